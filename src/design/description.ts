@@ -1,0 +1,285 @@
+/**
+ * The description: a design file after reading, with every name resolved and every quantity in base units
+ * (mm, nm for wavelengths, W, rad, mol/L, 1/mm). It is what the scene compiler takes; it knows no text,
+ * no unit string and no line number, only the path of each thing in the file so that later faults can point at it.
+ */
+import type { Curve } from '../units/curve.js';
+import type { DesignPath } from './fault.js';
+
+export type Vector3 = readonly [number, number, number];
+export type Vector2 = readonly [number, number];
+
+export interface Description {
+  readonly title: string;
+  readonly about: string | null;
+  readonly dials: readonly Dial[];
+  readonly media: ReadonlyMap<string, MediumDescription>;
+  /** Name of the medium around everything; present in `media`. */
+  readonly surroundings: string;
+  readonly finishes: ReadonlyMap<string, FinishDescription>;
+  /** In file order: where parts overlap, the later one wins. */
+  readonly parts: readonly PartDescription[];
+  readonly pumps: readonly PumpDescription[];
+  readonly detectors: readonly DetectorDescription[];
+  readonly exit: ExitDescription;
+  readonly defaults: TraceDefaults;
+}
+
+export interface Dial {
+  readonly name: string;
+  /** As written in the file or turned on the command line. */
+  readonly text: string;
+  /** Value in base units of its dimension. */
+  readonly value: number;
+}
+
+/** What the design itself asks of a trace; the command line overrides. */
+export interface TraceDefaults {
+  readonly histories: number | null;
+  /** Relative standard error wanted on the exit fraction. */
+  readonly precision: number | null;
+  readonly seed: string | null;
+  /** Voxels along x, y, z of the absorbed-power map over the bounding box of all dyed parts. */
+  readonly voxels: Vector3 | null;
+}
+
+// ------------------------------------------------------------------------------------------------ media
+
+export interface MediumDescription {
+  readonly name: string;
+  readonly path: DesignPath;
+  readonly kind: 'gas' | 'liquid' | 'solid';
+  /** Library name of what it is made of ('ethanol', 'borosilicate-crown', 'air'), or 'custom'. */
+  readonly base: string;
+  /** Refractive index. */
+  readonly index: Curve;
+  /** Napierian absorption of the bare solvent or solid, 1/mm. */
+  readonly absorption: Curve;
+  readonly dyes: readonly DissolvedDye[];
+  /** Heat data, null where the library has none. */
+  readonly thermal: ThermalProperties | null;
+}
+
+export interface DissolvedDye {
+  readonly name: string;
+  /** mol/L; null for a dye given directly by an absorption coefficient. */
+  readonly concentration: number | null;
+  /** Napierian absorption at this strength, 1/mm. */
+  readonly absorption: Curve;
+  /** 0..1, per absorbed photon. */
+  readonly quantumYield: number;
+  readonly emission: EmissionDescription;
+  /** Fluorescence lifetime, ns, null when unknown. */
+  readonly lifetimeNs: number | null;
+}
+
+/** Photons per nm, relative; or one line, which may be any wavelength exactly. */
+export type EmissionDescription =
+  | { readonly kind: 'line'; readonly wavelengthNm: number }
+  | { readonly kind: 'spectrum'; readonly photonsPerNm: Curve; readonly fromNm: number; readonly toNm: number };
+
+export interface ThermalProperties {
+  readonly densityKgPerM3: number;
+  readonly specificHeatJPerKgK: number;
+  readonly conductivityWPerMK: number;
+  /** °C at 101.325 kPa; null for solids. */
+  readonly boilingPointC: number | null;
+  readonly temperatureC: number;
+  readonly source: string;
+}
+
+// ---------------------------------------------------------------------------------------------- finishes
+
+export type FinishDescription = { readonly name: string; readonly path: DesignPath } & (
+  | { readonly kind: 'clear' }
+  | { readonly kind: 'black' }
+  /** Fixed reflectance at every angle and wavelength; the rest is absorbed. */
+  | { readonly kind: 'mirror'; readonly reflectance: number }
+  /** Opaque metal, complex index n − ik, Fresnel in the medium that touches it. */
+  | { readonly kind: 'metal'; readonly metal: string; readonly n: Curve; readonly k: Curve }
+  /**
+   * Idealised dichroic, the same at all angles. T = transmits in the pass band, R = reflects in the stop band,
+   * `absorbs` everywhere; what is neither is reflected (pass band) or transmitted (stop band). The edge is a
+   * logistic in wavelength whose 10–90 % width is `width`; a zero width is a step.
+   */
+  | {
+      readonly kind: 'dichroic';
+      readonly edgeNm: number;
+      readonly widthNm: number;
+      readonly passes: 'below' | 'above';
+      readonly transmits: number;
+      readonly reflects: number;
+      readonly absorbs: number;
+    }
+  /** R and T on a grid, [wavelength][angle], bilinear; angle of incidence from the normal, in the medium of incidence. */
+  | {
+      readonly kind: 'table';
+      readonly wavelengthsNm: readonly number[];
+      readonly anglesDeg: readonly number[];
+      readonly reflectance: readonly (readonly number[])[];
+      readonly transmittance: readonly (readonly number[])[];
+    }
+  /** Lambertian in both directions; the rest is absorbed. */
+  | { readonly kind: 'diffuser'; readonly reflects: number; readonly transmits: number }
+  /**
+   * Scatter about the specular or refracted direction; `fwhm` is the full width of the radiant intensity, rad.
+   * With `split` null the Fresnel law says what is reflected; otherwise the stated shares, the rest absorbed.
+   */
+  | {
+      readonly kind: 'scatter';
+      readonly shape: 'gaussian' | 'top-hat';
+      readonly fwhm: number;
+      readonly split: { readonly reflects: number; readonly transmits: number } | null;
+    }
+);
+
+// ------------------------------------------------------------------------------------------------- parts
+
+export interface PartDescription {
+  readonly name: string;
+  readonly path: DesignPath;
+  readonly medium: string;
+  /** Union of pieces. A part of one nameless piece has faces 'top', …; otherwise 'piece.top', …. */
+  readonly pieces: readonly PieceDescription[];
+  readonly placement: Placement;
+  readonly faces: readonly FaceFinish[];
+}
+
+export interface FaceFinish {
+  /** Face name within the part ('top', 'bore.side'), or '*' for every face not named. */
+  readonly face: string;
+  readonly finish: string;
+  readonly path: DesignPath;
+}
+
+/** A convex shape minus other convex shapes, placed in the part's own frame. */
+export interface PieceDescription {
+  readonly name: string | null;
+  readonly path: DesignPath;
+  readonly shape: ShapeDescription;
+  readonly at: Vector3;
+  readonly turns: readonly Turn[];
+  readonly minus: readonly PieceDescription[];
+}
+
+/**
+ * Convex shapes. The own frame of each has its origin at the centre of its bounding box, z up; a prism keeps
+ * the coordinates of its outline and is centred in z.
+ * Faces — box: left(−x) right(+x) front(−y) back(+y) bottom(−z) top(+z); prism: side-1 … side-n (edge i runs from
+ * corner i to corner i+1) or the names in `sides`, bottom, top; cylinder, cone: side, bottom, top;
+ * sphere: surface; cap: dome, bottom.
+ */
+export type ShapeDescription =
+  | { readonly kind: 'box'; readonly size: Vector3 }
+  | {
+      readonly kind: 'prism';
+      readonly outline: readonly Vector2[];
+      readonly height: number;
+      readonly sides: readonly string[] | null;
+    }
+  | { readonly kind: 'cylinder'; readonly radius: number; readonly height: number }
+  | { readonly kind: 'cone'; readonly bottomRadius: number; readonly topRadius: number; readonly height: number }
+  | { readonly kind: 'sphere'; readonly radius: number }
+  /** The part of a sphere of `radius` above a plane: `height` from the flat bottom to the crown, at most 2·radius. */
+  | { readonly kind: 'cap'; readonly radius: number; readonly height: number };
+
+/** Right-handed turn about an axis of the design through the shape's own origin, rad; applied in list order. */
+export interface Turn {
+  readonly axis: 'x' | 'y' | 'z';
+  readonly angle: number;
+}
+
+export interface Placement {
+  /** Where the part's own origin goes; ignored when `against` is given. */
+  readonly at: Vector3;
+  readonly turns: readonly Turn[];
+  readonly against: Against | null;
+}
+
+/** Puts a flat face of this part on a flat face of an earlier part, centre on centre. */
+export interface Against {
+  /** 'part.face' of the part leaned on. */
+  readonly face: string;
+  /** Own face that touches; null: the flat face that looks the other way. */
+  readonly with: string | null;
+  /** Shift along the touched face's own u and v axes, mm. */
+  readonly shift: Vector2;
+  /** Empty distance left between the two faces, mm. */
+  readonly gap: number;
+  readonly path: DesignPath;
+}
+
+// ------------------------------------------------------------------------------------------------- pumps
+
+export interface PumpDescription {
+  readonly name: string;
+  readonly path: DesignPath;
+  /** Optical power, W. */
+  readonly power: number;
+  readonly wavelengthNm: number;
+  /** Full width at half maximum of the Gaussian line, nm; 0 is a line. */
+  readonly linewidthNm: number;
+  /** Optical power per electrical power of the diode; null when not given. */
+  readonly wallPlug: number | null;
+  /** Efficiency of the driver, 0..1; null when not given. */
+  readonly driver: number | null;
+  readonly aim: Aim;
+  readonly beam: BeamDescription;
+}
+
+export type Aim =
+  /** From `distance` in front of a face's centre (shifted along its u, v), along its inward normal, then tilted about u and v. */
+  | {
+      readonly kind: 'toward';
+      readonly face: string;
+      readonly distance: number;
+      readonly shift: Vector2;
+      readonly tilt: Vector2;
+    }
+  /** From a point along a direction; `roll` turns the beam's u, v axes about it, rad. */
+  | { readonly kind: 'along'; readonly at: Vector3; readonly direction: Vector3; readonly roll: number };
+
+export type Outline =
+  | { readonly kind: 'rectangle'; readonly size: Vector2 }
+  | { readonly kind: 'disc'; readonly radius: number };
+
+export type BeamDescription =
+  /** Evenly filled, collimated, or Gaussian in angle with the FWHM given for u and v, rad. */
+  | { readonly kind: 'patch'; readonly outline: Outline; readonly divergence: Vector2 }
+  /** 1/e² radius at the origin of the beam and 1/e² half angle of divergence, rad (independent draws: geometric optics). */
+  | { readonly kind: 'gaussian'; readonly radius: number; readonly halfAngle: number }
+  | { readonly kind: 'lambertian'; readonly outline: Outline }
+  /**
+   * A bank: `across` emitters along u by `along` emitters along v, centre to centre `pitch`; each emits a Gaussian far field
+   * with FWHM `divergence` [u, v], rad. A thin lens in front bends every ray by tan' = tan − r/f.
+   */
+  | {
+      readonly kind: 'diodes';
+      readonly across: number;
+      readonly along: number;
+      readonly pitch: Vector2;
+      readonly divergence: Vector2;
+      readonly lens: { readonly focalLength: number; readonly distance: number } | null;
+    };
+
+// --------------------------------------------------------------------------------------------- detectors
+
+export interface DetectorDescription {
+  readonly name: string;
+  readonly path: DesignPath;
+  readonly target: DetectorTarget;
+  readonly pixels: Vector2 | null;
+}
+
+export type DetectorTarget =
+  /** Light that leaves the part through this face. */
+  | { readonly kind: 'face'; readonly face: string }
+  /** Light that crosses a bounded plane along its normal. */
+  | { readonly kind: 'plane'; readonly at: Vector3; readonly normal: Vector3; readonly outline: Outline };
+
+export interface ExitDescription {
+  /** 'part.face' or the name of a detector. */
+  readonly name: string;
+  readonly path: DesignPath;
+  readonly pixels: Vector2 | null;
+}
