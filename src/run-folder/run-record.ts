@@ -1,0 +1,119 @@
+/**
+ * The record of a run: what run.json holds. Every number shown anywhere (terminal, page, picture) is in it.
+ * `format` counts up whenever a reader of older records would go wrong.
+ */
+import type { Fault } from '../design/fault.js';
+import type { Fate, Light } from '../tallies/run-tallies.js';
+import type { StopReason } from '../trace/trace-result.js';
+
+export const RUN_FORMAT = 1;
+
+export interface Figure {
+  /** null: undefined for this run (no light left by the exit, wall-plug efficiency not given, …). */
+  readonly value: number | null;
+  /** null: exact, or too few batches to tell (then `note` says so). */
+  readonly standardError: number | null;
+  readonly unit: string;
+  readonly note?: string;
+}
+
+/** Names of the headline figures, in the order a person reads them. */
+export type FigureName =
+  | 'exitPhotonFraction' // exit photons per pump photon
+  | 'opticalEfficiency' // exit W per pump W
+  | 'exitPower' // W
+  | 'luminousFlux' // lm
+  | 'luminousEfficacyOptical' // lm per pump optical W
+  | 'luminousEfficacyWallPlug' // lm per electrical W
+  | 'chromaticityX'
+  | 'chromaticityY'
+  | 'dominantWavelength' // nm
+  | 'meanExitWavelength' // nm, photon mean
+  | 'blueLeak' // W of pump light through the exit
+  | 'blueLeakFraction' // of pump W
+  | 'exitUniformityVariation' // coefficient of variation of exit irradiance, noise taken out
+  | 'exitUniformityMinOverMean'
+  | 'exitFlatness' // ISO 13694 flatness factor
+  | 'exitBeamUniformity' // ISO 13694 beam uniformity
+  | 'peakAbsorbedPowerDensity' // W/cm³
+  | 'timeToBoiling' // s, adiabatic, still liquid, at the peak
+  | 'absorptionsPerHistory'
+  | 'reabsorptionsPerHistory'
+  | 'meanPumpPath' // mm per history
+  | 'meanEmittedPath' // mm per emission
+  | 'pumpAbsorbedFraction' // pump photons absorbed by a dye
+  | 'pumpPower'; // W
+
+export interface LedgerRow {
+  readonly fate: Fate;
+  readonly light: Light;
+  readonly where: string | null;
+  readonly by: string | null;
+  readonly fraction: number;
+  readonly standardError: number | null;
+}
+
+export interface MapRecord {
+  readonly id: string;
+  readonly what: string;
+  readonly where: string;
+  readonly unit: 'W/cm²' | 'W/cm³';
+  readonly shape: readonly number[];
+  readonly extentMm: readonly (readonly [number, number])[];
+  readonly axes: readonly string[];
+  /** Files beside run.json. */
+  readonly files: readonly string[];
+  readonly power: number;
+  readonly mean: number;
+  readonly minimum: number;
+  readonly maximum: number;
+  /** Coefficient of variation with the shot noise taken out, and its standard error. */
+  readonly variation: number | null;
+  readonly minOverMean: number | null;
+}
+
+export interface RunRecord {
+  readonly format: typeof RUN_FORMAT;
+  readonly tool: { readonly name: 'stokeswell'; readonly version: string };
+  readonly design: {
+    readonly title: string;
+    readonly file: string;
+    readonly text: string;
+    /** SHA-256 of the text, hex. */
+    readonly hash: string;
+    readonly dials: Readonly<Record<string, string>>;
+  };
+  readonly run: {
+    readonly seed: string;
+    readonly histories: number;
+    readonly batches: number;
+    readonly threads: number;
+    readonly seconds: number;
+    readonly stopReason: StopReason;
+    readonly startedAt: string;
+    /** Command that repeats this run to the same bits. */
+    readonly repeat: string;
+  };
+  readonly figures: Readonly<Record<FigureName, Figure>>;
+  readonly ledger: { readonly photons: readonly LedgerRow[]; readonly watts: readonly LedgerRow[] };
+  readonly maps: readonly MapRecord[];
+  readonly spectra: readonly {
+    readonly id: string;
+    readonly what: string;
+    readonly where: string | null;
+    readonly light: Light;
+    readonly file: string;
+    readonly photonFraction: number;
+  }[];
+  readonly angles: readonly { readonly id: string; readonly where: string; readonly file: string }[];
+  readonly histograms: readonly {
+    readonly id: string;
+    readonly unit: string;
+    readonly from: number;
+    readonly width: number;
+    /** Share of its histories or photons per cell; the last cell holds everything above. */
+    readonly shares: readonly number[];
+  }[];
+  readonly checks: readonly Fault[];
+  readonly cautions: readonly string[];
+}
