@@ -1,0 +1,23 @@
+/** Text in columns of characters (code points). */
+
+/** Padded on the right, or cut with `ellipsis`, to exactly `width`. */
+export function fitLeft(text: string, width: number, ellipsis: string): string {
+  const characters = [...text];
+  if (characters.length > width) return characters.slice(0, width - 1).join('') + ellipsis;
+  return text + ' '.repeat(width - characters.length);
+}
+
+/** Numbers padded so that their decimal points stand under each other; texts without one count as whole numbers. */
+export function alignDecimals(numbers: readonly string[]): string[] {
+  const wholeWidth = Math.max(0, ...numbers.map((text) => wholeOf(text).length));
+  const fractionWidth = Math.max(0, ...numbers.map((text) => text.length - wholeOf(text).length));
+  return numbers.map((text) => {
+    const whole = wholeOf(text);
+    return whole.padStart(wholeWidth) + text.slice(whole.length).padEnd(fractionWidth);
+  });
+}
+
+function wholeOf(text: string): string {
+  const point = text.indexOf('.');
+  return point < 0 ? text : text.slice(0, point);
+}

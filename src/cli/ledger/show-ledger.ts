@@ -1,0 +1,50 @@
+import type { LedgerRow, RunRecord } from '../../run-folder/run-record.js';
+import { formatWithError } from '../number-format.js';
+import { safeText } from '../safe-text.js';
+import { fitToStyle, type TerminalStyle } from '../terminal-style.js';
+import { evenness } from './evenness.js';
+import { fateWords, groupOf } from './fate-words.js';
+import { headline } from './headline.js';
+import { labelled } from './labelled.js';
+import { ledgerTable } from './ledger-table.js';
+import { survival } from './survival.js';
+
+/** What of a run is laid out: watts or photons of the ledger, its located warnings, and where its files are. */
+export interface LedgerView {
+  readonly count: 'watts' | 'photons';
+  /** One text per warning. */
+  readonly warnings: readonly string[];
+  /** Folder of the run, null when no files were written. */
+  readonly folder: string | null;
+}
+
+/** A run at a glance, 80 columns wide: how much comes out, where the rest goes, how even it is, whether it survives. */
+export function showLedger(record: RunRecord, view: LedgerView, style: TerminalStyle): string {
+  const rows = record.ledger[view.count];
+  const sections = [
+    headline(record, style),
+    [style.bold(`Where the ${view.count === 'watts' ? 'watts go' : 'photons go'}, % of the pump light`), ...ledgerTable(rows, style)],
+    labelled('Win back', largestLoss(rows, style), style),
+    evenness(record, style),
+    survival(record, style),
+    labelled('Warnings', view.warnings, { ...style, bold: style.warn }),
+    labelled('Cautions', record.cautions.map((text) => safeText(text, 1000)), { ...style, bold: style.warn }),
+    labelled('Files', view.folder === null ? [] : [safeText(view.folder)], style),
+  ];
+  const text = sections
+    .filter((section) => section.length > 0)
+    .map((section) => section.join('\n'))
+    .join('\n\n');
+  return `${fitToStyle(text, style)}\n`;
+}
+
+/** The largest loss apart from the Stokes heat, which every re-emission costs. */
+function largestLoss(rows: readonly LedgerRow[], style: TerminalStyle): string[] {
+  const losses = rows.filter((row) => groupOf(row) !== 'output' && row.fate !== 'stokes-heat' && row.fraction > 0);
+  const largest = losses.reduce<LedgerRow | null>((top, row) => (top && top.fraction >= row.fraction ? top : row), null);
+  if (largest === null) return [];
+  const where = largest.where === null ? '' : ` at ${safeText(largest.where, 60)}`;
+  const error = largest.standardError === null ? null : 100 * largest.standardError;
+  const share = formatWithError(100 * largest.fraction, error, '%', style.plusMinus);
+  return [`largest loss but Stokes heat: ${safeText(fateWords(largest), 60)}${where} (${largest.light}), ${share}`];
+}

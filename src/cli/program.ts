@@ -1,0 +1,101 @@
+import { Argument, Command, Option } from 'commander';
+import { EXIT_CODES_HELP, type ExitCode } from './exit-codes.js';
+import { collectDial, parseDuration, parseHistories, parsePrecision, parseSeed, parseThreads } from './option-values.js';
+import { print, tell } from './output-stream.js';
+import { toolVersion } from './tool-version.js';
+import type { CheckOptions } from './commands/check.js';
+import type { ProveOptions } from './commands/prove.js';
+import type { TraceCommandOptions } from './commands/trace.js';
+
+const ABOUT = `Traces pump light through a fluorescent cell, photon by photon, and says where it all goes.`;
+
+const QUICK_START = `
+A first run:
+  stokeswell new cell.yaml
+  stokeswell trace cell.yaml --precision 0.2%
+`;
+
+/**
+ * The command line. Commands are loaded when they run, so that help is quick.
+ * @param done receives the exit status of the command that ran
+ */
+export function buildProgram(done: (code: ExitCode) => void): Command {
+  const program = new Command('stokeswell')
+    .description(ABOUT)
+    .version(toolVersion(), '--version', 'print the version')
+    .helpOption('-h, --help', 'print help')
+    .helpCommand(false)
+    .showHelpAfterError('(stokeswell --help lists commands and options)')
+    .configureOutput({ writeOut: print, writeErr: tell })
+    .exitOverride()
+    .addHelpText('after', `${QUICK_START}\n${EXIT_CODES_HELP}`);
+
+  program
+    .command('new')
+    .description('write a commented starter design')
+    .argument('[file]', 'file to write; an existing one is never overwritten', 'design.yaml')
+    .action(async (file: string) => {
+      const { newCommand } = await import('./commands/new.js');
+      done(await newCommand(file));
+    });
+
+  program
+    .command('check')
+    .description('tell every fault of designs without tracing them')
+    .argument('<design...>', 'design files')
+    .option('--faces', 'list the faces with centre, normal, area and what touches them', false)
+    .option('--json', 'print one JSON document instead of text', false)
+    .addOption(dialOption())
+    .action(async (files: string[], options: CheckOptions) => {
+      const { checkCommand } = await import('./commands/check.js');
+      done(await checkCommand(files, options));
+    });
+
+  program
+    .command('trace')
+    .description('trace a design: ledger, figures, maps; ends at whichever bound is met first')
+    .argument('<design>', 'design file')
+    .option('--histories <number>', 'pump photons to follow, for example 200000 or 2e6', parseHistories)
+    .option('--precision <percent>', 'relative standard error wanted on the exit fraction, e.g. 0.2%', parsePrecision)
+    .option('--for <time>', 'time to trace, with unit ms, s, min or h, e.g. 30s', parseDuration)
+    .option('--seed <text>', "seed of the random streams; same seed, same bits (default: the design's, else 1)", parseSeed)
+    .option('--threads <number>', 'worker threads (default: all cores); the results do not depend on it', parseThreads)
+    .option('--out <folder>', 'new or empty folder for the run (default: results/<design>/<time>)')
+    .option('--no-files', 'write no files')
+    .option('--plain', 'print the record of the run as JSON and nothing else', false)
+    .addOption(new Option('--ledger <of>', 'ledger to print').choices(['watts', 'photons']).default('watts'))
+    .option('--progress', 'progress also where standard error is no terminal, a line per quarter')
+    .option('--no-progress', 'no progress')
+    .addOption(dialOption())
+    .action(async (file: string, options: TraceCommandOptions) => {
+      const { traceCommand } = await import('./commands/trace.js');
+      done(await traceCommand(file, options));
+    });
+
+  program
+    .command('prove')
+    .description('hold the tracer against laws and tables from outside, on this machine')
+    .option('--quick', 'fewer histories, wider bands', false)
+    .option('--only <text>', 'only proofs whose name holds this text')
+    .action(async (options: ProveOptions) => {
+      const { proveCommand } = await import('./commands/prove.js');
+      done(await proveCommand(options));
+    });
+
+  program
+    .command('schema')
+    .description('print a JSON Schema, for editors and readers of results')
+    .addArgument(new Argument('[of]', 'what it describes').choices(['design', 'run']).default('design'))
+    .action(async (of: 'design' | 'run') => {
+      const { schemaCommand } = await import('./commands/schema.js');
+      done(await schemaCommand(of));
+    });
+
+  return program;
+}
+
+function dialOption(): Option {
+  return new Option('--dial <name=value>', 'turn a dial of the design, e.g. "depth=10 mm"; may be repeated')
+    .argParser(collectDial)
+    .default({}, 'as in the design');
+}

@@ -1,0 +1,114 @@
+/** Raw counters + legend -> run tallies: names, units (eV, mm) and the measure of every map cell. */
+import type { CompiledScene } from '../scene/compile-scene.js';
+import { mapMeasure, voxelMeasure } from '../scene/map-measure.js';
+import { AZIMUTH_CELLS, POLAR_CELLS } from '../scene/scene-layout.js';
+import type { GrownTally } from '../tallies/batch-tally.js';
+import type {
+  Histogram,
+  RecordedAngles,
+  RecordedMap,
+  RecordedSpectrum,
+  RunTallies,
+} from '../tallies/run-tallies.js';
+import type { BatchFold } from './fold-batches.js';
+
+export function collectTallies(compiled: CompiledScene, fold: BatchFold, grown: GrownTally): RunTallies {
+  const { batch, group } = fold.moments(compiled.legend.quantumEv);
+  return {
+    slots: compiled.legend.slots,
+    moments: batch,
+    groupMoments: group,
+    maps: [...recorderMaps(compiled, grown), ...voxelMaps(compiled, grown)],
+    spectra: spectra(compiled, grown),
+    angles: angles(compiled, grown),
+    histograms: histograms(compiled, grown),
+    wavelengthsNm: compiled.legend.grid.nm,
+  };
+}
+
+function halves({ scene, legend }: CompiledScene, grown: GrownTally, offset: number, cells: number) {
+  const half = (h: number) => {
+    const start = h * scene.mapCells + offset;
+    return grown.maps.slice(start, start + cells).map((quanta) => quanta * legend.quantumEv);
+  };
+  return [half(0), half(1)] as const;
+}
+
+function recorderMaps(compiled: CompiledScene, grown: GrownTally): RecordedMap[] {
+  return compiled.legend.recorders.map((plan, i): RecordedMap => {
+    const [u, v] = plan.cells;
+    return {
+      id: `${plan.what}-${plan.where}`,
+      what: plan.what,
+      where: plan.where,
+      shape: [u, v],
+      extent: plan.extent,
+      axes: plan.wrapped ? ['round the side', 'along the axis'] : ['u', 'v'],
+      energy: halves(compiled, grown, compiled.scene.recorderMap[i], u * v),
+      measure: mapMeasure(plan),
+      frame: plan.wrapped ? null : { origin: plan.origin, u: plan.u, v: plan.v },
+    };
+  });
+}
+
+function voxelMaps(compiled: CompiledScene, grown: GrownTally): RecordedMap[] {
+  const { scene, legend } = compiled;
+  const { origin, size, cells } = legend.voxels;
+  const count = cells[0] * cells[1] * cells[2];
+  const measure = voxelMeasure(compiled);
+  const common = {
+    where: 'dyed parts',
+    shape: cells,
+    extent: origin.map((low, axis) => [low, low + size[axis]] as const),
+    axes: ['x', 'y', 'z'],
+    measure,
+    frame: { origin, u: [1, 0, 0], v: [0, 1, 0] },
+  } as const;
+  return [
+    { id: 'absorbed-pump', what: 'absorbed-pump', energy: halves(compiled, grown, scene.voxelPumpMap, count), ...common },
+    { id: 'absorbed-all', what: 'absorbed-all', energy: halves(compiled, grown, scene.voxelAllMap, count), ...common },
+  ];
+}
+
+function spectra({ scene, legend }: CompiledScene, grown: GrownTally): RecordedSpectrum[] {
+  const cut = (offset: number) => grown.spectra.slice(offset, offset + scene.wavelengths);
+  const everywhere: RecordedSpectrum[] = [
+    { id: 'launched', what: 'launched', where: null, light: 'pump', photons: cut(scene.spectrumLaunched) },
+    { id: 'absorbed-pump', what: 'absorbed-pump', where: null, light: 'pump', photons: cut(scene.spectrumAbsorbedPump) },
+    { id: 'emitted-in-dye', what: 'emitted-in-dye', where: null, light: 'emitted', photons: cut(scene.spectrumEmitted) },
+  ];
+  const recorded = legend.recorders.flatMap(({ what, where }, i): RecordedSpectrum[] => {
+    const offset = scene.recorderSpectrum[i];
+    if (offset < 0 || what === 'pumped-face') return [];
+    const pump = cut(offset);
+    const emitted = cut(offset + scene.wavelengths);
+    return what === 'exit'
+      ? [
+          { id: 'exit', what, where, light: 'emitted', photons: emitted },
+          { id: 'leak', what: 'leak', where, light: 'pump', photons: pump },
+        ]
+      : [
+          { id: `detector-${where}-emitted`, what, where, light: 'emitted', photons: emitted },
+          { id: `detector-${where}-pump`, what, where, light: 'pump', photons: pump },
+        ];
+  });
+  return [...everywhere, ...recorded];
+}
+
+function angles({ scene, legend }: CompiledScene, grown: GrownTally): RecordedAngles[] {
+  return legend.recorders.flatMap(({ what, where }, i) => {
+    const offset = scene.recorderAngles[i];
+    if (offset < 0) return [];
+    const energy = grown.angles.slice(offset, offset + POLAR_CELLS * AZIMUTH_CELLS).map((q) => q * legend.quantumEv);
+    return [{ id: `${what}-${where}`, where, polarCells: POLAR_CELLS, azimuthCells: AZIMUTH_CELLS, energy }];
+  });
+}
+
+function histograms({ scene }: CompiledScene, grown: GrownTally): Histogram[] {
+  const count = { from: 0, width: 1, unit: '' };
+  return [
+    { id: 'absorptions-per-history', ...count, counts: grown.absorptions.slice() },
+    { id: 'reabsorptions-of-exit-photons', ...count, counts: grown.exitReabsorptions.slice() },
+    { id: 'path-of-exit-photons', from: 0, width: scene.pathHistogramStep, unit: 'mm', counts: grown.exitPath.slice() },
+  ];
+}

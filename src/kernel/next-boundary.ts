@@ -1,0 +1,105 @@
+/** Distance to the surfaces that are not axis planes. Results go into `hit`: [0] distance, [1] way. */
+import type { Scene } from '../scene/scene-layout.js';
+import type { RegionGraph } from '../scene/region-graph.js';
+import { QUADRIC_STRIDE } from '../scene/quadric.js';
+
+/** Shortens `hit` where an oblique plane or a quadric of the region comes first. */
+export function nearestOther(
+  scene: Scene,
+  graph: RegionGraph,
+  region: number,
+  x: number,
+  y: number,
+  z: number,
+  dx: number,
+  dy: number,
+  dz: number,
+  hit: Float64Array,
+): void {
+  let nearest = hit[0];
+  let way = hit[1];
+  const families = scene.families;
+  const normal = scene.familyNormal;
+  const bound = graph.bound;
+  for (let f = 3; f < families; f++) {
+    const nx = normal[3 * f];
+    const ny = normal[3 * f + 1];
+    const nz = normal[3 * f + 2];
+    const speed = nx * dx + ny * dy + nz * dz;
+    if (speed === 0) continue;
+    const up = speed > 0 ? 1 : 0;
+    const t = (bound[2 * (region * families + f) + up] - (nx * x + ny * y + nz * z)) / speed;
+    if (t < nearest) {
+      nearest = t;
+      way = 2 * f + up;
+    }
+  }
+  const quadrics = scene.quadrics;
+  const q = scene.quadric;
+  for (let k = 0; k < quadrics; k++) {
+    const at = k * QUADRIC_STRIDE;
+    const side = graph.side[region * quadrics + k];
+    // side·q(p + t d) = a t² + 2 b t + c, not negative at t = 0; wanted is the first t at which it turns negative.
+    const gx = q[at] * x + q[at + 3] * y + q[at + 4] * z + q[at + 6];
+    const gy = q[at + 3] * x + q[at + 1] * y + q[at + 5] * z + q[at + 7];
+    const gz = q[at + 4] * x + q[at + 5] * y + q[at + 2] * z + q[at + 8];
+    const a =
+      side *
+      (q[at] * dx * dx +
+        q[at + 1] * dy * dy +
+        q[at + 2] * dz * dz +
+        2 * (q[at + 3] * dx * dy + q[at + 4] * dx * dz + q[at + 5] * dy * dz));
+    const b = side * (gx * dx + gy * dy + gz * dz);
+    if (b >= 0 && a >= 0) continue;
+    const value = side * (gx * x + gy * y + gz * z + q[at + 6] * x + q[at + 7] * y + q[at + 8] * z + q[at + 9]);
+    // Rounding may put a point on the surface a hair beyond it; its region knows better.
+    const c = value > 0 ? value : 0;
+    const discriminant = b * b - a * c;
+    if (discriminant < 0) continue;
+    const root = Math.sqrt(discriminant);
+    const t = b < 0 ? c / (root - b) : (b + root) / -a;
+    if (t < nearest) {
+      nearest = t;
+      way = 2 * families + k;
+    }
+  }
+  hit[0] = nearest;
+  hit[1] = way;
+}
+
+/** Unit normal of the surface at a point, turned along the direction of travel, into `out` [0..2]. */
+export function travelNormal(
+  scene: Scene,
+  way: number,
+  x: number,
+  y: number,
+  z: number,
+  dx: number,
+  dy: number,
+  dz: number,
+  out: Float64Array,
+): void {
+  let nx: number;
+  let ny: number;
+  let nz: number;
+  if (way < 2 * scene.families) {
+    const f = 3 * (way >> 1);
+    nx = scene.familyNormal[f];
+    ny = scene.familyNormal[f + 1];
+    nz = scene.familyNormal[f + 2];
+  } else {
+    const q = scene.quadric;
+    const at = (way - 2 * scene.families) * QUADRIC_STRIDE;
+    nx = q[at] * x + q[at + 3] * y + q[at + 4] * z + q[at + 6];
+    ny = q[at + 3] * x + q[at + 1] * y + q[at + 5] * z + q[at + 7];
+    nz = q[at + 4] * x + q[at + 5] * y + q[at + 2] * z + q[at + 8];
+    const norm = 1 / Math.sqrt(nx * nx + ny * ny + nz * nz);
+    nx *= norm;
+    ny *= norm;
+    nz *= norm;
+  }
+  const sign = nx * dx + ny * dy + nz * dz < 0 ? -1 : 1;
+  out[0] = sign * nx;
+  out[1] = sign * ny;
+  out[2] = sign * nz;
+}

@@ -1,0 +1,4 @@
+#!/usr/bin/env node
+import { runProgram } from './cli/run-program.js';
+
+await runProgram(process.argv.slice(2));

@@ -1,0 +1,239 @@
+/** What is wrong or odd about a design's geometry and finishes, and a report of every face. Nothing is traced. */
+import type { Description, FinishDescription, Vector3 } from '../design/description.js';
+import { DesignFaults } from '../design/design-faults.js';
+import type { Fault } from '../design/fault.js';
+import { type CompiledScene, compileScene } from './compile-scene.js';
+import type { SceneFace } from './compile-solids.js';
+import { patchArea, patchCentre, patchNormal, patchPoint } from './face-patch.js';
+import { RegionGraph } from './region-graph.js';
+import { add, scale } from './vector.js';
+
+export interface SceneCheck {
+  readonly faults: readonly Fault[];
+  /** Empty when the parts could not be placed. */
+  readonly faces: readonly FaceReport[];
+}
+
+export interface FaceReport {
+  readonly part: string;
+  readonly face: string;
+  readonly shape: 'flat' | 'cylinder' | 'cone' | 'sphere';
+  readonly centre: Vector3;
+  readonly normal: Vector3;
+  readonly areaMm2: number;
+  readonly finish: string;
+  /** 'part.face' of what touches it, 'part' where it dips into another part, 'surroundings'. */
+  readonly touches: readonly string[];
+  /** Share of the area where the face is the boundary of its part: 0 when it is buried or cut away. */
+  readonly exposed: number;
+}
+
+const SAMPLES = 256;
+/** Step off the face to look at either side, mm. */
+const STEP = 1e-5;
+
+export function checkScene(description: Description): SceneCheck {
+  let compiled: CompiledScene;
+  try {
+    compiled = compileScene(description);
+  } catch (error) {
+    if (error instanceof DesignFaults) return { faults: error.faults, faces: [] };
+    throw error;
+  }
+  const looks = new FaceLook(description, compiled);
+  const views = compiled.legend.faces.map((face) => ({ face, ...looks.look(face) }));
+  const faults = [
+    ...views.flatMap(({ face, exposed, clashes }) => finishFaults(compiled, face, exposed, clashes)),
+    ...exitFaults(description, compiled, views),
+    ...partFaults(description, views),
+  ];
+  return { faults, faces: views.map(({ face, exposed, touches }) => report(compiled, face, exposed, touches)) };
+}
+
+interface Look {
+  readonly exposed: number;
+  readonly touches: readonly string[];
+  /** Other faces on the same spot that carry another finish. */
+  readonly clashes: readonly SceneFace[];
+}
+
+class FaceLook {
+  readonly #graph: RegionGraph;
+  readonly #faces: readonly SceneFace[];
+  readonly #finish: Int32Array;
+  readonly #names: readonly string[];
+
+  constructor(description: Description, { scene, legend }: CompiledScene) {
+    this.#graph = new RegionGraph(scene);
+    this.#faces = legend.faces;
+    this.#finish = scene.faceFinish;
+    this.#names = ['surroundings', ...description.parts.map(({ name }) => name)];
+  }
+
+  look(face: SceneFace): Look {
+    const touches = new Set<string>();
+    const clashes = new Set<SceneFace>();
+    let exposed = 0;
+    for (let i = 0; i < SAMPLES; i++) {
+      // R2 sequence (Roberts 2018): even cover of the unit square.
+      const s = (0.5 + i * 0.7548776662466927) % 1;
+      const t = (0.5 + i * 0.5698402909980532) % 1;
+      const { point, normal } = patchPoint(face.patch, s, t);
+      const out = face.hollow ? scale(normal, -1) : normal;
+      if (this.#ownerAt(point, out, -STEP) !== face.owner) continue;
+      const beyond = this.#ownerAt(point, out, STEP);
+      if (beyond === face.owner) continue;
+      exposed++;
+      const partner = this.#faceAt(face, beyond);
+      touches.add(partner?.reference ?? this.#names[beyond]);
+      if (partner === undefined) continue;
+      const [own, other] = [this.#finish[face.index], this.#finish[partner.index]];
+      if (own >= 0 && other >= 0 && own !== other) clashes.add(partner);
+    }
+    return { exposed: exposed / SAMPLES, touches: [...touches].sort(), clashes: [...clashes] };
+  }
+
+  #ownerAt(point: Vector3, direction: Vector3, step: number): number {
+    const [x, y, z] = add(point, scale(direction, step));
+    if (this.#graph.crowded) this.#graph.forget();
+    return this.#graph.owner[this.#graph.locate(x, y, z, 0.6, 0.64, 0.48)];
+  }
+
+  /** Face of another owner on the same surface; its own sample decides whether it is really there. */
+  #faceAt(face: SceneFace, owner: number): SceneFace | undefined {
+    const same = (a: SceneFace['surface'], b: SceneFace['surface']) =>
+      a.kind === 'plane' && b.kind === 'plane'
+        ? a.family === b.family && a.offset === b.offset
+        : a.kind === 'curve' && b.kind === 'curve' && a.index === b.index;
+    return this.#faces.find((other) => other.owner === owner && same(other.surface, face.surface));
+  }
+}
+
+function report(
+  { scene, legend }: CompiledScene,
+  face: SceneFace,
+  exposed: number,
+  touches: readonly string[],
+): FaceReport {
+  const part = face.part.description.name;
+  const normal = patchNormal(face.patch);
+  const finish = scene.faceFinish[face.index];
+  const { patch } = face;
+  return {
+    part,
+    face: face.reference.slice(part.length + 1),
+    shape:
+      patch.kind === 'zone'
+        ? 'sphere'
+        : patch.kind === 'side'
+          ? patch.bottomRadius === patch.topRadius
+            ? 'cylinder'
+            : 'cone'
+          : 'flat',
+    centre: patchCentre(patch),
+    normal: face.hollow ? scale(normal, -1) : normal,
+    areaMm2: patchArea(patch),
+    finish: finish < 0 ? 'clear' : legend.finishNames[finish],
+    touches,
+    exposed,
+  };
+}
+
+function finishFaults(
+  { legend, scene }: CompiledScene,
+  face: SceneFace,
+  exposed: number,
+  clashes: readonly SceneFace[],
+): Fault[] {
+  const { name, faces } = face.part.description;
+  const given = faces.find((entry) => `${name}.${entry.face}` === face.reference);
+  if (given === undefined) return [];
+  const faults: Fault[] = [];
+  if (exposed === 0 && patchArea(face.patch) > 0) {
+    faults.push({
+      code: 'finish',
+      severity: 'error',
+      path: given.path,
+      problem: 'this face is buried in another part or cut away, so its finish never meets light',
+      found: `${given.finish} on ${face.reference}`,
+      suggestion: 'give the finish to the face that bounds the part there, or move the part',
+    });
+  }
+  // Told once, at the later of the two faces.
+  for (const other of clashes.filter(({ index }) => index < face.index)) {
+    faults.push({
+      code: 'finish',
+      severity: 'error',
+      path: given.path,
+      problem: `two finishes on one spot: ${face.reference} lies on ${other.reference}`,
+      found: `${given.finish} and ${legend.finishNames[scene.faceFinish[other.index]]}`,
+      expected: 'one finish where two faces touch',
+    });
+  }
+  return faults;
+}
+
+function exitFaults(
+  description: Description,
+  { scene, legend }: CompiledScene,
+  views: readonly { readonly face: SceneFace; readonly exposed: number }[],
+): Fault[] {
+  const { name, path } = description.exit;
+  const view = views.find(({ face }) => face.reference === name);
+  if (view === undefined) return [];
+  const refuse = (problem: string, suggestion: string): Fault[] => [
+    { code: 'unreachable', severity: 'error', path, problem, found: name, suggestion },
+  ];
+  if (view.exposed === 0) {
+    return refuse('the exit is buried in another part, so no light can leave there', 'name the face that light crosses last');
+  }
+  const finish = description.finishes.get(legend.finishNames[Math.max(0, scene.faceFinish[view.face.index])]);
+  return finish !== undefined && opaque(finish)
+    ? refuse('the finish of the exit lets nothing through', `take ${finish.name} off this face, or name another exit`)
+    : [];
+}
+
+function opaque(finish: FinishDescription): boolean {
+  switch (finish.kind) {
+    case 'black':
+    case 'mirror':
+    case 'metal':
+      return true;
+    case 'diffuser':
+      return finish.transmits === 0;
+    case 'scatter':
+      return finish.split?.transmits === 0;
+    case 'table':
+      return finish.transmittance.every((row) => row.every((value) => value === 0));
+    default:
+      return false;
+  }
+}
+
+function partFaults(
+  description: Description,
+  views: readonly { readonly face: SceneFace; readonly exposed: number }[],
+): Fault[] {
+  const faults: Fault[] = [];
+  for (const part of description.parts) {
+    if (views.some(({ face, exposed }) => face.part.description === part && exposed > 0)) continue;
+    faults.push({
+      code: 'geometry',
+      severity: 'error',
+      path: part.path,
+      problem: 'the whole part is hidden inside later parts or cut away',
+      found: part.name,
+      suggestion: 'move it further down in the file (the later part wins) or remove it',
+    });
+  }
+  const dyed = description.parts.some(({ medium }) => (description.media.get(medium)?.dyes.length ?? 0) > 0);
+  if (!dyed) {
+    faults.push({
+      code: 'caution',
+      severity: 'warning',
+      path: [],
+      problem: 'no part holds a dye, so nothing will fluoresce',
+    });
+  }
+  return faults;
+}

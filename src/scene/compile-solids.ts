@@ -1,0 +1,143 @@
+/** Parts -> surfaces, convex primitives, pieces and faces as flat arrays. */
+import type { Description } from '../design/description.js';
+import type { Fault } from '../design/fault.js';
+import type { FacePatch } from './convex-solid.js';
+import { patchRange } from './face-patch.js';
+import { findFace, type NamedSolid, partFaces, type PlacedPart } from './place-parts.js';
+import { type CurveHandle, type PlaneHandle, type SurfaceSide, SurfaceTable } from './surface-table.js';
+import type { Vector3 } from '../design/description.js';
+import { dot, normalise, snapDirection } from './vector.js';
+
+/** One face of one part, in the numbering of the scene. */
+export interface SceneFace {
+  readonly index: number;
+  /** 'part.face'. */
+  readonly reference: string;
+  readonly part: PlacedPart;
+  readonly owner: number;
+  readonly patch: FacePatch;
+  /** The patch's normal looks into the material: the wall of a hole. */
+  readonly hollow: boolean;
+  readonly surface: PlaneHandle | CurveHandle;
+}
+
+export interface CompiledSolids {
+  readonly faces: readonly SceneFace[];
+  readonly normals: readonly Vector3[];
+  readonly starts: readonly number[];
+  readonly offsets: readonly number[];
+  readonly quadrics: readonly number[];
+  readonly curves: number;
+  readonly primitiveStart: number[];
+  readonly constraintSurface: number[];
+  readonly constraintSide: number[];
+  readonly constraintFace: number[];
+  readonly pieceStart: number[];
+  readonly pieceMember: number[];
+  readonly ownerPieceStart: number[];
+  /** Plane of each free-plane detector by name, and the sign of its normal along the family's. */
+  readonly detectorPlanes: ReadonlyMap<string, { readonly plane: number; readonly sign: 1 | -1 }>;
+}
+
+/** Surfaces closer than this share of the design's size are one. */
+const RELATIVE_TOLERANCE = 1e-9;
+/** A free plane stands this far beyond where it was put, so that it never coincides with a face: its light has left the face first. */
+const PLANE_CLEARANCE = 1e-6;
+
+export function compileSolids(description: Description, parts: readonly PlacedPart[]): CompiledSolids {
+  const size = designSize(parts);
+  const table = new SurfaceTable(size * RELATIVE_TOLERANCE);
+  const faces: SceneFace[] = [];
+  const primitives: { sides: SurfaceSide[]; faces: number[] }[] = [];
+  const pieceStart = [0];
+  const pieceMember: number[] = [];
+  // Owner 0, the surroundings, has no pieces.
+  const ownerPieceStart = [0, 0];
+
+  const addPrimitive = (part: PlacedPart, owner: number, named: NamedSolid, hollow: boolean): number => {
+    const sides: SurfaceSide[] = [];
+    const own: number[] = [];
+    for (const face of named.solid.faces) {
+      const side = table.add(face.surface);
+      const reference = `${part.description.name}.${named.prefix}${face.name}`;
+      faces.push({ index: faces.length, reference, part, owner, patch: face.patch, hollow, surface: side.handle });
+      sides.push(side);
+      own.push(faces.length - 1);
+    }
+    primitives.push({ sides, faces: own });
+    return primitives.length - 1;
+  };
+
+  parts.forEach((part, i) => {
+    for (const { body, minus } of part.pieces) {
+      pieceMember.push(addPrimitive(part, i + 1, body, false));
+      for (const hole of minus) pieceMember.push(addPrimitive(part, i + 1, hole, true));
+      pieceStart.push(pieceMember.length);
+    }
+    ownerPieceStart.push(pieceStart.length - 1);
+  });
+
+  const planes = new Map<string, SurfaceSide>();
+  for (const { name, target } of description.detectors) {
+    if (target.kind !== 'plane') continue;
+    const normal = snapDirection(normalise(target.normal));
+    const offset = dot(normal, target.at) + PLANE_CLEARANCE * Math.max(1, size / 100);
+    planes.set(name, table.add({ kind: 'plane', normal, offset }));
+  }
+
+  const { normals, starts, offsets, quadrics, curves, idOf } = table.finish();
+  const primitiveStart = [0];
+  const constraintSurface: number[] = [];
+  const constraintSide: number[] = [];
+  const constraintFace: number[] = [];
+  for (const { sides, faces: own } of primitives) {
+    sides.forEach(({ handle, side }, k) => {
+      constraintSurface.push(idOf(handle));
+      constraintSide.push(side);
+      constraintFace.push(own[k]);
+    });
+    primitiveStart.push(constraintSurface.length);
+  }
+  const detectorPlanes = new Map<string, { plane: number; sign: 1 | -1 }>();
+  for (const [name, { handle, side }] of planes) detectorPlanes.set(name, { plane: idOf(handle), sign: -side as 1 | -1 });
+  return {
+    faces,
+    normals,
+    starts,
+    offsets,
+    quadrics,
+    curves,
+    primitiveStart,
+    constraintSurface,
+    constraintSide,
+    constraintFace,
+    pieceStart,
+    pieceMember,
+    ownerPieceStart,
+    detectorPlanes,
+  };
+}
+
+/** Longest side of the box round all parts, mm. */
+export function designSize(parts: readonly PlacedPart[]): number {
+  const axes: Vector3[] = [
+    [1, 0, 0],
+    [0, 1, 0],
+    [0, 0, 1],
+  ];
+  const ranges = axes.map((axis) => {
+    const all = parts.flatMap((part) => partFaces(part).map(({ face }) => patchRange(face.patch, axis)));
+    return all.length === 0 ? 1 : Math.max(...all.map(([, b]) => b)) - Math.min(...all.map(([a]) => a));
+  });
+  return Math.max(...ranges);
+}
+
+/** Faults of face names used by exit, detectors and pumps. */
+export function checkFaceReference(
+  parts: readonly PlacedPart[],
+  reference: string,
+  path: Fault['path'],
+): Fault | null {
+  if (findFace(parts, reference) !== null) return null;
+  return { code: 'unknown-name', severity: 'error', path, problem: 'no part has this face', found: reference };
+}

@@ -1,0 +1,123 @@
+/** Places in the tally arrays for every map, spectrum and angular map. */
+import type { CompiledSolids } from './compile-solids.js';
+import type { RecorderPlan, VoxelPlan } from './compile-recorders.js';
+import { AZIMUTH_CELLS, POLAR_CELLS, RECORDER, type Scene } from './scene-layout.js';
+import { sharedBytes, sharedDoubles, sharedInts } from './shared-arrays.js';
+import { frameAbout, scale } from './vector.js';
+import type { WavelengthGrid } from './wavelength-grid.js';
+
+type RecorderArrays = Pick<
+  Scene,
+  | 'faceExit'
+  | 'faceRecorderOut'
+  | 'faceRecorderArriving'
+  | 'planeDetector'
+  | 'detectorAperture'
+  | 'detectorExit'
+  | 'detectorSign'
+  | 'recorders'
+  | 'recorderFrame'
+  | 'recorderWrap'
+  | 'recorderCells'
+  | 'recorderMap'
+  | 'recorderSpectrum'
+  | 'recorderAngles'
+  | 'recorderLights'
+  | 'voxelOrigin'
+  | 'voxelScale'
+  | 'voxelCells'
+  | 'voxelPumpMap'
+  | 'voxelAllMap'
+  | 'mapCells'
+  | 'spectrumCells'
+  | 'angleCells'
+  | 'spectrumLaunched'
+  | 'spectrumAbsorbedPump'
+  | 'spectrumEmitted'
+>;
+
+export function layOutRecorders(
+  solids: CompiledSolids,
+  plans: readonly RecorderPlan[],
+  voxels: VoxelPlan,
+  grid: WavelengthGrid,
+): { arrays: RecorderArrays } {
+  const wavelengths = grid.nm.length;
+  const counter = () => {
+    let next = 0;
+    return { take: (cells: number) => (next += cells) - cells, total: () => next };
+  };
+  const maps = counter();
+  const spectra = counter();
+  const angles = counter();
+  const frame = new Float64Array(plans.length * RECORDER.STRIDE);
+  const aperture = new Float64Array(plans.length * 2);
+  const mapAt: number[] = [];
+  const spectrumAt: number[] = [];
+  const anglesAt: number[] = [];
+  plans.forEach((plan, i) => {
+    frame.set(frameOf(plan), i * RECORDER.STRIDE);
+    mapAt.push(maps.take(plan.cells[0] * plan.cells[1]));
+    spectrumAt.push(plan.spectrum ? spectra.take(2 * wavelengths) : -1);
+    anglesAt.push(plan.angles ? angles.take(POLAR_CELLS * AZIMUTH_CELLS) : -1);
+    if (plan.outline?.kind === 'disc') aperture.set([plan.outline.radius, -1], 2 * i);
+    if (plan.outline?.kind === 'rectangle') aperture.set(scaleHalf(plan.outline.size), 2 * i);
+  });
+  const voxelCount = voxels.cells[0] * voxels.cells[1] * voxels.cells[2];
+  const faceRecorder = (what: (plan: RecorderPlan) => boolean) =>
+    solids.faces.map((face) => plans.findIndex((plan) => plan.face === face && what(plan)));
+  const planeDetector = new Int32Array(solids.offsets.length).fill(-1);
+  plans.forEach((plan, i) => {
+    if (plan.plane !== null) planeDetector[plan.plane.plane] = i;
+  });
+  const exitFaces = new Set(plans.filter(({ isExit }) => isExit).map(({ face }) => face));
+  return {
+    arrays: {
+      faceExit: sharedBytes(solids.faces.map((face) => (exitFaces.has(face) ? 1 : 0))),
+      faceRecorderOut: sharedInts(faceRecorder(({ what }) => what !== 'pumped-face')),
+      faceRecorderArriving: sharedInts(faceRecorder(({ what }) => what === 'pumped-face')),
+      planeDetector: sharedInts(planeDetector),
+      detectorAperture: sharedDoubles(aperture),
+      detectorExit: sharedBytes(plans.map(({ isExit }) => (isExit ? 1 : 0))),
+      detectorSign: sharedBytes(plans.map(({ plane }) => plane?.sign ?? 0)),
+      recorders: plans.length,
+      recorderFrame: sharedDoubles(frame),
+      recorderWrap: sharedInts(plans.map(({ wrapped }) => (wrapped ? 1 : 0))),
+      recorderCells: sharedInts(plans.flatMap(({ cells }) => cells)),
+      recorderMap: sharedInts(mapAt),
+      recorderSpectrum: sharedInts(spectrumAt),
+      recorderAngles: sharedInts(anglesAt),
+      recorderLights: sharedInts(plans.map((p) => (p.countsPump ? 1 : 0) | (p.countsEmitted ? 2 : 0))),
+      voxelOrigin: sharedDoubles(voxels.origin),
+      voxelScale: sharedDoubles(voxels.cells.map((cells, axis) => cells / voxels.size[axis])),
+      voxelCells: sharedInts(voxels.cells),
+      voxelPumpMap: maps.take(voxelCount),
+      voxelAllMap: maps.take(voxelCount),
+      mapCells: maps.total(),
+      spectrumLaunched: spectra.take(wavelengths),
+      spectrumAbsorbedPump: spectra.take(wavelengths),
+      spectrumEmitted: spectra.take(wavelengths),
+      spectrumCells: spectra.total(),
+      angleCells: angles.total(),
+    },
+  };
+}
+
+const scaleHalf = ([a, b]: readonly [number, number]): [number, number] => [a / 2, b / 2];
+
+function frameOf(plan: RecorderPlan): number[] {
+  const [u, v] = plan.extent;
+  const { normal } = plan;
+  const perpendicular = Math.abs(plan.u[0] * normal[0] + plan.u[1] * normal[1] + plan.u[2] * normal[2]) < 1e-9;
+  const azimuth = plan.wrapped || perpendicular ? { u: plan.u, v: plan.v } : frameAbout(normal);
+  // A wrapped map finds its cell along the axis; its azimuth comes from the axes u, v.
+  const stepV = scale(plan.wrapped ? plan.normal : plan.v, plan.cells[1] / (v[1] - v[0]));
+  return [
+    ...plan.origin,
+    ...scale(plan.u, plan.cells[0] / (u[1] - u[0])),
+    ...stepV,
+    ...normal,
+    ...azimuth.u,
+    ...azimuth.v,
+  ];
+}

@@ -1,0 +1,126 @@
+/** Area or volume of map cells, by sampling points inside each: cells on the rim of a face or of the liquid count in part. */
+import type { Vector2 } from '../design/description.js';
+import type { RecorderPlan } from './compile-recorders.js';
+import type { CompiledScene } from './compile-scene.js';
+import type { FacePatch } from './convex-solid.js';
+import { RegionGraph } from './region-graph.js';
+import { add, dot, scale, subtract } from './vector.js';
+
+const SAMPLES = 8;
+
+/** Area, mm², of each cell of a recorder's map. */
+export function mapMeasure(plan: RecorderPlan): Float64Array {
+  const [cellsU, cellsV] = plan.cells;
+  const [[uLow, uHigh], [vLow, vHigh]] = plan.extent;
+  const stepU = (uHigh - uLow) / cellsU;
+  const stepV = (vHigh - vLow) / cellsV;
+  const density = areaDensity(plan);
+  const measure = new Float64Array(cellsU * cellsV);
+  for (let iv = 0; iv < cellsV; iv++) {
+    for (let iu = 0; iu < cellsU; iu++) {
+      let sum = 0;
+      for (let k = 0; k < SAMPLES * SAMPLES; k++) {
+        const u = uLow + (iu + ((k % SAMPLES) + 0.5) / SAMPLES) * stepU;
+        const v = vLow + (iv + (Math.floor(k / SAMPLES) + 0.5) / SAMPLES) * stepV;
+        sum += density(u, v);
+      }
+      measure[iu + cellsU * iv] = (sum / SAMPLES ** 2) * stepU * stepV;
+    }
+  }
+  return measure;
+}
+
+/** True area per map area at (u, v) from the centre of the map; 0 off the face. */
+function areaDensity(plan: RecorderPlan): (u: number, v: number) => number {
+  if (plan.outline !== null) return inOutline(plan.outline);
+  const patch = plan.face?.patch;
+  if (patch === undefined) throw new Error('a recorder sits on a face or has an outline');
+  switch (patch.kind) {
+    case 'polygon':
+      return inPolygon(plan, patch);
+    case 'disc':
+      return (u, v) => (u * u + v * v <= patch.radius ** 2 ? 1 : 0);
+    case 'side': {
+      const mean = (patch.bottomRadius + patch.topRadius) / 2;
+      const slant = Math.hypot(patch.height, patch.topRadius - patch.bottomRadius) / patch.height;
+      return (_, v) => {
+        const radius = patch.bottomRadius + ((patch.topRadius - patch.bottomRadius) * v) / patch.height;
+        return (radius / mean) * slant;
+      };
+    }
+    case 'zone':
+      return inZone(patch);
+  }
+}
+
+function inOutline(outline: NonNullable<RecorderPlan['outline']>): (u: number, v: number) => number {
+  if (outline.kind === 'disc') return (u, v) => (u * u + v * v <= outline.radius ** 2 ? 1 : 0);
+  return () => 1;
+}
+
+function inPolygon(plan: RecorderPlan, patch: Extract<FacePatch, { kind: 'polygon' }>): (u: number, v: number) => number {
+  const centre = add(plan.origin, add(scale(plan.u, -plan.extent[0][0]), scale(plan.v, -plan.extent[1][0])));
+  const corners = patch.corners.map((corner): Vector2 => {
+    const d = subtract(corner, centre);
+    return [dot(d, plan.u), dot(d, plan.v)];
+  });
+  const side = ([ax, ay]: Vector2, [bx, by]: Vector2, u: number, v: number) => (bx - ax) * (v - ay) - (by - ay) * (u - ax);
+  return (u, v) => {
+    const signs = corners.map((corner, i) => side(corner, corners[(i + 1) % corners.length], u, v));
+    return signs.every((s) => s >= 0) || signs.every((s) => s <= 0) ? 1 : 0;
+  };
+}
+
+/** A dome is mapped as seen along its axis; both halves of what lies beyond its equator fall on the same cells. */
+function inZone(patch: Extract<FacePatch, { kind: 'zone' }>): (u: number, v: number) => number {
+  const { radius, from } = patch;
+  const rim2 = radius ** 2 - from ** 2;
+  return (u, v) => {
+    const r2 = u * u + v * v;
+    if (r2 >= radius ** 2) return 0;
+    const stretch = radius / Math.sqrt(radius ** 2 - r2);
+    if (from >= 0) return r2 <= rim2 ? stretch : 0;
+    return r2 <= rim2 ? stretch : 2 * stretch;
+  };
+}
+
+/** Volume, mm³, of each voxel that belongs to a part with dye (or to any part, if none has). */
+export function voxelMeasure({ scene, legend }: CompiledScene): Float64Array {
+  const { origin, size, cells } = legend.voxels;
+  const graph = new RegionGraph(scene);
+  const dyed = (owner: number) => scene.absorberCount[scene.ownerMedium[owner]] > 1;
+  const anyDye = Array.from({ length: scene.owners - 1 }, (_, i) => i + 1).some(dyed);
+  const step = size.map((s, axis) => s / cells[axis]);
+  let region = -1;
+  const counts = (x: number, y: number, z: number): boolean => {
+    if (region < 0 || !graph.contains(region, x, y, z)) {
+      if (graph.crowded) graph.forget();
+      region = graph.locate(x, y, z, 0.6, 0.64, 0.48);
+    }
+    const owner = graph.owner[region];
+    return owner > 0 && (!anyDye || dyed(owner));
+  };
+  const measure = new Float64Array(cells[0] * cells[1] * cells[2]);
+  const share = (ix: number, iy: number, iz: number, samples: number): number => {
+    let inside = 0;
+    for (let k = 0; k < samples ** 3; k++) {
+      const a = (k % samples) + 0.5;
+      const b = (Math.floor(k / samples) % samples) + 0.5;
+      const c = Math.floor(k / samples ** 2) + 0.5;
+      const at = (axis: number, i: number, s: number) => origin[axis] + (i + s / samples) * step[axis];
+      if (counts(at(0, ix, a), at(1, iy, b), at(2, iz, c))) inside++;
+    }
+    return inside / samples ** 3;
+  };
+  let cell = 0;
+  for (let iz = 0; iz < cells[2]; iz++) {
+    for (let iy = 0; iy < cells[1]; iy++) {
+      for (let ix = 0; ix < cells[0]; ix++) {
+        const coarse = share(ix, iy, iz, 2);
+        const fine = coarse > 0 && coarse < 1 ? share(ix, iy, iz, 5) : coarse;
+        measure[cell++] = fine * step[0] * step[1] * step[2];
+      }
+    }
+  }
+  return measure;
+}

@@ -1,0 +1,293 @@
+/**
+ * Regions and what happens between them, worked out as light first comes there.
+ *
+ * A region is a choice of side for every surface of the scene: which slab of each family of parallel planes, inside or outside each
+ * quadric. Where light is, is known by its region alone, never by asking a rounded coordinate, so no ray can slip between two
+ * faces or be lost on an edge: it always has a next surface that bounds its region, and crossing it leads to exactly one
+ * neighbour. Most surfaces continue beyond the part that they bound; crossing them there changes nothing (`PASS`).
+ */
+import type { Scene } from './scene-layout.js';
+import { SURROUNDINGS } from './scene-layout.js';
+import { quadricValue, QUADRIC_STRIDE } from './quadric.js';
+
+/** Crossing where nothing changes. */
+export const PASS = -1;
+const UNKNOWN = -2;
+
+/** Closer than this to a surface, the direction of travel decides on which side a starting point lies, mm. */
+const TIE = 1e-9;
+
+export class RegionGraph {
+  /** Ways out of a region: low and high plane of every family, then every quadric. */
+  readonly ways: number;
+  readonly families: number;
+  readonly quadrics: number;
+  readonly capacity: number;
+
+  /** [region · 2·families + 2·family + (0 low | 1 high)]: offset of the plane that bounds the region, ±Infinity without. */
+  readonly bound: Float64Array;
+  /** [region · quadrics + quadric]: −1 inside, +1 outside. */
+  readonly side: Int8Array;
+  /** [region · ways + way]: region beyond, meaningful once `crossing` is known. */
+  readonly neighbour: Int32Array;
+  /** [region · ways + way]: interface number, or PASS, or unknown. */
+  readonly crossing: Int32Array;
+  readonly owner: Int32Array;
+  readonly medium: Int32Array;
+
+  // Interfaces.
+  finish = new Int32Array(64);
+  mediumBeyond = new Int32Array(64);
+  ownerBeyond = new Int32Array(64);
+  /** Face left, −1 when coming from the surroundings. */
+  faceOut = new Int32Array(64);
+  /** Face entered, −1 when going to the surroundings. */
+  faceIn = new Int32Array(64);
+  /** Face that carries the finish: where its absorption is booked. */
+  faceActing = new Int32Array(64);
+  /** Recorder of a free plane, −1 for real faces. */
+  detector = new Int32Array(64);
+
+  #regions = 0;
+  #interfaces = 0;
+  #slab: Int32Array;
+  readonly #known = new Map<string, number>();
+  readonly #knownInterfaces = new Map<string, number>();
+
+  constructor(readonly scene: Scene) {
+    this.families = scene.families;
+    this.quadrics = scene.quadrics;
+    this.ways = 2 * this.families + this.quadrics;
+    const bytes = this.ways * 8 + this.families * 20 + this.quadrics + 8;
+    this.capacity = Math.max(64, Math.min(1 << 16, Math.floor(2 ** 28 / bytes)));
+    this.bound = new Float64Array(this.capacity * 2 * this.families);
+    this.side = new Int8Array(this.capacity * this.quadrics);
+    this.neighbour = new Int32Array(this.capacity * this.ways);
+    this.crossing = new Int32Array(this.capacity * this.ways);
+    this.owner = new Int32Array(this.capacity);
+    this.medium = new Int32Array(this.capacity);
+    this.#slab = new Int32Array(this.capacity * this.families);
+  }
+
+  get regions(): number {
+    return this.#regions;
+  }
+
+  /** Almost full: the kernel calls this between histories, when no region number is held. */
+  get crowded(): boolean {
+    return this.#regions > this.capacity - 256;
+  }
+
+  /** Forgets every region; they are worked out anew when light comes there. Results do not depend on it. */
+  forget(): void {
+    this.#known.clear();
+    this.#regions = 0;
+  }
+
+  /** Region of a starting point; on a surface, the side the direction leads to. */
+  locate(x: number, y: number, z: number, dx: number, dy: number, dz: number): number {
+    const { scene } = this;
+    const slabs: number[] = [];
+    const sides: number[] = [];
+    for (let f = 0; f < this.families; f++) {
+      const nx = scene.familyNormal[3 * f];
+      const ny = scene.familyNormal[3 * f + 1];
+      const nz = scene.familyNormal[3 * f + 2];
+      const at = nx * x + ny * y + nz * z;
+      const forward = nx * dx + ny * dy + nz * dz >= 0;
+      let slab = 0;
+      for (let i = scene.familyStart[f]; i < scene.familyStart[f + 1]; i++) {
+        const beyond = at - scene.planeOffset[i];
+        if (beyond > TIE || (beyond >= -TIE && forward)) slab++;
+      }
+      slabs.push(slab);
+    }
+    for (let q = 0; q < this.quadrics; q++) {
+      const c = q * QUADRIC_STRIDE;
+      const h = 1e-6;
+      const value = quadricValue(scene.quadric, c, x, y, z);
+      const ahead = quadricValue(scene.quadric, c, x + h * dx, y + h * dy, z + h * dz);
+      // q is about 2·radius·distance near its surface.
+      const reach = TIE * quadricScale(scene.quadric, c, x, y, z);
+      sides.push((Math.abs(value) > reach ? value : ahead) > 0 ? 1 : -1);
+    }
+    return this.#intern(slabs, sides);
+  }
+
+  /** Whether a point lies well inside a region, so that `locate` would return it. */
+  contains(region: number, x: number, y: number, z: number): boolean {
+    const { scene } = this;
+    for (let f = 0; f < this.families; f++) {
+      const at = scene.familyNormal[3 * f] * x + scene.familyNormal[3 * f + 1] * y + scene.familyNormal[3 * f + 2] * z;
+      const b = 2 * (region * this.families + f);
+      if (at < this.bound[b] + TIE || at > this.bound[b + 1] - TIE) return false;
+    }
+    for (let q = 0; q < this.quadrics; q++) {
+      const c = q * QUADRIC_STRIDE;
+      const value = quadricValue(scene.quadric, c, x, y, z) * this.side[region * this.quadrics + q];
+      if (value < TIE * quadricScale(scene.quadric, c, x, y, z)) return false;
+    }
+    return true;
+  }
+
+  /** Works out what lies beyond one way of a region. Returns the crossing. */
+  resolve(region: number, way: number): number {
+    const at = region * this.ways + way;
+    if (this.crossing[at] !== UNKNOWN) return this.crossing[at];
+    const slabs = Array.from(this.#slab.subarray(region * this.families, (region + 1) * this.families));
+    const sides = Array.from(this.side.subarray(region * this.quadrics, (region + 1) * this.quadrics));
+    let surface: number;
+    if (way < 2 * this.families) {
+      const family = way >> 1;
+      const up = way & 1;
+      surface = this.scene.familyStart[family] + slabs[family] - (up ? 0 : 1);
+      slabs[family] += up ? 1 : -1;
+    } else {
+      const q = way - 2 * this.families;
+      surface = this.scene.planeOffset.length + q;
+      sides[q] = -sides[q];
+    }
+    const beyond = this.#intern(slabs, sides);
+    this.neighbour[at] = beyond;
+    this.crossing[at] = this.#interface(region, beyond, surface);
+    return this.crossing[at];
+  }
+
+  #intern(slabs: readonly number[], sides: readonly number[]): number {
+    const key = `${slabs.join(',')}|${sides.join(',')}`;
+    const known = this.#known.get(key);
+    if (known !== undefined) return known;
+    if (this.#regions >= this.capacity) throw new RangeError('more regions in one history than the graph can hold');
+    const region = this.#regions++;
+    this.#known.set(key, region);
+    this.#slab.set(slabs, region * this.families);
+    this.side.set(sides, region * this.quadrics);
+    slabs.forEach((slab, f) => {
+      const start = this.scene.familyStart[f];
+      const count = this.scene.familyStart[f + 1] - start;
+      const b = 2 * (region * this.families + f);
+      this.bound[b] = slab > 0 ? this.scene.planeOffset[start + slab - 1] : Number.NEGATIVE_INFINITY;
+      this.bound[b + 1] = slab < count ? this.scene.planeOffset[start + slab] : Number.POSITIVE_INFINITY;
+    });
+    this.crossing.fill(UNKNOWN, region * this.ways, (region + 1) * this.ways);
+    this.owner[region] = this.#ownerOf(region);
+    this.medium[region] = this.scene.ownerMedium[this.owner[region]];
+    return region;
+  }
+
+  #ownerOf(region: number): number {
+    for (let owner = this.scene.owners - 1; owner > SURROUNDINGS; owner--) {
+      for (let piece = this.scene.ownerPieceStart[owner]; piece < this.scene.ownerPieceStart[owner + 1]; piece++) {
+        if (this.#inPiece(piece, region)) return owner;
+      }
+    }
+    return SURROUNDINGS;
+  }
+
+  #inPiece(piece: number, region: number): boolean {
+    const { pieceStart, pieceMember } = this.scene;
+    for (let m = pieceStart[piece]; m < pieceStart[piece + 1]; m++) {
+      const body = m === pieceStart[piece];
+      if (this.#inPrimitive(pieceMember[m], region) !== body) return false;
+    }
+    return true;
+  }
+
+  #inPrimitive(primitive: number, region: number): boolean {
+    const { primitiveStart, constraintSurface, constraintSide } = this.scene;
+    for (let c = primitiveStart[primitive]; c < primitiveStart[primitive + 1]; c++) {
+      if (this.#sideOf(constraintSurface[c], region) !== constraintSide[c]) return false;
+    }
+    return true;
+  }
+
+  #sideOf(surface: number, region: number): number {
+    const { planeOffset, familyStart } = this.scene;
+    if (surface >= planeOffset.length) return this.side[region * this.quadrics + surface - planeOffset.length];
+    let family = 0;
+    while (familyStart[family + 1] <= surface) family++;
+    return this.#slab[region * this.families + family] > surface - familyStart[family] ? 1 : -1;
+  }
+
+  #interface(from: number, to: number, surface: number): number {
+    const { scene } = this;
+    const isPlane = surface < scene.planeOffset.length;
+    if (isPlane && scene.planeDetector[surface] >= 0) {
+      return this.#internInterface(-1, this.medium[to], this.owner[to], -1, -1, -1, scene.planeDetector[surface]);
+    }
+    const ownerFrom = this.owner[from];
+    const ownerTo = this.owner[to];
+    if (ownerFrom === ownerTo) return PASS;
+    const faceOut = this.#faceOf(ownerFrom, from, to, surface);
+    const faceIn = this.#faceOf(ownerTo, from, to, surface);
+    const outFinish = faceOut < 0 ? -1 : scene.faceFinish[faceOut];
+    const inFinish = faceIn < 0 ? -1 : scene.faceFinish[faceIn];
+    const acting = outFinish >= 0 ? faceOut : inFinish >= 0 ? faceIn : faceOut >= 0 ? faceOut : faceIn;
+    const finish = Math.max(outFinish >= 0 ? outFinish : inFinish, 0);
+    return this.#internInterface(finish, this.medium[to], ownerTo, faceOut, faceIn, acting, -1);
+  }
+
+  /** Face of `owner` that lies on `surface` between two neighbouring regions, −1 if its boundary is not there. */
+  #faceOf(owner: number, from: number, to: number, surface: number): number {
+    const { ownerPieceStart, pieceStart, pieceMember, primitiveStart, constraintSurface, constraintFace } = this.scene;
+    for (let piece = ownerPieceStart[owner]; piece < ownerPieceStart[owner + 1]; piece++) {
+      if (this.#inPiece(piece, from) === this.#inPiece(piece, to)) continue;
+      for (let m = pieceStart[piece]; m < pieceStart[piece + 1]; m++) {
+        const primitive = pieceMember[m];
+        if (this.#inPrimitive(primitive, from) === this.#inPrimitive(primitive, to)) continue;
+        for (let c = primitiveStart[primitive]; c < primitiveStart[primitive + 1]; c++) {
+          if (constraintSurface[c] === surface) return constraintFace[c];
+        }
+      }
+    }
+    return -1;
+  }
+
+  #internInterface(
+    finish: number,
+    mediumBeyond: number,
+    ownerBeyond: number,
+    faceOut: number,
+    faceIn: number,
+    faceActing: number,
+    detector: number,
+  ): number {
+    const key = `${finish},${mediumBeyond},${ownerBeyond},${faceOut},${faceIn},${detector}`;
+    const known = this.#knownInterfaces.get(key);
+    if (known !== undefined) return known;
+    const id = this.#interfaces++;
+    if (id >= this.finish.length) this.#growInterfaces();
+    this.#knownInterfaces.set(key, id);
+    this.finish[id] = finish;
+    this.mediumBeyond[id] = mediumBeyond;
+    this.ownerBeyond[id] = ownerBeyond;
+    this.faceOut[id] = faceOut;
+    this.faceIn[id] = faceIn;
+    this.faceActing[id] = faceActing;
+    this.detector[id] = detector;
+    return id;
+  }
+
+  #growInterfaces(): void {
+    const grow = (old: Int32Array) => {
+      const larger = new Int32Array(old.length * 2);
+      larger.set(old);
+      return larger;
+    };
+    this.finish = grow(this.finish);
+    this.mediumBeyond = grow(this.mediumBeyond);
+    this.ownerBeyond = grow(this.ownerBeyond);
+    this.faceOut = grow(this.faceOut);
+    this.faceIn = grow(this.faceIn);
+    this.faceActing = grow(this.faceActing);
+    this.detector = grow(this.detector);
+  }
+}
+
+/** Size of the gradient of q: what turns a value of q into a distance. */
+function quadricScale(q: Float64Array, c: number, x: number, y: number, z: number): number {
+  const gx = q[c] * x + q[c + 3] * y + q[c + 4] * z + q[c + 6];
+  const gy = q[c + 3] * x + q[c + 1] * y + q[c + 5] * z + q[c + 7];
+  const gz = q[c + 4] * x + q[c + 5] * y + q[c + 2] * z + q[c + 8];
+  return 2 * Math.sqrt(gx * gx + gy * gy + gz * gz) + 1e-12;
+}

@@ -1,0 +1,172 @@
+/**
+ * The scene: what the kernel reads. Flat typed arrays only, over shared memory, so that threads see one copy.
+ * Lengths in mm; spectral tables are indexed [thing · wavelengths + wavelength index].
+ */
+export const SCENE_VERSION = 1;
+
+/** Index of the surroundings among owners; part i of the design is owner i + 1. */
+export const SURROUNDINGS = 0;
+
+/** How a finish decides between reflection, transmission and absorption. */
+export const SPLIT = { fresnel: 0, spectral: 1, metal: 2, table: 3 } as const;
+/** Where reflected or transmitted light goes. */
+export const SPREAD = { specular: 0, lambertian: 1, gaussian: 2, topHat: 3 } as const;
+export const BEAM = { patch: 0, gaussian: 1, lambertian: 2, diodes: 3 } as const;
+export const OUTLINE = { rectangle: 0, disc: 1 } as const;
+
+/** Slots of a face's fates, counted from `faceSlot[face]`. */
+export const FACE_SLOT = {
+  reflectedAtEntry: 0,
+  leftPump: 1,
+  leftEmitted: 2,
+  absorbedPump: 3,
+  absorbedEmitted: 4,
+  COUNT: 5,
+} as const;
+/** Slots of an owner's fates, counted from `ownerSlot[owner]`. */
+export const OWNER_SLOT = { bulkPump: 0, bulkEmitted: 1, trappedPump: 2, trappedEmitted: 3, COUNT: 4 } as const;
+/** Slots of one dye in one owner, counted from `dyeSlot[owner · maxAbsorbers + absorber]`. */
+export const DYE_SLOT = { lostPump: 0, lostEmitted: 1, stokesPump: 2, stokesEmitted: 3, COUNT: 4 } as const;
+export const MISSED_SLOT = 0;
+export const EXIT_PUMP_SLOT = 1;
+export const EXIT_EMITTED_SLOT = 2;
+export const FIRST_OTHER_SLOT = 3;
+
+/** Doubles per pump in `pumps`. */
+export const PUMP = {
+  originX: 0, // origin of the beam, mm
+  axisU: 3, // unit vectors
+  axisV: 6,
+  axisW: 9, // direction of the beam
+  sizeU: 12, // full width, or radius of a disc or Gaussian, mm
+  sizeV: 13,
+  spreadU: 14, // patch, diodes: standard deviation of the angle, rad; Gaussian: 1/e² half angle / 2
+  spreadV: 15,
+  across: 16,
+  along: 17,
+  pitchU: 18,
+  pitchV: 19,
+  lensPower: 20, // 1/focal length, 1/mm, 0 without lens
+  lensDistance: 21,
+  STRIDE: 22,
+} as const;
+
+/** Doubles per recorder in `recorderFrame`. */
+export const RECORDER = {
+  originX: 0,
+  stepU: 3, // unit axis u divided by the cell width, so that a dot product gives the cell
+  stepV: 6,
+  axisN: 9, // outward normal at the centre: axis of the angular map
+  axisU: 12, // unit axes for the azimuth
+  axisV: 15,
+  STRIDE: 18,
+} as const;
+export const POLAR_CELLS = 45;
+export const AZIMUTH_CELLS = 72;
+
+export const ABSORPTION_HISTOGRAM_CELLS = 64;
+export const PATH_HISTOGRAM_CELLS = 100;
+
+export interface Scene {
+  readonly version: number;
+  readonly wavelengths: number;
+
+  // ---- surfaces. Families of parallel planes come first; families 0, 1, 2 are the design axes x, y, z.
+  readonly families: number;
+  readonly familyNormal: Float64Array; // [family · 3]
+  readonly familyStart: Int32Array; // [family + 1], into planeOffset
+  readonly planeOffset: Float64Array; // ascending within a family: normal · p = offset
+  readonly quadrics: number;
+  readonly quadric: Float64Array; // [quadric · 10]: xx yy zz xy xz yz x y z 1 of q(p), inside q < 0 (see quadric.ts)
+
+  // ---- solids. A surface id is a plane index, or planes + quadric index.
+  readonly primitiveStart: Int32Array; // [primitive + 1], into the three arrays below
+  readonly constraintSurface: Int32Array;
+  readonly constraintSide: Int8Array; // −1: inside is below the offset (q < 0), +1: above
+  readonly constraintFace: Int32Array;
+  readonly pieceStart: Int32Array; // [piece + 1], into pieceMember; first member is the body, the others are taken away
+  readonly pieceMember: Int32Array;
+  readonly ownerPieceStart: Int32Array; // [owner + 1], into pieces; the surroundings have none
+  readonly owners: number;
+  readonly ownerMedium: Int32Array;
+
+  // ---- faces
+  readonly faces: number;
+  readonly faceOwner: Int32Array;
+  readonly faceFinish: Int32Array; // −1: none given
+  readonly faceExit: Int8Array; // 1: light that leaves here is output
+  readonly faceRecorderOut: Int32Array; // light leaving through the face, −1 none
+  readonly faceRecorderArriving: Int32Array; // pump light arriving from outside, −1 none
+  readonly planeDetector: Int32Array; // [plane]: recorder of a free plane, −1
+  readonly detectorAperture: Float64Array; // [recorder · 2]: half widths u, v; v < 0: disc of radius u; 0: unbounded
+  readonly detectorExit: Int8Array; // [recorder]
+  readonly detectorSign: Int8Array; // [recorder]: sign of the detector's normal along its family's
+
+  // ---- media
+  readonly media: number;
+  readonly index: Float64Array; // [medium · wavelengths]
+  readonly attenuation: Float64Array; // 1/mm, sum of all absorbers
+  readonly maxAbsorbers: number;
+  readonly absorberCount: Int32Array; // [medium]; absorber 0 is the bare solvent or solid, the others are dyes
+  readonly absorberShare: Float64Array; // [(medium · maxAbsorbers + absorber) · wavelengths]: cumulative
+  readonly dyeYield: Float64Array; // [medium · maxAbsorbers + absorber]
+  readonly dyeSpectrum: Int32Array; // alias table of its emission
+
+  // ---- finishes
+  readonly finishes: number;
+  readonly finishSplit: Int32Array;
+  readonly finishReflectSpread: Int32Array;
+  readonly finishTransmitSpread: Int32Array;
+  readonly finishWidth: Float64Array; // Gaussian: FWHM; top hat: half angle; rad
+  readonly finishA: Float64Array; // [finish · wavelengths]: reflectance, or n of a metal
+  readonly finishB: Float64Array; // transmittance, or k of a metal
+  readonly finishTable: Int32Array; // first row of an angular table, −1
+  readonly tableAngles: number; // angles per table, evenly from 0 to 90°
+  readonly tableReflectance: Float64Array; // [(row + wavelength) · tableAngles + angle]
+  readonly tableTransmittance: Float64Array;
+
+  // ---- pumps
+  readonly pumpCount: number;
+  readonly pumps: Float64Array;
+  readonly pumpBeam: Int32Array;
+  readonly pumpOutline: Int32Array;
+  readonly pumpSpectrum: Int32Array;
+  readonly pumpCumulative: Float64Array; // cumulative share of photons
+
+  // ---- pooled alias tables of spectra, [table · wavelengths]
+  readonly spectrumKeep: Float64Array;
+  readonly spectrumOther: Int32Array;
+
+  // ---- weights per wavelength
+  readonly energyQuanta: Float64Array; // photon energy in whole quanta, so that sums of it are exact
+  readonly observerX: Float64Array;
+  readonly observerY: Float64Array;
+  readonly observerZ: Float64Array;
+  readonly wavelengthNm: Float64Array;
+
+  // ---- tallies
+  readonly slots: number;
+  readonly faceSlot: Int32Array;
+  readonly ownerSlot: Int32Array;
+  readonly dyeSlot: Int32Array; // [owner · maxAbsorbers + absorber], −1 for the bulk
+  readonly recorders: number;
+  readonly recorderFrame: Float64Array;
+  readonly recorderWrap: Int32Array; // 0 flat; 1 cylinder: u is the azimuth about axisN-stored axis, v the height
+  readonly recorderCells: Int32Array; // [recorder · 2]: cells along u, v
+  readonly recorderMap: Int32Array; // offset of the map in the maps array
+  readonly recorderSpectrum: Int32Array; // offset of its pump spectrum (emitted follows), −1
+  readonly recorderAngles: Int32Array; // offset, −1
+  readonly recorderLights: Int32Array; // bit 0: map counts pump, bit 1: emitted
+  readonly voxelOrigin: Float64Array; // 3
+  readonly voxelScale: Float64Array; // cells per mm, 3
+  readonly voxelCells: Int32Array; // 3
+  readonly voxelPumpMap: number; // offset of the absorbed-pump map
+  readonly voxelAllMap: number;
+  readonly mapCells: number; // of one half
+  readonly spectrumCells: number;
+  readonly angleCells: number;
+  readonly spectrumLaunched: number;
+  readonly spectrumAbsorbedPump: number;
+  readonly spectrumEmitted: number;
+  readonly pathHistogramStep: number; // mm
+}
