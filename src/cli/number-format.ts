@@ -23,7 +23,8 @@ const DIGITS_WITHOUT_ERROR = 4;
  * @param plain never use a power of ten (columns of a table)
  */
 export function roundToError(value: number, standardError: number | null, plain = false): RoundedPair {
-  if (!Number.isFinite(value)) return { value: Number.isNaN(value) ? 'unknown' : 'unbounded', error: null, exponent: 0 };
+  if (!Number.isFinite(value))
+    return { value: Number.isNaN(value) ? 'unknown' : 'unbounded', error: null, exponent: 0 };
   const error = standardError !== null && Number.isFinite(standardError) ? Math.abs(standardError) : null;
   if (error === null || error === 0) {
     const text = significant(value, DIGITS_WITHOUT_ERROR);
@@ -39,12 +40,7 @@ export function roundToError(value: number, standardError: number | null, plain 
 }
 
 /** "0.4123 ± 0.0012 W", "(1.20 ± 0.03)e-7 W", or "12.3 W" when no error is known. */
-export function formatWithError(
-  value: number,
-  standardError: number | null,
-  unit: string,
-  plusMinus: string,
-): string {
+export function formatWithError(value: number, standardError: number | null, unit: string, plusMinus: string): string {
   const pair = roundToError(value, standardError);
   const tail = unit === '' ? '' : ` ${unit}`;
   if (pair.error === null || pair.error === '0') return `${pair.value}${tail}`;
@@ -88,6 +84,8 @@ function shiftDecimal(value: number, places: number): number {
 /** Fixed decimals; negative decimals round to tens, hundreds, …; never "-0". */
 function roundTo(value: number, decimals: number): string {
   const text =
-    decimals >= 0 ? value.toFixed(Math.min(decimals, 100)) : String(Math.round(value / 10 ** -decimals) * 10 ** -decimals);
+    decimals >= 0
+      ? value.toFixed(Math.min(decimals, 100))
+      : String(Math.round(value / 10 ** -decimals) * 10 ** -decimals);
   return /^-0*\.?0*$/.test(text) ? text.slice(1) : text;
 }

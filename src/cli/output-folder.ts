@@ -11,7 +11,10 @@ const RESULTS = 'results';
  * @param now time the run starts
  */
 export function defaultRunFolder(designFile: string, now: Date): string {
-  const name = basename(designFile).replace(/\.ya?ml$/i, '').replace(/[^\p{L}\p{N}._-]+/gu, '-').replace(/^\.+/, '');
+  const name = basename(designFile)
+    .replace(/\.ya?ml$/i, '')
+    .replace(/[^\p{L}\p{N}._-]+/gu, '-')
+    .replace(/^\.+/, '');
   const stamp = now.toISOString().replace(/\..*/, '').replace('T', '-').replaceAll(':', '');
   const milliseconds = String(now.getUTCMilliseconds()).padStart(3, '0');
   return join(RESULTS, name || 'design', `${stamp}-${milliseconds}`);

@@ -1,11 +1,18 @@
 import { Argument, Command, Option } from 'commander';
-import { EXIT_CODES_HELP, type ExitCode } from './exit-codes.js';
-import { collectDial, parseDuration, parseHistories, parsePrecision, parseSeed, parseThreads } from './option-values.js';
-import { print, tell } from './output-stream.js';
-import { toolVersion } from './tool-version.js';
 import type { CheckOptions } from './commands/check.js';
 import type { ProveOptions } from './commands/prove.js';
 import type { TraceCommandOptions } from './commands/trace.js';
+import { EXIT_CODES_HELP, type ExitCode } from './exit-codes.js';
+import {
+  collectDial,
+  parseDuration,
+  parseHistories,
+  parsePrecision,
+  parseSeed,
+  parseThreads,
+} from './option-values.js';
+import { print, tell } from './output-stream.js';
+import { toolVersion } from './tool-version.js';
 
 const ABOUT = `Traces pump light through a fluorescent cell, photon by photon, and says where it all goes.`;
 
@@ -58,7 +65,11 @@ export function buildProgram(done: (code: ExitCode) => void): Command {
     .option('--histories <number>', 'pump photons to follow, for example 200000 or 2e6', parseHistories)
     .option('--precision <percent>', 'relative standard error wanted on the exit fraction, e.g. 0.2%', parsePrecision)
     .option('--for <time>', 'time to trace, with unit ms, s, min or h, e.g. 30s', parseDuration)
-    .option('--seed <text>', "seed of the random streams; same seed, same bits (default: the design's, else 1)", parseSeed)
+    .option(
+      '--seed <text>',
+      "seed of the random streams; same seed, same bits (default: the design's, else 1)",
+      parseSeed,
+    )
     .option('--threads <number>', 'worker threads (default: all cores); the results do not depend on it', parseThreads)
     .option('--out <folder>', 'new or empty folder for the run (default: results/<design>/<time>)')
     .option('--no-files', 'write no files')

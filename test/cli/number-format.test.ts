@@ -4,7 +4,13 @@
  */
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { formatSeconds, formatWithError, groupedCount, roundToError, significant } from '../../src/cli/number-format.js';
+import {
+  formatSeconds,
+  formatWithError,
+  groupedCount,
+  roundToError,
+  significant,
+} from '../../src/cli/number-format.js';
 
 describe('roundToError', () => {
   it.each([

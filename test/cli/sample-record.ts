@@ -72,7 +72,13 @@ function row(
   return { fate, light, where, by, fraction, standardError };
 }
 
-function map(what: string, where: string, variation: number | null, minOverMean: number | null, unit: 'W/cm²' | 'W/cm³') {
+function map(
+  what: string,
+  where: string,
+  variation: number | null,
+  minOverMean: number | null,
+  unit: 'W/cm²' | 'W/cm³',
+) {
   return {
     id: `${what}-${where}`,
     what,

@@ -23,12 +23,19 @@ export function showLedger(record: RunRecord, view: LedgerView, style: TerminalS
   const rows = record.ledger[view.count];
   const sections = [
     headline(record, style),
-    [style.bold(`Where the ${view.count === 'watts' ? 'watts go' : 'photons go'}, % of the pump light`), ...ledgerTable(rows, style)],
+    [
+      style.bold(`Where the ${view.count === 'watts' ? 'watts go' : 'photons go'}, % of the pump light`),
+      ...ledgerTable(rows, style),
+    ],
     labelled('Win back', largestLoss(rows, style), style),
     evenness(record, style),
     survival(record, style),
     labelled('Warnings', view.warnings, { ...style, bold: style.warn }),
-    labelled('Cautions', record.cautions.map((text) => safeText(text, 1000)), { ...style, bold: style.warn }),
+    labelled(
+      'Cautions',
+      record.cautions.map((text) => safeText(text, 1000)),
+      { ...style, bold: style.warn },
+    ),
     labelled('Files', view.folder === null ? [] : [safeText(view.folder)], style),
   ];
   const text = sections
@@ -41,7 +48,10 @@ export function showLedger(record: RunRecord, view: LedgerView, style: TerminalS
 /** The largest loss apart from the Stokes heat, which every re-emission costs. */
 function largestLoss(rows: readonly LedgerRow[], style: TerminalStyle): string[] {
   const losses = rows.filter((row) => groupOf(row) !== 'output' && row.fate !== 'stokes-heat' && row.fraction > 0);
-  const largest = losses.reduce<LedgerRow | null>((top, row) => (top && top.fraction >= row.fraction ? top : row), null);
+  const largest = losses.reduce<LedgerRow | null>(
+    (top, row) => (top && top.fraction >= row.fraction ? top : row),
+    null,
+  );
   if (largest === null) return [];
   const where = largest.where === null ? '' : ` at ${safeText(largest.where, 60)}`;
   const error = largest.standardError === null ? null : 100 * largest.standardError;

@@ -1,0 +1,68 @@
+import type { Description, MediumDescription } from '../design/description.js';
+import { significant } from './number-format.js';
+import { safeText } from './safe-text.js';
+import type { TerminalStyle } from './terminal-style.js';
+
+/** A medium as the pump meets it. */
+export interface MediumReport {
+  readonly medium: string;
+  readonly base: string;
+  readonly parts: readonly string[];
+  /** Wavelength of the first pump, nm, at which the rest is given. */
+  readonly atNm: number;
+  readonly index: number;
+  /** Depth after which 1/e of the pump light is left, mm; null where nothing absorbs. */
+  readonly depthMm: number | null;
+  readonly dyes: readonly {
+    readonly dye: string;
+    readonly millimolesPerLitre: number | null;
+    readonly quantumYield: number;
+  }[];
+}
+
+/** Media that fill a part, at the wavelength of the first pump. */
+export function reportMedia(description: Description): MediumReport[] {
+  const atNm = description.pumps[0]?.wavelengthNm;
+  if (atNm === undefined) return [];
+  return [...description.media.values()]
+    .map((medium) => ({ medium, parts: description.parts.filter((part) => part.medium === medium.name) }))
+    .filter(({ parts }) => parts.length > 0)
+    .map(({ medium, parts }) => ({
+      medium: medium.name,
+      base: medium.base,
+      parts: parts.map((part) => part.name),
+      atNm,
+      index: medium.index(atNm),
+      depthMm: depthAt(medium, atNm),
+      dyes: medium.dyes.map((dye) => ({
+        dye: dye.name,
+        millimolesPerLitre: dye.concentration === null ? null : dye.concentration * 1e3,
+        quantumYield: dye.quantumYield,
+      })),
+    }));
+}
+
+/** One line a medium. */
+export function mediaLines(media: readonly MediumReport[], style: TerminalStyle): string[] {
+  return media.map((report) => {
+    const dyes = report.dyes.map((dye) => {
+      const strength = dye.millimolesPerLitre === null ? '' : ` ${significant(dye.millimolesPerLitre, 4)} mmol/L`;
+      return `${safeText(dye.dye)}${strength}, quantum yield ${significant(100 * dye.quantumYield, 3)} %`;
+    });
+    const depth = report.depthMm === null ? 'no absorption' : `1/e depth ${significant(report.depthMm, 3)} mm`;
+    const facts = [
+      safeText(report.base),
+      `index ${report.index.toFixed(4)} and ${depth} at ${significant(report.atNm, 5)} nm`,
+      ...dyes,
+    ];
+    return `  ${style.bold(safeText(report.medium))} in ${report.parts.map((part) => safeText(part)).join(', ')}: ${facts.join('; ')}`;
+  });
+}
+
+function depthAt(medium: MediumDescription, wavelengthNm: number): number | null {
+  const absorption = medium.dyes.reduce(
+    (sum, dye) => sum + dye.absorption(wavelengthNm),
+    medium.absorption(wavelengthNm),
+  );
+  return absorption > 0 ? 1 / absorption : null;
+}

@@ -1,0 +1,13 @@
+import { shellQuote } from './shell-quote.js';
+
+/** The command that repeats a run to the same bits; without a new folder, which is the repeater's to choose. */
+export function repeatCommand(
+  file: string,
+  histories: number,
+  seed: string,
+  dials: Readonly<Record<string, string>>,
+): string {
+  const turned = Object.entries(dials).flatMap(([name, value]) => ['--dial', `${name}=${value}`]);
+  const words = ['stokeswell', 'trace', file, '--histories', String(histories), '--seed', seed, ...turned];
+  return words.map(shellQuote).join(' ');
+}

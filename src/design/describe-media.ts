@@ -1,0 +1,116 @@
+/** Media as written -> media with curves; library materials are added under their own names where they are used. */
+import {
+  gasNames,
+  readGas,
+  readSolid,
+  readSolvent,
+  solidNames,
+  solventNames,
+  type MaterialData,
+} from '../materials/library.js';
+import type { MediumDescription } from './description.js';
+import { describeOwnDye, dissolveDye, type Dye } from './describe-dyes.js';
+import type { DesignRecord } from './design-fields.js';
+import type { DesignPath } from './fault.js';
+import type { Named } from './form-record.js';
+import type { Reference } from './form-scalars.js';
+import type { MediumEntry, MediumRecord } from './media-fields.js';
+import { checkReference } from './names.js';
+import { checkAscending, pointCurve } from './point-curve.js';
+import type { Reading } from './reading.js';
+
+type Base = Omit<MediumDescription, 'name' | 'path' | 'dyes'>;
+
+/** All media of the design, and the library materials that parts and surroundings name directly. */
+export function describeMedia(design: DesignRecord, reading: Reading): Map<string, MediumDescription> {
+  const dyes = new Map(design.dyes.map((entry) => [entry.name, describeOwnDye(entry, reading)]));
+  const media = new Map<string, MediumDescription>();
+  for (const entry of design.media) {
+    const medium = describeMedium(entry, dyes, reading);
+    if (medium !== null) media.set(entry.name, medium);
+  }
+  const declared = design.media.map(({ name }) => name);
+  const used = [...design.parts.map(({ value }) => value.medium), design.surroundings];
+  for (const medium of used) {
+    if (declared.includes(medium.name)) continue;
+    const names = [...declared, ...libraryNames()];
+    const problem = 'no medium of the design and no material of the library has this name';
+    if (!checkReference(medium, names, problem, reading)) continue;
+    const base = libraryMaterial(medium.name);
+    if (base !== null) media.set(medium.name, { name: medium.name, path: medium.path, ...base, dyes: [] });
+  }
+  reportUnused(design, used, reading);
+  return media;
+}
+
+const libraryNames = (): string[] => [...solventNames(), ...solidNames(), ...gasNames()];
+
+function libraryMaterial(name: string): Base | null {
+  if (solventNames().includes(name)) return fromLibrary('liquid', readSolvent(name));
+  if (solidNames().includes(name)) return fromLibrary('solid', readSolid(name));
+  if (gasNames().includes(name)) return fromLibrary('gas', readGas(name));
+  return null;
+}
+
+const fromLibrary = (kind: Base['kind'], { name, index, absorption, thermal }: MaterialData): Base => ({
+  kind,
+  base: name,
+  index,
+  absorption,
+  thermal,
+});
+
+function describeMedium(
+  { name, path, value }: Named<MediumEntry>,
+  ownDyes: ReadonlyMap<string, Dye>,
+  reading: Reading,
+): MediumDescription | null {
+  if (value.kind === 'library') {
+    if (!checkReference(value.material, libraryNames(), 'no material of the library has this name', reading)) return null;
+    const base = libraryMaterial(value.material.name);
+    return base && { name, path, ...base, dyes: [] };
+  }
+  const { fields } = value;
+  const base = describeBase(fields, path, reading);
+  // The dyes are looked at even when the base is unknown, so that all faults come at once.
+  const host = { base: base?.base ?? 'custom', pH: fields.pH };
+  const dyes = fields.dyes.flatMap((dye) => dissolveDye(dye, ownDyes, host, reading) ?? []);
+  return base && { name, path, ...base, dyes };
+}
+
+function describeBase(fields: MediumRecord, path: DesignPath, reading: Reading): Base | null {
+  const { solvent, solid, index, kind, pH, absorption } = fields;
+  checkAscending(absorption ?? [], [...path, 'absorption'], reading);
+  if (pH !== null && solvent === null && index === null) reportMisplaced('pH', 'a solvent', path, reading);
+  if (kind !== null && index === null) reportMisplaced('kind', 'a material given by its index', path, reading);
+  if (index !== null) {
+    checkAscending(index, [...path, 'index'], reading);
+    return {
+      kind: kind ?? 'liquid',
+      base: 'custom',
+      index: pointCurve(index, 'held'),
+      absorption: absorption === null ? () => 0 : pointCurve(absorption, 'held'),
+      thermal: null,
+    };
+  }
+  const base = solvent === null ? named(solid, 'solid', reading) : named(solvent, 'solvent', reading);
+  return base && { ...base, ...(absorption === null ? {} : { absorption: pointCurve(absorption, 'held') }) };
+}
+
+function named(material: Reference | null, kind: 'solid' | 'solvent', reading: Reading): Base | null {
+  if (material === null) return null;
+  const names = kind === 'solid' ? solidNames() : solventNames();
+  if (!checkReference(material, names, `no ${kind} of the library has this name`, reading)) return null;
+  return libraryMaterial(material.name);
+}
+
+function reportMisplaced(field: string, owner: string, path: DesignPath, reading: Reading): void {
+  reading.report({ code: 'unknown-key', path: [...path, field], problem: `${field} belongs to ${owner}`, found: field });
+}
+
+function reportUnused(design: DesignRecord, used: readonly Reference[], reading: Reading): void {
+  for (const { name, path } of design.media) {
+    if (used.some((medium) => medium.name === name)) continue;
+    reading.report({ code: 'caution', severity: 'warning', path, problem: 'no part is filled with this medium', found: name });
+  }
+}

@@ -1,0 +1,111 @@
+/** Fields of media and of dyes given in the design itself. */
+import { optional, required, withDefault } from './form.js';
+import { either, mapped } from './form-either.js';
+import { listOf, tuple } from './form-lists.js';
+import { quantity, quantityOf } from './form-quantities.js';
+import { mapOf, record } from './form-record.js';
+import { oneWord, type Reference, reference } from './form-scalars.js';
+
+/** Light the tables of the library and of the CIE speak about, with room at both ends. */
+export const WAVELENGTH_RANGE = { min: 200, max: 2000 };
+const LONGEST_TABLE = 10_000;
+
+/** A value that is the same at all wavelengths (one row, wavelength null) or a table of [wavelength, value]. */
+export type SpectralRows = readonly (readonly [wavelengthNm: number | null, value: number])[];
+
+const wavelength = quantity('wavelength', WAVELENGTH_RANGE);
+
+const rowsOf = (value: ReturnType<typeof quantity>, words: string) =>
+  listOf(
+    mapped(tuple<[number, number]>(`[wavelength, ${words}]`, wavelength, value), (row): SpectralRows[number] => row),
+    `a list of [wavelength, ${words}] pairs`,
+    2,
+    LONGEST_TABLE,
+  );
+
+const spectral = (value: ReturnType<typeof quantity>, words: string) =>
+  either<SpectralRows>({
+    scalar: mapped(value, (constant): SpectralRows => [[null, constant]]),
+    list: rowsOf(value, words),
+  });
+
+const strength = quantityOf(['concentration', 'massConcentration', 'number'], { min: 0 });
+
+const dyes = withDefault(
+  mapOf('dye names, each with its strength', strength),
+  [],
+  'no dye',
+  'Dyes dissolved in the medium: a dye of the library or of `dyes`, with its concentration (mol/L, or g/L through its ' +
+    'molar mass; a plain factor for a dye given by `absorption`).',
+);
+
+const absorption = optional(
+  spectral(quantity('absorption', { min: 0 }), 'absorption'),
+  'Napierian absorption of the bare material, or a list of [wavelength, absorption] pairs, linear between them and ' +
+    'held at the ends. For a library material it takes the place of the library curve.',
+);
+
+const mediumRecord = record(
+  'solvent, solid or index, with dyes',
+  {
+    solvent: optional(reference('a solvent of the library', ['ethanol', 'water']), 'A solvent of the library.'),
+    solid: optional(reference('a solid of the library', ['pmma']), 'A glass, crystal or polymer of the library.'),
+    index: optional(
+      spectral(quantity('number', { min: 1, max: 5 }), 'index'),
+      'Refractive index of a material of your own, or a list of [wavelength, index] pairs.',
+    ),
+    kind: optional(oneWord('liquid', 'solid'), 'What a material given by `index` is. Default: liquid.'),
+    pH: optional(quantity('number', { min: 0, max: 14 }), 'pH of a solution in a solvent.'),
+    absorption,
+    dyes,
+  },
+  { exactlyOne: [['solvent', 'solid', 'index']] },
+);
+
+export type MediumRecord = ReturnType<typeof mediumRecord.read>;
+export type DyeStrength = ReturnType<typeof strength.read>;
+
+/** A medium as written: the bare name of a library material, or a record. */
+export type MediumEntry =
+  | { readonly kind: 'library'; readonly material: Reference }
+  | { readonly kind: 'record'; readonly fields: MediumRecord };
+
+export const mediaForm = mapOf(
+  'media by name',
+  either<MediumEntry>({
+    scalar: mapped(
+      reference('a solvent, solid or gas of the library', ['borosilicate-crown', 'ethanol', 'air']),
+      (material) => ({ kind: 'library', material }),
+    ),
+    map: mapped(mediumRecord, (fields) => ({ kind: 'record', fields })),
+  }),
+);
+
+const dyeRecord = record(
+  'extinction or absorption, emission and yield',
+  {
+    extinction: optional(
+      spectral(quantity('extinction', { min: 0 }), 'extinction'),
+      'Decadic molar extinction, or a list of [wavelength, extinction] pairs, linear between them and held at the ends.',
+    ),
+    absorption: optional(
+      spectral(quantity('absorption', { min: 0 }), 'absorption'),
+      'Napierian absorption at strength 1, in place of an extinction: media then give the dye as a plain factor.',
+    ),
+    emission: required(
+      either<SpectralRows>({
+        scalar: mapped(wavelength, (line): SpectralRows => [[line, 1]]),
+        list: rowsOf(quantity('number', { min: 0 }), 'photons per nm'),
+      }),
+      'One wavelength, or a list of [wavelength, relative photons per nm] pairs, linear between them, nothing outside.',
+    ),
+    yield: required(quantity('fraction', { min: 0, max: 1 }), 'Quantum yield: photons emitted per photon absorbed.'),
+    lifetime: optional(quantity('lifetime', { above: 0 }), 'Fluorescence lifetime.'),
+    'molar-mass': optional(quantity('molarMass', { above: 0 }), 'Molar mass, needed where a strength is given in g/L.'),
+  },
+  { exactlyOne: [['extinction', 'absorption']] },
+);
+
+export type DyeRecord = ReturnType<typeof dyeRecord.read>;
+
+export const dyesForm = mapOf('dyes by name', dyeRecord);

@@ -1,0 +1,152 @@
+/** Fields of parts and of the shapes they are made of. */
+import { optional, required, withDefault } from './form.js';
+import { either, mapped } from './form-either.js';
+import { listOf, pair, triple } from './form-lists.js';
+import { quantity } from './form-quantities.js';
+import { mapOf, record } from './form-record.js';
+import { freeText, oneWord, reference } from './form-scalars.js';
+
+export const anyLength = quantity('length');
+/** Nothing in a light engine is larger than 100 m or finer than a tenth of a wavelength. */
+export const size = quantity('length', { min: 1e-5, max: 1e5 });
+const radiusOrNone = quantity('length', { min: 0, max: 1e5 });
+const angle = quantity('angle');
+
+const point = pair(anyLength, 'a corner [x, y]');
+
+const prism = record('outline and height', {
+  outline: required(
+    listOf(point, 'a list of at least 3 corners [x, y]', 3, 200),
+    'Corners of the convex cross-section, one after the other round it.',
+  ),
+  height: required(size, 'Extent along z.'),
+  sides: optional(
+    listOf(freeText('a name for a side', 60), 'a name for each side', 3, 200),
+    'Names of the sides; the first runs from the first corner to the second. Default: side-1, side-2, …',
+  ),
+});
+
+const radius = optional(size, 'Radius; give it or the diameter.');
+const diameter = optional(size, 'Diameter; give it or the radius.');
+
+const cylinder = record(
+  'radius and height',
+  { radius, diameter, height: required(size, 'Extent along z.') },
+  { exactlyOne: [['radius', 'diameter']] },
+);
+
+const cone = record(
+  'bottom-radius, top-radius and height',
+  {
+    'bottom-radius': optional(radiusOrNone, 'Radius of the bottom; 0 mm for a point.'),
+    'bottom-diameter': optional(radiusOrNone, 'Diameter of the bottom.'),
+    'top-radius': optional(radiusOrNone, 'Radius of the top; 0 mm for a point.'),
+    'top-diameter': optional(radiusOrNone, 'Diameter of the top.'),
+    height: required(size, 'Extent along z.'),
+  },
+  {
+    exactlyOne: [
+      ['bottom-radius', 'bottom-diameter'],
+      ['top-radius', 'top-diameter'],
+    ],
+  },
+);
+
+const sphere = record('radius', { radius, diameter }, { exactlyOne: [['radius', 'diameter']] });
+
+const cap = record(
+  'radius and height',
+  { radius, diameter, height: required(size, 'From the flat bottom to the crown, at most the diameter of the sphere.') },
+  { exactlyOne: [['radius', 'diameter']] },
+);
+
+const turnRecord = record('axis and by', {
+  axis: required(oneWord('x', 'y', 'z'), 'Axis of the design to turn about.'),
+  by: required(angle, 'Angle, right-handed.'),
+});
+
+export type TurnRecord = ReturnType<typeof turnRecord.read>;
+
+const turn = withDefault(
+  either<readonly TurnRecord[]>({
+    list: listOf(turnRecord, 'turns {axis: z, by: 30 deg}', 1, 20),
+    map: mapped(turnRecord, (one) => [one]),
+  }),
+  [],
+  'no turn',
+  'Turns about axes through the own centre, one after the other.',
+);
+
+const shapeFields = {
+  box: optional(triple(size, 'a size [x, y, z]'), 'Size along x, y, z. Faces: left, right, front, back, bottom, top.'),
+  prism: optional(prism, 'Convex outline drawn out along z. Faces: side-1, … or the names in `sides`, bottom, top.'),
+  cylinder: optional(cylinder, 'Cylinder along z. Faces: side, bottom, top.'),
+  cone: optional(cone, 'Cone or frustum along z. Faces: side, bottom, top.'),
+  sphere: optional(sphere, 'Sphere. Face: surface.'),
+  cap: optional(cap, 'Part of a sphere above a plane. Faces: dome, bottom.'),
+};
+
+const SHAPES = ['box', 'prism', 'cylinder', 'cone', 'sphere', 'cap'] as const;
+
+const at = withDefault(triple(anyLength, 'a place [x, y, z]'), [0, 0, 0], '[0 mm, 0 mm, 0 mm]', 'Where the own centre goes.');
+
+const pieceName = required(freeText('a name', 60), 'Name of the piece; its faces are called name.face.');
+
+const hole = record(
+  'a name and a shape',
+  { name: pieceName, ...shapeFields, at, turn },
+  { exactlyOne: [SHAPES] },
+);
+
+const minus = withDefault(
+  listOf(hole, 'a list of named shapes', 1, 50),
+  [],
+  'nothing',
+  'Shapes taken away, placed from the centre of the shape they are taken from.',
+);
+
+const piece = record(
+  'a name and a shape',
+  { name: pieceName, ...shapeFields, at, turn, minus },
+  { exactlyOne: [SHAPES] },
+);
+
+export type ShapeFields = Omit<ReturnType<typeof hole.read>, 'name' | 'at' | 'turn'>;
+export type HoleRecord = ReturnType<typeof hole.read>;
+export type PieceRecord = ReturnType<typeof piece.read>;
+
+const partRecord = record(
+  'a shape and a medium',
+  {
+    ...shapeFields,
+    union: optional(listOf(piece, 'a list of named shapes', 1, 50), 'Several shapes of one medium joined to one part.'),
+    minus,
+    medium: required(
+      reference('the name of a medium', ['bath', 'borosilicate-crown']),
+      'A medium of `media`, or a solvent, solid or gas of the library.',
+    ),
+    at: optional(triple(anyLength, 'a place [x, y, z]'), 'Where the own centre goes. Default: the origin.'),
+    turn,
+    against: optional(
+      reference('part.face of an earlier part', ['cell.top']),
+      'Puts a flat face of this part on that face, centre on centre.',
+    ),
+    with: optional(
+      reference('a face of this part', ['bottom']),
+      'Own face that touches. Default: the flat face that looks the other way.',
+    ),
+    shift: optional(pair(anyLength, 'a shift [u, v]'), 'Shift along the touched face. Default: none.'),
+    gap: optional(quantity('length', { min: 0 }), 'Empty distance left between the faces. Default: none.'),
+    faces: withDefault(
+      mapOf('faces with their finishes', reference('the name of a finish', ['clear', 'black']), new Map(), false),
+      [],
+      'all clear',
+      'Finish of each face; `others` stands for every face not named.',
+    ),
+  },
+  { exactlyOne: [[...SHAPES, 'union']] },
+);
+
+export type PartRecord = ReturnType<typeof partRecord.read>;
+
+export const partsForm = mapOf('parts by name', partRecord);

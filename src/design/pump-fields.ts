@@ -1,0 +1,115 @@
+/** Fields of pumps. */
+import { optional, required, withDefault } from './form.js';
+import { either, mapped } from './form-either.js';
+import { pair, triple } from './form-lists.js';
+import { count, quantity } from './form-quantities.js';
+import { mapOf, record } from './form-record.js';
+import { oneWord, reference } from './form-scalars.js';
+import { WAVELENGTH_RANGE } from './media-fields.js';
+import { anyLength, size } from './part-fields.js';
+
+const halfTurn = quantity('angle', { min: 0, below: Math.PI });
+const tilt = quantity('angle', { above: -Math.PI / 2, below: Math.PI / 2 });
+const efficiency = quantity('fraction', { above: 0, max: 1 });
+
+const outlineFields = {
+  rectangle: optional(pair(size, 'a size [u, v]'), 'Width and height.'),
+  disc: optional(size, 'Radius.'),
+};
+
+const outline = record('rectangle or disc', outlineFields, { exactlyOne: [['rectangle', 'disc']] });
+export type OutlineFields = ReturnType<typeof outline.read>;
+
+const diodes = record('across, along and pitch', {
+  across: required(count(1, 10_000), 'Emitters side by side, along u.'),
+  along: required(count(1, 10_000), 'Emitters one above the other, along v.'),
+  pitch: required(pair(size, 'a pitch [u, v]'), 'Distance from centre to centre along u and v.'),
+});
+
+const gaussian = record('radius and half-angle', {
+  radius: required(size, '1/e² radius at the origin of the beam.'),
+  'half-angle': withDefault(
+    quantity('angle', { min: 0, below: Math.PI / 2 }),
+    0,
+    '0 deg',
+    '1/e² half angle of the divergence.',
+  ),
+});
+
+const lens = record('focal-length and distance', {
+  'focal-length': required(anyLength, 'Focal length of the thin lens; negative for one that spreads.'),
+  distance: required(quantity('length', { min: 0 }), 'From the emitters to the lens.'),
+});
+
+const divergence = either<readonly [number, number]>({
+  list: pair(halfTurn, 'a divergence [fast, slow]'),
+  scalar: mapped(halfTurn, (both) => [both, both]),
+});
+
+const pumpRecord = record(
+  'a beam, its power and its wavelength, and its aim',
+  {
+    diodes: optional(diodes, 'A bank of laser diodes.'),
+    patch: optional(outline, 'An evenly filled beam.'),
+    gaussian: optional(gaussian, 'A Gaussian beam.'),
+    lambertian: optional(outline, 'A Lambertian emitter.'),
+    power: required(quantity('power', { above: 0 }), 'Optical power of the whole pump.'),
+    wavelength: required(quantity('wavelength', WAVELENGTH_RANGE), 'Centre wavelength.'),
+    linewidth: withDefault(quantity('wavelength', { min: 0, max: 200 }), 0, '0 nm', 'Full width of the line at half maximum.'),
+    divergence: optional(divergence, 'Far field, full width at half maximum: [fast, slow], or one angle for both.'),
+    'fast-axis': optional(oneWord('along', 'across'), 'Which way the fast axis lies. Default: along.'),
+    lens: optional(lens, 'A thin lens in front of the whole bank.'),
+    'wall-plug': optional(efficiency, 'Optical power per electrical power of the diodes.'),
+    driver: optional(efficiency, 'Efficiency of the driver.'),
+    toward: optional(reference('part.face', ['cell.front']), 'Aims at the centre of a face, along its inward normal.'),
+    distance: optional(quantity('length', { above: 0 }), 'How far in front of the face the pump stands.'),
+    shift: optional(pair(anyLength, 'a shift [u, v]'), 'Shift along the face. Default: none.'),
+    tilt: optional(pair(tilt, 'a tilt [about u, about v]'), 'Tilt of the beam. Default: none.'),
+    at: optional(triple(anyLength, 'a place [x, y, z]'), 'Where the pump stands, in place of `toward`.'),
+    direction: optional(
+      triple(quantity('number'), 'a direction [x, y, z] in plain numbers'),
+      'Where the pump at `at` looks; its length does not matter.',
+    ),
+    roll: optional(quantity('angle'), 'Turn of a pump at `at` about its beam. Default: none.'),
+  },
+  {
+    exactlyOne: [
+      ['diodes', 'patch', 'gaussian', 'lambertian'],
+      ['toward', 'at'],
+    ],
+  },
+);
+
+export type PumpRecord = ReturnType<typeof pumpRecord.read>;
+
+export const pumpsForm = mapOf('pumps by name', pumpRecord);
+
+const pixelCount = count(1, 4096);
+export const pixels = optional(pair(pixelCount, 'numbers of pixels [u, v]'), 'Pixels of the map. Default: chosen from the shape.');
+
+const plane = record(
+  'at, normal, and rectangle or disc',
+  {
+    at: required(triple(anyLength, 'a place [x, y, z]'), 'Centre of the plane.'),
+    normal: required(
+      triple(quantity('number'), 'a direction [x, y, z] in plain numbers'),
+      'Side the light leaves by; its length does not matter.',
+    ),
+    ...outlineFields,
+  },
+  { exactlyOne: [['rectangle', 'disc']] },
+);
+
+const detectorRecord = record(
+  'face or plane',
+  {
+    face: optional(reference('part.face', ['cell.left']), 'Records the light that leaves the part through this face.'),
+    plane: optional(plane, 'Records the light that crosses a bounded plane along its normal.'),
+    pixels,
+  },
+  { exactlyOne: [['face', 'plane']] },
+);
+
+export type DetectorRecord = ReturnType<typeof detectorRecord.read>;
+
+export const detectorsForm = mapOf('detectors by name', detectorRecord);
