@@ -50,8 +50,8 @@ export function buildProgram(done: (code: ExitCode) => void): Command {
     .command('check')
     .description('tell every fault of designs without tracing them')
     .argument('<design...>', 'design files')
-    .option('--faces', 'list the faces with centre, normal, area and what touches them', false)
-    .option('--json', 'print one JSON document instead of text', false)
+    .option('--faces', 'list the faces with centre, normal, area and what touches them')
+    .option('--json', 'print one JSON document instead of text')
     .addOption(dialOption())
     .action(async (files: string[], options: CheckOptions) => {
       const { checkCommand } = await import('./commands/check.js');
@@ -73,7 +73,7 @@ export function buildProgram(done: (code: ExitCode) => void): Command {
     .option('--threads <number>', 'worker threads (default: all cores); the results do not depend on it', parseThreads)
     .option('--out <folder>', 'new or empty folder for the run (default: results/<design>/<time>)')
     .option('--no-files', 'write no files')
-    .option('--plain', 'print the record of the run as JSON and nothing else', false)
+    .option('--plain', 'print the record of the run as JSON and nothing else')
     .addOption(new Option('--ledger <of>', 'ledger to print').choices(['watts', 'photons']).default('watts'))
     .option('--progress', 'progress also where standard error is no terminal, a line per quarter')
     .option('--no-progress', 'no progress')
@@ -86,7 +86,7 @@ export function buildProgram(done: (code: ExitCode) => void): Command {
   program
     .command('prove')
     .description('hold the tracer against laws and tables from outside, on this machine')
-    .option('--quick', 'fewer histories, wider bands', false)
+    .option('--quick', 'fewer histories, wider bands')
     .option('--only <text>', 'only proofs whose name holds this text')
     .action(async (options: ProveOptions) => {
       const { proveCommand } = await import('./commands/prove.js');

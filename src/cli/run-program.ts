@@ -56,6 +56,6 @@ function tellFault(error: unknown): ExitCode {
       'Your input is not to blame. Please report this to whoever keeps your copy of stokeswell, with the command,\n' +
       'the design file and what the same command prints with STOKESWELL_DEBUG=1 set.\n',
   );
-  if (process.env['STOKESWELL_DEBUG'] === '1' && error instanceof Error && error.stack) tell(`${error.stack}\n`);
+  if (process.env.STOKESWELL_DEBUG === '1' && error instanceof Error && error.stack) tell(`${error.stack}\n`);
   return EXIT.defect;
 }

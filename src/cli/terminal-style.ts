@@ -20,9 +20,9 @@ type Environment = Readonly<Record<string, string | undefined>>;
  * locale is UTF-8, or on a terminal that names no locale.
  */
 export function styleFor(isTerminal: boolean, environment: Environment): TerminalStyle {
-  const wantsColour = isTerminal && !environment['NO_COLOR'] && environment['TERM'] !== 'dumb';
+  const wantsColour = isTerminal && !environment.NO_COLOR && environment.TERM !== 'dumb';
   const colours = pc.createColors(wantsColour);
-  const locale = environment['LC_ALL'] || environment['LC_CTYPE'] || environment['LANG'];
+  const locale = environment.LC_ALL || environment.LC_CTYPE || environment.LANG;
   const unicode = locale ? /utf-?8/i.test(locale) : isTerminal;
   return {
     plusMinus: unicode ? '±' : '+-',

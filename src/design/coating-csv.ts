@@ -80,7 +80,12 @@ function readHeading(cells: readonly Cell[], line: number, faults: CsvFault[]): 
   return null;
 }
 
-function readRow(cells: readonly Cell[], order: (Column | undefined)[], line: number, faults: CsvFault[]): CoatingPoint {
+function readRow(
+  cells: readonly Cell[],
+  order: (Column | undefined)[],
+  line: number,
+  faults: CsvFault[],
+): CoatingPoint {
   const point = { wavelengthNm: Number.NaN, angleDeg: Number.NaN, reflectance: Number.NaN, transmittance: Number.NaN };
   order.forEach((column, i) => {
     if (column === undefined) return;

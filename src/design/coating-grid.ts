@@ -1,6 +1,5 @@
 /** Rows of a coating table, from the design or a CSV file beside it -> shares on a full grid. */
 import { type CoatingPoint, readCoatingRows } from './coating-csv.js';
-import { ENERGY_SLACK } from './describe-finishes.js';
 import type { FinishDescription } from './description.js';
 import type { DesignPath } from './fault.js';
 import type { CoatingTable } from './finish-fields.js';
@@ -12,6 +11,9 @@ type Grid = Omit<Extract<FinishDescription, { kind: 'table' }>, 'name' | 'path' 
 interface Row extends CoatingPoint {
   readonly complain: (complaint: Omit<Complaint, 'path'>) => void;
 }
+
+/** What shares may exceed 1 by: rounding of the user's percent values. */
+export const ENERGY_SLACK = 1e-9;
 
 const DEGREES_PER_RADIAN = 180 / Math.PI;
 
@@ -46,7 +48,8 @@ function rowsOfFile(name: string, path: DesignPath, reading: Reading): Row[] | n
     return null;
   }
   const { points, faults } = readCoatingRows(table.text);
-  for (const { line, column, ...fault } of faults) reading.report({ ...fault, path }, { file: table.file, line, column });
+  for (const { line, column, ...fault } of faults)
+    reading.report({ ...fault, path }, { file: table.file, line, column });
   if (faults.length > 0) return null;
   return points.map(({ line, ...point }) => ({
     ...point,
@@ -70,12 +73,19 @@ function buildGrid(rows: readonly Row[], path: DesignPath, reading: Reading): Gr
     }
     if (cells.has(at)) {
       const found = `${row.wavelengthNm} nm, ${row.angleDeg} deg`;
-      row.complain({ code: 'finish', problem: 'the table has this row twice', found, expected: 'one row for each pair' });
+      row.complain({
+        code: 'finish',
+        problem: 'the table has this row twice',
+        found,
+        expected: 'one row for each pair',
+      });
       sound = false;
     }
     cells.set(at, row);
   }
-  const absent = wavelengthsNm.flatMap((nm) => anglesDeg.filter((angle) => !cells.has(key(nm, angle))).map((angle) => [nm, angle]));
+  const absent = wavelengthsNm.flatMap((nm) =>
+    anglesDeg.filter((angle) => !cells.has(key(nm, angle))).map((angle) => [nm, angle]),
+  );
   if (absent.length > 0) {
     reading.report({
       code: 'finish',

@@ -59,7 +59,7 @@ export function dissolveDye(
 ): DissolvedDye | null {
   const own = ownDyes.get(name);
   const names = [...ownDyes.keys(), ...dyeNames()];
-  if (own === undefined && !checkReference({ name, path }, names, 'no dye has this name', reading)) return null;
+  if (own === undefined && !checkReference({ name, path }, names, 'no dye has this name', reading, 'key')) return null;
   const dye = own ?? libraryDye(name, path, host, reading);
   const { emission, quantumYield, lifetimeNs } = dye;
   const given = { name, quantumYield, emission, lifetimeNs };

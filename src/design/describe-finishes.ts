@@ -1,6 +1,6 @@
 /** Finishes as written -> what they do to light, energy checked. */
 import { readMetal } from '../materials/library.js';
-import { coatingGrid } from './coating-grid.js';
+import { coatingGrid, ENERGY_SLACK } from './coating-grid.js';
 import type { FinishDescription } from './description.js';
 import type { DesignRecord } from './design-fields.js';
 import type { DesignPath } from './fault.js';
@@ -11,9 +11,6 @@ import type { Reading } from './reading.js';
 
 type Finish<Kind extends FinishDescription['kind']> = Extract<FinishDescription, { kind: Kind }>;
 type Identity = Pick<FinishDescription, 'name' | 'path'>;
-
-/** What shares may exceed 1 by: rounding of the user's percent values. */
-export const ENERGY_SLACK = 1e-9;
 
 export function describeFinishes(design: DesignRecord, reading: Reading): Map<string, FinishDescription> {
   const finishes = new Map<string, FinishDescription>();

@@ -1,15 +1,15 @@
 /** Media as written -> media with curves; library materials are added under their own names where they are used. */
 import {
   gasNames,
+  type MaterialData,
   readGas,
   readSolid,
   readSolvent,
   solidNames,
   solventNames,
-  type MaterialData,
 } from '../materials/library.js';
+import { type Dye, describeOwnDye, dissolveDye } from './describe-dyes.js';
 import type { MediumDescription } from './description.js';
-import { describeOwnDye, dissolveDye, type Dye } from './describe-dyes.js';
 import type { DesignRecord } from './design-fields.js';
 import type { DesignPath } from './fault.js';
 import type { Named } from './form-record.js';
@@ -39,7 +39,6 @@ export function describeMedia(design: DesignRecord, reading: Reading): Map<strin
     const base = libraryMaterial(medium.name);
     if (base !== null) media.set(medium.name, { name: medium.name, path: medium.path, ...base, dyes: [] });
   }
-  reportUnused(design, used, reading);
   return media;
 }
 
@@ -66,7 +65,8 @@ function describeMedium(
   reading: Reading,
 ): MediumDescription | null {
   if (value.kind === 'library') {
-    if (!checkReference(value.material, libraryNames(), 'no material of the library has this name', reading)) return null;
+    if (!checkReference(value.material, libraryNames(), 'no material of the library has this name', reading))
+      return null;
     const base = libraryMaterial(value.material.name);
     return base && { name, path, ...base, dyes: [] };
   }
@@ -105,12 +105,10 @@ function named(material: Reference | null, kind: 'solid' | 'solvent', reading: R
 }
 
 function reportMisplaced(field: string, owner: string, path: DesignPath, reading: Reading): void {
-  reading.report({ code: 'unknown-key', path: [...path, field], problem: `${field} belongs to ${owner}`, found: field });
-}
-
-function reportUnused(design: DesignRecord, used: readonly Reference[], reading: Reading): void {
-  for (const { name, path } of design.media) {
-    if (used.some((medium) => medium.name === name)) continue;
-    reading.report({ code: 'caution', severity: 'warning', path, problem: 'no part is filled with this medium', found: name });
-  }
+  reading.report({
+    code: 'unknown-key',
+    path: [...path, field],
+    problem: `${field} belongs to ${owner}`,
+    found: field,
+  });
 }

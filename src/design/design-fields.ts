@@ -1,15 +1,16 @@
 /** The table of fields of a design file: validator, JSON Schema and help all come from it. */
+
+import { finishesForm } from './finish-fields.js';
 import { optional, required, withDefault } from './form.js';
 import { either, mapped } from './form-either.js';
 import { triple } from './form-lists.js';
 import { count, quantity } from './form-quantities.js';
 import { mapOf, record } from './form-record.js';
 import { freeText, type Reference, reference } from './form-scalars.js';
-import { dialForm } from './read-dials.js';
-import { finishesForm } from './finish-fields.js';
 import { dyesForm, mediaForm } from './media-fields.js';
 import { partsForm } from './part-fields.js';
 import { detectorsForm, pixels, pumpsForm } from './pump-fields.js';
+import { dialForm } from './read-dials.js';
 
 const exitName = reference('part.face or the name of a detector', ['lid.top']);
 

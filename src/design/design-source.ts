@@ -112,8 +112,11 @@ function lentEntries(value: unknown, source: DesignSource, misfits: Node[]): Ent
   });
 }
 
-/** Where the value at a path stands: a scalar at its own text, a collection at its key; else the nearest place above. */
-export function locatePath(source: DesignSource, path: DesignPath): Position {
+/**
+ * Where the value at a path stands: a scalar at its own text, a collection at its key, or for `what` 'key' anything at
+ * its key; the nearest place above for what is not in the file.
+ */
+export function locatePath(source: DesignSource, path: DesignPath, what: 'value' | 'key' = 'value'): Position {
   let node = source.root;
   let offset = node?.range?.[0] ?? 0;
   for (const step of path) {
@@ -125,7 +128,8 @@ export function locatePath(source: DesignSource, path: DesignPath): Position {
     } else {
       const entry = entriesOf(node, source).entries.find(({ name }) => name === String(step));
       node = entry === undefined ? null : source.resolve(entry.value);
-      if (entry !== undefined) offset = isScalar(node) && node.value !== '' ? startOf(node, offset) : startOf(entry.key, offset);
+      const byValue = what === 'value' && isScalar(node) && node.value !== '';
+      if (entry !== undefined) offset = startOf(byValue && node !== null ? node : entry.key, offset);
     }
   }
   return source.position(offset);

@@ -1,13 +1,14 @@
 /** Fields of finishes. */
+
+import type { Form } from './form.js';
 import { optional, required, withDefault } from './form.js';
 import { either, mapped } from './form-either.js';
 import { listOf, tuple } from './form-lists.js';
 import { quantity } from './form-quantities.js';
 import { mapOf, record } from './form-record.js';
 import { freeText, oneWord } from './form-scalars.js';
-import type { Form } from './form.js';
-import { mirrorForm } from './mirror-form.js';
 import { WAVELENGTH_RANGE } from './media-fields.js';
+import { mirrorForm } from './mirror-form.js';
 
 const share = quantity('fraction', { min: 0, max: 1 });
 const wavelength = quantity('wavelength', WAVELENGTH_RANGE);

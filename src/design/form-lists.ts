@@ -12,7 +12,10 @@ export const listOf = <T>(item: Form<T>, expects: string, least: number, most: n
 });
 
 /** A list of exactly these items, e.g. [a length, a length]. */
-export const tuple = <T extends readonly unknown[]>(expects: string, ...items: { readonly [K in keyof T]: Form<T[K]> }): Form<T> => {
+export const tuple = <T extends readonly unknown[]>(
+  expects: string,
+  ...items: { readonly [K in keyof T]: Form<T[K]> }
+): Form<T> => {
   const forms: readonly Form<unknown>[] = items;
   return {
     expects,

@@ -1,6 +1,7 @@
 /** Forms of numbers with units, and of the counts and ranges they must keep. */
-import { describeKind, QUANTITY_KINDS, type QuantityKindName, describeDimension } from '../units/quantity-kinds.js';
+
 import { type Quantity, quantityIn } from '../units/quantity.js';
+import { describeDimension, describeKind, QUANTITY_KINDS, type QuantityKindName } from '../units/quantity-kinds.js';
 import type { DesignPath } from './fault.js';
 import type { Form, JsonSchema } from './form.js';
 import type { Place, Reading } from './reading.js';
@@ -82,8 +83,9 @@ function reportDimension(
   const bare = quantityIn(read, 'number') !== null;
   const problem = bare ? 'the number has no unit' : `${describeDimension(read.dimension)} cannot stand here`;
   const unit = QUANTITY_KINDS[kind].example.split(' ').slice(1).join(' ');
+  const found = bare && /^[\p{L}_(]/u.test(text) ? `${text} = ${read.magnitude}` : text;
   const hint = bare && /^[\d.]+$/.test(text) && unit !== '' ? { suggestion: `write ${text} ${unit}` } : {};
-  reading.report({ code: 'quantity', path: place.path, problem, found: text, expected, ...hint });
+  reading.report({ code: 'quantity', path: place.path, problem, found, expected, ...hint });
 }
 
 function checkRange(value: number, kind: QuantityKindName, range: Range, place: Place, reading: Reading): void {
@@ -135,5 +137,5 @@ function quantitySchema(kinds: readonly QuantityKindName[], expects: string): Js
   const examples = kinds.map((kind) => QUANTITY_KINDS[kind].example);
   const plain = kinds.some((kind) => kind === 'number' || kind === 'fraction');
   if (plain) return { type: ['string', 'number'], $comment: expects, examples };
-  return { type: 'string', pattern: '[\\p{L}_°%]', $comment: expects, examples };
+  return { type: 'string', pattern: '[A-Za-zµ_°%]', $comment: expects, examples };
 }

@@ -17,10 +17,17 @@ export interface RecordRules<F extends FieldTable> {
 }
 
 /** A map with the fields of a table. */
-export function record<F extends FieldTable>(expects: string, fields: F, rules: RecordRules<F> = {}): Form<RecordValue<F>> {
+export function record<F extends FieldTable>(
+  expects: string,
+  fields: F,
+  rules: RecordRules<F> = {},
+): Form<RecordValue<F>> {
   const groups = rules.exactlyOne ?? [];
   const blank = (path: DesignPath) =>
-    ({ ...Object.fromEntries(Object.entries(fields).map(([name, field]) => [name, field.absent()])), path }) as RecordValue<F>;
+    ({
+      ...Object.fromEntries(Object.entries(fields).map(([name, field]) => [name, field.absent()])),
+      path,
+    }) as RecordValue<F>;
   return {
     expects,
     blank: () => blank([]),
@@ -105,11 +112,17 @@ function readEntries({ node, path }: Place, reading: Reading, expected: string):
     const first = entries.find((entry) => entry.name === name);
     const line = reading.source.position(first ? startOf(first.key) : 0).line;
     const problem = `the key stands here a second time; the first is in line ${line}`;
-    reading.report({ code: 'yaml', path: [...path, name], problem, found: name, expected: 'each key once' }, startOf(key));
+    reading.report(
+      { code: 'yaml', path: [...path, name], problem, found: name, expected: 'each key once' },
+      startOf(key),
+    );
   }
   for (const misfit of misfits) {
     const problem = 'this can be neither a key nor a lender of keys';
-    reading.report({ code: 'yaml', path, problem, found: describeNode(misfit), expected: 'a plain name' }, startOf(misfit));
+    reading.report(
+      { code: 'yaml', path, problem, found: describeNode(misfit), expected: 'a plain name' },
+      startOf(misfit),
+    );
   }
   return entries;
 }
@@ -151,7 +164,12 @@ function reportAbsent(
   for (const group of groups) {
     const chosen = group.filter((name) => given.has(name));
     if (chosen.length === 0) {
-      reading.report({ code: 'missing', path, problem: 'a required field is missing', expected: `one of ${group.join(', ')}` });
+      reading.report({
+        code: 'missing',
+        path,
+        problem: 'a required field is missing',
+        expected: `one of ${group.join(', ')}`,
+      });
     }
     for (const extra of chosen.slice(1)) {
       const problem = `${chosen[0]} and ${extra} exclude each other`;

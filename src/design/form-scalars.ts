@@ -19,7 +19,13 @@ export const freeText = (expects: string, longest: number): Form<string> => ({
     if (text === null) return '';
     if (text.length > longest) {
       const problem = `the text is longer than ${longest} characters`;
-      reading.report({ code: 'range', path: place.path, problem, found: `${text.length} characters`, expected: expects });
+      reading.report({
+        code: 'range',
+        path: place.path,
+        problem,
+        found: `${text.length} characters`,
+        expected: expects,
+      });
     }
     return text;
   },

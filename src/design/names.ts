@@ -11,22 +11,17 @@ export function checkReference(
   names: readonly string[],
   problem: string,
   reading: Reading,
+  at: 'key' | null = null,
 ): boolean {
   if (names.includes(name)) return true;
   if (name === '') return false;
   const nearest = nearestName(name, names);
-  reading.report({
-    code: 'unknown-name',
-    path,
-    problem,
-    found: name,
-    expected: listNames(names),
-    ...(nearest === null ? {} : { suggestion: nearest }),
-  });
+  const hint = nearest === null ? {} : { suggestion: nearest };
+  reading.report({ code: 'unknown-name', path, problem, found: name, expected: listNames(names), ...hint }, at);
   return false;
 }
 
-export function listNames(names: readonly string[]): string {
+function listNames(names: readonly string[]): string {
   if (names.length === 0) return 'none is there to choose from';
   const more = names.length - MOST_LISTED;
   return `one of ${names.slice(0, MOST_LISTED).join(', ')}${more > 0 ? ` and ${more} more` : ''}`;
@@ -37,7 +32,13 @@ export function reportRepeatedNames(names: readonly Reference[], reading: Readin
   const seen = new Set<string>();
   for (const { name, path } of names) {
     if (name !== '' && seen.has(name)) {
-      reading.report({ code: 'type', path, problem: 'the name is taken already', found: name, expected: 'another name' });
+      reading.report({
+        code: 'type',
+        path,
+        problem: 'the name is taken already',
+        found: name,
+        expected: 'another name',
+      });
     }
     seen.add(name);
   }

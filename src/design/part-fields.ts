@@ -56,7 +56,11 @@ const sphere = record('radius', { radius, diameter }, { exactlyOne: [['radius', 
 
 const cap = record(
   'radius and height',
-  { radius, diameter, height: required(size, 'From the flat bottom to the crown, at most the diameter of the sphere.') },
+  {
+    radius,
+    diameter,
+    height: required(size, 'From the flat bottom to the crown, at most the diameter of the sphere.'),
+  },
   { exactlyOne: [['radius', 'diameter']] },
 );
 
@@ -88,15 +92,16 @@ const shapeFields = {
 
 const SHAPES = ['box', 'prism', 'cylinder', 'cone', 'sphere', 'cap'] as const;
 
-const at = withDefault(triple(anyLength, 'a place [x, y, z]'), [0, 0, 0], '[0 mm, 0 mm, 0 mm]', 'Where the own centre goes.');
+const at = withDefault(
+  triple(anyLength, 'a place [x, y, z]'),
+  [0, 0, 0],
+  '[0 mm, 0 mm, 0 mm]',
+  'Where the own centre goes.',
+);
 
 const pieceName = required(freeText('a name', 60), 'Name of the piece; its faces are called name.face.');
 
-const hole = record(
-  'a name and a shape',
-  { name: pieceName, ...shapeFields, at, turn },
-  { exactlyOne: [SHAPES] },
-);
+const hole = record('a name and a shape', { name: pieceName, ...shapeFields, at, turn }, { exactlyOne: [SHAPES] });
 
 const minus = withDefault(
   listOf(hole, 'a list of named shapes', 1, 50),

@@ -13,7 +13,8 @@ export function pointCurve(rows: SpectralRows, outside: 'held' | 'zero'): Curve 
   const last = wavelengths.length - 1;
   return (wavelengthNm) => {
     if (wavelengthNm < wavelengths[0]) return outside === 'held' ? rows[0][1] : 0;
-    if (wavelengthNm >= wavelengths[last]) return outside === 'held' || wavelengthNm === wavelengths[last] ? rows[last][1] : 0;
+    if (wavelengthNm >= wavelengths[last])
+      return outside === 'held' || wavelengthNm === wavelengths[last] ? rows[last][1] : 0;
     let low = 0;
     let high = last;
     while (high - low > 1) {
@@ -32,5 +33,11 @@ export function checkAscending(rows: SpectralRows, path: DesignPath, reading: Re
   if (wrong < 0) return;
   const found = `${rows[wrong][0]} nm after ${rows[wrong - 1][0]} nm`;
   const problem = 'the wavelengths of a table must rise';
-  reading.report({ code: 'range', path: [...path, wrong], problem, found, expected: 'each wavelength above the one before' });
+  reading.report({
+    code: 'range',
+    path: [...path, wrong],
+    problem,
+    found,
+    expected: 'each wavelength above the one before',
+  });
 }

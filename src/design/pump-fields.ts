@@ -55,7 +55,12 @@ const pumpRecord = record(
     lambertian: optional(outline, 'A Lambertian emitter.'),
     power: required(quantity('power', { above: 0 }), 'Optical power of the whole pump.'),
     wavelength: required(quantity('wavelength', WAVELENGTH_RANGE), 'Centre wavelength.'),
-    linewidth: withDefault(quantity('wavelength', { min: 0, max: 200 }), 0, '0 nm', 'Full width of the line at half maximum.'),
+    linewidth: withDefault(
+      quantity('wavelength', { min: 0, max: 200 }),
+      0,
+      '0 nm',
+      'Full width of the line at half maximum.',
+    ),
     divergence: optional(divergence, 'Far field, full width at half maximum: [fast, slow], or one angle for both.'),
     'fast-axis': optional(oneWord('along', 'across'), 'Which way the fast axis lies. Default: along.'),
     lens: optional(lens, 'A thin lens in front of the whole bank.'),
@@ -85,7 +90,10 @@ export type PumpRecord = ReturnType<typeof pumpRecord.read>;
 export const pumpsForm = mapOf('pumps by name', pumpRecord);
 
 const pixelCount = count(1, 4096);
-export const pixels = optional(pair(pixelCount, 'numbers of pixels [u, v]'), 'Pixels of the map. Default: chosen from the shape.');
+export const pixels = optional(
+  pair(pixelCount, 'numbers of pixels [u, v]'),
+  'Pixels of the map. Default: chosen from the shape.',
+);
 
 const plane = record(
   'at, normal, and rectangle or disc',

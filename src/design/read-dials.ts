@@ -2,8 +2,8 @@
 import { isMap } from 'yaml';
 import { nearestName } from '../units/nearest-name.js';
 import { inOwnUnit, type Quantity } from '../units/quantity.js';
-import { QUANTITY_KINDS } from '../units/quantity-kinds.js';
 import { sameDimension } from '../units/quantity-dimension.js';
+import { QUANTITY_KINDS } from '../units/quantity-kinds.js';
 import { UNITS } from '../units/quantity-units.js';
 import type { Dial } from './description.js';
 import { entriesOf, startOf } from './design-source.js';
@@ -70,7 +70,8 @@ export function readDials(root: Place, turned: Readonly<Record<string, string>>,
 function dialPlaces(root: Place, reading: Reading): Map<string, Place> {
   const { source } = reading;
   const places = new Map<string, Place>();
-  const dials = root.node === null ? undefined : entriesOf(root.node, source).entries.find(({ name }) => name === 'dials');
+  const dials =
+    root.node === null ? undefined : entriesOf(root.node, source).entries.find(({ name }) => name === 'dials');
   const map = dials && source.resolve(dials.value);
   // Anything but a map is told by the form of the whole design, as are odd keys and duplicates.
   if (!map || !isMap(map)) return places;
@@ -90,7 +91,9 @@ function readDial(
 ): Quantity | null {
   const text = reading.text(place, EXPECTS);
   const written =
-    text === null ? null : reading.quantityFromText(text, place, EXPECTS, (i) => reading.offsetIn(place, text, i), dial);
+    text === null
+      ? null
+      : reading.quantityFromText(text, place, EXPECTS, (i) => reading.offsetIn(place, text, i), dial);
   if (turned === undefined || written === null) return written;
   const value = reading.quantityFromText(turned, place, EXPECTS, () => null, dial);
   if (value === null || sameDimension(value.dimension, written.dimension)) return value;

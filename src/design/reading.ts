@@ -21,6 +21,9 @@ const MOST_FAULTS = 200;
 /** `T` without the key `severity`, which is 'error' unless said. */
 export type Complaint = Omit<Fault, 'severity'> & { readonly severity?: 'warning' };
 
+/** A character of the text, the key of the path, or a place in another file. */
+export type Spot = number | 'key' | { readonly file: string; readonly line: number; readonly column: number };
+
 export class Reading {
   readonly dials = new Map<string, Quantity | null>();
   readonly usedDials = new Set<string>();
@@ -34,15 +37,29 @@ export class Reading {
     readonly readTable: TableFileReader,
   ) {}
 
-  /** Notes a fault at its path, at a given place of the text, or in another file. */
-  report(complaint: Complaint, at: number | { file: string; line: number; column: number } | null = null): void {
+  /** Notes a fault: where the value at its path stands unless another spot is given. */
+  report(complaint: Complaint, at: Spot | null = null): void {
     if (this.told.length >= MOST_FAULTS) {
       this.untold++;
       return;
     }
     const { source } = this;
-    const place = typeof at === 'number' ? source.position(at) : (at ?? locatePath(source, complaint.path));
+    const place =
+      typeof at === 'number'
+        ? source.position(at)
+        : typeof at === 'object' && at !== null
+          ? at
+          : locatePath(source, complaint.path, at ?? 'value');
     this.told.push({ severity: 'error', file: source.file, ...complaint, ...place });
+  }
+
+  hasErrors(): boolean {
+    return this.told.some(({ severity }) => severity === 'error');
+  }
+
+  /** True when something has been said about exactly this path. */
+  hasFaultAt(path: DesignPath): boolean {
+    return this.told.some((fault) => fault.path.join('\n') === path.join('\n'));
   }
 
   /** Faults and warnings in the order of the file. */

@@ -2,5 +2,5 @@
 export type TableFileReader = (name: string) => TableFile;
 
 export type TableFile =
-  | { readonly ok: true; readonly text: string; /** As shown in faults. */ readonly file: string }
+  | { readonly ok: true; readonly text: string /** As shown in faults. */; readonly file: string }
   | { readonly ok: false; readonly problem: string; readonly expected?: string; readonly suggestion?: string };

@@ -64,9 +64,13 @@ function voxelMaps(compiled: CompiledScene, grown: GrownTally): RecordedMap[] {
     measure,
     frame: { origin, u: [1, 0, 0], v: [0, 1, 0] },
   } as const;
+  const pump = halves(compiled, grown, scene.voxelPumpMap, count);
+  const emitted = halves(compiled, grown, scene.voxelEmittedMap, count);
+  const sum = (h: 0 | 1) => pump[h].map((energy, i) => energy + emitted[h][i]);
+  const all = [sum(0), sum(1)] as const;
   return [
-    { id: 'absorbed-pump', what: 'absorbed-pump', energy: halves(compiled, grown, scene.voxelPumpMap, count), ...common },
-    { id: 'absorbed-all', what: 'absorbed-all', energy: halves(compiled, grown, scene.voxelAllMap, count), ...common },
+    { id: 'absorbed-pump', what: 'absorbed-pump', energy: pump, ...common },
+    { id: 'absorbed-all', what: 'absorbed-all', energy: all, ...common },
   ];
 }
 

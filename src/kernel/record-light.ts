@@ -18,28 +18,43 @@ export function mapCoordinate(scene: Scene, recorder: number, axis: 0 | 1, x: nu
   return px * frame[step] + py * frame[step + 1] + pz * frame[step + 2];
 }
 
-/** Adds one photon to a recorder. `ray` holds its point and direction. */
-export function recordLight(
+/** Adds one photon to a recorder: its point and direction. */
+export function recordCrossing(
   scene: Scene,
   tally: GrownTally,
   recorder: number,
   half: number,
   light: number,
   wavelength: number,
-  ray: Float64Array,
+  x: number,
+  y: number,
+  z: number,
+  dx: number,
+  dy: number,
+  dz: number,
 ): void {
-  const cellsU = scene.recorderCells[2 * recorder];
-  const cellsV = scene.recorderCells[2 * recorder + 1];
-  const quanta = scene.energyQuanta[wavelength];
   if ((scene.recorderLights[recorder] >> light) & 1) {
-    const iu = clampCell(mapCoordinate(scene, recorder, 0, ray[0], ray[1], ray[2]), cellsU);
-    const iv = clampCell(mapCoordinate(scene, recorder, 1, ray[0], ray[1], ray[2]), cellsV);
+    const cellsU = scene.recorderCells[2 * recorder];
+    const cellsV = scene.recorderCells[2 * recorder + 1];
+    const quanta = scene.energyQuanta[wavelength];
+    const iu = clampCell(mapCoordinate(scene, recorder, 0, x, y, z), cellsU);
+    const iv = clampCell(mapCoordinate(scene, recorder, 1, x, y, z), cellsV);
     tally.maps[half * scene.mapCells + scene.recorderMap[recorder] + iu + cellsU * iv] += quanta;
     const angles = scene.recorderAngles[recorder];
-    if (angles >= 0) tally.angles[angles + angularCell(scene.recorderFrame, recorder, ray)] += quanta;
+    if (angles >= 0) tally.angles[angles + angularCell(scene.recorderFrame, recorder, dx, dy, dz)] += quanta;
   }
   const spectrum = scene.recorderSpectrum[recorder];
   if (spectrum >= 0) tally.spectra[spectrum + light * scene.wavelengths + wavelength]++;
+}
+
+/** Whether light crosses a free plane along its normal and within its outline. */
+export function inAperture(scene: Scene, recorder: number, way: number, x: number, y: number, z: number): boolean {
+  const upwards = (way & 1) === 1 ? 1 : -1;
+  if (upwards !== scene.detectorSign[recorder]) return false;
+  const u = mapCoordinate(scene, recorder, 0, x, y, z) / scene.recorderCells[2 * recorder];
+  const v = mapCoordinate(scene, recorder, 1, x, y, z) / scene.recorderCells[2 * recorder + 1];
+  if (scene.detectorAperture[2 * recorder + 1] < 0) return (2 * u - 1) ** 2 + (2 * v - 1) ** 2 <= 1;
+  return u >= 0 && u < 1 && v >= 0 && v < 1;
 }
 
 /** A photon on the very edge of a face belongs to its last cell. */
@@ -48,15 +63,15 @@ function clampCell(coordinate: number, cells: number): number {
   return cell < 0 ? 0 : cell >= cells ? cells - 1 : cell;
 }
 
-function angularCell(frame: Float64Array, recorder: number, ray: Float64Array): number {
+function angularCell(frame: Float64Array, recorder: number, dx: number, dy: number, dz: number): number {
   const at = recorder * RECORDER.STRIDE;
   const n = at + RECORDER.axisN;
   const u = at + RECORDER.axisU;
   const v = at + RECORDER.axisV;
-  const along = ray[3] * frame[n] + ray[4] * frame[n + 1] + ray[5] * frame[n + 2];
+  const along = dx * frame[n] + dy * frame[n + 1] + dz * frame[n + 2];
   const polar = Math.acos(Math.max(-1, Math.min(1, along)));
-  const a = ray[3] * frame[u] + ray[4] * frame[u + 1] + ray[5] * frame[u + 2];
-  const b = ray[3] * frame[v] + ray[4] * frame[v + 1] + ray[5] * frame[v + 2];
+  const a = dx * frame[u] + dy * frame[u + 1] + dz * frame[u + 2];
+  const b = dx * frame[v] + dy * frame[v + 1] + dz * frame[v + 2];
   const turn = Math.atan2(b, a) / (2 * Math.PI);
   // Light that leaves a curved face backwards of its axis is kept in the last polar cell.
   const row = clampCell((polar / (Math.PI / 2)) * POLAR_CELLS, POLAR_CELLS);
@@ -82,6 +97,5 @@ export function depositVoxel(
   const iz = Math.floor((z - voxelOrigin[2]) * voxelScale[2]);
   if (ix < 0 || iy < 0 || iz < 0 || ix >= cellsX || iy >= cellsY || iz >= voxelCells[2]) return;
   const cell = half * scene.mapCells + ix + cellsX * (iy + cellsY * iz);
-  maps[scene.voxelAllMap + cell] += quanta;
-  if (light === 0) maps[scene.voxelPumpMap + cell] += quanta;
+  maps[(light === 0 ? scene.voxelPumpMap : scene.voxelEmittedMap) + cell] += quanta;
 }

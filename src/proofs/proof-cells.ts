@@ -81,6 +81,7 @@ export function dye(
 }
 
 const finish = <Kind extends object>(name: string, kind: Kind) => ({ name, path: ['finishes', name], ...kind });
+export const CLEAR: FinishDescription = finish('clear', { kind: 'clear' as const });
 export const BLACK: FinishDescription = finish('black', { kind: 'black' as const });
 /** Loses nothing: a mirrored side wall continues a slab for ever. */
 export const PERFECT: FinishDescription = mirror('perfect', 1);
@@ -192,7 +193,7 @@ export function cell(
     dials: [],
     media: new Map([air, ...media].map((one) => [one.name, one])),
     surroundings: around,
-    finishes: new Map([BLACK, PERFECT, ...finishes].map((one) => [one.name, one])),
+    finishes: new Map([CLEAR, BLACK, PERFECT, ...finishes].map((one) => [one.name, one])),
     parts,
     pumps,
     detectors,

@@ -27,7 +27,7 @@ type RecorderArrays = Pick<
   | 'voxelScale'
   | 'voxelCells'
   | 'voxelPumpMap'
-  | 'voxelAllMap'
+  | 'voxelEmittedMap'
   | 'mapCells'
   | 'spectrumCells'
   | 'angleCells'
@@ -92,7 +92,7 @@ export function layOutRecorders(
       voxelScale: sharedDoubles(voxels.cells.map((cells, axis) => cells / voxels.size[axis])),
       voxelCells: sharedInts(voxels.cells),
       voxelPumpMap: maps.take(voxelCount),
-      voxelAllMap: maps.take(voxelCount),
+      voxelEmittedMap: maps.take(voxelCount),
       mapCells: maps.total(),
       spectrumLaunched: spectra.take(wavelengths),
       spectrumAbsorbedPump: spectra.take(wavelengths),

@@ -14,6 +14,29 @@ import { quadricValue, QUADRIC_STRIDE } from './quadric.js';
 export const PASS = -1;
 const UNKNOWN = -2;
 
+/** Integers per interface in `interfaces`; a crossing is the place of its record there. */
+export const INTERFACE = {
+  flags: 0,
+  finish: 1,
+  mediumBeyond: 2,
+  ownerBeyond: 3,
+  /** Face left, −1 when coming from the surroundings. */
+  faceOut: 4,
+  /** Face entered, −1 when going to the surroundings. */
+  faceIn: 5,
+  /** Face that carries the finish: where its absorption is booked. */
+  faceActing: 6,
+  /** Recorder: of a free plane, or of pump light arriving at the face entered. */
+  recorder: 7,
+  STRIDE: 8,
+} as const;
+/** The interface is a free plane. */
+export const FREE_PLANE = 1;
+/** Pump light that arrives here is recorded. */
+export const RECORDS_ARRIVAL = 2;
+/** The finish spreads what it reflects or transmits. */
+export const SPREADS = 4;
+
 /** Closer than this to a surface, the direction of travel decides on which side a starting point lies, mm. */
 const TIE = 1e-9;
 
@@ -30,26 +53,15 @@ export class RegionGraph {
   readonly side: Int8Array;
   /** [region · ways + way]: region beyond, meaningful once `crossing` is known. */
   readonly neighbour: Int32Array;
-  /** [region · ways + way]: interface number, or PASS, or unknown. */
+  /** [region · ways + way]: place of the interface's record, or PASS, or unknown. */
   readonly crossing: Int32Array;
   readonly owner: Int32Array;
   readonly medium: Int32Array;
 
-  // Interfaces.
-  finish = new Int32Array(64);
-  mediumBeyond = new Int32Array(64);
-  ownerBeyond = new Int32Array(64);
-  /** Face left, −1 when coming from the surroundings. */
-  faceOut = new Int32Array(64);
-  /** Face entered, −1 when going to the surroundings. */
-  faceIn = new Int32Array(64);
-  /** Face that carries the finish: where its absorption is booked. */
-  faceActing = new Int32Array(64);
-  /** Recorder of a free plane, −1 for real faces. */
-  detector = new Int32Array(64);
+  /** Records of INTERFACE.STRIDE integers. Grows: read it anew after `resolve`. */
+  interfaces = new Int32Array(64 * INTERFACE.STRIDE);
 
   #regions = 0;
-  #interfaces = 0;
   #slab: Int32Array;
   readonly #known = new Map<string, number>();
   readonly #knownInterfaces = new Map<string, number>();
@@ -252,35 +264,23 @@ export class RegionGraph {
     faceActing: number,
     detector: number,
   ): number {
+    const { scene } = this;
     const key = `${finish},${mediumBeyond},${ownerBeyond},${faceOut},${faceIn},${detector}`;
     const known = this.#knownInterfaces.get(key);
     if (known !== undefined) return known;
-    const id = this.#interfaces++;
-    if (id >= this.finish.length) this.#growInterfaces();
-    this.#knownInterfaces.set(key, id);
-    this.finish[id] = finish;
-    this.mediumBeyond[id] = mediumBeyond;
-    this.ownerBeyond[id] = ownerBeyond;
-    this.faceOut[id] = faceOut;
-    this.faceIn[id] = faceIn;
-    this.faceActing[id] = faceActing;
-    this.detector[id] = detector;
-    return id;
-  }
-
-  #growInterfaces(): void {
-    const grow = (old: Int32Array) => {
-      const larger = new Int32Array(old.length * 2);
-      larger.set(old);
-      return larger;
-    };
-    this.finish = grow(this.finish);
-    this.mediumBeyond = grow(this.mediumBeyond);
-    this.ownerBeyond = grow(this.ownerBeyond);
-    this.faceOut = grow(this.faceOut);
-    this.faceIn = grow(this.faceIn);
-    this.faceActing = grow(this.faceActing);
-    this.detector = grow(this.detector);
+    const at = this.#knownInterfaces.size * INTERFACE.STRIDE;
+    if (at >= this.interfaces.length) {
+      const larger = new Int32Array(2 * this.interfaces.length);
+      larger.set(this.interfaces);
+      this.interfaces = larger;
+    }
+    this.#knownInterfaces.set(key, at);
+    const arrival = faceIn < 0 ? -1 : scene.faceRecorderArriving[faceIn];
+    const spreads = finish >= 0 && (scene.finishReflectSpread[finish] || scene.finishTransmitSpread[finish]);
+    const flags = (detector >= 0 ? FREE_PLANE : 0) | (arrival >= 0 ? RECORDS_ARRIVAL : 0) | (spreads ? SPREADS : 0);
+    const recorder = detector >= 0 ? detector : arrival;
+    this.interfaces.set([flags, finish, mediumBeyond, ownerBeyond, faceOut, faceIn, faceActing, recorder], at);
+    return at;
   }
 }
 

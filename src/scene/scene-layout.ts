@@ -161,7 +161,7 @@ export interface Scene {
   readonly voxelScale: Float64Array; // cells per mm, 3
   readonly voxelCells: Int32Array; // 3
   readonly voxelPumpMap: number; // offset of the absorbed-pump map
-  readonly voxelAllMap: number;
+  readonly voxelEmittedMap: number;
   readonly mapCells: number; // of one half
   readonly spectrumCells: number;
   readonly angleCells: number;

@@ -29,7 +29,8 @@ export function editDistance(a: string, b: string): number {
     for (let j = 1; j <= b.length; j++) {
       const substitution = last[j - 1] + (a[i - 1] === b[j - 1] ? 0 : 1);
       row[j] = Math.min(last[j] + 1, row[j - 1] + 1, substitution);
-      if (i > 1 && j > 1 && a[i - 1] === b[j - 2] && a[i - 2] === b[j - 1]) row[j] = Math.min(row[j], beforeLast[j - 2] + 1);
+      if (i > 1 && j > 1 && a[i - 1] === b[j - 2] && a[i - 2] === b[j - 1])
+        row[j] = Math.min(row[j], beforeLast[j - 2] + 1);
     }
     beforeLast = last;
     last = row;

@@ -7,12 +7,13 @@
  *
  * Dial names may hold hyphens, so a minus after a name needs a space before it.
  */
+
+import { addQuantities, multiplyQuantities, plainNumber, type Quantity } from './quantity.js';
 import { sameDimension } from './quantity-dimension.js';
 import { QuantityError, type QuantityFault } from './quantity-fault.js';
 import { describeDimension } from './quantity-kinds.js';
 import { nearestUnit, readUnit } from './quantity-unit-expression.js';
 import { UNITS } from './quantity-units.js';
-import { addQuantities, multiplyQuantities, plainNumber, type Quantity } from './quantity.js';
 
 export const LONGEST_QUANTITY = 500;
 const DEEPEST_NESTING = 40;

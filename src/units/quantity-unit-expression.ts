@@ -2,10 +2,11 @@
  * Reads what follows a number: a unit written without spaces ('mm', 'W/cm²', '/cm', 'L/mol/cm', 'L/(mol cm)').
  * Inside parentheses a space multiplies. A slash or star that is not followed by a unit is left for the arithmetic.
  */
+
+import { nearestName } from './nearest-name.js';
 import { type Dimension, PLAIN, timesPower } from './quantity-dimension.js';
 import { QuantityError } from './quantity-fault.js';
 import { UNITS } from './quantity-units.js';
-import { nearestName } from './nearest-name.js';
 
 export interface UnitExpression {
   readonly dimension: Dimension;

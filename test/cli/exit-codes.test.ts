@@ -24,8 +24,10 @@ describe('command line', () => {
   it('--help documents commands and every exit status', async () => {
     const { code, out, err } = await run('--help');
     expect({ code, err }).toEqual({ code: 0, err: '' });
-    for (const word of ['new', 'check', 'trace', 'prove', 'schema']) expect(out).toMatch(new RegExp(`^ +${word} `, 'm'));
-    for (const status of ['0', '1', '2', '3', '4', '70', '130']) expect(out).toMatch(new RegExp(`^ +${status} +\\w`, 'm'));
+    for (const word of ['new', 'check', 'trace', 'prove', 'schema'])
+      expect(out).toMatch(new RegExp(`^ +${word} `, 'm'));
+    for (const status of ['0', '1', '2', '3', '4', '70', '130'])
+      expect(out).toMatch(new RegExp(`^ +${status} +\\w`, 'm'));
   });
 
   it('--version prints the version', async () => {
@@ -81,18 +83,21 @@ describe('new', () => {
 });
 
 describe('designs that cannot be read', () => {
-  it.each(['check', 'trace'])('%s: missing, empty, binary, folder: 2, a sentence that names the file, nothing written', async (command) => {
-    await writeFile(join(cwd, 'empty.yaml'), '');
-    await writeFile(join(cwd, 'binary.yaml'), Buffer.from([0x7f, 0x45, 0x4c, 0x46, 0, 1, 2, 0xff, 0xfe, 0]));
-    const before = await readdir(cwd);
-    for (const file of ['missing.yaml', 'empty.yaml', 'binary.yaml', '.']) {
-      const { code, out, err } = await run(command, file);
-      expect({ file, code }).toEqual({ file, code: 2 });
-      expectSentences(out + err);
-      expect(out + err).toContain(file);
-    }
-    expect(await readdir(cwd)).toEqual(before);
-  });
+  it.each(['check', 'trace'])(
+    '%s: missing, empty, binary, folder: 2, a sentence that names the file, nothing written',
+    async (command) => {
+      await writeFile(join(cwd, 'empty.yaml'), '');
+      await writeFile(join(cwd, 'binary.yaml'), Buffer.from([0x7f, 0x45, 0x4c, 0x46, 0, 1, 2, 0xff, 0xfe, 0]));
+      const before = await readdir(cwd);
+      for (const file of ['missing.yaml', 'empty.yaml', 'binary.yaml', '.']) {
+        const { code, out, err } = await run(command, file);
+        expect({ file, code }).toEqual({ file, code: 2 });
+        expectSentences(out + err);
+        expect(out + err).toContain(file);
+      }
+      expect(await readdir(cwd)).toEqual(before);
+    },
+  );
 
   it('check goes on with the other designs', async () => {
     await run('new', 'good.yaml');

@@ -9,8 +9,8 @@ import { safeText } from '../safe-text.js';
 import { fitToStyle, styleFor, type TerminalStyle } from '../terminal-style.js';
 
 export interface CheckOptions {
-  readonly faces: boolean;
-  readonly json: boolean;
+  readonly faces?: boolean;
+  readonly json?: boolean;
   readonly dial: Readonly<Record<string, string>>;
 }
 
@@ -30,7 +30,7 @@ export async function checkCommand(files: readonly string[], options: CheckOptio
   for (const file of files) {
     const check = await checkDesign(file, options.dial);
     checks.push(check);
-    if (!options.json) print(fitToStyle(`${showCheck(check, options.faces, style).join('\n')}\n`, style));
+    if (!options.json) print(fitToStyle(`${showCheck(check, options.faces === true, style).join('\n')}\n`, style));
   }
   if (options.json) print(`${JSON.stringify(checks, null, 2)}\n`);
   return checks.every((check) => check.ok) ? EXIT.ok : EXIT.fault;
