@@ -1,8 +1,8 @@
-import { slotsOf } from './slots-of.js';
-import { compare } from './judge-case.js';
 import { fateShare, figureMean } from './estimate.js';
+import { compare } from './judge-case.js';
 import type { Proof, ProofCase } from './proof.js';
 import { cell, dye, ENDLESS, medium, part, pump, thinBeam } from './proof-cells.js';
+import { slotsOf } from './slots-of.js';
 import { traceCell } from './trace-cell.js';
 
 const DEPTH_MM = 10;
@@ -36,7 +36,12 @@ export const beerLambertProof: Proof = {
         }),
       );
       cases.push(
-        compare(`transmission at optical depth ${depth}`, 'exp(−µd)', figureMean(tallies, { leakPhotons: 1 }), Math.exp(-depth)),
+        compare(
+          `transmission at optical depth ${depth}`,
+          'exp(−µd)',
+          figureMean(tallies, { leakPhotons: 1 }),
+          Math.exp(-depth),
+        ),
       );
       if (depth !== 2) continue;
       for (const [name, share] of Object.entries(SHARES)) {
@@ -45,7 +50,12 @@ export const beerLambertProof: Proof = {
           slotsOf(name === 'solvent' ? { fate: 'absorbed-by-solvent' } : { fate: 'lost-in-dye', by: name }),
         );
         cases.push(
-          compare(`absorbed by the ${name}${name === 'solvent' ? '' : ' dye'}, optical depth 2`, '(µ_i/µ)(1 − exp(−µd))', absorbed, share * -Math.expm1(-depth)),
+          compare(
+            `absorbed by the ${name}${name === 'solvent' ? '' : ' dye'}, optical depth 2`,
+            '(µ_i/µ)(1 − exp(−µd))',
+            absorbed,
+            share * -Math.expm1(-depth),
+          ),
         );
       }
     }

@@ -22,7 +22,12 @@ export const diffuseFresnelProof: Proof = {
   async run(context) {
     const cases: ProofCase[] = [];
     for (const [index, external, internal] of ROWS) {
-      const block = part('block', 'glass', { kind: 'box', size: [40, 40, 10] }, { faces: { '*': 'black', top: 'clear' } });
+      const block = part(
+        'block',
+        'glass',
+        { kind: 'box', size: [40, 40, 10] },
+        { faces: { '*': 'black', top: 'clear' } },
+      );
       const contents = {
         media: [medium('glass', index)],
         parts: [block],
@@ -30,11 +35,17 @@ export const diffuseFresnelProof: Proof = {
       };
       const outside = await traceCell(
         context,
-        cell(`diffuse from air, n ${index}`, { ...contents, pumps: [pump([0, 0, 5 + NEAR_MM], [0, 0, -1], lambertianDisc(0.01))] }),
+        cell(`diffuse from air, n ${index}`, {
+          ...contents,
+          pumps: [pump([0, 0, 5 + NEAR_MM], [0, 0, -1], lambertianDisc(0.01))],
+        }),
       );
       const inside = await traceCell(
         context,
-        cell(`diffuse from inside, n ${index}`, { ...contents, pumps: [pump([0, 0, 5 - NEAR_MM], [0, 0, 1], lambertianDisc(0.01))] }),
+        cell(`diffuse from inside, n ${index}`, {
+          ...contents,
+          pumps: [pump([0, 0, 5 - NEAR_MM], [0, 0, 1], lambertianDisc(0.01))],
+        }),
       );
       cases.push(
         compare(

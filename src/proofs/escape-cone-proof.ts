@@ -26,7 +26,9 @@ export const escapeConeProof: Proof = {
         context,
         cell(`first pass, n ${index}`, {
           media: [glowing('glass', index)],
-          parts: [part('block', 'glass', { kind: 'box', size: [40, 40, 2] }, { faces: { '*': 'black', top: 'clear' } })],
+          parts: [
+            part('block', 'glass', { kind: 'box', size: [40, 40, 2] }, { faces: { '*': 'black', top: 'clear' } }),
+          ],
           pumps: [innerSource()],
           exit: 'block.top',
         }),
@@ -47,9 +49,14 @@ export const escapeConeProof: Proof = {
       cell('wide plate', {
         media: [glowing('glass', index)],
         parts: [
-          part('plate', 'glass', { kind: 'box', size: [WIDE_MM, WIDE_MM, 1] }, {
-            faces: { '*': 'black', top: 'clear', bottom: 'perfect' },
-          }),
+          part(
+            'plate',
+            'glass',
+            { kind: 'box', size: [WIDE_MM, WIDE_MM, 1] },
+            {
+              faces: { '*': 'black', top: 'clear', bottom: 'perfect' },
+            },
+          ),
         ],
         pumps: [innerSource()],
         exit: 'plate.top',

@@ -1,5 +1,5 @@
 /** A mean with its standard error, from the per-batch moments of a run. */
-import { FIGURE, FIGURE_COUNT, type FateSlot, type Moments, type RunTallies } from '../tallies/run-tallies.js';
+import { type FateSlot, FIGURE, FIGURE_COUNT, type Moments, type RunTallies } from '../tallies/run-tallies.js';
 
 export interface Estimate {
   readonly value: number;

@@ -1,5 +1,5 @@
 import type { Vector3 } from '../design/description.js';
-import { figureMean, fateShare } from './estimate.js';
+import { fateShare, figureMean } from './estimate.js';
 import { fresnelReflectance, radians } from './fresnel-law.js';
 import { compare } from './judge-case.js';
 import type { Proof, ProofCase, ProofContext } from './proof.js';

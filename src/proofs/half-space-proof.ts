@@ -1,7 +1,7 @@
-import { figureMean, fateShare } from './estimate.js';
+import { fateShare, figureMean } from './estimate.js';
 import { compare } from './judge-case.js';
 import type { Proof, ProofCase } from './proof.js';
-import { cell, dye, ENDLESS, medium, part, PUMP_NM, pump, thinBeam } from './proof-cells.js';
+import { cell, dye, ENDLESS, medium, PUMP_NM, part, pump, thinBeam } from './proof-cells.js';
 import { INCIDENCE_WORDS, type Incidence, scatteringSlab } from './scattering-slab.js';
 import { slotsOf } from './slots-of.js';
 import { traceCell } from './trace-cell.js';
@@ -23,7 +23,8 @@ const ROWS: readonly (readonly [number, Incidence, number])[] = [
 export const halfSpaceProof: Proof = {
   name: 'Dyed half-space, one wavelength',
   law: 'what comes back is 1 − √(1 − φ) H(µ₀), H of Chandrasekhar for isotropic scattering',
-  source: 'Chandrasekhar, Radiative Transfer (1950) ch. V, evaluated to 6 decimals; Giovanelli, Optica Acta 2 153 (1955)',
+  source:
+    'Chandrasekhar, Radiative Transfer (1950) ch. V, evaluated to 6 decimals; Giovanelli, Optica Acta 2 153 (1955)',
   status: 'computed here',
   async run(context) {
     const cases: ProofCase[] = [];

@@ -39,7 +39,12 @@ export const integratingSphereProof: Proof = {
       const perHit = reflectance / (1 - reflectance);
       const where = `ρ = ${reflectance}, port ${100 * port} %`;
       cases.push(
-        compare(`out of the port, ${where}`, 'ρf/(1 − ρ(1 − f))', figureMean(tallies, { leakPhotons: 1 }), multiplier * port),
+        compare(
+          `out of the port, ${where}`,
+          'ρf/(1 − ρ(1 − f))',
+          figureMean(tallies, { leakPhotons: 1 }),
+          multiplier * port,
+        ),
         compare(
           `sphere multiplier, ${where}`,
           'M = ρ/(1 − ρ(1 − f))',

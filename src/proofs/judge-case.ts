@@ -7,7 +7,13 @@ export const STANDARD_ERRORS_ALLOWED = 4;
 const ARITHMETIC = 1e-9;
 
 /** Puts a measured number beside the expected one. */
-export function compare(label: string, against: string, measured: Estimate, expected: number, tolerance = 0): ProofCase {
+export function compare(
+  label: string,
+  against: string,
+  measured: Estimate,
+  expected: number,
+  tolerance = 0,
+): ProofCase {
   const { value, standardError } = measured;
   return {
     label,

@@ -23,7 +23,8 @@ const CUBE_ERROR = 3e-5;
 export const lightBoxProof: Proof = {
   name: 'White boxes',
   law: 'a flat box lets out tρ/(1 − ρr): multiplier 1/(1 − ρr); a cube obeys its radiosity equation',
-  source: 'geometric series; radiosity (Siegel & Howell, Thermal Radiation Heat Transfer) solved independently, no printed table known to us',
+  source:
+    'geometric series; radiosity (Siegel & Howell, Thermal Radiation Heat Transfer) solved independently, no printed table known to us',
   status: 'computed here',
   async run(context) {
     const cases: ProofCase[] = [];
@@ -33,9 +34,14 @@ export const lightBoxProof: Proof = {
         media: [],
         finishes: [diffuser('floor', FLOOR), diffuser('sheet', SHEET.reflects, SHEET.transmits)],
         parts: [
-          part('box', 'air', { kind: 'box', size: [10, 10, 1] }, {
-            faces: { ...ENDLESS, bottom: 'floor', top: 'sheet' },
-          }),
+          part(
+            'box',
+            'air',
+            { kind: 'box', size: [10, 10, 1] },
+            {
+              faces: { ...ENDLESS, bottom: 'floor', top: 'sheet' },
+            },
+          ),
         ],
         pumps: [pump([0, 0, 0], [0, 0, -1], thinBeam())],
         exit: 'box.top',
@@ -44,7 +50,12 @@ export const lightBoxProof: Proof = {
     const multiplier = 1 / (1 - FLOOR * SHEET.reflects);
     const absorbedAt = (face: string) => fateShare(flat, slotsOf({ fate: 'absorbed-by-finish', where: `box.${face}` }));
     cases.push(
-      compare('out of a flat box', 'ρt/(1 − ρr)', figureMean(flat, { leakPhotons: 1 }), FLOOR * SHEET.transmits * multiplier),
+      compare(
+        'out of a flat box',
+        'ρt/(1 − ρr)',
+        figureMean(flat, { leakPhotons: 1 }),
+        FLOOR * SHEET.transmits * multiplier,
+      ),
       compare('absorbed by its floor', '(1 − ρ)/(1 − ρr)', absorbedAt('bottom'), (1 - FLOOR) * multiplier),
       compare(
         'absorbed by its sheet',
@@ -71,7 +82,13 @@ export const lightBoxProof: Proof = {
         }),
       );
       cases.push(
-        compare(`out of a white cube, ρ = ${reflectance}`, 'radiosity', figureMean(tallies, { leakPhotons: 1 }), expected, CUBE_ERROR),
+        compare(
+          `out of a white cube, ρ = ${reflectance}`,
+          'radiosity',
+          figureMean(tallies, { leakPhotons: 1 }),
+          expected,
+          CUBE_ERROR,
+        ),
       );
     }
     return cases;

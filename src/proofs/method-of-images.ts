@@ -2,7 +2,7 @@
 import { gaussNodes } from './quadrature.js';
 
 /** Images either side along each axis: the tail beyond is below 1e-7 for rods up to length 2. */
-const IMAGES = 150;
+const IMAGES = 60;
 
 /**
  * Irradiance over its mean at (x, y) of the exit plane, point source of power 1 at (x0, y0), both from the axis:
@@ -18,7 +18,7 @@ export function rodIrradiance(length: number, x0: number, y0: number, x: number,
       sum += (length / (length * length + dx * dx + dy * dy)) ** 2;
     }
   }
-  // ∫ L²/(π r⁴) outside the square |x|, |y| < a is L²(2 + π)/(2π a²)·½·2; a half-cell beyond the last image.
+  // The integral of L²/(π r⁴) outside the square |x|, |y| < a, half a cell beyond the last image.
   const a = IMAGES + 0.5;
   return sum / Math.PI + (length * length * (Math.PI + 2)) / (2 * Math.PI * a * a);
 }

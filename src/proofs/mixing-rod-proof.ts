@@ -1,9 +1,9 @@
-import type { RecordedMap } from '../tallies/run-tallies.js';
-import type { Estimate } from './estimate.js';
+import { EV_NM } from '../units/constants.js';
 import { compare } from './judge-case.js';
+import { mapCells } from './map-cells.js';
 import { rodShare } from './method-of-images.js';
 import type { Proof, ProofCase, ProofContext } from './proof.js';
-import { cell, detector, ENDLESS, lambertianDisc, part, pump } from './proof-cells.js';
+import { cell, detector, ENDLESS, lambertianDisc, PUMP_NM, part, pump } from './proof-cells.js';
 import { traceCell } from './trace-cell.js';
 
 const PIXELS = 4;
@@ -41,33 +41,37 @@ async function rod(context: ProofContext, length: number, source: readonly [numb
       media: [],
       parts: [part('rod', 'air', { kind: 'box', size: [1, 1, length] }, { faces: ENDLESS })],
       pumps: [pump([source[0], source[1], 1e-9 - length / 2], [0, 0, 1], lambertianDisc(1e-5))],
-      detectors: [detector('end', { kind: 'face', face: 'rod.top' }, [PIXELS, PIXELS])],
+      detectors: [
+        detector(
+          'end',
+          {
+            kind: 'plane',
+            at: [0, 0, length / 2 - 1e-6],
+            normal: [0, 0, 1],
+            outline: { kind: 'rectangle', size: [1, 1] },
+          },
+          [PIXELS, PIXELS],
+        ),
+      ],
       exit: 'rod.top',
     }),
   );
-  const map = tallies.maps.find(({ where }) => where === 'end');
-  if (!map) throw new Error('the detector at the end of the rod has no map');
+  const cells = mapCells(tallies.maps, 'end');
+  const total = cells.reduce((sum, { energy }) => sum + energy, 0);
+  const photons = total / (EV_NM / PUMP_NM);
   return CELLS.map(([i, j]) => {
-    const edges = (cellIndex: number): [number, number] => [cellIndex / PIXELS - 0.5, (cellIndex + 1) / PIXELS - 0.5];
-    const expected = rodShare(length, source, edges(i), edges(j));
-    return compare(`share of cell (${i}, ${j}), ${title}`, 'Σ images', cellShare(map, i, j), expected, 1e-6);
+    const edges = (index: number): [number, number] => [index / PIXELS - 0.5, (index + 1) / PIXELS - 0.5];
+    const holds = (at: number, [low, high]: [number, number]): boolean => at > low && at < high;
+    const found = cells.find(({ centre }) => holds(centre[0], edges(i)) && holds(centre[1], edges(j)));
+    const share = (found?.energy ?? Number.NaN) / total;
+    // Every history leaves one photon at most, so the count is binomial; evenly spread starts only make the true error smaller.
+    const measured = { value: share, standardError: Math.sqrt((share * (1 - share)) / photons) };
+    return compare(
+      `share of cell (${i}, ${j}), ${title}`,
+      'Σ images',
+      measured,
+      rodShare(length, source, edges(i), edges(j)),
+      1e-6,
+    );
   });
-}
-
-/**
- * Share of the map's light in the cell whose centre is at (i, j) of the design's own x and y. Every history leaves one photon
- * at most, so the count is binomial; evenly spread starts only make the true error smaller.
- */
-function cellShare(map: RecordedMap, i: number, j: number): Estimate {
-  const { frame, shape, energy } = map;
-  if (!frame) throw new Error('a flat map has a frame');
-  const value = energy[0].map((half, index) => half + energy[1][index]);
-  const total = value.reduce((sum, cellEnergy) => sum + cellEnergy, 0);
-  const along = (axis: readonly number[], offset: number): number =>
-    axis[0] * ((i + 0.5) / PIXELS - 0.5 - frame.origin[0]) + axis[1] * ((j + 0.5) / PIXELS - 0.5 - frame.origin[1]) - offset;
-  const u = Math.floor(along(frame.u, map.extent[0][0]) * PIXELS);
-  const v = Math.floor(along(frame.v, map.extent[1][0]) * PIXELS);
-  const share = value[u + shape[0] * v] / total;
-  const quantum = EV_PER_PHOTON;
-  return { value: share, standardError: Math.sqrt((share * (1 - share) * quantum) / total) };
 }

@@ -2,7 +2,7 @@ import type { Description, Vector3 } from '../design/description.js';
 import { type Estimate, figureMean } from './estimate.js';
 import { compare } from './judge-case.js';
 import type { Proof, ProofContext } from './proof.js';
-import { cell, detector, diffuser, dye, lambertianDisc, medium, mirror, part, PUMP_NM, pump } from './proof-cells.js';
+import { cell, detector, diffuser, dye, lambertianDisc, medium, mirror, PUMP_NM, part, pump } from './proof-cells.js';
 import { traceCell } from './trace-cell.js';
 
 interface Aperture {
@@ -27,7 +27,9 @@ export const reciprocityProof: Proof = {
     const ratio = (forth.value * BELOW.radius ** 2) / (back.value * BESIDE.radius ** 2);
     const relative = Math.hypot(forth.standardError / forth.value, back.standardError / back.value);
     const measured: Estimate = { value: ratio, standardError: ratio * relative };
-    return [compare('a dyed block with a dull mirror and a white wall, there over back', 'A₁F₁₂/A₂F₂₁ = 1', measured, 1)];
+    return [
+      compare('a dyed block with a dull mirror and a white wall, there over back', 'A₁F₁₂/A₂F₂₁ = 1', measured, 1),
+    ];
   },
 };
 
@@ -41,9 +43,7 @@ function lossyBlock(from: Aperture, to: Aperture): Description {
   return cell(`from ${from.name} to ${to.name}`, {
     media: [medium('dyed', 1.4, { absorption: 0.02, dyes: [dye('dye', 0.3, 0.95, PUMP_NM)] })],
     finishes: [mirror('dull', 0.8), diffuser('white', 0.7)],
-    parts: [
-      part('block', 'dyed', { kind: 'box', size: [4, 6, 5] }, { faces: { left: 'dull', back: 'white' } }),
-    ],
+    parts: [part('block', 'dyed', { kind: 'box', size: [4, 6, 5] }, { faces: { left: 'dull', back: 'white' } })],
     pumps: [pump(from.at, inward, lambertianDisc(from.radius))],
     detectors: [
       detector('receiver', {

@@ -4,7 +4,7 @@
  */
 import type { BeamDescription, Description, Vector3 } from '../design/description.js';
 import { radians } from './fresnel-law.js';
-import { cell, dye, ENDLESS, lambertianDisc, medium, part, PUMP_NM, pump, thinBeam } from './proof-cells.js';
+import { cell, dye, ENDLESS, lambertianDisc, medium, PUMP_NM, part, pump, thinBeam } from './proof-cells.js';
 
 const INDEX = 1.36;
 const SIDE_MM = 10;

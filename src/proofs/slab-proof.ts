@@ -40,7 +40,13 @@ export const slabProof: Proof = {
           reflected,
           1e-6,
         ),
-        compare(`T of a slab, ${where}`, table, figureMean(tallies, { exitPhotons: 1, leakPhotons: 1 }), transmitted, 1e-6),
+        compare(
+          `T of a slab, ${where}`,
+          table,
+          figureMean(tallies, { exitPhotons: 1, leakPhotons: 1 }),
+          transmitted,
+          1e-6,
+        ),
       );
     }
     return cases;

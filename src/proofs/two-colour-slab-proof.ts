@@ -16,7 +16,8 @@ const ROUNDING = 1e-6;
 export const twoColourSlabProof: Proof = {
   name: 'Pumped slab with reabsorption',
   law: 'G = φ[τ_p exp(−τ_p x) + (τ_e/2)∫E₁(τ_e|x − y|)G dy]: source of emission in a matched slab pumped along its normal',
-  source: 'own Nyström solution of the integral equation (800 nodes); its one-colour case agrees with the slab tables to 1e-6',
+  source:
+    'own Nyström solution of the integral equation (800 nodes); its one-colour case agrees with the slab tables to 1e-6',
   status: 'computed here',
   async run(context) {
     const cases: ProofCase[] = [];
@@ -40,8 +41,20 @@ export const twoColourSlabProof: Proof = {
       const leftFront = fateShare(tallies, slotsOf({ fate: 'left-elsewhere', light: 'emitted', where: 'slab.top' }));
       cases.push(
         compare(`emitted through the pumped face, ${where}`, table, leftFront, front, ROUNDING),
-        compare(`emitted through the far face, ${where}`, table, figureMean(tallies, { exitPhotons: 1 }), back, ROUNDING),
-        compare(`emissions per pump photon, ${where}`, table, figureMean(tallies, { emissions: 1 }), generated, ROUNDING),
+        compare(
+          `emitted through the far face, ${where}`,
+          table,
+          figureMean(tallies, { exitPhotons: 1 }),
+          back,
+          ROUNDING,
+        ),
+        compare(
+          `emissions per pump photon, ${where}`,
+          table,
+          figureMean(tallies, { emissions: 1 }),
+          generated,
+          ROUNDING,
+        ),
       );
     }
     return cases;

@@ -22,10 +22,15 @@ interface Setup {
 const discs = (r1: number, r2: number): Setup => ({
   label: `disc of ${r1} to disc of ${r2} at distance 1`,
   against: 'C-41',
-  target: part('target', 'air', { kind: 'cylinder', radius: r2, height: THIN_MM }, {
-    at: [0, 0, 1 + THIN_MM / 2],
-    faces: { '*': 'black' },
-  }),
+  target: part(
+    'target',
+    'air',
+    { kind: 'cylinder', radius: r2, height: THIN_MM },
+    {
+      at: [0, 0, 1 + THIN_MM / 2],
+      faces: { '*': 'black' },
+    },
+  ),
   source: pump([0, 0, 0], [0, 0, 1], lambertianDisc(r1)),
   face: 'target.bottom',
   expected: coaxialDiscs(r1, r2),
@@ -34,10 +39,15 @@ const discs = (r1: number, r2: number): Setup => ({
 const parallel = (side: number): Setup => ({
   label: `square of ${side} to its like at distance 1`,
   against: 'C-11',
-  target: part('target', 'air', { kind: 'box', size: [side, side, THIN_MM] }, {
-    at: [0, 0, 1 + THIN_MM / 2],
-    faces: { '*': 'black' },
-  }),
+  target: part(
+    'target',
+    'air',
+    { kind: 'box', size: [side, side, THIN_MM] },
+    {
+      at: [0, 0, 1 + THIN_MM / 2],
+      faces: { '*': 'black' },
+    },
+  ),
   source: pump([0, 0, 0], [0, 0, 1], lambertianSquare(side)),
   face: 'target.bottom',
   expected: parallelRectangles(side, side),
@@ -46,16 +56,30 @@ const parallel = (side: number): Setup => ({
 const perpendicular = (height: number): Setup => ({
   label: `unit square to a wall of height ${height} on its edge`,
   against: 'C-14',
-  target: part('target', 'air', { kind: 'box', size: [THIN_MM, 1, height] }, {
-    at: [-0.5 - THIN_MM / 2, 0, height / 2],
-    faces: { '*': 'black' },
-  }),
+  target: part(
+    'target',
+    'air',
+    { kind: 'box', size: [THIN_MM, 1, height] },
+    {
+      at: [-0.5 - THIN_MM / 2, 0, height / 2],
+      faces: { '*': 'black' },
+    },
+  ),
   source: pump([0, 0, 0], [0, 0, 1], lambertianSquare(1)),
   face: 'target.right',
   expected: perpendicularRectangles(height, 1),
 });
 
-const SETUPS = [discs(1, 1), discs(0.5, 1), discs(2, 1), parallel(1), parallel(0.4), perpendicular(1), perpendicular(2), perpendicular(0.25)];
+const SETUPS = [
+  discs(1, 1),
+  discs(0.5, 1),
+  discs(2, 1),
+  parallel(1),
+  parallel(0.4),
+  perpendicular(1),
+  perpendicular(2),
+  perpendicular(0.25),
+];
 
 export const viewFactorProof: Proof = {
   name: 'View factors',

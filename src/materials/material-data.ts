@@ -1,0 +1,59 @@
+import type { Curve } from '../units/curve.js';
+
+/** What the library knows of a solvent, a solid or a gas. */
+export interface MaterialData {
+  readonly name: string;
+  readonly kind: 'gas' | 'liquid' | 'solid';
+  /** Refractive index relative to air. */
+  readonly index: Curve;
+  /** Napierian absorption of the bare material, 1/mm. */
+  readonly absorption: Curve;
+  readonly thermal: ThermalData | null;
+  /** Wavelengths the index was fitted to, nm. */
+  readonly rangeNm: readonly [number, number];
+  readonly source: string;
+  /** How sure each part is: verified, from memory, or taken as lossless for want of data. */
+  readonly status: string;
+}
+
+/** Liquid at rest at 25 °C and its boiling point at 101.325 kPa. */
+export interface ThermalData {
+  readonly densityKgPerM3: number;
+  readonly specificHeatJPerKgK: number;
+  readonly conductivityWPerMK: number;
+  readonly viscosityMPaS: number;
+  readonly boilingPointC: number | null;
+  readonly temperatureC: number;
+  readonly source: string;
+}
+
+/** What the library knows of a dye in one solvent. */
+export interface DyeData {
+  readonly name: string;
+  readonly solvent: string;
+  readonly molarMassGPerMol: number;
+  /** Decadic molar extinction, L/(mol cm); 0 above the red end of the table, held below its blue end. */
+  readonly extinction: Curve;
+  readonly emission: { readonly photonsPerNm: Curve; readonly fromNm: number; readonly toNm: number };
+  readonly quantumYield: number;
+  /** ns, from the spectra after Strickler & Berg (1962). */
+  readonly lifetimeNs: number | null;
+  readonly source: string;
+  readonly status: string;
+  /** pH over which the spectra and yield hold; null where pH does not matter. */
+  readonly pHRange: readonly [number, number] | null;
+}
+
+export interface MetalData {
+  readonly name: string;
+  /** Complex index n − ik, k > 0 absorbs. */
+  readonly n: Curve;
+  readonly k: Curve;
+  readonly source: string;
+  readonly status: string;
+}
+
+/** @throws RangeError that lists the names there are. */
+export function unknownName(kind: string, name: string, names: readonly string[]): RangeError {
+  return new RangeError(`the library has no ${kind} called ${name}; it has ${names.join(', ')}`);
+}

@@ -1,0 +1,49 @@
+import { beamSpreadProof } from './beam-spread-proof.js';
+import { beerLambertProof } from './beer-lambert-proof.js';
+import { diffuseFresnelProof } from './diffuse-fresnel-proof.js';
+import { energyProof } from './energy-proof.js';
+import { escapeConeProof } from './escape-cone-proof.js';
+import { fresnelProof } from './fresnel-proof.js';
+import { glassPlateProof } from './glass-plate-proof.js';
+import { glassSphereProof } from './glass-sphere-proof.js';
+import { halfSpaceProof } from './half-space-proof.js';
+import { integratingSphereProof } from './integrating-sphere-proof.js';
+import { lightBoxProof } from './light-box-proof.js';
+import { meanChordProof } from './mean-chord-proof.js';
+import { metalMirrorProof } from './metal-mirror-proof.js';
+import { mixingRodProof } from './mixing-rod-proof.js';
+import { parallelBeamProof } from './parallel-beam-proof.js';
+import { photometryProof } from './photometry-proof.js';
+import { prismProof } from './prism-proof.js';
+import type { Proof } from './proof.js';
+import { reciprocityProof } from './reciprocity-proof.js';
+import { slabProof } from './slab-proof.js';
+import { trappedLightProof } from './trapped-light-proof.js';
+import { twoColourSlabProof } from './two-colour-slab-proof.js';
+import { viewFactorProof } from './view-factor-proof.js';
+
+/** Every proof, from single laws to whole cells. */
+export const allProofs: readonly Proof[] = [
+  beerLambertProof,
+  energyProof,
+  fresnelProof,
+  diffuseFresnelProof,
+  metalMirrorProof,
+  prismProof,
+  beamSpreadProof,
+  viewFactorProof,
+  meanChordProof,
+  parallelBeamProof,
+  escapeConeProof,
+  trappedLightProof,
+  glassSphereProof,
+  glassPlateProof,
+  slabProof,
+  halfSpaceProof,
+  twoColourSlabProof,
+  integratingSphereProof,
+  lightBoxProof,
+  mixingRodProof,
+  reciprocityProof,
+  photometryProof,
+];
