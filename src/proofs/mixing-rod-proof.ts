@@ -7,6 +7,8 @@ import { cell, detector, ENDLESS, lambertianDisc, PUMP_NM, part, pump } from './
 import { traceCell } from './trace-cell.js';
 
 const PIXELS = 4;
+/** The map lies this far inside the end, so that the exit does not swallow the light first. */
+const BEFORE_END_MM = 1e-4;
 /** Length over side, place of the source from the axis. */
 const RODS = [
   [0.5, [0.25, 0]],
@@ -46,7 +48,7 @@ async function rod(context: ProofContext, length: number, source: readonly [numb
           'end',
           {
             kind: 'plane',
-            at: [0, 0, length / 2 - 1e-6],
+            at: [0, 0, length / 2 - BEFORE_END_MM],
             normal: [0, 0, 1],
             outline: { kind: 'rectangle', size: [1, 1] },
           },

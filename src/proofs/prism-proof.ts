@@ -46,6 +46,7 @@ async function deviate(context: ProofContext, degrees: number | null): Promise<P
   const out = heading - deviation;
   const away: Vector3 = [Math.cos(out), Math.sin(out), 0];
   const screen: Vector3 = [leaving[0] + AWAY_MM * away[0], leaving[1] + AWAY_MM * away[1], 0];
+  const further: Vector3 = [screen[0] + away[0], screen[1] + away[1], 0];
   const title = degrees === null ? 'symmetric passage' : `incidence ${degrees} deg`;
   const h = HEIGHT_MM / 2;
   const tallies = await traceCell(
@@ -72,13 +73,14 @@ async function deviate(context: ProofContext, degrees: number | null): Promise<P
         ),
       ],
       detectors: [
+        detector('beyond', { kind: 'plane', at: further, normal: away, outline: { kind: 'disc', radius: 100 } }),
         detector(
           'screen',
           { kind: 'plane', at: screen, normal: away, outline: { kind: 'rectangle', size: [SCREEN_MM, SCREEN_MM] } },
           [PIXELS, PIXELS],
         ),
       ],
-      exit: 'prism.right',
+      exit: 'beyond',
     }),
     0.05,
   );

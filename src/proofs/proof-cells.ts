@@ -197,7 +197,8 @@ export function cell(
     parts,
     pumps,
     detectors,
-    exit: { name: exit, path: ['exit'], pixels: null },
-    defaults: { histories: null, precision: null, seed: null, voxels: null },
+    // No proof reads the maps of the exit or of the absorbed power: a single cell costs nothing.
+    exit: { name: exit, path: ['exit'], pixels: [1, 1] },
+    defaults: { histories: null, precision: null, seed: null, voxels: [1, 1, 1] },
   };
 }

@@ -3,6 +3,9 @@ import { FIGURE, type RunTallies } from '../tallies/run-tallies.js';
 import { traceDescription } from '../trace/trace-design.js';
 import type { ProofContext } from './proof.js';
 
+/** Starting threads for fewer histories than this takes longer than tracing them; the results are the same bits. */
+const WORTH_THREADS = 100_000;
+
 /** What both ledgers of every run must close to. */
 const CLOSURE = 1e-12;
 
@@ -11,12 +14,13 @@ const CLOSURE = 1e-12;
  * @throws Error when either ledger of the run does not close: then no number of it is worth comparing.
  */
 export async function traceCell(context: ProofContext, cell: Description, share = 1): Promise<RunTallies> {
+  const histories = Math.max(640, Math.round(context.histories * share));
   const { tallies } = await traceDescription(cell, {
-    histories: Math.max(640, Math.round(context.histories * share)),
+    histories,
     precision: null,
     seconds: null,
     seed: `${context.seed}/${cell.title}`,
-    threads: context.threads,
+    threads: histories < WORTH_THREADS ? 0 : context.threads,
   });
   const gap = closureGap(tallies);
   if (!(gap <= CLOSURE)) throw new Error(`the ledgers of "${cell.title}" miss one by ${gap}`);

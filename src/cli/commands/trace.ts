@@ -1,6 +1,6 @@
 import { availableParallelism } from 'node:os';
 import type { LocatedFault } from '../../design/fault.js';
-import type { GoodReading } from '../../design/read-design.js';
+import type { SoundDesign } from '../../design/read-design.js';
 import type { TraceResult } from '../../trace/trace-result.js';
 import { CommandFault } from '../command-fault.js';
 import { EXIT, type ExitCode } from '../exit-codes.js';
@@ -56,7 +56,7 @@ export async function traceCommand(file: string, options: TraceCommandOptions): 
 }
 
 async function traceReading(
-  reading: GoodReading,
+  reading: SoundDesign,
   options: TraceCommandOptions,
   signal: AbortSignal,
 ): Promise<TraceResult> {

@@ -1,0 +1,61 @@
+/** Evenness figures of a recorded face map, on cells coarse enough that counting noise does not speak. */
+import type { MapField } from './map-field.js';
+import { coarsen, isoUniformity, mapExtremes, mapMean, type PlaneMap, trueVariation } from './uniformity.js';
+
+/** Wanted photons per cell for minimum and maximum: 5 % noise. */
+const PHOTONS_PER_CELL = 400;
+/** A map is not joined to fewer cells than this along its shorter side. */
+const FEWEST_CELLS = 4;
+
+export interface Evenness {
+  readonly variation: { readonly value: number; readonly standardError: number } | null;
+  readonly minOverMean: number;
+  readonly flatness: number;
+  readonly uniformity: number;
+  /** On which cells the last three were taken. */
+  readonly note: string;
+}
+
+/** null for a map without light or with voxels. */
+export function mapEvenness(field: MapField): Evenness | null {
+  if (field.map.shape.length !== 2 || !(field.power > 0)) return null;
+  const whole = planeMap(field, field.values);
+  const factor = joinFactor(field, whole);
+  const coarse = dropSlivers(coarsen(whole, factor));
+  const mean = mapMean(coarse);
+  const [even, odd] = field.halves;
+  const halfMap = (values: Float64Array) => dropSlivers(planeMap(field, values));
+  return {
+    variation: even !== null && odd !== null && sum(even) > 0 && sum(odd) > 0 ? trueVariation(halfMap(even), halfMap(odd)) : null,
+    minOverMean: mapExtremes(coarse).minimum / mean,
+    flatness: isoUniformity(coarse).flatness,
+    uniformity: isoUniformity(coarse).uniformity,
+    note: evennessNote(coarse, field),
+  };
+}
+
+const sum = (values: Float64Array): number => values.reduce((a, b) => (Number.isNaN(b) ? a : a + b), 0);
+
+function planeMap({ map }: MapField, values: Float64Array): PlaneMap {
+  return { cellsU: map.shape[0], cellsV: map.shape[1], values, weights: map.measure };
+}
+
+/** Cells of which less than half lies on the face do not count. */
+function dropSlivers(map: PlaneMap): PlaneMap {
+  const full = Math.max(...map.weights);
+  return { ...map, weights: map.weights.map((weight) => (weight >= full / 2 ? weight : 0)) };
+}
+
+function joinFactor({ counts }: MapField, { cellsU, cellsV, weights }: PlaneMap): number {
+  const photons = counts.reduce((a, b) => a + b, 0);
+  const cells = weights.reduce((n, weight) => n + (weight > 0 ? 1 : 0), 0);
+  const wanted = Math.ceil(Math.sqrt((PHOTONS_PER_CELL * cells) / Math.max(photons, 1)));
+  const most = Math.max(1, Math.floor(Math.min(cellsU, cellsV) / FEWEST_CELLS));
+  return Math.min(Math.max(1, wanted), most);
+}
+
+function evennessNote(coarse: PlaneMap, { counts }: MapField): string {
+  const cells = coarse.weights.reduce((n, weight) => n + (weight > 0 ? 1 : 0), 0);
+  const noise = 100 / Math.sqrt(Math.max(1, counts.reduce((a, b) => a + b, 0) / cells));
+  return `on ${coarse.cellsU} × ${coarse.cellsV} cells, each with about ${noise.toPrecision(2)} % of counting noise`;
+}

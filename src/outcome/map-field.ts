@@ -1,0 +1,63 @@
+/** Recorded energies -> irradiance or absorbed power density, per half and together. */
+import type { RecordedMap, RunTallies } from '../tallies/run-tallies.js';
+import { BATCH_HISTORIES } from '../tallies/batch-tally.js';
+
+/** A map in W/cm² (faces) or W/cm³ (voxels). */
+export interface MapField {
+  readonly map: RecordedMap;
+  readonly unit: 'W/cm²' | 'W/cm³';
+  /** NaN where the map has no face or liquid. */
+  readonly values: Float64Array;
+  /** The same from even and from odd batches alone; a half without histories is null. */
+  readonly halves: readonly [Float64Array | null, Float64Array | null];
+  /** Photons behind each cell, about (energy over the mean photon energy). */
+  readonly counts: Float64Array;
+  /** W in the whole map. */
+  readonly power: number;
+}
+
+/** Histories in even and in odd batches. */
+export function halfHistories(histories: number): readonly [number, number] {
+  const full = Math.floor(histories / BATCH_HISTORIES);
+  const rest = histories - full * BATCH_HISTORIES;
+  const even = Math.ceil(full / 2) * BATCH_HISTORIES + (full % 2 === 0 ? rest : 0);
+  return [even, histories - even];
+}
+
+/**
+ * @param pumpWatts total pump power
+ * @param launchedEv mean eV launched per history
+ */
+export function mapField(map: RecordedMap, tallies: RunTallies, pumpWatts: number, launchedEv: number): MapField {
+  const histories = tallies.moments.histories;
+  const voxels = map.shape.length === 3;
+  // mm² -> cm², mm³ -> cm³
+  const toCm = voxels ? 1e-3 : 1e-2;
+  const [even, odd] = map.energy;
+  const field = (energy: Float64Array, n: number) => {
+    const wattsPerEv = pumpWatts / (n * launchedEv);
+    return energy.map((ev, i) => (map.measure[i] > 0 ? (ev * wattsPerEv) / (map.measure[i] * toCm) : Number.NaN));
+  };
+  const both = even.map((ev, i) => ev + odd[i]);
+  const [evenHistories, oddHistories] = halfHistories(histories);
+  const energy = both.reduce((a, b) => a + b, 0);
+  return {
+    map,
+    unit: voxels ? 'W/cm³' : 'W/cm²',
+    values: field(both, histories),
+    halves: [
+      evenHistories > 0 ? field(even, evenHistories) : null,
+      oddHistories > 0 ? field(odd, oddHistories) : null,
+    ],
+    counts: both.map((ev) => ev / launchedEv),
+    power: (energy * pumpWatts) / (histories * launchedEv),
+  };
+}
+
+/** Cells of which at least half belongs to the face or the liquid; others are too thin to judge evenness by. */
+export function soundCells({ map }: MapField): number[] {
+  const full = Math.max(...map.measure);
+  const cells: number[] = [];
+  for (let i = 0; i < map.measure.length; i++) if (map.measure[i] >= full / 2) cells.push(i);
+  return cells;
+}

@@ -1,0 +1,160 @@
+/** Trace result -> the record a run keeps, and the arrays of its maps and spectra. */
+import { cautionsFor } from '../materials/cautions.js';
+import type { RunArrays } from '../run-folder/run-arrays.js';
+import { type MapRecord, RUN_FORMAT, type RunRecord } from '../run-folder/run-record.js';
+import type { TraceResult } from '../trace/trace-result.js';
+import { ErrorBars } from './error-bars.js';
+import { runFigures } from './figures.js';
+import { photonLedger, wattLedger } from './ledger.js';
+import { mapEvenness } from './map-evenness.js';
+import { type MapField, mapField } from './map-field.js';
+
+/** What only the caller knows of a run. */
+export interface RunAbout {
+  readonly version: string;
+  readonly file: string;
+  readonly text: string;
+  /** SHA-256 of the text, hex. */
+  readonly hash: string;
+  /** Dials as used, name -> text. */
+  readonly dials: Readonly<Record<string, string>>;
+  readonly startedAt: Date;
+  /** Command that repeats the run. */
+  readonly repeat: string;
+}
+
+/** File names in `record` are left empty: the run folder chooses them. @throws LedgerDefect */
+export function summariseRun(result: TraceResult, about: RunAbout): { record: RunRecord; arrays: RunArrays } {
+  const { tallies, description } = result;
+  const bars = new ErrorBars(tallies);
+  const pumpWatts = description.pumps.reduce((sum, { power }) => sum + power, 0);
+  const fields = tallies.maps.map((map) => mapField(map, tallies, pumpWatts, bars.mean('launchedEnergy')));
+  const record: RunRecord = {
+    format: RUN_FORMAT,
+    tool: { name: 'stokeswell', version: about.version },
+    design: {
+      title: description.title,
+      file: about.file,
+      text: about.text,
+      hash: about.hash,
+      dials: about.dials,
+    },
+    run: {
+      seed: result.seed,
+      histories: tallies.moments.histories,
+      batches: tallies.moments.batches,
+      threads: result.threads,
+      seconds: result.seconds,
+      stopReason: result.stopReason,
+      startedAt: about.startedAt.toISOString(),
+      repeat: about.repeat,
+    },
+    figures: runFigures(result, fields),
+    ledger: { photons: photonLedger(tallies), watts: wattLedger(tallies) },
+    maps: fields.map(mapRecord),
+    spectra: tallies.spectra.map(({ id, what, where, light, photons }) => ({
+      id,
+      what,
+      where,
+      light,
+      file: '',
+      photonFraction: total(photons) / tallies.moments.histories,
+    })),
+    angles: tallies.angles.map(({ id, where }) => ({ id, where, file: '' })),
+    histograms: tallies.histograms.map(({ id, unit, from, width, counts }) => {
+      const all = total(counts);
+      return { id, unit, from, width, shares: Array.from(counts, (count) => (all > 0 ? count / all : 0)) };
+    }),
+    checks: result.warnings,
+    cautions: cautionsFor({
+      pumpWatts,
+      solvents: partMedia(result).flatMap(({ kind, base }) => (kind === 'liquid' ? [base] : [])),
+      dyes: partMedia(result).flatMap(({ dyes }) => dyes.map(({ name }) => name)),
+    }),
+  };
+  return { record, arrays: runArrays(result, fields, pumpWatts) };
+}
+
+function partMedia({ description }: TraceResult) {
+  const names = new Set(description.parts.map(({ medium }) => medium));
+  return [...names].map((name) => description.media.get(name)).filter((medium) => medium !== undefined);
+}
+
+const total = (values: Float64Array): number => values.reduce((a, b) => a + b, 0);
+
+function mapRecord(field: MapField): MapRecord {
+  const { map, unit, values, power } = field;
+  let minimum = Number.POSITIVE_INFINITY;
+  let maximum = 0;
+  let measure = 0;
+  map.measure.forEach((m, i) => {
+    if (m <= 0) return;
+    measure += m;
+    minimum = Math.min(minimum, values[i]);
+    maximum = Math.max(maximum, values[i]);
+  });
+  const evenness = mapEvenness(field);
+  return {
+    id: map.id,
+    what: map.what,
+    where: map.where,
+    unit,
+    shape: map.shape,
+    extentMm: map.extent,
+    axes: map.axes,
+    files: [],
+    power,
+    mean: power / (measure * (unit === 'W/cm³' ? 1e-3 : 1e-2)),
+    minimum,
+    maximum,
+    variation: evenness?.variation?.value ?? null,
+    minOverMean: evenness?.minOverMean ?? null,
+  };
+}
+
+function runArrays({ tallies }: TraceResult, fields: readonly MapField[], pumpWatts: number): RunArrays {
+  const { histories } = tallies.moments;
+  const wattsPerEv = pumpWatts / (histories * new ErrorBars(tallies).mean('launchedEnergy'));
+  const widths = cellWidths(tallies.wavelengthsNm);
+  return {
+    maps: fields.map(({ map, unit, values }) => ({
+      id: map.id,
+      shape: map.shape,
+      extentMm: map.extent,
+      axes: map.axes,
+      unit,
+      values,
+      measure: map.measure,
+    })),
+    spectra: {
+      wavelengthsNm: tallies.wavelengthsNm,
+      columns: tallies.spectra.map(({ id, photons }) => ({
+        id,
+        values: photons.map((count, i) => count / histories / widths[i]),
+      })),
+    },
+    angles: tallies.angles.map(({ id, polarCells, azimuthCells, energy }) => ({
+      id,
+      polarCells,
+      azimuthCells,
+      wattsPerSr: energy.map(
+        (ev, i) => (ev * wattsPerEv) / cellSolidAngle(Math.floor(i / azimuthCells), polarCells, azimuthCells),
+      ),
+    })),
+  };
+}
+
+function cellSolidAngle(polar: number, polarCells: number, azimuthCells: number): number {
+  const step = Math.PI / 2 / polarCells;
+  return ((2 * Math.PI) / azimuthCells) * (Math.cos(polar * step) - Math.cos((polar + 1) * step));
+}
+
+/** Half way to either neighbour. */
+function cellWidths(nm: Float64Array): Float64Array {
+  const last = nm.length - 1;
+  return nm.map((_, i) => {
+    const below = i > 0 ? (nm[i] - nm[i - 1]) / 2 : (nm[1] - nm[0]) / 2;
+    const above = i < last ? (nm[i + 1] - nm[i]) / 2 : below;
+    return below + above;
+  });
+}
