@@ -3,7 +3,7 @@ export type { Description } from './design/description.js';
 export { DesignFaults } from './design/design-faults.js';
 export type { Fault, FaultCode, LocatedFault } from './design/fault.js';
 export { type DesignReading, readDesign } from './design/read-design.js';
-export { summariseRun } from './outcome/summarise-run.js';
+export { type RunAbout, summariseRun } from './outcome/summarise-run.js';
 export type { Figure, FigureName, LedgerRow, MapRecord, RunRecord } from './run-folder/run-record.js';
 export type { RunTallies } from './tallies/run-tallies.js';
 export { NothingTraced, traceDescription } from './trace/trace-design.js';

@@ -5,6 +5,8 @@ import { safeText } from './safe-text.js';
 import type { TerminalStyle } from './terminal-style.js';
 
 const HEADINGS = ['face', 'shape', 'centre, mm', 'normal', 'mm²', 'finish', 'touches'];
+/** Samples on an edge count for neither side: nearly whole is whole. */
+const WHOLE = 0.99;
 /** Columns of numbers stand to the right. */
 const AREA_COLUMN = 4;
 
@@ -36,7 +38,7 @@ export function faceTable(faces: readonly FaceReport[], style: TerminalStyle): s
 function touchText(face: FaceReport): string {
   const touched = face.touches.map((name) => safeText(name)).join(', ');
   if (face.exposed === 0) return 'buried or cut away';
-  return face.exposed < 1 ? `${touched} (${significant(100 * face.exposed, 2)} % exposed)` : touched;
+  return face.exposed < WHOLE ? `${touched} (${significant(100 * face.exposed, 2)} % exposed)` : touched;
 }
 
 /** Rounding noise of turned parts reads as 0. */

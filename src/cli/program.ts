@@ -71,7 +71,7 @@ export function buildProgram(done: (code: ExitCode) => void): Command {
       parseSeed,
     )
     .option('--threads <number>', 'worker threads (default: all cores); the results do not depend on it', parseThreads)
-    .option('--out <folder>', 'new or empty folder for the run (default: results/<design>/<time>)')
+    .option('--out <folder>', 'new or empty folder for the run (default: a new one below results)')
     .option('--no-files', 'write no files')
     .option('--plain', 'print the record of the run as JSON and nothing else')
     .addOption(new Option('--ledger <of>', 'ledger to print').choices(['watts', 'photons']).default('watts'))

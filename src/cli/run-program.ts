@@ -1,4 +1,5 @@
 import { CommanderError } from 'commander';
+import { RunFolderError } from '../run-folder/run-folder-error.js';
 import { CommandFault } from './command-fault.js';
 import { EXIT, type ExitCode } from './exit-codes.js';
 import { guardStreams, tell } from './output-stream.js';
@@ -46,6 +47,10 @@ async function exitCodeOf(words: readonly string[]): Promise<ExitCode> {
 function tellFault(error: unknown): ExitCode {
   // Commander has printed its own sentence.
   if (error instanceof CommanderError) return error.exitCode === 0 ? EXIT.ok : EXIT.fault;
+  if (error instanceof RunFolderError) {
+    tell(`${error.message}\n`);
+    return EXIT.unwritable;
+  }
   if (error instanceof CommandFault) {
     tell(`${error.message}\n`);
     return error.exitCode;

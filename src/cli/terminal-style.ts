@@ -38,7 +38,7 @@ const ASCII_FOR: Readonly<Record<string, string>> = {
   '±': '+-',
   '²': '2',
   '³': '3',
-  '°': ' deg',
+  '°': 'deg',
   µ: 'u',
   μ: 'u',
   '–': '-',

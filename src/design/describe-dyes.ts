@@ -29,8 +29,8 @@ export function describeOwnDye({ path, value }: Named<DyeRecord>, reading: Readi
     reading.report({ code: 'range', path: [...path, 'emission'], problem, expected: 'some photons per nm above 0' });
   }
   return {
-    extinction: extinction && pointCurve(extinction, 'held'),
-    absorption: absorption && pointCurve(absorption, 'held'),
+    extinction: extinction && pointCurve(extinction, 'hold'),
+    absorption: absorption && pointCurve(absorption, 'hold'),
     emission: describeEmission(emission),
     quantumYield: value.yield,
     lifetimeNs: value.lifetime,
@@ -98,12 +98,13 @@ function libraryDye(name: string, path: Named<unknown>['path'], { base, pH }: Ho
   const solvent = measured.includes(base) ? base : nearestSolvent(base, measured);
   const data = readDye(name, solvent);
   if (solvent !== base) {
+    const host = base === 'custom' ? 'a material of your own' : base;
     reading.report({
       code: 'caution',
       severity: 'warning',
       path,
-      problem: `the library has no spectra of ${name} in ${base}; those in ${solvent} are used, peaks and yield may differ`,
-      found: base,
+      problem: `the library has no spectra of ${name} in ${host}; those in ${solvent} are used, peaks and yield may differ`,
+      found: host,
       expected: measured.join(', '),
     });
   }
@@ -125,7 +126,8 @@ function cautionAboutPH(
   path: Named<unknown>['path'],
   reading: Reading,
 ): void {
-  if (pH !== null && (Number.isNaN(pH) || (pH >= low && pH <= high))) return;
+  // A pH that cannot be has been told already.
+  if (pH !== null && (Number.isNaN(pH) || pH < 0 || pH > 14 || (pH >= low && pH <= high))) return;
   reading.report({
     code: 'caution',
     severity: 'warning',

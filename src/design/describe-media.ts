@@ -45,13 +45,13 @@ export function describeMedia(design: DesignRecord, reading: Reading): Map<strin
 const libraryNames = (): string[] => [...solventNames(), ...solidNames(), ...gasNames()];
 
 function libraryMaterial(name: string): Base | null {
-  if (solventNames().includes(name)) return fromLibrary('liquid', readSolvent(name));
-  if (solidNames().includes(name)) return fromLibrary('solid', readSolid(name));
-  if (gasNames().includes(name)) return fromLibrary('gas', readGas(name));
+  if (solventNames().includes(name)) return fromLibrary(readSolvent(name));
+  if (solidNames().includes(name)) return fromLibrary(readSolid(name));
+  if (gasNames().includes(name)) return fromLibrary(readGas(name));
   return null;
 }
 
-const fromLibrary = (kind: Base['kind'], { name, index, absorption, thermal }: MaterialData): Base => ({
+const fromLibrary = ({ name, kind, index, absorption, thermal }: MaterialData): Base => ({
   kind,
   base: name,
   index,
@@ -88,13 +88,13 @@ function describeBase(fields: MediumRecord, path: DesignPath, reading: Reading):
     return {
       kind: kind ?? 'liquid',
       base: 'custom',
-      index: pointCurve(index, 'held'),
-      absorption: absorption === null ? () => 0 : pointCurve(absorption, 'held'),
+      index: pointCurve(index, 'hold'),
+      absorption: absorption === null ? () => 0 : pointCurve(absorption, 'hold'),
       thermal: null,
     };
   }
   const base = solvent === null ? named(solid, 'solid', reading) : named(solvent, 'solvent', reading);
-  return base && { ...base, ...(absorption === null ? {} : { absorption: pointCurve(absorption, 'held') }) };
+  return base && { ...base, ...(absorption === null ? {} : { absorption: pointCurve(absorption, 'hold') }) };
 }
 
 function named(material: Reference | null, kind: 'solid' | 'solvent', reading: Reading): Base | null {

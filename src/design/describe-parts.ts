@@ -28,7 +28,7 @@ export function describeParts(
   for (const entry of design.parts) {
     later.delete(entry.name);
     const pieces = describePieces(entry, reading);
-    const own = pieces?.flatMap((piece) => pieceFaces(piece));
+    const own = pieces === null ? null : pieces.flatMap((piece) => pieceFaces(piece));
     const { value, name, path } = entry;
     const against = describeAgainst(value, path, own, faces, later, reading);
     if (against !== null && value.at !== null) {

@@ -47,7 +47,7 @@ function describeCap(cap: Given<'cap'>, path: DesignPath, reading: Reading): Sha
 function describePrism(prism: Given<'prism'>, path: DesignPath, reading: Reading): ShapeDescription | null {
   const { outline, height, sides } = prism;
   if (outline.length === 0 || outline.flat().some(Number.isNaN)) return null;
-  checkSides(sides, outline.length, path, reading);
+  const named = checkSides(sides, outline.length, path, reading);
   const turns = outlineTurns(outline);
   const orientation = Math.sign(turns.reduce((sum, turn) => sum + turn, 0));
   const wrong = turns.findIndex((turn) => turn * orientation <= 0);
@@ -65,6 +65,7 @@ function describePrism(prism: Given<'prism'>, path: DesignPath, reading: Reading
     });
     return null;
   }
+  if (!named) return null;
   if (orientation > 0) return { kind: 'prism', outline, height, sides };
   // Edge i of the turned outline is edge n−2−i of the written one, and the last closes both.
   const n = outline.length;
@@ -73,7 +74,7 @@ function describePrism(prism: Given<'prism'>, path: DesignPath, reading: Reading
     kind: 'prism',
     outline: outline.toReversed(),
     height,
-    sides: names.length === n ? names.map((_, i) => names[(2 * n - 2 - i) % n]) : names,
+    sides: names.map((_, i) => names[(2 * n - 2 - i) % n]),
   };
 }
 
@@ -90,13 +91,18 @@ function outlineTurns(outline: readonly Vector2[]): number[] {
   });
 }
 
-function checkSides(sides: readonly string[] | null, edges: number, path: DesignPath, reading: Reading): void {
-  if (sides === null || sides.length === 0) return;
+/** False when there is not a name for each edge: then nothing can be said about names of faces. */
+function checkSides(sides: readonly string[] | null, edges: number, path: DesignPath, reading: Reading): boolean {
+  if (sides === null) return true;
   const at = [...path, 'sides'];
   if (sides.length !== edges) {
     const problem = 'the number of names is not that of the sides';
     const expected = `${edges} names, one for each edge of the outline`;
-    reading.report({ code: 'geometry', path: at, problem, found: `${sides.length} names`, expected });
+    // An empty list is one that could not be read.
+    if (sides.length > 0) {
+      reading.report({ code: 'geometry', path: at, problem, found: `${sides.length} names`, expected });
+    }
+    return false;
   }
   const taken = new Map(['bottom', 'top', 'others'].map((name) => [name, 'this name has a meaning of its own']));
   sides.forEach((name, i) => {
@@ -106,4 +112,5 @@ function checkSides(sides: readonly string[] | null, edges: number, path: Design
     sides.map((name, i) => ({ name, path: [...at, i] })),
     reading,
   );
+  return true;
 }

@@ -1,5 +1,18 @@
 /** The text of a design file as a YAML tree in which every node knows its place. */
-import { isAlias, isMap, isScalar, isSeq, LineCounter, type Node, type Pair, parseDocument, type Scalar } from 'yaml';
+import {
+  type Alias,
+  type Document,
+  isAlias,
+  isMap,
+  isScalar,
+  isSeq,
+  type Node,
+  type Pair,
+  parseDocument,
+  type Scalar,
+  visit,
+  type YAMLError,
+} from 'yaml';
 import type { DesignPath } from './fault.js';
 
 export interface DesignSource {
@@ -35,6 +48,7 @@ const SAID_BETTER: Readonly<Record<string, string>> = {
   MULTIPLE_DOCS: 'a second document starts here; a design is one document',
   TAB_AS_INDENT: 'a tab stands where only spaces may indent',
   TAG_RESOLVE_FAILED: 'tags are not used in designs',
+  RESOURCE_EXHAUSTION: 'brackets are nested too deeply',
   BLOCK_AS_IMPLICIT_KEY: 'two colons on one line; quote the text or start a new line',
 };
 
@@ -43,29 +57,70 @@ const SAID_BETTER: Readonly<Record<string, string>> = {
  * not for YAML.
  */
 export function parseDesignSource(text: string, file: string): DesignSource {
-  const lines = new LineCounter();
-  const position = (offset: number): Position => {
-    const { line, col } = lines.linePos(offset);
-    return { line: Math.max(1, line), column: Math.max(1, col) };
-  };
+  const position = positionFinder(text);
   try {
     // Duplicate keys are looked for by entriesOf, which is linear where the library compares each with each.
-    const options = { lineCounter: lines, schema: 'failsafe', prettyErrors: false, uniqueKeys: false } as const;
+    const options = { schema: 'failsafe', prettyErrors: false, uniqueKeys: false } as const;
     const document = parseDocument(text, options);
-    const syntaxFaults = [...document.errors, ...document.warnings].map(({ code, message, pos }): SyntaxFault => {
-      const problem = SAID_BETTER[code] ?? sentence(message);
-      return { problem: `not well-formed YAML: ${problem}`, offset: pos[0] };
-    });
+    const syntaxFaults = syntaxFaultsOf([...document.errors, ...document.warnings]);
+    const targets = aliasTargets(document);
     const resolve = (node: unknown): Node | null => {
-      if (isAlias(node)) return node.resolve(document) ?? null;
+      if (isAlias(node)) return targets.get(node) ?? null;
       return isMap(node) || isSeq(node) || isScalar(node) ? node : null;
     };
     return { file, text, root: resolve(document.contents), syntaxFaults, resolve, position };
   } catch (error) {
     if (!(error instanceof RangeError)) throw error;
-    const problem = 'not readable YAML: brackets are nested too deeply';
+    const problem = `not well-formed YAML: ${SAID_BETTER.RESOURCE_EXHAUSTION}`;
     return { file, text, root: null, syntaxFaults: [{ problem, offset: 0 }], resolve: () => null, position };
   }
+}
+
+/** Offset to line and column. The library's own counter loses count of lines after some errors. */
+function positionFinder(text: string): (offset: number) => Position {
+  const starts = [0];
+  for (let at = text.indexOf('\n'); at >= 0; at = text.indexOf('\n', at + 1)) starts.push(at + 1);
+  return (offset) => {
+    const within = Math.min(Math.max(0, offset), text.length);
+    let low = 0;
+    let high = starts.length;
+    while (high - low > 1) {
+      const middle = (low + high) >> 1;
+      if (starts[middle] <= within) low = middle;
+      else high = middle;
+    }
+    return { line: low + 1, column: within - starts[low] + 1 };
+  };
+}
+
+/** One fault for each place: what follows from a fault at the same spot says nothing new. */
+function syntaxFaultsOf(errors: readonly YAMLError[]): SyntaxFault[] {
+  const deep = errors.find(({ code }) => code === 'RESOURCE_EXHAUSTION');
+  const places = new Map<number, SyntaxFault>();
+  for (const { code, message, pos } of deep ? [deep] : errors) {
+    const problem = `not well-formed YAML: ${SAID_BETTER[code] ?? sentence(message)}`;
+    if (!places.has(pos[0])) places.set(pos[0], { problem, offset: pos[0] });
+  }
+  return [...places.values()];
+}
+
+/**
+ * What each alias stands for: the nearest node above it with that anchor. The library walks the document anew for
+ * every alias; one walk for all keeps a file of aliases linear.
+ */
+function aliasTargets(document: Document.Parsed): ReadonlyMap<Alias, Node> {
+  const anchors = new Map<string, Node>();
+  const targets = new Map<Alias, Node>();
+  visit(document, {
+    Value: (_, node) => {
+      if (node.anchor !== undefined) anchors.set(node.anchor, node);
+    },
+    Alias: (_, alias) => {
+      const target = anchors.get(alias.source);
+      if (target !== undefined) targets.set(alias, target);
+    },
+  });
+  return targets;
 }
 
 const sentence = (message: string): string => message.split('\n')[0].replace(/[.:]$/, '');

@@ -61,6 +61,7 @@ export interface Named<T> {
 
 const NAME = /^[\p{L}_](?:-?[\p{L}\p{N}_])*$/u;
 const LONGEST_NAME = 60;
+const MOST_ENTRIES = 1000;
 
 /** A map from names to like values. `reserved` names are taken; each maps to the reason. */
 export function mapOf<T>(
@@ -75,7 +76,12 @@ export function mapOf<T>(
     schema: { type: 'object', additionalProperties: item.schema },
     read(place, reading) {
       const entries = readEntries(place, reading, expects) ?? [];
-      return entries.map(({ key, name, value }) => {
+      if (entries.length > MOST_ENTRIES) {
+        const problem = 'the section has too many entries';
+        const found = `${entries.length} entries`;
+        reading.report({ code: 'range', path: place.path, problem, found, expected: `at most ${MOST_ENTRIES}` });
+      }
+      return entries.slice(0, MOST_ENTRIES).map(({ key, name, value }) => {
         const path = [...place.path, name];
         if (plainNames) checkName(name, path, startOf(key), reserved, reading);
         return { name, path, value: item.read(reading.place(value, path), reading) };
@@ -134,7 +140,7 @@ function reportUnknownKey(
   names: readonly string[],
   reading: Reading,
 ): void {
-  const nearest = nearestName(name, names);
+  const nearest = reading.full ? null : nearestName(name, names);
   reading.report(
     {
       code: 'unknown-key',

@@ -21,7 +21,7 @@ const prism = record('outline and height', {
   ),
   height: required(size, 'Extent along z.'),
   sides: optional(
-    listOf(freeText('a name for a side', 60), 'a name for each side', 3, 200),
+    listOf(freeText('a name for a side', 60), 'a name for each side', 1, 200),
     'Names of the sides; the first runs from the first corner to the second. Default: side-1, side-2, …',
   ),
 });

@@ -15,7 +15,7 @@ export interface Place {
 }
 
 /** Aliases let a small file unfold to a huge one; no sensible design has this many values. */
-const MOST_VALUES = 300_000;
+const MOST_VALUES = 100_000;
 const MOST_FAULTS = 200;
 
 /** `T` without the key `severity`, which is 'error' unless said. */
@@ -39,7 +39,7 @@ export class Reading {
 
   /** Notes a fault: where the value at its path stands unless another spot is given. */
   report(complaint: Complaint, at: Spot | null = null): void {
-    if (this.told.length >= MOST_FAULTS) {
+    if (this.full) {
       this.untold++;
       return;
     }
@@ -51,6 +51,11 @@ export class Reading {
           ? at
           : locatePath(source, complaint.path, at ?? 'value');
     this.told.push({ severity: 'error', file: source.file, ...complaint, ...place });
+  }
+
+  /** Enough has been told: further faults are only counted. */
+  get full(): boolean {
+    return this.told.length >= MOST_FAULTS;
   }
 
   hasErrors(): boolean {

@@ -1,7 +1,7 @@
 /** Raw counters + legend -> run tallies: names, units (eV, mm) and the measure of every map cell. */
 import type { CompiledScene } from '../scene/compile-scene.js';
 import { mapMeasure, voxelMeasure } from '../scene/map-measure.js';
-import { AZIMUTH_CELLS, POLAR_CELLS } from '../scene/scene-layout.js';
+import { CELLS } from '../scene/scene-layout.js';
 import type { GrownTally } from '../tallies/batch-tally.js';
 import type {
   Histogram,
@@ -103,8 +103,8 @@ function angles({ scene, legend }: CompiledScene, grown: GrownTally): RecordedAn
   return legend.recorders.flatMap(({ what, where }, i) => {
     const offset = scene.recorderAngles[i];
     if (offset < 0) return [];
-    const energy = grown.angles.slice(offset, offset + POLAR_CELLS * AZIMUTH_CELLS).map((q) => q * legend.quantumEv);
-    return [{ id: `${what}-${where}`, where, polarCells: POLAR_CELLS, azimuthCells: AZIMUTH_CELLS, energy }];
+    const energy = grown.angles.slice(offset, offset + CELLS.polar * CELLS.azimuth).map((q) => q * legend.quantumEv);
+    return [{ id: `${what}-${where}`, where, polarCells: CELLS.polar, azimuthCells: CELLS.azimuth, energy }];
   });
 }
 

@@ -1,12 +1,6 @@
-import {
-  ABSORPTION_HISTOGRAM_CELLS,
-  EXIT_EMITTED_SLOT,
-  EXIT_PUMP_SLOT,
-  PATH_HISTOGRAM_CELLS,
-  type Scene,
-} from '../scene/scene-layout.js';
+import { CELLS, type Scene, SLOT } from '../scene/scene-layout.js';
 import type { BatchTally } from '../tallies/batch-tally.js';
-import { FIGURE } from '../tallies/run-tallies.js';
+import { FIGURE_PLACE } from '../tallies/run-tallies.js';
 
 /** Books the fate of a history and, for output, what people see of it. Path lengths in mm inside parts. */
 export function closeHistory(
@@ -23,23 +17,23 @@ export function closeHistory(
   const quanta = scene.energyQuanta[wavelength];
   vector[2 * fate]++;
   vector[2 * fate + 1] += quanta;
-  vector[figures + FIGURE.dyeAbsorptions] += absorptions;
-  if (absorptions > 1) vector[figures + FIGURE.reabsorptions] += absorptions - 1;
-  vector[figures + FIGURE.pumpPath] += pumpPath;
-  vector[figures + FIGURE.emittedPath] += emittedPath;
-  grown.absorptions[Math.min(absorptions, ABSORPTION_HISTOGRAM_CELLS - 1)]++;
-  if (fate === EXIT_EMITTED_SLOT) {
-    vector[figures + FIGURE.exitPhotons]++;
-    vector[figures + FIGURE.exitEnergy] += quanta;
-    vector[figures + FIGURE.exitX] += quanta * scene.observerX[wavelength];
-    vector[figures + FIGURE.exitY] += quanta * scene.observerY[wavelength];
-    vector[figures + FIGURE.exitZ] += quanta * scene.observerZ[wavelength];
-    vector[figures + FIGURE.exitWavelength] += scene.wavelengthNm[wavelength];
-    grown.exitReabsorptions[Math.min(absorptions - 1, ABSORPTION_HISTOGRAM_CELLS - 1)]++;
+  vector[figures + FIGURE_PLACE.dyeAbsorptions] += absorptions;
+  if (absorptions > 1) vector[figures + FIGURE_PLACE.reabsorptions] += absorptions - 1;
+  vector[figures + FIGURE_PLACE.pumpPath] += pumpPath;
+  vector[figures + FIGURE_PLACE.emittedPath] += emittedPath;
+  grown.absorptions[Math.min(absorptions, CELLS.absorptions - 1)]++;
+  if (fate === SLOT.exitEmitted) {
+    vector[figures + FIGURE_PLACE.exitPhotons]++;
+    vector[figures + FIGURE_PLACE.exitEnergy] += quanta;
+    vector[figures + FIGURE_PLACE.exitX] += quanta * scene.observerX[wavelength];
+    vector[figures + FIGURE_PLACE.exitY] += quanta * scene.observerY[wavelength];
+    vector[figures + FIGURE_PLACE.exitZ] += quanta * scene.observerZ[wavelength];
+    vector[figures + FIGURE_PLACE.exitWavelength] += scene.wavelengthNm[wavelength];
+    grown.exitReabsorptions[Math.min(absorptions - 1, CELLS.absorptions - 1)]++;
     const cell = Math.floor((pumpPath + emittedPath) / scene.pathHistogramStep);
-    grown.exitPath[Math.min(cell, PATH_HISTOGRAM_CELLS - 1)]++;
-  } else if (fate === EXIT_PUMP_SLOT) {
-    vector[figures + FIGURE.leakPhotons]++;
-    vector[figures + FIGURE.leakEnergy] += quanta;
+    grown.exitPath[Math.min(cell, CELLS.path - 1)]++;
+  } else if (fate === SLOT.exitPump) {
+    vector[figures + FIGURE_PLACE.leakPhotons]++;
+    vector[figures + FIGURE_PLACE.leakEnergy] += quanta;
   }
 }

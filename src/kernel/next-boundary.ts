@@ -1,4 +1,7 @@
-/** Distance to the surfaces that are not axis planes. Results go into `hit`: [0] distance, [1] way. */
+/**
+ * Distance to the surfaces that are not axis planes. `ray` holds x y z dx dy dz; results go into `hit`: [0] distance, [1] way.
+ * Numbers travel in arrays because a call boxes every fraction it is given.
+ */
 import type { Scene } from '../scene/scene-layout.js';
 import type { RegionGraph } from '../scene/region-graph.js';
 import { QUADRIC_STRIDE } from '../scene/quadric.js';
@@ -8,14 +11,15 @@ export function nearestOther(
   scene: Scene,
   graph: RegionGraph,
   region: number,
-  x: number,
-  y: number,
-  z: number,
-  dx: number,
-  dy: number,
-  dz: number,
+  ray: Float64Array,
   hit: Float64Array,
 ): void {
+  const x = ray[0];
+  const y = ray[1];
+  const z = ray[2];
+  const dx = ray[3];
+  const dy = ray[4];
+  const dz = ray[5];
   let nearest = hit[0];
   let way = hit[1];
   const families = scene.families;
@@ -71,12 +75,7 @@ export function nearestOther(
 export function travelNormal(
   scene: Scene,
   way: number,
-  x: number,
-  y: number,
-  z: number,
-  dx: number,
-  dy: number,
-  dz: number,
+  ray: Float64Array,
   out: Float64Array,
 ): void {
   let nx: number;
@@ -90,6 +89,9 @@ export function travelNormal(
   } else {
     const q = scene.quadric;
     const at = (way - 2 * scene.families) * QUADRIC_STRIDE;
+    const x = ray[0];
+    const y = ray[1];
+    const z = ray[2];
     nx = q[at] * x + q[at + 3] * y + q[at + 4] * z + q[at + 6];
     ny = q[at + 3] * x + q[at + 1] * y + q[at + 5] * z + q[at + 7];
     nz = q[at + 4] * x + q[at + 5] * y + q[at + 2] * z + q[at + 8];
@@ -98,7 +100,7 @@ export function travelNormal(
     ny *= norm;
     nz *= norm;
   }
-  const sign = nx * dx + ny * dy + nz * dz < 0 ? -1 : 1;
+  const sign = nx * ray[3] + ny * ray[4] + nz * ray[5] < 0 ? -1 : 1;
   out[0] = sign * nx;
   out[1] = sign * ny;
   out[2] = sign * nz;

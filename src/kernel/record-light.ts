@@ -1,14 +1,14 @@
 /** Maps, spectra and angles of light that crosses a recorded face or plane, and the voxels where light is absorbed. */
-import { AZIMUTH_CELLS, POLAR_CELLS, RECORDER, type Scene } from '../scene/scene-layout.js';
+import { CELLS, RECORDER, type Scene } from '../scene/scene-layout.js';
 import type { GrownTally } from '../tallies/batch-tally.js';
 
 /** Cell coordinate along the map's u and v of a point on the recorder, in cells (not rounded). */
-export function mapCoordinate(scene: Scene, recorder: number, axis: 0 | 1, x: number, y: number, z: number): number {
+export function mapCoordinate(scene: Scene, recorder: number, axis: 0 | 1, ray: Float64Array): number {
   const frame = scene.recorderFrame;
   const at = recorder * RECORDER.STRIDE;
-  const px = x - frame[at];
-  const py = y - frame[at + 1];
-  const pz = z - frame[at + 2];
+  const px = ray[0] - frame[at];
+  const py = ray[1] - frame[at + 1];
+  const pz = ray[2] - frame[at + 2];
   if (axis === 0 && scene.recorderWrap[recorder] === 1) {
     const u = px * frame[at + RECORDER.axisU] + py * frame[at + RECORDER.axisU + 1] + pz * frame[at + RECORDER.axisU + 2];
     const v = px * frame[at + RECORDER.axisV] + py * frame[at + RECORDER.axisV + 1] + pz * frame[at + RECORDER.axisV + 2];
@@ -26,33 +26,28 @@ export function recordCrossing(
   half: number,
   light: number,
   wavelength: number,
-  x: number,
-  y: number,
-  z: number,
-  dx: number,
-  dy: number,
-  dz: number,
+  ray: Float64Array,
 ): void {
   if ((scene.recorderLights[recorder] >> light) & 1) {
     const cellsU = scene.recorderCells[2 * recorder];
     const cellsV = scene.recorderCells[2 * recorder + 1];
     const quanta = scene.energyQuanta[wavelength];
-    const iu = clampCell(mapCoordinate(scene, recorder, 0, x, y, z), cellsU);
-    const iv = clampCell(mapCoordinate(scene, recorder, 1, x, y, z), cellsV);
+    const iu = clampCell(mapCoordinate(scene, recorder, 0, ray), cellsU);
+    const iv = clampCell(mapCoordinate(scene, recorder, 1, ray), cellsV);
     tally.maps[half * scene.mapCells + scene.recorderMap[recorder] + iu + cellsU * iv] += quanta;
     const angles = scene.recorderAngles[recorder];
-    if (angles >= 0) tally.angles[angles + angularCell(scene.recorderFrame, recorder, dx, dy, dz)] += quanta;
+    if (angles >= 0) tally.angles[angles + angularCell(scene.recorderFrame, recorder, ray)] += quanta;
   }
   const spectrum = scene.recorderSpectrum[recorder];
   if (spectrum >= 0) tally.spectra[spectrum + light * scene.wavelengths + wavelength]++;
 }
 
 /** Whether light crosses a free plane along its normal and within its outline. */
-export function inAperture(scene: Scene, recorder: number, way: number, x: number, y: number, z: number): boolean {
+export function inAperture(scene: Scene, recorder: number, way: number, ray: Float64Array): boolean {
   const upwards = (way & 1) === 1 ? 1 : -1;
   if (upwards !== scene.detectorSign[recorder]) return false;
-  const u = mapCoordinate(scene, recorder, 0, x, y, z) / scene.recorderCells[2 * recorder];
-  const v = mapCoordinate(scene, recorder, 1, x, y, z) / scene.recorderCells[2 * recorder + 1];
+  const u = mapCoordinate(scene, recorder, 0, ray) / scene.recorderCells[2 * recorder];
+  const v = mapCoordinate(scene, recorder, 1, ray) / scene.recorderCells[2 * recorder + 1];
   if (scene.detectorAperture[2 * recorder + 1] < 0) return (2 * u - 1) ** 2 + (2 * v - 1) ** 2 <= 1;
   return u >= 0 && u < 1 && v >= 0 && v < 1;
 }
@@ -63,19 +58,19 @@ function clampCell(coordinate: number, cells: number): number {
   return cell < 0 ? 0 : cell >= cells ? cells - 1 : cell;
 }
 
-function angularCell(frame: Float64Array, recorder: number, dx: number, dy: number, dz: number): number {
+function angularCell(frame: Float64Array, recorder: number, ray: Float64Array): number {
   const at = recorder * RECORDER.STRIDE;
   const n = at + RECORDER.axisN;
   const u = at + RECORDER.axisU;
   const v = at + RECORDER.axisV;
-  const along = dx * frame[n] + dy * frame[n + 1] + dz * frame[n + 2];
+  const along = ray[3] * frame[n] + ray[4] * frame[n + 1] + ray[5] * frame[n + 2];
   const polar = Math.acos(Math.max(-1, Math.min(1, along)));
-  const a = dx * frame[u] + dy * frame[u + 1] + dz * frame[u + 2];
-  const b = dx * frame[v] + dy * frame[v + 1] + dz * frame[v + 2];
+  const a = ray[3] * frame[u] + ray[4] * frame[u + 1] + ray[5] * frame[u + 2];
+  const b = ray[3] * frame[v] + ray[4] * frame[v + 1] + ray[5] * frame[v + 2];
   const turn = Math.atan2(b, a) / (2 * Math.PI);
   // Light that leaves a curved face backwards of its axis is kept in the last polar cell.
-  const row = clampCell((polar / (Math.PI / 2)) * POLAR_CELLS, POLAR_CELLS);
-  return row * AZIMUTH_CELLS + clampCell((turn < 0 ? turn + 1 : turn) * AZIMUTH_CELLS, AZIMUTH_CELLS);
+  const row = clampCell((polar / (Math.PI / 2)) * CELLS.polar, CELLS.polar);
+  return row * CELLS.azimuth + clampCell((turn < 0 ? turn + 1 : turn) * CELLS.azimuth, CELLS.azimuth);
 }
 
 /** Adds an absorbed photon to the voxel maps. */
@@ -84,18 +79,16 @@ export function depositVoxel(
   maps: Float64Array,
   half: number,
   light: number,
-  quanta: number,
-  x: number,
-  y: number,
-  z: number,
+  wavelength: number,
+  ray: Float64Array,
 ): void {
   const { voxelOrigin, voxelScale, voxelCells } = scene;
   const cellsX = voxelCells[0];
   const cellsY = voxelCells[1];
-  const ix = Math.floor((x - voxelOrigin[0]) * voxelScale[0]);
-  const iy = Math.floor((y - voxelOrigin[1]) * voxelScale[1]);
-  const iz = Math.floor((z - voxelOrigin[2]) * voxelScale[2]);
+  const ix = Math.floor((ray[0] - voxelOrigin[0]) * voxelScale[0]);
+  const iy = Math.floor((ray[1] - voxelOrigin[1]) * voxelScale[1]);
+  const iz = Math.floor((ray[2] - voxelOrigin[2]) * voxelScale[2]);
   if (ix < 0 || iy < 0 || iz < 0 || ix >= cellsX || iy >= cellsY || iz >= voxelCells[2]) return;
   const cell = half * scene.mapCells + ix + cellsX * (iy + cellsY * iz);
-  maps[(light === 0 ? scene.voxelPumpMap : scene.voxelEmittedMap) + cell] += quanta;
+  maps[(light === 0 ? scene.voxelPumpMap : scene.voxelEmittedMap) + cell] += scene.energyQuanta[wavelength];
 }

@@ -2,38 +2,41 @@
  * The hot loop: one batch of histories, from pump to fate. Analog: every event of a photon is drawn as nature would, so both
  * ledgers are sums of whole numbers. Nothing is allocated; scalars live in locals; helpers take and fill typed arrays.
  */
-import { nextUnit } from '../numerics/random-stream.js';
-import { drawIndex } from '../numerics/sample-table.js';
+import { BLOCK, fillUnits, nextUnit } from '../numerics/random-stream.js';
 import { SOBOL_DIMENSIONS, sobolUnit, stepSobol } from '../numerics/sobol.js';
-import { fresnelReflectance } from '../optics/fresnel.js';
-import { metalReflectance } from '../optics/metal-reflectance.js';
-import { FREE_PLANE, INTERFACE, PASS, RECORDS_ARRIVAL, type RegionGraph, SPREADS } from '../scene/region-graph.js';
+import { CROSSING, FLAG, INTERFACE, type RegionGraph } from '../scene/region-graph.js';
 import {
   DYE_SLOT,
-  EXIT_EMITTED_SLOT,
-  EXIT_PUMP_SLOT,
   FACE_SLOT,
-  MISSED_SLOT,
   OWNER_SLOT,
   type Scene,
-  SPLIT,
+  SLOT,
   SPREAD,
 } from '../scene/scene-layout.js';
 import { type BatchTally, closeGroup, GROUP_HISTORIES } from '../tallies/batch-tally.js';
-import { FIGURE } from '../tallies/run-tallies.js';
+import { FIGURE_PLACE } from '../tallies/run-tallies.js';
 import { closeHistory } from './close-history.js';
 import { choosePump, LAUNCH, launchPump } from './launch-pump.js';
 import { nearestOther, travelNormal } from './next-boundary.js';
 import { depositVoxel, inAperture, recordCrossing } from './record-light.js';
 import { scatterAbout, scatterLambertian } from './scatter.js';
-import { tableShares } from './table-shares.js';
+import { SHARES, splitLight } from './split-light.js';
 
 /**
  * After this many boundaries in a row at which nothing was left to chance, light goes round a closed path for good. Where
  * something on the path absorbs, that is its fate, as it would be after more turns; where nothing does within as many
  * boundaries again, it is `trapped`.
  */
-const CLOSED_PATH = 20_000;
+const enum LIMIT {
+  closedPath = 20_000,
+  /** An event takes at most this many numbers from the block. */
+  draws = 8,
+}
+
+const enum WALL {
+  unknown = -1,
+  slow = 0,
+}
 
 /** @returns how many histories ended in no fate: 0, or the program is at fault. */
 export function traceBatch(
@@ -50,21 +53,27 @@ export function traceBatch(
   const others = scene.families > 3 || scene.quadrics > 0;
   const maxAbsorbers = scene.maxAbsorbers;
   const { index, attenuation, absorberCount, absorberShare, dyeYield, dyeSpectrum } = scene;
-  const { energyQuanta, finishSplit, finishA, finishB, faceSlot, ownerSlot, dyeSlot } = scene;
+  const { energyQuanta, faceSlot, ownerSlot, dyeSlot } = scene;
   const { bound, neighbour, crossing, medium: regionMedium, owner: regionOwner } = graph;
   const { vector, grown } = tally;
   const { maps, spectra } = grown;
+  const { spectrumKeep, spectrumOther } = scene;
   const figures = 2 * scene.slots;
   let interfaces = graph.interfaces;
 
   const ray = new Float64Array(6);
   const normal = new Float64Array(3);
   const hit = new Float64Array(2);
-  const shares = new Float64Array(2);
+  const shares = new Float64Array(SHARES.COUNT);
+  /** Reflectance of the six ways out of a region for the flight in hand; WALL.unknown, or WALL.slow for walls the short loop leaves alone. */
+  const walls = new Float64Array(6);
   // The first point of a randomly shifted net is the shift itself.
   const points = new Int32Array(SOBOL_DIMENSIONS);
   for (let i = 0; i < SOBOL_DIMENSIONS; i++) points[i] = (nextUnit(random) * 2 ** 32) | 0;
   const startRegion = new Int32Array(scene.pumpCount).fill(-1);
+  // Draws are made in blocks: a call for each one would box its result.
+  const units = new Float64Array(BLOCK.draws);
+  let draw: number = BLOCK.draws;
   let defects = 0;
   let inGroup = 0;
 
@@ -108,59 +117,184 @@ export function traceBatch(
     /** Slot of the fate, −1 while under way. */
     let fate = -1;
 
-    vector[figures + FIGURE.launchedPhotons]++;
-    vector[figures + FIGURE.launchedEnergy] += energyQuanta[wavelength];
+    vector[figures + FIGURE_PLACE.launchedPhotons]++;
+    vector[figures + FIGURE_PLACE.launchedEnergy] += energyQuanta[wavelength];
     spectra[scene.spectrumLaunched + wavelength]++;
 
     for (;;) {
-      // ---- nearest way out of the region
+      if (draw > BLOCK.draws - LIMIT.draws) {
+        fillUnits(random, units);
+        draw = 0;
+      }
+
+      // ---- flight to the next boundary that matters
       const b = region * families2;
       let way = -1;
       let t = Number.POSITIVE_INFINITY;
-      const wayX = dx > 0 ? 1 : 0;
-      const wayY = dy > 0 ? 3 : 2;
-      const wayZ = dz > 0 ? 5 : 4;
-      const tX = (bound[b + wayX] - x) * ix;
-      const tY = (bound[b + wayY] - y) * iy;
-      const tZ = (bound[b + wayZ] - z) * iz;
-      // A ray that lies in a plane has no distance to it (0 · ∞ is no number) and never wins.
-      if (tX < t) {
-        t = tX;
-        way = wayX;
-      }
-      if (tY < t) {
-        t = tY;
-        way = wayY;
-      }
-      if (tZ < t) {
-        t = tZ;
-        way = wayZ;
-      }
+      let wayX = dx > 0 ? 1 : 0;
+      let wayY = dy > 0 ? 3 : 2;
+      let wayZ = dz > 0 ? 5 : 4;
+      let toX = (bound[b + wayX] - x) * ix;
+      let toY = (bound[b + wayY] - y) * iy;
+      let toZ = (bound[b + wayZ] - z) * iz;
+      /** Number already drawn for the boundary ahead. */
+      let unit = -1;
+      let absorbed = false;
       if (others) {
+        // A ray that lies in a plane has no distance to it (0 · ∞ is no number) and never wins.
+        if (toX < t) {
+          t = toX;
+          way = wayX;
+        }
+        if (toY < t) {
+          t = toY;
+          way = wayY;
+        }
+        if (toZ < t) {
+          t = toZ;
+          way = wayZ;
+        }
         hit[0] = t;
         hit[1] = way;
-        nearestOther(scene, graph, region, x, y, z, dx, dy, dz, hit);
+        ray[0] = x;
+        ray[1] = y;
+        ray[2] = z;
+        ray[3] = dx;
+        ray[4] = dy;
+        ray[5] = dz;
+        nearestOther(scene, graph, region, ray, hit);
         t = hit[0];
         way = hit[1];
+        if (t < 0) t = 0;
+        if (mu * t >= tau) {
+          absorbed = true;
+          t = tau / mu;
+        }
+        if (absorbed || way >= 0) {
+          x += t * dx;
+          y += t * dy;
+          z += t * dz;
+          tau -= mu * t;
+          path += t * inside;
+        }
+      } else {
+        // Between axis planes specular light keeps the sizes of its direction's components: the three distances are all it
+        // needs, and the reflectance of each wall stays the same until something else happens to it.
+        const acrossX = (bound[b + 1] - bound[b]) * Math.abs(ix);
+        const acrossY = (bound[b + 3] - bound[b + 2]) * Math.abs(iy);
+        const acrossZ = (bound[b + 5] - bound[b + 4]) * Math.abs(iz);
+        let toEnd = mu > 0 ? tau / mu : Number.POSITIVE_INFINITY;
+        let flown = 0;
+        // Flown when a coordinate was last known exactly.
+        let sinceX = 0;
+        let sinceY = 0;
+        let sinceZ = 0;
+        walls[0] = WALL.unknown;
+        walls[1] = WALL.unknown;
+        walls[2] = WALL.unknown;
+        walls[3] = WALL.unknown;
+        walls[4] = WALL.unknown;
+        walls[5] = WALL.unknown;
+        for (;;) {
+          t = toEnd;
+          way = -1;
+          if (toX < t) {
+            t = toX;
+            way = wayX;
+          }
+          if (toY < t) {
+            t = toY;
+            way = wayY;
+          }
+          if (toZ < t) {
+            t = toZ;
+            way = wayZ;
+          }
+          if (t === Number.POSITIVE_INFINITY) break;
+          flown += t;
+          toX -= t;
+          toY -= t;
+          toZ -= t;
+          toEnd -= t;
+          if (way < 0) {
+            absorbed = true;
+            break;
+          }
+          let wall = walls[way];
+          if (wall < 0) {
+            let record = crossing[region * ways + way];
+            if (record < CROSSING.pass) {
+              record = graph.resolve(region, way);
+              interfaces = graph.interfaces;
+            }
+            wall = WALL.slow;
+            if (record >= 0 && entered) {
+              const flags = interfaces[record + INTERFACE.flags];
+              if (flags === 0 || (flags === FLAG.recordsArrival && light === 1)) {
+                shares[SHARES.index] = n1;
+                shares[SHARES.cosine] = Math.abs(way < 2 ? dx : way < 4 ? dy : dz);
+                splitLight(scene, interfaces, record, wavelength, shares);
+                wall = shares[SHARES.reflected];
+              }
+            }
+            walls[way] = wall;
+          }
+          if (wall < 1) {
+            if (wall === WALL.slow) break;
+            closed = 0;
+            unit = units[draw++];
+            if (unit >= wall) break;
+            unit = -1;
+            if (draw > BLOCK.draws - LIMIT.draws) {
+              fillUnits(random, units);
+              draw = 0;
+            }
+          } else if (++closed > LIMIT.closedPath) break;
+          if (way < 2) {
+            wayX ^= 1;
+            toX = acrossX;
+            x = bound[b + way];
+            dx = -dx;
+            ix = -ix;
+            sinceX = flown;
+          } else if (way < 4) {
+            wayY ^= 1;
+            toY = acrossY;
+            y = bound[b + way];
+            dy = -dy;
+            iy = -iy;
+            sinceY = flown;
+          } else {
+            wayZ ^= 1;
+            toZ = acrossZ;
+            z = bound[b + way];
+            dz = -dz;
+            iz = -iz;
+            sinceZ = flown;
+          }
+        }
+        if (t !== Number.POSITIVE_INFINITY) {
+          path += flown * inside;
+          if (mu > 0) tau = toEnd * mu;
+          x += (flown - sinceX) * dx;
+          y += (flown - sinceY) * dy;
+          z += (flown - sinceZ) * dz;
+        }
       }
-      if (t < 0) t = 0;
 
       // ---- absorbed on the way?
-      const depth = mu * t;
-      if (depth >= tau) {
-        const s = tau / mu;
-        x += s * dx;
-        y += s * dy;
-        z += s * dz;
-        path += s * inside;
+      if (absorbed) {
         const quanta = energyQuanta[wavelength];
-        depositVoxel(scene, maps, half, light, quanta, x, y, z);
+        ray[0] = x;
+        ray[1] = y;
+        ray[2] = z;
+        depositVoxel(scene, maps, half, light, wavelength, ray);
         const count = absorberCount[medium];
         let absorber = 0;
         if (count > 1) {
-          const unit = nextUnit(random);
+          const pick = units[draw++];
           const row = medium * maxAbsorbers;
-          while (absorber < count - 1 && unit >= absorberShare[(row + absorber) * wavelengths + wavelength]) absorber++;
+          while (absorber < count - 1 && pick >= absorberShare[(row + absorber) * wavelengths + wavelength]) absorber++;
         }
         if (absorber === 0) {
           fate = ownerSlot[owner] + OWNER_SLOT.bulkPump + light;
@@ -168,30 +302,36 @@ export function traceBatch(
         }
         absorptions++;
         if (light === 0) {
-          vector[figures + FIGURE.pumpAbsorbed]++;
+          vector[figures + FIGURE_PLACE.pumpAbsorbed]++;
           spectra[scene.spectrumAbsorbedPump + wavelength]++;
           pumpPath = path;
           path = 0;
         }
         const dye = medium * maxAbsorbers + absorber;
         const slot = dyeSlot[owner * maxAbsorbers + absorber];
-        if (nextUnit(random) >= dyeYield[dye]) {
+        if (units[draw++] >= dyeYield[dye]) {
           fate = slot + DYE_SLOT.lostPump + light;
           break;
         }
-        const unit = nextUnit(random);
+        // Alias table (drawIndex, written out).
         const table = dyeSpectrum[dye] * wavelengths;
-        wavelength = drawIndex(scene.spectrumKeep, scene.spectrumOther, table, wavelengths, unit);
+        const scaled = units[draw++] * wavelengths;
+        const cell = scaled | 0;
+        wavelength = scaled - cell < spectrumKeep[table + cell] ? cell : spectrumOther[table + cell];
         vector[2 * (slot + DYE_SLOT.stokesPump + light) + 1] += quanta - energyQuanta[wavelength];
-        vector[figures + FIGURE.emissions]++;
+        vector[figures + FIGURE_PLACE.emissions]++;
         spectra[scene.spectrumEmitted + wavelength]++;
         // Isotropic: Marsaglia, Ann. Math. Stat. 43 645 (1972).
         let p = 0;
         let q = 0;
         let r2 = 0;
         do {
-          p = 2 * nextUnit(random) - 1;
-          q = 2 * nextUnit(random) - 1;
+          if (draw > BLOCK.draws - LIMIT.draws) {
+            fillUnits(random, units);
+            draw = 0;
+          }
+          p = 2 * units[draw++] - 1;
+          q = 2 * units[draw++] - 1;
           r2 = p * p + q * q;
         } while (r2 >= 1);
         const f = 2 * Math.sqrt(1 - r2);
@@ -201,7 +341,7 @@ export function traceBatch(
         ix = dx !== 0 ? 1 / dx : Number.NEGATIVE_INFINITY;
         iy = dy !== 0 ? 1 / dy : Number.NEGATIVE_INFINITY;
         iz = dz !== 0 ? 1 / dz : Number.NEGATIVE_INFINITY;
-        tau = -Math.log(nextUnit(random));
+        tau = -Math.log(units[draw++]);
         mu = attenuation[medium * wavelengths + wavelength];
         n1 = index[medium * wavelengths + wavelength];
         light = 1;
@@ -212,53 +352,58 @@ export function traceBatch(
       if (way < 0) {
         // Nothing ahead: light is in the surroundings for good.
         if (owner !== 0 || dx !== dx) break;
-        if (lastFace < 0) fate = light === 0 ? MISSED_SLOT : -1;
+        if (lastFace < 0) fate = light === 0 ? SLOT.missed : -1;
         else if (!entered) fate = faceSlot[lastFace] + FACE_SLOT.reflectedAtEntry;
         else fate = faceSlot[lastFace] + FACE_SLOT.leftPump + light;
         break;
       }
-      x += t * dx;
-      y += t * dy;
-      z += t * dz;
-      tau -= depth;
-      path += t * inside;
-
       // ---- what lies beyond
       const at = region * ways + way;
       let record = crossing[at];
       if (record < 0) {
-        if (record !== PASS) {
+        if (record !== CROSSING.pass) {
           record = graph.resolve(region, way);
           interfaces = graph.interfaces;
         }
-        if (record === PASS) {
+        if (record === CROSSING.pass) {
           region = neighbour[at];
           continue;
         }
       }
-      if (++closed > CLOSED_PATH) {
+      if (++closed > LIMIT.closedPath) {
         if (mu > 0) tau = 0;
-        else if (closed > 2 * CLOSED_PATH) {
+        else if (closed > 2 * LIMIT.closedPath) {
           fate = ownerSlot[owner] + OWNER_SLOT.trappedPump + light;
           break;
         }
       }
       const flags = interfaces[record + INTERFACE.flags];
-      if ((flags & FREE_PLANE) !== 0) {
+      if ((flags & FLAG.freePlane) !== 0) {
         const recorder = interfaces[record + INTERFACE.recorder];
-        if (inAperture(scene, recorder, way, x, y, z)) {
-          recordCrossing(scene, grown, recorder, half, light, wavelength, x, y, z, dx, dy, dz);
+        ray[0] = x;
+        ray[1] = y;
+        ray[2] = z;
+        ray[3] = dx;
+        ray[4] = dy;
+        ray[5] = dz;
+        if (inAperture(scene, recorder, way, ray)) {
+          recordCrossing(scene, grown, recorder, half, light, wavelength, ray);
           if (scene.detectorExit[recorder] === 1) {
-            fate = light === 0 ? EXIT_PUMP_SLOT : EXIT_EMITTED_SLOT;
+            fate = light === 0 ? SLOT.exitPump : SLOT.exitEmitted;
             break;
           }
         }
         region = neighbour[at];
         continue;
       }
-      if ((flags & RECORDS_ARRIVAL) !== 0 && light === 0) {
-        const recorder = interfaces[record + INTERFACE.recorder];
-        recordCrossing(scene, grown, recorder, half, light, wavelength, x, y, z, dx, dy, dz);
+      if ((flags & FLAG.recordsArrival) !== 0 && light === 0) {
+        ray[0] = x;
+        ray[1] = y;
+        ray[2] = z;
+        ray[3] = dx;
+        ray[4] = dy;
+        ray[5] = dz;
+        recordCrossing(scene, grown, interfaces[record + INTERFACE.recorder], half, light, wavelength, ray);
       }
 
       // ---- reflected, transmitted or absorbed?
@@ -268,59 +413,40 @@ export function traceBatch(
       else if (axis === 1) cosine = Math.abs(dy);
       else if (axis === 2) cosine = Math.abs(dz);
       else {
-        travelNormal(scene, way, x, y, z, dx, dy, dz, normal);
+        ray[0] = x;
+        ray[1] = y;
+        ray[2] = z;
+        ray[3] = dx;
+        ray[4] = dy;
+        ray[5] = dz;
+        travelNormal(scene, way, ray, normal);
         cosine = normal[0] * dx + normal[1] * dy + normal[2] * dz;
       }
-      const finish = interfaces[record + INTERFACE.finish];
-      const split = finishSplit[finish];
+      shares[SHARES.index] = n1;
+      shares[SHARES.cosine] = cosine;
+      splitLight(scene, interfaces, record, wavelength, shares);
+      const reflected = shares[SHARES.reflected];
+      const transmitted = shares[SHARES.transmitted];
+      const n2 = shares[SHARES.indexBeyond];
       let reflects = true;
-      let n2 = n1;
-      if (split === SPLIT.fresnel) {
-        n2 = index[interfaces[record + INTERFACE.mediumBeyond] * wavelengths + wavelength];
-        if (n1 === n2) reflects = false;
+      // Nothing is left to chance at a perfect reflector or a finish that passes everything.
+      if (reflected < 1) {
+        if (reflected === 0 && transmitted === 1) reflects = false;
         else {
-          const reflected = fresnelReflectance(n1, n2, cosine);
-          if (reflected < 1) {
-            closed = 0;
-            reflects = nextUnit(random) < reflected;
-          }
-        }
-      } else {
-        let reflected = 0;
-        let transmitted = 0;
-        if (split === SPLIT.spectral) {
-          reflected = finishA[finish * wavelengths + wavelength];
-          transmitted = finishB[finish * wavelengths + wavelength];
-        } else if (split === SPLIT.metal) {
-          const row = finish * wavelengths + wavelength;
-          reflected = metalReflectance(n1, finishA[row], finishB[row], cosine);
-        } else {
-          tableShares(scene, finish, wavelength, cosine, shares);
-          reflected = shares[0];
-          transmitted = shares[1];
-        }
-        let unit = 0;
-        // Nothing is left to chance at a perfect reflector or a finish that passes everything.
-        if (reflected < 1 && transmitted < 1) {
           closed = 0;
-          unit = nextUnit(random);
-        }
-        if (unit >= reflected) {
-          if (unit >= reflected + transmitted) {
+          if (unit < 0) unit = units[draw++];
+          reflects = unit < reflected;
+          if (!reflects && unit >= reflected + transmitted) {
             fate = faceSlot[interfaces[record + INTERFACE.faceActing]] + FACE_SLOT.absorbedPump + light;
             break;
           }
-          n2 = index[interfaces[record + INTERFACE.mediumBeyond] * wavelengths + wavelength];
-          const ratio = n1 / n2;
-          // Beyond the critical angle nothing gets out, unless a Lambertian diffuser makes light forget its angle.
-          reflects =
-            ratio * ratio * (1 - cosine * cosine) >= 1 && scene.finishTransmitSpread[finish] !== SPREAD.lambertian;
         }
       }
+      const finish = interfaces[record + INTERFACE.finish];
 
       if (reflects) {
         if (!entered) lastFace = interfaces[record + INTERFACE.faceActing];
-        if ((flags & SPREADS) === 0) {
+        if ((flags & FLAG.spreads) === 0) {
           if (axis === 0) {
             dx = -dx;
             ix = -ix;
@@ -343,10 +469,17 @@ export function traceBatch(
       }
 
       // ---- a new direction
-      if (axis < 3) travelNormal(scene, way, x, y, z, dx, dy, dz, normal);
-      const gx = normal[0];
-      const gy = normal[1];
-      const gz = normal[2];
+      let gx = 0;
+      let gy = 0;
+      let gz = 0;
+      if (axis === 0) gx = dx > 0 ? 1 : -1;
+      else if (axis === 1) gy = dy > 0 ? 1 : -1;
+      else if (axis === 2) gz = dz > 0 ? 1 : -1;
+      else {
+        gx = normal[0];
+        gy = normal[1];
+        gz = normal[2];
+      }
       const spread = reflects ? scene.finishReflectSpread[finish] : scene.finishTransmitSpread[finish];
       const sign = reflects ? -1 : 1;
       if (spread === SPREAD.lambertian) {
@@ -392,10 +525,15 @@ export function traceBatch(
       const faceOut = interfaces[record + INTERFACE.faceOut];
       lastFace = faceOut >= 0 ? faceOut : interfaces[record + INTERFACE.faceIn];
       if (faceOut >= 0 && scene.faceRecorderOut[faceOut] >= 0) {
-        const recorder = scene.faceRecorderOut[faceOut];
-        recordCrossing(scene, grown, recorder, half, light, wavelength, x, y, z, dx, dy, dz);
+        ray[0] = x;
+        ray[1] = y;
+        ray[2] = z;
+        ray[3] = dx;
+        ray[4] = dy;
+        ray[5] = dz;
+        recordCrossing(scene, grown, scene.faceRecorderOut[faceOut], half, light, wavelength, ray);
         if (scene.faceExit[faceOut] === 1) {
-          fate = light === 0 ? EXIT_PUMP_SLOT : EXIT_EMITTED_SLOT;
+          fate = light === 0 ? SLOT.exitPump : SLOT.exitEmitted;
           break;
         }
       }

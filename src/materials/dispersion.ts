@@ -20,7 +20,7 @@ export function readDispersion(material: string): Dispersion {
     index: dispersionFormula(row),
     rangeNm: [numberIn(row, 'min_nm'), numberIn(row, 'max_nm')],
     source: row.source,
-    status: row.status,
+    status: row.note === '' ? row.status : `${row.status} (${row.note})`,
   };
 }
 

@@ -3,7 +3,7 @@ import { type DyeData, unknownName } from './material-data.js';
 import { numberIn, type Row, readTable } from './read-table.js';
 
 interface DyeEntry {
-  /** g/mol, from memory (high), checked against the formula in the tests. */
+  /** g/mol, from the formula and the abridged standard atomic weights (CIAAW 2021; from memory, high). */
   readonly molarMassGPerMol: number;
   readonly files: Readonly<Record<string, string | undefined>>;
   readonly pHRange: readonly [number, number] | null;
@@ -19,9 +19,9 @@ const DYES: Readonly<Record<string, DyeEntry | undefined>> = {
   'rhodamine-6g': { molarMassGPerMol: 479.02, files: { ethanol: 'rhodamine_6g_ethanol' }, pHRange: null },
   'rhodamine-b': { molarMassGPerMol: 479.02, files: { ethanol: 'rhodamine_b_ethanol' }, pHRange: null },
   'rhodamine-101': { molarMassGPerMol: 490.6, files: { ethanol: 'rhodamine_101_ethanol' }, pHRange: null },
-  'coumarin-6': { molarMassGPerMol: 350.43, files: { ethanol: 'coumarin_6_ethanol' }, pHRange: null },
-  'coumarin-343': { molarMassGPerMol: 285.29, files: { ethanol: 'coumarin_343_ethanol' }, pHRange: null },
-  'coumarin-153': { molarMassGPerMol: 309.28, files: { ethanol: 'coumarin_153_ethanol' }, pHRange: null },
+  'coumarin-6': { molarMassGPerMol: 350.44, files: { ethanol: 'coumarin_6_ethanol' }, pHRange: null },
+  'coumarin-343': { molarMassGPerMol: 285.3, files: { ethanol: 'coumarin_343_ethanol' }, pHRange: null },
+  'coumarin-153': { molarMassGPerMol: 309.29, files: { ethanol: 'coumarin_153_ethanol' }, pHRange: null },
   'perylene-diimide': { molarMassGPerMol: 766.98, files: { toluene: 'perylene_diimide_toluene' }, pHRange: null },
 };
 
@@ -60,14 +60,21 @@ export function readDye(dye: string, solvent: string): DyeData {
     },
     quantumYield: numberIn(summary, 'quantum_yield'),
     lifetimeNs: lifetimeOf(summary),
-    source: notes.find((note) => note.startsWith('source')) ?? notes[0] ?? '',
-    status: summary.spectra_status,
+    source: sourceOf(notes, file),
+    status: summary.caution === '' ? summary.spectra_status : `${summary.spectra_status}; ${summary.caution}`,
     pHRange,
   };
 }
 
 function lifetimeOf(summary: Row): number | null {
   return summary.lifetime_ns_calc === '' ? null : numberIn(summary, 'lifetime_ns_calc');
+}
+
+/** What follows the colon of the head line that starts with 'source'. */
+function sourceOf(notes: readonly string[], file: string): string {
+  const line = notes.find((note) => note.startsWith('source'));
+  if (line === undefined) throw new Error(`dyes/${file}.csv names no source`);
+  return line.slice(line.indexOf(':') + 1).trim();
 }
 
 /** Wavelengths between which a spectrum is not zero. */

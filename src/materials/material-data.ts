@@ -23,6 +23,8 @@ export interface ThermalData {
   readonly conductivityWPerMK: number;
   readonly viscosityMPaS: number;
   readonly boilingPointC: number | null;
+  /** Closed cup, °C, the lowest value given; null for what does not burn or has no figure. */
+  readonly flashPointC: number | null;
   readonly temperatureC: number;
   readonly source: string;
 }
@@ -36,7 +38,7 @@ export interface DyeData {
   readonly extinction: Curve;
   readonly emission: { readonly photonsPerNm: Curve; readonly fromNm: number; readonly toNm: number };
   readonly quantumYield: number;
-  /** ns, from the spectra after Strickler & Berg (1962). */
+  /** ns, computed from spectra and yield after Strickler & Berg, J. Chem. Phys. 37 814 (1962); `status` says where it is doubtful. */
   readonly lifetimeNs: number | null;
   readonly source: string;
   readonly status: string;

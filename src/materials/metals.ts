@@ -12,6 +12,8 @@ export const metalNames = (): readonly string[] => [
   'gold-template-stripped',
 ];
 
+const STATUS = 'verified; bare opaque films, and published ones differ by up to 6 points of reflectance for silver';
+
 /** Complex index of an opaque film, 400–700 nm, held beyond. @throws RangeError for an unknown name. */
 export function readMetal(name: string): MetalData {
   if (!metalNames().includes(name)) throw unknownName('metal', name, metalNames());
@@ -24,6 +26,7 @@ export function readMetal(name: string): MetalData {
       own.map((row) => numberIn(row, column)),
       { below: 'hold', above: 'hold' },
     );
-  const source = notes.find((note) => note.startsWith(`${name}:`))?.slice(name.length + 1).trim() ?? '';
-  return { name, n: curve('n'), k: curve('k'), source, status: 'verified' };
+  const source = notes.find((note) => note.startsWith(`${name}:`));
+  if (source === undefined) throw new Error(`metals.csv names no source for ${name}`);
+  return { name, n: curve('n'), k: curve('k'), source: source.slice(name.length + 1).trim(), status: STATUS };
 }

@@ -8,7 +8,8 @@ export function linearCurve(
   outside: { readonly below: 'hold' | 'zero'; readonly above: 'hold' | 'zero' },
 ): (x: number) => number {
   const last = xs.length - 1;
-  if (last < 0 || ys.length !== xs.length) throw new RangeError('a curve needs as many values as positions, at least one');
+  if (last < 0 || ys.length !== xs.length)
+    throw new RangeError('a curve needs as many values as positions, at least one');
   for (let i = 1; i <= last; i++) {
     if (!(xs[i] > xs[i - 1])) throw new RangeError(`positions must ascend; ${xs[i]} follows ${xs[i - 1]}`);
   }

@@ -28,3 +28,28 @@ export function seedStream(state: Int32Array, words: Int32Array): void {
   state.set(words.subarray(0, 4));
   for (let i = 0; i < 16; i++) nextBits(state);
 }
+
+/** Numbers per block of `fillUnits`. */
+export const enum BLOCK {
+  draws = 256,
+}
+
+/** Fills a block of BLOCK.draws numbers, each as from `nextUnit`. */
+export function fillUnits(state: Int32Array, units: Float64Array): void {
+  let a = state[0];
+  let b = state[1];
+  let c = state[2];
+  let counter = state[3];
+  for (let i = 0; i < BLOCK.draws; i++) {
+    const result = (((a + b) | 0) + counter) | 0;
+    counter = (counter + 1) | 0;
+    a = b ^ (b >>> 9);
+    b = (c + (c << 3)) | 0;
+    c = (((c << 21) | (c >>> 11)) + result) | 0;
+    units[i] = ((result >>> 0) + 0.5) * TO_UNIT;
+  }
+  state[0] = a;
+  state[1] = b;
+  state[2] = c;
+  state[3] = counter;
+}

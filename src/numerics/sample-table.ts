@@ -5,7 +5,10 @@ export interface AliasTable {
   readonly other: Int32Array;
 }
 
-/** @param weights non-negative, at least one positive. */
+/**
+ * @param weights non-negative, at least one positive, their sum finite.
+ * @throws RangeError for other weights
+ */
 export function buildAliasTable(weights: ArrayLike<number>): AliasTable {
   const count = weights.length;
   let total = 0;
@@ -15,6 +18,7 @@ export function buildAliasTable(weights: ArrayLike<number>): AliasTable {
     total += weight;
   }
   if (!(total > 0)) throw new RangeError('all weights are zero');
+  if (!Number.isFinite(total)) throw new RangeError('the sum of the weights is not finite');
   const keep = new Float64Array(count);
   const other = new Int32Array(count);
   const small: number[] = [];
@@ -49,13 +53,7 @@ function indexOfLargest(values: ArrayLike<number>): number {
 }
 
 /** Draws from the table that starts at `offset` in the pooled arrays; `unit` in [0, 1). */
-export function drawIndex(
-  keep: Float64Array,
-  other: Int32Array,
-  offset: number,
-  count: number,
-  unit: number,
-): number {
+export function drawIndex(keep: Float64Array, other: Int32Array, offset: number, count: number, unit: number): number {
   const scaled = unit * count;
   const cell = scaled | 0;
   return scaled - cell < keep[offset + cell] ? cell : other[offset + cell];

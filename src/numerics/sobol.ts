@@ -49,7 +49,8 @@ export function startSobol(points: Int32Array, shift: Int32Array): void {
 export function stepSobol(points: Int32Array, index: number): void {
   // Lowest zero bit of index.
   const bit = 31 - Math.clz32(~index & (index + 1));
-  for (let dimension = 0; dimension < SOBOL_DIMENSIONS; dimension++) points[dimension] ^= DIRECTIONS[dimension * BITS + bit];
+  for (let dimension = 0; dimension < SOBOL_DIMENSIONS; dimension++)
+    points[dimension] ^= DIRECTIONS[dimension * BITS + bit];
 }
 
 /** Coordinate of the current point in (0, 1). */

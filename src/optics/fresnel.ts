@@ -1,5 +1,6 @@
 /**
  * Unpolarised Fresnel reflectance of a smooth interface between two transparent media (Born & Wolf, Principles of Optics, §1.5).
+ * Whether light gets through must be decided by the same bits here and where it is refracted: keep `sine2` as it is written.
  * @param nIncident refractive index on the side the light comes from
  * @param nTransmitted refractive index beyond
  * @param cosIncident cosine of the angle of incidence, 0..1

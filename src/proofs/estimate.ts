@@ -1,91 +1,58 @@
-/** A mean with its standard error, from the per-batch moments of a run. */
-import { type FateSlot, FIGURE, FIGURE_COUNT, type Moments, type RunTallies } from '../tallies/run-tallies.js';
+/** What the proofs measure: shares and figures of a run with their standard errors, from the moments of its batches. */
+import { ErrorBars } from '../outcome/error-bars.js';
+import type { FateSlot, FIGURE, RunTallies } from '../tallies/run-tallies.js';
 
 export interface Estimate {
   readonly value: number;
   readonly standardError: number;
 }
 
-export type FigureWeights = Partial<Record<keyof typeof FIGURE, number>>;
+type FigureName = keyof typeof FIGURE;
+/** A sum of figures, each with its factor. */
+export type FigureWeights = Partial<Record<FigureName, number>>;
 
-/** Below this many batches their scatter is itself too uncertain, and the finer groups are used. */
-const FEWEST_BATCHES = 16;
-
-const momentsOf = ({ moments, groupMoments }: RunTallies): Moments =>
-  moments.batches >= FEWEST_BATCHES ? moments : groupMoments;
-
-/**
- * Photons per history in all slots that `pick` takes. One slot has its own batch variance. A sum of slots gets the root of
- * the summed variances: a photon in one slot is in no other, so covariances do not add to it.
- */
+/** Photons per history in all slots that `pick` takes. */
 export function fateShare(tallies: RunTallies, pick: (slot: FateSlot) => boolean): Estimate {
-  return shareOf(tallies, pick, 0);
+  return slotSum(tallies, pick, 0);
 }
 
 /** Photon energy, eV per history, in all slots that `pick` takes. */
 export function fateEnergy(tallies: RunTallies, pick: (slot: FateSlot) => boolean): Estimate {
-  return shareOf(tallies, pick, 1);
+  return slotSum(tallies, pick, 1);
 }
 
-function shareOf(tallies: RunTallies, pick: (slot: FateSlot) => boolean, quantity: 0 | 1): Estimate {
-  const moments = momentsOf(tallies);
-  const { histories: n, batches, sum, sumSquares } = moments;
-  let value = 0;
-  let variance = 0;
-  tallies.slots.forEach((slot, index) => {
-    if (!pick(slot)) return;
-    const at = 2 * index + quantity;
-    const mean = sum[at] / n;
-    value += mean;
-    variance += Math.max(0, sumSquares[at] / n - mean * mean);
-  });
-  return { value, standardError: Math.sqrt(variance / (batches - 1)) };
-}
-
-/** Weighted sum of figure sums per history, with all covariances. */
-export function figureMean(tallies: RunTallies, weights: FigureWeights): Estimate {
-  const moments = momentsOf(tallies);
-  const entries = indexed(weights);
+/**
+ * One slot has its own batch variance. A sum of slots gets the root of the summed variances: a photon in one slot is in no
+ * other, so covariances do not add to it.
+ */
+function slotSum(tallies: RunTallies, pick: (slot: FateSlot) => boolean, part: 0 | 1): Estimate {
+  const bars = new ErrorBars(tallies);
+  const parts = tallies.slots.flatMap((slot, index) => (pick(slot) ? [bars.slot(index, part)] : []));
   return {
-    value: entries.reduce((total, [index, weight]) => total + weight * meanOf(moments, tallies, index), 0),
-    standardError: Math.sqrt(varianceOf(moments, tallies, entries)),
+    value: parts.reduce((sum, { value }) => sum + value, 0),
+    standardError: Math.hypot(...parts.map(({ standardError }) => known(standardError))),
   };
 }
 
-/** Ratio of two weighted sums of figures; standard error by the ratio's linear expansion, covariances included. */
-export function figureRatio(tallies: RunTallies, numerator: FigureWeights, denominator: FigureWeights): Estimate {
-  const moments = momentsOf(tallies);
-  const top = indexed(numerator);
-  const bottom = indexed(denominator);
-  const total = (entries: Indexed): number =>
-    entries.reduce((sum, [index, weight]) => sum + weight * meanOf(moments, tallies, index), 0);
-  const below = total(bottom);
-  const value = total(top) / below;
-  const expansion = new Map(top);
-  for (const [index, weight] of bottom) expansion.set(index, (expansion.get(index) ?? 0) - value * weight);
-  return { value, standardError: Math.sqrt(varianceOf(moments, tallies, [...expansion])) / Math.abs(below) };
+/** Weighted sum of figures per history, with all covariances. */
+export function figureMean(tallies: RunTallies, weights: FigureWeights): Estimate {
+  return figureRatio(tallies, weights, null);
 }
 
-type Indexed = readonly (readonly [number, number])[];
-
-function indexed(weights: FigureWeights): Indexed {
-  return (Object.keys(FIGURE) as (keyof typeof FIGURE)[])
-    .filter((name) => weights[name] !== undefined)
-    .map((name) => [FIGURE[name], weights[name] ?? 0] as const);
+/** Ratio of two weighted sums of figures, covariances included; the denominator null is one. */
+export function figureRatio(
+  tallies: RunTallies,
+  numerator: FigureWeights,
+  denominator: FigureWeights | null,
+): Estimate {
+  const names = [...new Set([...Object.keys(numerator), ...Object.keys(denominator ?? {})])] as FigureName[];
+  const { value, standardError } = new ErrorBars(tallies).propagate(names, (...means) => {
+    const total = (weights: FigureWeights): number =>
+      names.reduce((sum, name, index) => sum + (weights[name] ?? 0) * means[index], 0);
+    return total(numerator) / (denominator === null ? 1 : total(denominator));
+  });
+  return { value: known(value), standardError: known(standardError) };
 }
 
-const meanOf = (moments: Moments, tallies: RunTallies, index: number): number =>
-  moments.sum[2 * tallies.slots.length + index] / moments.histories;
-
-/** Variance of a weighted sum of figure means. */
-function varianceOf(moments: Moments, tallies: RunTallies, weights: Indexed): number {
-  const { histories: n, batches, figureCross } = moments;
-  let spread = 0;
-  for (const [i, a] of weights) {
-    for (const [j, b] of weights) {
-      const product = figureCross[i * FIGURE_COUNT + j] / n;
-      spread += a * b * (product - meanOf(moments, tallies, i) * meanOf(moments, tallies, j));
-    }
-  }
-  return Math.max(0, spread) / (batches - 1);
-}
+/** What a run of so many histories always has; NaN, which no band holds, if it has not. */
+const known = (value: number | null): number => value ?? Number.NaN;

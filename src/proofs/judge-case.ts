@@ -14,7 +14,10 @@ export function compare(
   expected: number,
   tolerance = 0,
 ): ProofCase {
-  const { value, standardError } = measured;
+  const { value } = measured;
+  // A ratio without chance in it still scatters in its last digits.
+  const floor = ARITHMETIC * Math.max(1, Math.abs(value));
+  const standardError = measured.standardError <= floor ? 0 : measured.standardError;
   return {
     label,
     against,
@@ -22,7 +25,7 @@ export function compare(
     standardError,
     expected,
     tolerance,
-    deviation: standardError > 0 ? (value - expected) / standardError : null,
+    deviation: standardError === 0 ? null : (value - expected) / standardError,
   };
 }
 

@@ -144,7 +144,7 @@ async function throughBody(
     0.5,
   );
   return compare(
-    `absorbed in a ${label}`,
+    `absorbed: ${label}`,
     against,
     fateShare(tallies, slotsOf({ fate: 'absorbed-by-solvent' })),
     1 - transmitted,

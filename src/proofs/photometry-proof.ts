@@ -1,4 +1,5 @@
 import type { EmissionDescription } from '../design/description.js';
+import { colourMatching } from '../materials/observer.js';
 import type { RunTallies } from '../tallies/run-tallies.js';
 import { MAXIMUM_LUMINOUS_EFFICACY_LM_PER_W } from '../units/constants.js';
 import { D65_FROM_NM, D65_TO_NM, d65Power } from './daylight-d65.js';
@@ -9,13 +10,17 @@ import type { Proof, ProofCase, ProofContext } from './proof.js';
 import { cell, dye, medium, part, pump, thinBeam } from './proof-cells.js';
 import { traceCell } from './trace-cell.js';
 
-/** Line, V(λ), chromaticity; CIE 15:2004 table T.4 (V to 6 decimals; x, y of the locus from the same table). */
+/** Rows of the observer, CIE 15:2004 table T.4: nm, x̄, ȳ = V, z̄, six decimals. */
 const LINES = [
-  [555, 1.0, 0.3373, 0.6589],
-  [520, 0.71, 0.0743, 0.8338],
-  [600, 0.631, 0.627, 0.3725],
+  [520, 0.06327, 0.71, 0.07825],
+  [555, 0.51205, 1.0, 0.00575],
+  [600, 1.0622, 0.631, 0.0008],
 ] as const;
 const D65 = { x: 0.31272, y: 0.32903 } as const;
+/** Five printed decimals, and sums in steps of 5 instead of 1 nm. */
+const ROUNDING = 2e-5;
+/** What linear interpolation between rows of the observer shifts D65 by. */
+const BETWEEN_ROWS = 5e-5;
 /** A pump that the eye and the dye's own light do not share. */
 const VIOLET_NM = 370;
 
@@ -26,7 +31,8 @@ export const photometryProof: Proof = {
   status: 'verified',
   async run(context) {
     const cases: ProofCase[] = [];
-    for (const [wavelengthNm, sensitivity, x, y] of LINES) {
+    for (const [wavelengthNm, x, sensitivity, z] of LINES) {
+      const sum = x + sensitivity + z;
       const tallies = await emit(context, `line at ${wavelengthNm} nm`, { kind: 'line', wavelengthNm }, 0.05);
       const perEnergy = figureRatio(tallies, { exitY: 1 }, { exitEnergy: 1 });
       const efficacy: Estimate = {
@@ -34,9 +40,9 @@ export const photometryProof: Proof = {
         standardError: perEnergy.standardError * MAXIMUM_LUMINOUS_EFFICACY_LM_PER_W,
       };
       cases.push(
-        compare(`lm/W at ${wavelengthNm} nm`, '683.002 V(λ)', efficacy, 683.002 * sensitivity, 0.005),
-        compare(`x of ${wavelengthNm} nm`, 'spectral locus', chromaticity(tallies, 'exitX'), x, 5e-5),
-        compare(`y of ${wavelengthNm} nm`, 'spectral locus', chromaticity(tallies, 'exitY'), y, 5e-5),
+        compare(`lm/W at ${wavelengthNm} nm`, '683.002 V(λ)', efficacy, 683.002 * sensitivity, 0.001),
+        compare(`x of ${wavelengthNm} nm`, 'CIE 15 table T.4', chromaticity(tallies, 'exitX'), x / sum, 2e-6),
+        compare(`y of ${wavelengthNm} nm`, 'CIE 15 table T.4', chromaticity(tallies, 'exitY'), sensitivity / sum, 2e-6),
       );
     }
     const daylight: EmissionDescription = {
@@ -47,12 +53,27 @@ export const photometryProof: Proof = {
     };
     const tallies = await emit(context, 'daylight', daylight, 1);
     cases.push(
-      compare('x of D65', 'CIE 15:2004, from memory', chromaticity(tallies, 'exitX'), D65.x, 2e-5),
-      compare('y of D65', 'CIE 15:2004, from memory', chromaticity(tallies, 'exitY'), D65.y, 2e-5),
+      compare('x of D65 summed over the observer', 'CIE 15:2004, memory', exact(sumOf(0)), D65.x, ROUNDING),
+      compare('y of D65 summed over the observer', 'CIE 15:2004, memory', exact(sumOf(1)), D65.y, ROUNDING),
+      compare('x of D65 emitted by a dye', 'CIE 15:2004, memory', chromaticity(tallies, 'exitX'), D65.x, BETWEEN_ROWS),
+      compare('y of D65 emitted by a dye', 'CIE 15:2004, memory', chromaticity(tallies, 'exitY'), D65.y, BETWEEN_ROWS),
     );
     return cases;
   },
 };
+
+const exact = (value: number): Estimate => ({ value, standardError: 0 });
+
+/** x (0) or y (1) of D65 by the sum over the observer's rows that CIE 15 allows. */
+function sumOf(axis: 0 | 1): number {
+  const totals = [0, 0, 0];
+  for (let nm = D65_FROM_NM; nm <= D65_TO_NM; nm += 5) {
+    colourMatching(nm).forEach((value, index) => {
+      totals[index] += value * d65Power(nm);
+    });
+  }
+  return totals[axis] / (totals[0] + totals[1] + totals[2]);
+}
 
 /** A matched box that takes the pump at once and emits the given light on every side. */
 function emit(context: ProofContext, title: string, emission: EmissionDescription, share: number): Promise<RunTallies> {

@@ -92,6 +92,10 @@ export function mirror(name: string, reflectance: number): FinishDescription {
 export function diffuser(name: string, reflects: number, transmits = 0): FinishDescription {
   return finish(name, { kind: 'diffuser' as const, reflects, transmits });
 }
+/** A sheet that passes everything, spread about the straight way by `fwhm`, rad. */
+export function scatterer(name: string, shape: 'gaussian' | 'top-hat', fwhm: number): FinishDescription {
+  return finish(name, { kind: 'scatter' as const, shape, fwhm, split: { reflects: 0, transmits: 1 } });
+}
 export function metal(name: string, n: number, k: number): FinishDescription {
   return finish(name, { kind: 'metal' as const, metal: name, n: constant(n), k: constant(k) });
 }

@@ -9,9 +9,8 @@ import { traceCell } from './trace-cell.js';
 /** Index, trapped share, share of the histories: each trapped photon takes thousands of reflections to be known as one. */
 const BLOCKS = [
   [1.2, 0, 1 / 20],
-  [1.3614, 0.064509, 1 / 30],
-  [1.5168, 0.255685, 1 / 60],
-  [1.585, 0.327556, 1 / 60],
+  [1.3614, 0.064509, 1 / 40],
+  [1.5168, 0.255685, 1 / 80],
 ] as const;
 
 export const trappedLightProof: Proof = {
@@ -50,7 +49,7 @@ export const trappedLightProof: Proof = {
         pumps: [innerSource([0.3, 0.2, -0.1])],
         exit: 'plate.top',
       }),
-      1 / 100,
+      1 / 150,
     );
     cases.push(
       compare(

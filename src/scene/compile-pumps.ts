@@ -8,6 +8,9 @@ import type { SpectrumPool } from './spectrum-pool.js';
 import { add, cross, dot, frameAbout, normalise, scale, snapDirection, subtract } from './vector.js';
 import { FWHM_PER_SIGMA, linePhotons, type WavelengthGrid } from './wavelength-grid.js';
 
+const BEAMS = { patch: BEAM.patch, gaussian: BEAM.gaussian, lambertian: BEAM.lambertian, diodes: BEAM.diodes } as const;
+const OUTLINES = { rectangle: OUTLINE.rectangle, disc: OUTLINE.disc } as const;
+
 export interface BeamFrame {
   readonly origin: Vector3;
   readonly u: Vector3;
@@ -44,10 +47,10 @@ export function compilePumps(
     const at = i * PUMP.STRIDE;
     pumps.set([...frame.origin, ...frame.u, ...frame.v, ...frame.w], at);
     writeBeam(pump, pumps, at);
-    beam.push(BEAM[pump.beam.kind]);
+    beam.push(BEAMS[pump.beam.kind]);
     outline.push(
       pump.beam.kind === 'patch' || pump.beam.kind === 'lambertian'
-        ? OUTLINE[pump.beam.outline.kind]
+        ? OUTLINES[pump.beam.outline.kind]
         : OUTLINE.rectangle,
     );
     const photons = linePhotons(grid, pump.wavelengthNm, pump.linewidthNm);

@@ -1,7 +1,7 @@
 /** Places in the tally arrays for every map, spectrum and angular map. */
 import type { CompiledSolids } from './compile-solids.js';
 import type { RecorderPlan, VoxelPlan } from './compile-recorders.js';
-import { AZIMUTH_CELLS, POLAR_CELLS, RECORDER, type Scene } from './scene-layout.js';
+import { CELLS, RECORDER, type Scene } from './scene-layout.js';
 import { sharedBytes, sharedDoubles, sharedInts } from './shared-arrays.js';
 import { frameAbout, scale } from './vector.js';
 import type { WavelengthGrid } from './wavelength-grid.js';
@@ -59,7 +59,7 @@ export function layOutRecorders(
     frame.set(frameOf(plan), i * RECORDER.STRIDE);
     mapAt.push(maps.take(plan.cells[0] * plan.cells[1]));
     spectrumAt.push(plan.spectrum ? spectra.take(2 * wavelengths) : -1);
-    anglesAt.push(plan.angles ? angles.take(POLAR_CELLS * AZIMUTH_CELLS) : -1);
+    anglesAt.push(plan.angles ? angles.take(CELLS.polar * CELLS.azimuth) : -1);
     if (plan.outline?.kind === 'disc') aperture.set([plan.outline.radius, -1], 2 * i);
     if (plan.outline?.kind === 'rectangle') aperture.set(scaleHalf(plan.outline.size), 2 * i);
   });

@@ -4,38 +4,44 @@
  * A region is a choice of side for every surface of the scene: which slab of each family of parallel planes, inside or outside each
  * quadric. Where light is, is known by its region alone, never by asking a rounded coordinate, so no ray can slip between two
  * faces or be lost on an edge: it always has a next surface that bounds its region, and crossing it leads to exactly one
- * neighbour. Most surfaces continue beyond the part that they bound; crossing them there changes nothing (`PASS`).
+ * neighbour. Most surfaces continue beyond the part that they bound; crossing them there changes nothing (`CROSSING.pass`).
  */
 import type { Scene } from './scene-layout.js';
 import { SURROUNDINGS } from './scene-layout.js';
 import { quadricValue, QUADRIC_STRIDE } from './quadric.js';
 
-/** Crossing where nothing changes. */
-export const PASS = -1;
-const UNKNOWN = -2;
+/** Crossings that are no interface. */
+export const enum CROSSING {
+  /** Nothing changes here. */
+  pass = -1,
+  /** Not worked out yet. */
+  unknown = -2,
+}
 
 /** Integers per interface in `interfaces`; a crossing is the place of its record there. */
-export const INTERFACE = {
-  flags: 0,
-  finish: 1,
-  mediumBeyond: 2,
-  ownerBeyond: 3,
+export const enum INTERFACE {
+  flags = 0,
+  finish = 1,
+  mediumBeyond = 2,
+  ownerBeyond = 3,
   /** Face left, −1 when coming from the surroundings. */
-  faceOut: 4,
+  faceOut = 4,
   /** Face entered, −1 when going to the surroundings. */
-  faceIn: 5,
+  faceIn = 5,
   /** Face that carries the finish: where its absorption is booked. */
-  faceActing: 6,
+  faceActing = 6,
   /** Recorder: of a free plane, or of pump light arriving at the face entered. */
-  recorder: 7,
-  STRIDE: 8,
-} as const;
-/** The interface is a free plane. */
-export const FREE_PLANE = 1;
-/** Pump light that arrives here is recorded. */
-export const RECORDS_ARRIVAL = 2;
-/** The finish spreads what it reflects or transmits. */
-export const SPREADS = 4;
+  recorder = 7,
+  STRIDE = 8,
+}
+export const enum FLAG {
+  /** The interface is a free plane. */
+  freePlane = 1,
+  /** Pump light that arrives here is recorded. */
+  recordsArrival = 2,
+  /** The finish spreads what it reflects or transmits. */
+  spreads = 4,
+}
 
 /** Closer than this to a surface, the direction of travel decides on which side a starting point lies, mm. */
 const TIE = 1e-9;
@@ -53,7 +59,7 @@ export class RegionGraph {
   readonly side: Int8Array;
   /** [region · ways + way]: region beyond, meaningful once `crossing` is known. */
   readonly neighbour: Int32Array;
-  /** [region · ways + way]: place of the interface's record, or PASS, or unknown. */
+  /** [region · ways + way]: place of the interface's record, or CROSSING.pass, or unknown. */
   readonly crossing: Int32Array;
   readonly owner: Int32Array;
   readonly medium: Int32Array;
@@ -145,7 +151,7 @@ export class RegionGraph {
   /** Works out what lies beyond one way of a region. Returns the crossing. */
   resolve(region: number, way: number): number {
     const at = region * this.ways + way;
-    if (this.crossing[at] !== UNKNOWN) return this.crossing[at];
+    if (this.crossing[at] !== CROSSING.unknown) return this.crossing[at];
     const slabs = Array.from(this.#slab.subarray(region * this.families, (region + 1) * this.families));
     const sides = Array.from(this.side.subarray(region * this.quadrics, (region + 1) * this.quadrics));
     let surface: number;
@@ -181,7 +187,7 @@ export class RegionGraph {
       this.bound[b] = slab > 0 ? this.scene.planeOffset[start + slab - 1] : Number.NEGATIVE_INFINITY;
       this.bound[b + 1] = slab < count ? this.scene.planeOffset[start + slab] : Number.POSITIVE_INFINITY;
     });
-    this.crossing.fill(UNKNOWN, region * this.ways, (region + 1) * this.ways);
+    this.crossing.fill(CROSSING.unknown, region * this.ways, (region + 1) * this.ways);
     this.owner[region] = this.#ownerOf(region);
     this.medium[region] = this.scene.ownerMedium[this.owner[region]];
     return region;
@@ -229,7 +235,7 @@ export class RegionGraph {
     }
     const ownerFrom = this.owner[from];
     const ownerTo = this.owner[to];
-    if (ownerFrom === ownerTo) return PASS;
+    if (ownerFrom === ownerTo) return CROSSING.pass;
     const faceOut = this.#faceOf(ownerFrom, from, to, surface);
     const faceIn = this.#faceOf(ownerTo, from, to, surface);
     const outFinish = faceOut < 0 ? -1 : scene.faceFinish[faceOut];
@@ -277,7 +283,7 @@ export class RegionGraph {
     this.#knownInterfaces.set(key, at);
     const arrival = faceIn < 0 ? -1 : scene.faceRecorderArriving[faceIn];
     const spreads = finish >= 0 && (scene.finishReflectSpread[finish] || scene.finishTransmitSpread[finish]);
-    const flags = (detector >= 0 ? FREE_PLANE : 0) | (arrival >= 0 ? RECORDS_ARRIVAL : 0) | (spreads ? SPREADS : 0);
+    const flags = (detector >= 0 ? FLAG.freePlane : 0) | (arrival >= 0 ? FLAG.recordsArrival : 0) | (spreads ? FLAG.spreads : 0);
     const recorder = detector >= 0 ? detector : arrival;
     this.interfaces.set([flags, finish, mediumBeyond, ownerBeyond, faceOut, faceIn, faceActing, recorder], at);
     return at;

@@ -1,5 +1,6 @@
 /**
  * The scene: what the kernel reads. Flat typed arrays only, over shared memory, so that threads see one copy.
+ * Numbers of slots and kinds are const enums: the build writes them into the kernel as literals, where imported objects would be looked up.
  * Lengths in mm; spectral tables are indexed [thing · wavelengths + wavelength index].
  */
 export const SCENE_VERSION = 1;
@@ -8,64 +9,68 @@ export const SCENE_VERSION = 1;
 export const SURROUNDINGS = 0;
 
 /** How a finish decides between reflection, transmission and absorption. */
-export const SPLIT = { fresnel: 0, spectral: 1, metal: 2, table: 3 } as const;
+export const enum SPLIT { fresnel = 0, spectral = 1, metal = 2, table = 3 }
 /** Where reflected or transmitted light goes. */
-export const SPREAD = { specular: 0, lambertian: 1, gaussian: 2, topHat: 3 } as const;
-export const BEAM = { patch: 0, gaussian: 1, lambertian: 2, diodes: 3 } as const;
-export const OUTLINE = { rectangle: 0, disc: 1 } as const;
+export const enum SPREAD { specular = 0, lambertian = 1, gaussian = 2, topHat = 3 }
+export const enum BEAM { patch = 0, gaussian = 1, lambertian = 2, diodes = 3 }
+export const enum OUTLINE { rectangle = 0, disc = 1 }
 
 /** Slots of a face's fates, counted from `faceSlot[face]`. */
-export const FACE_SLOT = {
-  reflectedAtEntry: 0,
-  leftPump: 1,
-  leftEmitted: 2,
-  absorbedPump: 3,
-  absorbedEmitted: 4,
-  COUNT: 5,
-} as const;
+export const enum FACE_SLOT {
+  reflectedAtEntry = 0,
+  leftPump = 1,
+  leftEmitted = 2,
+  absorbedPump = 3,
+  absorbedEmitted = 4,
+  COUNT = 5,
+}
 /** Slots of an owner's fates, counted from `ownerSlot[owner]`. */
-export const OWNER_SLOT = { bulkPump: 0, bulkEmitted: 1, trappedPump: 2, trappedEmitted: 3, COUNT: 4 } as const;
+export const enum OWNER_SLOT { bulkPump = 0, bulkEmitted = 1, trappedPump = 2, trappedEmitted = 3, COUNT = 4 }
 /** Slots of one dye in one owner, counted from `dyeSlot[owner · maxAbsorbers + absorber]`. */
-export const DYE_SLOT = { lostPump: 0, lostEmitted: 1, stokesPump: 2, stokesEmitted: 3, COUNT: 4 } as const;
-export const MISSED_SLOT = 0;
-export const EXIT_PUMP_SLOT = 1;
-export const EXIT_EMITTED_SLOT = 2;
-export const FIRST_OTHER_SLOT = 3;
+export const enum DYE_SLOT { lostPump = 0, lostEmitted = 1, stokesPump = 2, stokesEmitted = 3, COUNT = 4 }
+/** Slots that every scene has. */
+export const enum SLOT {
+  missed = 0,
+  exitPump = 1,
+  exitEmitted = 2,
+}
 
 /** Doubles per pump in `pumps`. */
-export const PUMP = {
-  originX: 0, // origin of the beam, mm
-  axisU: 3, // unit vectors
-  axisV: 6,
-  axisW: 9, // direction of the beam
-  sizeU: 12, // full width, or radius of a disc or Gaussian, mm
-  sizeV: 13,
-  spreadU: 14, // patch, diodes: standard deviation of the angle, rad; Gaussian: 1/e² half angle / 2
-  spreadV: 15,
-  across: 16,
-  along: 17,
-  pitchU: 18,
-  pitchV: 19,
-  lensPower: 20, // 1/focal length, 1/mm, 0 without lens
-  lensDistance: 21,
-  STRIDE: 22,
-} as const;
+export const enum PUMP {
+  originX = 0, // origin of the beam, mm
+  axisU = 3, // unit vectors
+  axisV = 6,
+  axisW = 9, // direction of the beam
+  sizeU = 12, // full width, or radius of a disc or Gaussian, mm
+  sizeV = 13,
+  spreadU = 14, // patch, diodes: standard deviation of the angle, rad; Gaussian = 1/e² half angle / 2
+  spreadV = 15,
+  across = 16,
+  along = 17,
+  pitchU = 18,
+  pitchV = 19,
+  lensPower = 20, // 1/focal length, 1/mm, 0 without lens
+  lensDistance = 21,
+  STRIDE = 22,
+}
 
 /** Doubles per recorder in `recorderFrame`. */
-export const RECORDER = {
-  originX: 0,
-  stepU: 3, // unit axis u divided by the cell width, so that a dot product gives the cell
-  stepV: 6,
-  axisN: 9, // outward normal at the centre: axis of the angular map
-  axisU: 12, // unit axes for the azimuth
-  axisV: 15,
-  STRIDE: 18,
-} as const;
-export const POLAR_CELLS = 45;
-export const AZIMUTH_CELLS = 72;
-
-export const ABSORPTION_HISTOGRAM_CELLS = 64;
-export const PATH_HISTOGRAM_CELLS = 100;
+export const enum RECORDER {
+  originX = 0,
+  stepU = 3, // unit axis u divided by the cell width, so that a dot product gives the cell
+  stepV = 6,
+  axisN = 9, // outward normal at the centre: axis of the angular map
+  axisU = 12, // unit axes for the azimuth
+  axisV = 15,
+  STRIDE = 18,
+}
+/** Cells of angular maps and histograms. */
+export const enum CELLS {
+  polar = 45,
+  azimuth = 72,
+  absorptions = 64,
+  path = 100,
+}
 
 export interface Scene {
   readonly version: number;

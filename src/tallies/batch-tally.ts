@@ -1,5 +1,5 @@
 /** Counters a thread writes while it traces. One batch's vector is handed on; maps and histograms stay and grow. */
-import { ABSORPTION_HISTOGRAM_CELLS, PATH_HISTOGRAM_CELLS, type Scene } from '../scene/scene-layout.js';
+import { CELLS, type Scene } from '../scene/scene-layout.js';
 import { FIGURE_COUNT } from './run-tallies.js';
 
 /** Histories of one random stream, and the unit of the error bars. A power of two: a whole Sobol net. */
@@ -32,9 +32,9 @@ const lengths = (scene: Scene): readonly number[] => [
   2 * scene.mapCells,
   scene.spectrumCells,
   scene.angleCells,
-  ABSORPTION_HISTOGRAM_CELLS,
-  ABSORPTION_HISTOGRAM_CELLS,
-  PATH_HISTOGRAM_CELLS,
+  CELLS.absorptions,
+  CELLS.absorptions,
+  CELLS.path,
 ];
 
 /** Memory for one thread's growing tallies, bytes. */

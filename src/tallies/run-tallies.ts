@@ -46,34 +46,54 @@ export interface Moments {
   readonly figureCross: Float64Array;
 }
 
-/** Index of each figure sum inside the figure part of the vector. Emitted light through the exit unless said otherwise. */
-export const FIGURE = {
-  launchedPhotons: 0,
-  launchedEnergy: 1,
-  exitPhotons: 2,
-  exitEnergy: 3,
+/** Place of each figure sum inside the figure part of the vector. Emitted light through the exit unless said otherwise. */
+export const enum FIGURE_PLACE {
+  launchedPhotons = 0,
+  launchedEnergy = 1,
+  exitPhotons = 2,
+  exitEnergy = 3,
   /** Σ eV·x̄(λ), CIE 1931 2°. */
-  exitX: 4,
+  exitX = 4,
   /** Σ eV·ȳ(λ): 683.002 lm/W × this × W/eV are the lumens. */
-  exitY: 5,
-  exitZ: 6,
+  exitY = 5,
+  exitZ = 6,
   /** Σ wavelength, nm, over exit photons. */
-  exitWavelength: 7,
+  exitWavelength = 7,
   /** Pump light through the exit. */
-  leakPhotons: 8,
-  leakEnergy: 9,
+  leakPhotons = 8,
+  leakEnergy = 9,
   /** Absorptions of any kind by dyes. */
-  dyeAbsorptions: 10,
+  dyeAbsorptions = 10,
   /** Of these, absorptions of light that a dye had emitted. */
-  reabsorptions: 11,
+  reabsorptions = 11,
   /** Σ path length, mm, all media. */
-  pumpPath: 12,
-  emittedPath: 13,
+  pumpPath = 12,
+  emittedPath = 13,
   /** Pump photons absorbed by a dye. */
-  pumpAbsorbed: 14,
-  emissions: 15,
-} as const;
+  pumpAbsorbed = 14,
+  emissions = 15,
+}
 export const FIGURE_COUNT = 16;
+
+/** The same by name. */
+export const FIGURE = {
+  launchedPhotons: FIGURE_PLACE.launchedPhotons,
+  launchedEnergy: FIGURE_PLACE.launchedEnergy,
+  exitPhotons: FIGURE_PLACE.exitPhotons,
+  exitEnergy: FIGURE_PLACE.exitEnergy,
+  exitX: FIGURE_PLACE.exitX,
+  exitY: FIGURE_PLACE.exitY,
+  exitZ: FIGURE_PLACE.exitZ,
+  exitWavelength: FIGURE_PLACE.exitWavelength,
+  leakPhotons: FIGURE_PLACE.leakPhotons,
+  leakEnergy: FIGURE_PLACE.leakEnergy,
+  dyeAbsorptions: FIGURE_PLACE.dyeAbsorptions,
+  reabsorptions: FIGURE_PLACE.reabsorptions,
+  pumpPath: FIGURE_PLACE.pumpPath,
+  emittedPath: FIGURE_PLACE.emittedPath,
+  pumpAbsorbed: FIGURE_PLACE.pumpAbsorbed,
+  emissions: FIGURE_PLACE.emissions,
+} as const;
 
 /** A map over a face, a plane or the liquid, in two halves (even and odd batches) whose difference is pure noise. */
 export interface RecordedMap {

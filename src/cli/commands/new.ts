@@ -18,6 +18,7 @@ export async function newCommand(file: string): Promise<ExitCode> {
   }
   const name = safeText(shellQuote(file));
   print(`${safeText(file)} written. Next:\n  stokeswell check ${name}\n  stokeswell trace ${name}\n`);
+  print('For completion in an editor: stokeswell schema > design.schema.json\n');
   return EXIT.ok;
 }
 

@@ -16,7 +16,7 @@ const HISTORIES = 200_000;
 const QUICK_HISTORIES = 20_000;
 /** Proofs are repeatable: a deviation can be looked into. */
 const SEED = 'proof';
-const LABEL_WIDTH = 46;
+const LABEL_WIDTH = 58;
 
 /** `stokeswell prove`: outside truths checked on this machine, a line per case as it is done. */
 export async function proveCommand(options: ProveOptions): Promise<ExitCode> {
@@ -41,7 +41,8 @@ export async function proveCommand(options: ProveOptions): Promise<ExitCode> {
     throw new CommandFault(EXIT.fault, `No proof has "${safeText(options.only ?? '')}" in its name.`);
   }
   const verdict = summary.failed === 0 ? 'all within their bands' : `${summary.failed} outside their bands`;
-  say(`\n${style.bold(`${summary.proofs} proofs, ${summary.cases} cases: ${verdict}`)}`);
+  const proofs = summary.proofs === 1 ? '1 proof' : `${summary.proofs} proofs`;
+  say(`\n${style.bold(`${proofs}, ${summary.cases} cases: ${verdict}`)}`);
   return summary.failed === 0 ? EXIT.ok : EXIT.deviation;
 }
 
@@ -59,5 +60,6 @@ export function caseLine(proofCase: ProofCase, passed: boolean, style: TerminalS
       : `${proofCase.deviation < 0 ? '' : '+'}${proofCase.deviation.toFixed(1)} standard errors`;
   const mark = passed ? style.good('holds ') : style.warn('FAILS ');
   const label = safeText(proofCase.label);
-  return `  ${mark} ${label.padEnd(LABEL_WIDTH)} ${measured}, expected ${expected}, ${deviation}`;
+  const law = passed || proofCase.against === '' ? '' : ` (${safeText(proofCase.against)})`;
+  return `  ${mark} ${label.padEnd(LABEL_WIDTH)} ${measured}, expected ${expected}${law}, ${deviation}`;
 }

@@ -1,13 +1,16 @@
 import { availableParallelism } from 'node:os';
 import type { LocatedFault } from '../../design/fault.js';
 import type { SoundDesign } from '../../design/read-design.js';
+import type { RunArrays } from '../../run-folder/run-arrays.js';
+import { RunFolderError } from '../../run-folder/run-folder-error.js';
+import type { RunRecord } from '../../run-folder/run-record.js';
 import type { TraceResult } from '../../trace/trace-result.js';
 import { CommandFault } from '../command-fault.js';
 import { EXIT, type ExitCode } from '../exit-codes.js';
 import { countFaults, faultLines } from '../fault-lines.js';
 import { listenForInterrupt } from '../interrupt.js';
 import { showLedger } from '../ledger/show-ledger.js';
-import { checkRunFolder, defaultRunFolder } from '../output-folder.js';
+import { checkOutputFolder, RESULTS } from '../output-folder.js';
 import { print, tell } from '../output-stream.js';
 import { ProgressLine } from '../progress-line.js';
 import { styleFor } from '../terminal-style.js';
@@ -33,26 +36,47 @@ export async function traceCommand(file: string, options: TraceCommandOptions): 
   const { locateFaults, readDesign } = await import('../../design/read-design.js');
   const reading = await readDesign(file, { dials: options.dial });
   if (!reading.ok) throw designFault(reading.faults);
-  const startedAt = new Date();
-  const folder = options.files ? (options.out ?? defaultRunFolder(file, startedAt)) : null;
-  if (folder !== null) await checkRunFolder(folder);
+  if (options.files) await checkOutputFolder(options.out);
 
+  const startedAt = new Date();
   const interrupt = listenForInterrupt(() => tell(INTERRUPT_NOTE));
   try {
     const result = await traceReading(reading, options, interrupt.signal);
-    const { keepRun } = await import('../keep-run.js');
-    const record = await keepRun(result, { reading, dials: options.dial, startedAt, folder });
-    if (options.plain) {
-      print(`${JSON.stringify(record)}\n`);
-    } else {
+    const { recordRun } = await import('../record-run.js');
+    const { record, arrays } = recordRun(result, reading, options.dial, startedAt);
+    const show = async (folder: string | null): Promise<void> => {
+      if (options.plain) return showPlain(record, folder);
       const warnings = [...reading.warnings, ...locateFaults(reading, result.warnings)].flatMap(faultLines);
       const style = styleFor(process.stdout.isTTY === true, process.env);
       print(showLedger(record, { count: options.ledger, warnings, folder }, style));
+    };
+    try {
+      await show(options.files ? await keep(record, arrays, options.out) : null);
+    } catch (error) {
+      // The answer is not lost when the disk would not have it.
+      if (error instanceof RunFolderError) await show(null);
+      throw error;
     }
     return result.stopReason === 'interrupted' ? EXIT.interrupted : EXIT.ok;
   } finally {
     interrupt.release();
   }
+}
+
+/** Writes the run and gives back its folder. */
+async function keep(record: RunRecord, arrays: RunArrays, out: string | undefined): Promise<string> {
+  const { runFolderPath } = await import('../../run-folder/run-folder-path.js');
+  const { writeRun } = await import('../../run-folder/write-run.js');
+  const { hash, title } = record.design;
+  const folder = out ?? (await runFolderPath(RESULTS, title, { hash, ...record.run }));
+  await writeRun(folder, record, arrays);
+  return folder;
+}
+
+async function showPlain(record: RunRecord, folder: string | null): Promise<void> {
+  const { nameFiles } = await import('../../run-folder/file-names.js');
+  const { runJson } = await import('../../run-folder/run-json.js');
+  print(runJson(folder === null ? record : nameFiles(record)));
 }
 
 async function traceReading(

@@ -45,7 +45,10 @@ function outputLines(figures: Figures, style: TerminalStyle): string[] {
       withUnit(figures.luminousFlux, 'lm', style),
       after(withUnit(figures.luminousEfficacyOptical, 'lm', style), ' per pump W'),
     ]),
-    after(withUnit(figures.luminousEfficacyWallPlug, 'lm', style), ' per electrical W'),
+    after(
+      withUnit(figures.luminousEfficacyWallPlug, 'lm', style),
+      ` per electrical W${inBrackets(figures.luminousEfficacyWallPlug)}`,
+    ),
     after(withUnit(figures.exitPhotonFraction, '', style), ' exit photons per pump photon'),
   ].filter((line) => line !== null);
 }
@@ -76,9 +79,13 @@ export function withUnit(figure: Figure, unit: string, style: TerminalStyle): st
 }
 
 function scaled(figure: Figure, factor: number, unit: string, style: TerminalStyle): string | null {
-  if (figure.value === null) return null;
+  if (figure.value === null || !Number.isFinite(figure.value)) return null;
   const error = figure.standardError === null ? null : figure.standardError * factor;
   return formatWithError(figure.value * factor, error, unit, style.plusMinus);
+}
+
+function inBrackets(figure: Figure): string {
+  return figure.note ? ` (${safeText(figure.note)})` : '';
 }
 
 function after(text: string | null, tail: string): string | null {

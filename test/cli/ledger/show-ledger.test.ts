@@ -57,8 +57,8 @@ Evenness                              variation  min./mean   mean    peak
   variation: standard deviation over mean, photon noise taken out
 
 Survival    peak absorbed power density 1231 ± 42 W/cm³
-            liquid standing still boils there after 0.1520 ± 0.0050 s (no heat
-              carried away)
+            time to boiling 0.1520 ± 0.0050 s (bath at rest from 20 °C to
+              78.3 °C, no heat carried away)
 
 Warnings    geometries/loom.yaml:4:5: parts.lid — the lid is thinner than its
               window

@@ -1,0 +1,38 @@
+import type { SoundDesign } from '../design/read-design.js';
+import { summariseRun } from '../outcome/summarise-run.js';
+import type { RunArrays } from '../run-folder/run-arrays.js';
+import type { RunRecord } from '../run-folder/run-record.js';
+import type { TraceResult } from '../trace/trace-result.js';
+import { repeatCommand } from './repeat-command.js';
+import { toolVersion } from './tool-version.js';
+
+/**
+ * The record of a run, with what only the command line knows of it.
+ * @param turned dials turned on the command line
+ */
+export function recordRun(
+  result: TraceResult,
+  reading: SoundDesign,
+  turned: Readonly<Record<string, string>>,
+  startedAt: Date,
+): { record: RunRecord; arrays: RunArrays } {
+  const { description, file, text, hash } = reading;
+  const { histories } = result.tallies.moments;
+  return summariseRun(
+    { ...result, warnings: [...reading.warnings.map(withoutPlace), ...result.warnings] },
+    {
+      version: toolVersion(),
+      file,
+      text,
+      hash,
+      dials: Object.fromEntries(description.dials.map((dial) => [dial.name, dial.text])),
+      startedAt,
+      repeat: repeatCommand(file, histories, result.seed, turned),
+    },
+  );
+}
+
+/** The record keeps the design's text, so a fault's path says enough. */
+function withoutPlace({ file: _file, line: _line, column: _column, ...fault }: SoundDesign['warnings'][number]) {
+  return fault;
+}

@@ -1,0 +1,62 @@
+/** The tables of a run folder. Header names carry the unit in plain letters, so that every spreadsheet shows them right. */
+import { type CsvField, csvText } from './csv-text.js';
+import type { AnglesArray, MapArray, SpectraArray } from './run-arrays.js';
+import type { RunRecord } from './run-record.js';
+
+/** A row per cell: the centre of the cell, the value (blank off the face or liquid), and how much face or liquid the cell holds. */
+export function mapCsv({ shape, extentMm, axes, unit, values, measure }: MapArray): string {
+  const [value, size] =
+    unit === 'W/cm²' ? ['irradiance_W_per_cm2', 'area_mm2'] : ['absorbed_power_density_W_per_cm3', 'volume_mm3'];
+  const header = [...axes.map((axis) => `${axis.replaceAll(' ', '_')}_mm`), value, size];
+  return csvText(header, mapRows());
+
+  function* mapRows(): Generator<CsvField[]> {
+    for (let i = 0; i < values.length; i++) {
+      let rest = i;
+      const centre = shape.map((cells, axis) => {
+        const at = rest % cells;
+        rest = (rest - at) / cells;
+        const [low, high] = extentMm[axis];
+        return low + ((at + 0.5) / cells) * (high - low);
+      });
+      yield [...centre, values[i], measure[i]];
+    }
+  }
+}
+
+/** A row per wavelength; a column per spectrum, photons per launched photon per nm. */
+export function spectraCsv({ wavelengthsNm, columns }: SpectraArray): string {
+  const header = ['wavelength_nm', ...columns.map(({ id }) => `${id}_per_nm`)];
+  return csvText(
+    header,
+    Array.from(wavelengthsNm, (nm, i) => [nm, ...columns.map(({ values }) => values[i])]),
+  );
+}
+
+/** A row per direction, at the centre of its cell. */
+export function anglesCsv({ polarCells, azimuthCells, wattsPerSr }: AnglesArray): string {
+  return csvText(
+    ['polar_deg', 'azimuth_deg', 'radiant_intensity_W_per_sr'],
+    Array.from(wattsPerSr, (intensity, i) => {
+      const azimuth = i % azimuthCells;
+      const polar = (i - azimuth) / azimuthCells;
+      return [((polar + 0.5) * 90) / polarCells, ((azimuth + 0.5) * 360) / azimuthCells, intensity];
+    }),
+  );
+}
+
+/** Both ledgers, one under the other; `of` tells which. Fractions of launched photons, or of launched power. */
+export function ledgerCsv({ ledger }: RunRecord): string {
+  const rows = (['photons', 'watts'] as const).flatMap((of) =>
+    ledger[of].map(({ fate, light, where, by, fraction, standardError }) => [
+      of,
+      fate,
+      light,
+      where,
+      by,
+      fraction,
+      standardError,
+    ]),
+  );
+  return csvText(['of', 'fate', 'light', 'where', 'by', 'fraction', 'standard_error'], rows);
+}

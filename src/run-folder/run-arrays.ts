@@ -1,0 +1,36 @@
+/** The arrays of a run: what its folder keeps beside run.json. The outcome stage fills them. */
+
+export interface MapArray {
+  readonly id: string;
+  /** Cells along each axis; value index = iu + nu·(iv + nv·iw). */
+  readonly shape: readonly number[];
+  /** Low and high end along each axis, mm. */
+  readonly extentMm: readonly (readonly [number, number])[];
+  readonly axes: readonly string[];
+  readonly unit: 'W/cm²' | 'W/cm³';
+  /** NaN where the map has no face or liquid. */
+  readonly values: Float64Array;
+  /** Area, mm², or volume, mm³, of the face or liquid inside each cell. */
+  readonly measure: Float64Array;
+}
+
+export interface SpectraArray {
+  readonly wavelengthsNm: Float64Array;
+  /** Photons per launched photon per nm, one value per wavelength. */
+  readonly columns: readonly { readonly id: string; readonly values: Float64Array }[];
+}
+
+export interface AnglesArray {
+  readonly id: string;
+  /** Polar cells of equal width from 0 to 90°, azimuth cells of equal width from 0 to 360°. */
+  readonly polarCells: number;
+  readonly azimuthCells: number;
+  /** Radiant intensity, index polar·azimuthCells + azimuth. */
+  readonly wattsPerSr: Float64Array;
+}
+
+export interface RunArrays {
+  readonly maps: readonly MapArray[];
+  readonly spectra: SpectraArray;
+  readonly angles: readonly AnglesArray[];
+}

@@ -1,0 +1,41 @@
+import { lstat } from 'node:fs/promises';
+import { join } from 'node:path';
+import { fileSystemReason, isFileSystemError, RunFolderError } from './run-folder-error.js';
+import { slug } from './slug.js';
+
+/** What tells the runs of a design apart. */
+export interface RunIdentity {
+  /** SHA-256 of the design text, hex. */
+  readonly hash: string;
+  readonly seed: string;
+  readonly histories: number;
+}
+
+/**
+ * Path of a folder for a run that is not there yet: outRoot/<title>/<hash>-seed-<seed>-<histories>, with -2, -3, … where runs alike were kept
+ * before. Makes nothing.
+ * @throws RunFolderError when the place cannot be looked at
+ */
+export async function runFolderPath(
+  outRoot: string,
+  title: string,
+  { hash, seed, histories }: RunIdentity,
+): Promise<string> {
+  const design = slug(title, 'design');
+  const run = `${slug(hash.slice(0, 8), 'design')}-seed-${slug(seed, 'other')}-${slug(String(histories), 'all')}`;
+  for (let copy = 1; ; copy++) {
+    const path = join(outRoot, design, copy === 1 ? run : `${run}-${copy}`);
+    if (!(await exists(path))) return path;
+  }
+}
+
+async function exists(path: string): Promise<boolean> {
+  try {
+    await lstat(path);
+    return true;
+  } catch (error) {
+    if (!isFileSystemError(error)) throw error;
+    if (error.code === 'ENOENT') return false;
+    throw new RunFolderError('write', path, fileSystemReason(error), 'Name another folder.', error);
+  }
+}
