@@ -1,4 +1,4 @@
-import { mkdir, readdir, rm, rmdir, writeFile } from 'node:fs/promises';
+import { mkdir, readdir, rm, rmdir, stat, writeFile } from 'node:fs/promises';
 import { dirname, join, resolve } from 'node:path';
 import { fileSystemReason, isFileSystemError, RunFolderError } from '../run-folder/run-folder-error.js';
 
@@ -20,16 +20,34 @@ export async function checkOutputFolder(out: string | undefined): Promise<void> 
       'Name a new folder with --out.',
     );
   }
-  let outermost: string | undefined;
+  const made: string[] = [];
   try {
-    outermost = await mkdir(folder, { recursive: true });
+    for (const missing of await missingFolders(folder)) {
+      await mkdir(missing);
+      made.unshift(missing);
+    }
     const probe = join(folder, `.can-write-${process.pid}`);
     await writeFile(probe, 'x', { flag: 'wx' });
     await rm(probe);
   } catch (error) {
     throw unwritable(folder, error);
   } finally {
-    if (outermost !== undefined) await removeEmpty(folder, outermost);
+    // Innermost first; one that somebody has put something in stays.
+    for (const path of made) await rmdir(path).catch(() => undefined);
+  }
+}
+
+/** Folders to make, outermost first. Node's own recursive mkdir never returns where the system refuses with ENOENT, as in /proc. */
+async function missingFolders(folder: string): Promise<string[]> {
+  const missing: string[] = [];
+  for (let at = resolve(folder); ; at = dirname(at)) {
+    try {
+      await stat(at);
+      return missing;
+    } catch (error) {
+      if (!isFileSystemError(error) || error.code !== 'ENOENT' || dirname(at) === at) throw error;
+      missing.unshift(at);
+    }
   }
 }
 
@@ -39,18 +57,6 @@ async function entriesOf(folder: string): Promise<string[]> {
   } catch (error) {
     if (isFileSystemError(error) && error.code === 'ENOENT') return [];
     throw unwritable(folder, error);
-  }
-}
-
-/** Takes away the folders just made, innermost first, unless somebody has put something in. */
-async function removeEmpty(folder: string, outermost: string): Promise<void> {
-  for (let at = resolve(folder); ; at = dirname(at)) {
-    try {
-      await rmdir(at);
-    } catch {
-      return;
-    }
-    if (at === resolve(outermost) || dirname(at) === at) return;
   }
 }
 

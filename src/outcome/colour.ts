@@ -12,7 +12,12 @@ export function dominantWavelength(x: number, y: number): number {
   const dx = x - 1 / 3;
   const dy = y - 1 / 3;
   if (Math.hypot(dx, dy) < 1e-6) return Number.NaN;
-  const locus = observerTable().map(({ nm, xyz: [a, b, c] }) => ({ nm, x: a / (a + b + c), y: b / (a + b + c) }));
+  const locus = observerTable().map(({ nm, xyz: [a, b, c] }) => ({
+    nm,
+    sum: a + b + c,
+    x: a / (a + b + c),
+    y: b / (a + b + c),
+  }));
   // Beyond 700 nm the locus stands still but for rounding.
   const usable = locus.filter(({ nm }) => nm >= 380 && nm <= 700);
   const side = (p: { x: number; y: number }) => dx * (p.y - 1 / 3) - dy * (p.x - 1 / 3);
@@ -26,7 +31,10 @@ export function dominantWavelength(x: number, y: number): number {
     const px = from.x + (to.x - from.x) * share;
     const py = from.y + (to.y - from.y) * share;
     // The line meets the locus on both sides of E; only the one ahead counts.
-    if (dx * (px - 1 / 3) + dy * (py - 1 / 3) > 0) return from.nm + (to.nm - from.nm) * share;
+    if (dx * (px - 1 / 3) + dy * (py - 1 / 3) <= 0) continue;
+    // Between rows the observer is linear in X, Y, Z: a step along the chord weighs each end by its X + Y + Z.
+    const along = (share * from.sum) / (share * from.sum + (1 - share) * to.sum);
+    return from.nm + (to.nm - from.nm) * along;
   }
   return Number.NaN;
 }

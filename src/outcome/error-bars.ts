@@ -26,6 +26,11 @@ export class ErrorBars {
     return this.#moments.histories;
   }
 
+  /** Whether there are groups enough for errors at all. */
+  get tellErrors(): boolean {
+    return this.#moments.batches >= 2;
+  }
+
   /** Mean per history of the photons (`part` 0) or eV (1) of a slot. */
   slot(slot: number, part: 0 | 1): Estimate {
     const { histories, batches, sum, sumSquares } = this.#moments;
@@ -34,7 +39,7 @@ export class ErrorBars {
     if (batches < 2) return { value, standardError: null };
     const scatter = clampedVariance(sumSquares[at], sum[at] ** 2 / histories, batches);
     if (scatter > 0) return { value, standardError: Math.sqrt(scatter / histories) };
-    // No batch differed from another (never seen, or every time): one event more or less would not have surprised (Poisson).
+    // No batch differed from another (never seen, or every time): see oneEventAtLeast.
     const perEvent = sum[2 * slot] > 0 ? sum[at] / sum[2 * slot] : 1;
     return { value, standardError: Math.abs(perEvent) / histories };
   }
@@ -47,7 +52,7 @@ export class ErrorBars {
   covariance(a: keyof typeof FIGURE, b: keyof typeof FIGURE): number | null {
     const { histories, batches, figureCross } = this.#moments;
     if (batches < 2) return null;
-    const product = (this.mean(a) * this.mean(b)) * histories;
+    const product = this.mean(a) * this.mean(b) * histories;
     return (figureCross[FIGURE[a] * FIGURE_COUNT + FIGURE[b]] - product) / (batches - 1) / histories;
   }
 
@@ -78,6 +83,24 @@ export class ErrorBars {
     const error = Math.sqrt(Math.max(0, variance));
     return { value, standardError: Number.isFinite(error) ? error : null };
   }
+}
+
+/** Scatter below this share of a value is rounding of its sums, not chance. */
+const ROUNDING = 1e-7;
+
+/**
+ * Where no batch differed from another, mostly because a thing was never seen or always, the variance of the batches is zero but certainty is not:
+ * one event more or less among all histories would not have surprised. So the error is that of a Poisson count of one. (After N histories without an event,
+ * its probability is below 3/N with 95 % confidence: "rule of three", Hanley & Lippman-Hand, JAMA 249 (1983) 1743; from memory.)
+ * @param oneEvent what one event in the whole run would add to the value, at most
+ */
+export function oneEventAtLeast<E extends { readonly value: number | null; readonly standardError: number | null }>(
+  estimate: E,
+  oneEvent: number,
+): E {
+  const { value, standardError } = estimate;
+  if (value === null || standardError === null || standardError > ROUNDING * Math.abs(value)) return estimate;
+  return { ...estimate, standardError: oneEvent };
 }
 
 /** Differences of near equal sums may come out a rounding below zero. */

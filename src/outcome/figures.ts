@@ -3,7 +3,7 @@ import type { Figure, FigureName } from '../run-folder/run-record.js';
 import type { TraceResult } from '../trace/trace-result.js';
 import { MAXIMUM_LUMINOUS_EFFICACY_LM_PER_W } from '../units/constants.js';
 import { chromaticityX, chromaticityY, dominantWavelength } from './colour.js';
-import { ErrorBars } from './error-bars.js';
+import { ErrorBars, oneEventAtLeast } from './error-bars.js';
 import { mapEvenness } from './map-evenness.js';
 import type { MapField } from './map-field.js';
 import { peakDensity, timeToBoiling } from './peak-density.js';
@@ -15,16 +15,28 @@ export function runFigures(result: TraceResult, fields: readonly MapField[]): Re
   const pumpWatts = description.pumps.reduce((sum, { power }) => sum + power, 0);
   const electrical = electricalPower(result);
   const exit = (f: (...means: number[]) => number, unit: string) => colourFigure(bars, f, unit);
+  // One event carries a pump photon's energy at most (seen with ȳ at most 1).
   const share = (of: 'exitEnergy' | 'leakEnergy' | 'exitY', factor: number, unit: string): Figure => ({
-    ...bars.propagate([of, 'launchedEnergy'], (part, all) => (factor * part) / all),
+    ...oneEventAtLeast(
+      bars.propagate([of, 'launchedEnergy'], (part, all) => (factor * part) / all),
+      factor / bars.histories,
+    ),
     unit,
   });
-  const perHistory = (of: 'exitPhotons' | 'dyeAbsorptions' | 'reabsorptions' | 'pumpPath' | 'pumpAbsorbed', unit: string) => ({
-    ...bars.propagate([of], (mean) => mean),
+  const mean = (of: 'pumpPath', unit: string): Figure => ({ ...bars.propagate([of], (value) => value), unit });
+  const perHistory = (
+    of: 'exitPhotons' | 'dyeAbsorptions' | 'reabsorptions' | 'pumpAbsorbed',
+    unit: string,
+  ): Figure => ({
+    ...oneEventAtLeast(
+      bars.propagate([of], (value) => value),
+      1 / bars.histories,
+    ),
     unit,
   });
   const lumens = MAXIMUM_LUMINOUS_EFFICACY_LM_PER_W;
-  return {
+  const dark = bars.mean('exitPhotons') > 0 ? undefined : NO_OUTPUT;
+  const figures: Record<FigureName, Figure> = {
     exitPhotonFraction: perHistory('exitPhotons', 'photons per pump photon'),
     opticalEfficiency: share('exitEnergy', 1, 'W/W'),
     exitPower: share('exitEnergy', pumpWatts, 'W'),
@@ -33,25 +45,55 @@ export function runFigures(result: TraceResult, fields: readonly MapField[]): Re
     luminousEfficacyWallPlug:
       electrical.watts === null
         ? { value: null, standardError: null, unit: 'lm/W', note: electrical.note }
-        : { ...share('exitY', (lumens * pumpWatts) / electrical.watts, 'lm/W'), note: electrical.note },
-    chromaticityX: exit(chromaticityX, ''),
-    chromaticityY: exit(chromaticityY, ''),
-    dominantWavelength: exit((x, y, z) => dominantWavelength(chromaticityX(x, y, z), chromaticityY(x, y, z)), 'nm'),
-    meanExitWavelength: { ...bars.propagate(['exitWavelength', 'exitPhotons'], (sum, n) => sum / n), unit: 'nm' },
+        : noted(share('exitY', (lumens * pumpWatts) / electrical.watts, 'lm/W'), electrical.note),
+    chromaticityX: noted(exit(chromaticityX, ''), dark),
+    chromaticityY: noted(exit(chromaticityY, ''), dark),
+    dominantWavelength: dominant(bars, dark),
+    meanExitWavelength: noted(
+      { ...bars.propagate(['exitWavelength', 'exitPhotons'], (sum, n) => sum / n), unit: 'nm' },
+      dark,
+    ),
     blueLeak: share('leakEnergy', pumpWatts, 'W'),
     blueLeakFraction: share('leakEnergy', 1, 'W/W'),
     ...evennessFigures(fields),
     ...densityFigures(result, fields),
     absorptionsPerHistory: perHistory('dyeAbsorptions', 'per pump photon'),
     reabsorptionsPerHistory: perHistory('reabsorptions', 'per pump photon'),
-    meanPumpPath: perHistory('pumpPath', 'mm per pump photon'),
-    meanEmittedPath: {
-      ...bars.propagate(['emittedPath', 'emissions'], (path, n) => path / n),
-      unit: 'mm per emission',
-    },
+    meanPumpPath: mean('pumpPath', 'mm per pump photon'),
+    meanEmittedPath: noted(
+      { ...bars.propagate(['emittedPath', 'emissions'], (path, n) => path / n), unit: 'mm per emission' },
+      bars.mean('emissions') > 0 ? undefined : 'no dye emitted',
+    ),
     pumpAbsorbedFraction: perHistory('pumpAbsorbed', 'of pump photons'),
     pumpPower: { value: pumpWatts, standardError: null, unit: 'W' },
   };
+  return bars.tellErrors ? figures : withoutErrors(figures);
+}
+
+const NO_OUTPUT = 'no light left by the exit';
+
+function noted(figure: Figure, note: string | undefined): Figure {
+  return note === undefined ? figure : { ...figure, note };
+}
+
+/** Says of every figure that has a value, but no error for want of histories, why it has none. */
+function withoutErrors(figures: Record<FigureName, Figure>): Record<FigureName, Figure> {
+  const why = 'too few histories to tell its error';
+  const entries = Object.entries(figures).map(([name, figure]) => {
+    const silent = figure.value !== null && figure.standardError === null && name !== 'pumpPower';
+    return [name, silent ? noted(figure, figure.note === undefined ? why : `${figure.note}; ${why}`) : figure];
+  });
+  return Object.fromEntries(entries) as Record<FigureName, Figure>;
+}
+
+function dominant(bars: ErrorBars, dark: string | undefined): Figure {
+  const figure = colourFigure(
+    bars,
+    (x, y, z) => dominantWavelength(chromaticityX(x, y, z), chromaticityY(x, y, z)),
+    'nm',
+  );
+  if (dark !== undefined) return noted(figure, dark);
+  return noted(figure, figure.value === null ? 'white and purple light have none' : 'against equal-energy white');
 }
 
 function colourFigure(bars: ErrorBars, f: (...means: number[]) => number, unit: string): Figure {
@@ -59,12 +101,14 @@ function colourFigure(bars: ErrorBars, f: (...means: number[]) => number, unit: 
 }
 
 /** Electrical power of all diodes and drivers, W. */
-function electricalPower({ description }: TraceResult): { watts: number | null; note: string } {
+function electricalPower({
+  description,
+}: TraceResult): { watts: number; note?: string } | { watts: null; note: string } {
   const silent = description.pumps.filter(({ wallPlug }) => wallPlug === null).map(({ name }) => name);
   if (silent.length > 0) return { watts: null, note: `no wall-plug efficiency given for ${silent.join(', ')}` };
   const watts = description.pumps.reduce((sum, p) => sum + p.power / ((p.wallPlug ?? 1) * (p.driver ?? 1)), 0);
   const loose = description.pumps.some(({ driver }) => driver === null);
-  return { watts, note: loose ? 'driver losses not counted where no driver efficiency is given' : '' };
+  return loose ? { watts, note: 'driver losses not counted where no driver efficiency is given' } : { watts };
 }
 
 function evennessFigures(fields: readonly MapField[]) {
@@ -76,16 +120,25 @@ function evennessFigures(fields: readonly MapField[]) {
     unit,
     note,
   });
-  const nothing = figure(null, null, '', 'no light left by the exit');
+  const nothing = figure(null, null, '', NO_OUTPUT);
+  const variation = evenness?.variation ?? null;
   return {
     exitUniformityVariation:
-      evenness?.variation == null
+      variation === null
         ? nothing
-        : figure(evenness.variation.value, evenness.variation.standardError, '', 'coefficient of variation, noise taken out'),
+        : figure(
+            variation.value,
+            variation.standardError,
+            '',
+            `coefficient of variation, noise taken out${variation.resolved ? '' : '; not told from perfectly even'}`,
+          ),
     exitUniformityMinOverMean: evenness === null ? nothing : figure(evenness.minOverMean, null, '', evenness.note),
-    exitFlatness: evenness === null ? nothing : figure(evenness.flatness, null, '', `ISO 13694, threshold 10 %, ${evenness.note}`),
+    exitFlatness:
+      evenness === null ? nothing : figure(evenness.flatness, null, '', `ISO 13694, threshold 10 %, ${evenness.note}`),
     exitBeamUniformity:
-      evenness === null ? nothing : figure(evenness.uniformity, null, '', `ISO 13694, threshold 10 %, ${evenness.note}`),
+      evenness === null
+        ? nothing
+        : figure(evenness.uniformity, null, '', `ISO 13694, threshold 10 %, ${evenness.note}`),
   };
 }
 

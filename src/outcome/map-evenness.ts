@@ -1,6 +1,14 @@
 /** Evenness figures of a recorded face map, on cells coarse enough that counting noise does not speak. */
-import type { MapField } from './map-field.js';
-import { coarsen, isoUniformity, mapExtremes, mapMean, type PlaneMap, trueVariation } from './uniformity.js';
+import { cellSize, type MapField, soundness } from './map-field.js';
+import {
+  coarsen,
+  isoUniformity,
+  mapExtremes,
+  mapMean,
+  type PlaneMap,
+  trueVariation,
+  type Variation,
+} from './uniformity.js';
 
 /** Wanted photons per cell for minimum and maximum: 5 % noise. */
 const PHOTONS_PER_CELL = 400;
@@ -8,7 +16,7 @@ const PHOTONS_PER_CELL = 400;
 const FEWEST_CELLS = 4;
 
 export interface Evenness {
-  readonly variation: { readonly value: number; readonly standardError: number } | null;
+  readonly variation: Variation | null;
   readonly minOverMean: number;
   readonly flatness: number;
   readonly uniformity: number;
@@ -21,12 +29,17 @@ export function mapEvenness(field: MapField): Evenness | null {
   if (field.map.shape.length !== 2 || !(field.power > 0)) return null;
   const whole = planeMap(field, field.values);
   const factor = joinFactor(field, whole);
-  const coarse = dropSlivers(coarsen(whole, factor));
+  const size = cellSize(field.map);
+  const joined = coarsen(whole, factor);
+  const coarse = dropSlivers(joined, (cell) => joined.joined[cell] * size);
   const mean = mapMean(coarse);
   const [even, odd] = field.halves;
-  const halfMap = (values: Float64Array) => dropSlivers(planeMap(field, values));
+  const halfMap = (values: Float64Array) => dropSlivers(planeMap(field, values), () => size);
   return {
-    variation: even !== null && odd !== null && sum(even) > 0 && sum(odd) > 0 ? trueVariation(halfMap(even), halfMap(odd)) : null,
+    variation:
+      even !== null && odd !== null && sum(even) > 0 && sum(odd) > 0
+        ? trueVariation(halfMap(even), halfMap(odd))
+        : null,
     minOverMean: mapExtremes(coarse).minimum / mean,
     flatness: isoUniformity(coarse).flatness,
     uniformity: isoUniformity(coarse).uniformity,
@@ -41,9 +54,9 @@ function planeMap({ map }: MapField, values: Float64Array): PlaneMap {
 }
 
 /** Cells of which less than half lies on the face do not count. */
-function dropSlivers(map: PlaneMap): PlaneMap {
-  const full = Math.max(...map.weights);
-  return { ...map, weights: map.weights.map((weight) => (weight >= full / 2 ? weight : 0)) };
+function dropSlivers(map: PlaneMap, size: (cell: number) => number): PlaneMap {
+  const sound = soundness(map.weights, size);
+  return { ...map, weights: map.weights.map((weight, i) => (sound(i) ? weight : 0)) };
 }
 
 function joinFactor({ counts }: MapField, { cellsU, cellsV, weights }: PlaneMap): number {

@@ -1,6 +1,7 @@
 /** Recorded energies -> irradiance or absorbed power density, per half and together. */
-import type { RecordedMap, RunTallies } from '../tallies/run-tallies.js';
+
 import { BATCH_HISTORIES } from '../tallies/batch-tally.js';
+import type { RecordedMap, RunTallies } from '../tallies/run-tallies.js';
 
 /** A map in W/cm² (faces) or W/cm³ (voxels). */
 export interface MapField {
@@ -45,10 +46,7 @@ export function mapField(map: RecordedMap, tallies: RunTallies, pumpWatts: numbe
     map,
     unit: voxels ? 'W/cm³' : 'W/cm²',
     values: field(both, histories),
-    halves: [
-      evenHistories > 0 ? field(even, evenHistories) : null,
-      oddHistories > 0 ? field(odd, oddHistories) : null,
-    ],
+    halves: [evenHistories > 0 ? field(even, evenHistories) : null, oddHistories > 0 ? field(odd, oddHistories) : null],
     counts: both.map((ev) => ev / launchedEv),
     power: (energy * pumpWatts) / (histories * launchedEv),
   };
@@ -56,8 +54,26 @@ export function mapField(map: RecordedMap, tallies: RunTallies, pumpWatts: numbe
 
 /** Cells of which at least half belongs to the face or the liquid; others are too thin to judge evenness by. */
 export function soundCells({ map }: MapField): number[] {
-  const full = Math.max(...map.measure);
+  const size = cellSize(map);
+  const sound = soundness(map.measure, () => size);
   const cells: number[] = [];
-  for (let i = 0; i < map.measure.length; i++) if (map.measure[i] >= full / 2) cells.push(i);
+  for (let i = 0; i < map.measure.length; i++) if (sound(i)) cells.push(i);
   return cells;
+}
+
+/** Size of a whole cell, mm² or mm³, on the map. The face itself may have more in it: the rim of a dome is steep. */
+export function cellSize({ shape, extent }: RecordedMap): number {
+  return extent.reduce((product, [low, high], axis) => (product * (high - low)) / shape[axis], 1);
+}
+
+/**
+ * Tells the cells whose measure is at least half of their size; where no cell is full (a thin plate in wide voxels), half of what the
+ * fullest has.
+ */
+export function soundness(measure: Float64Array, size: (cell: number) => number): (cell: number) => boolean {
+  let fullest = 0;
+  for (let i = 0; i < measure.length; i++) fullest = Math.max(fullest, measure[i] / size(i));
+  // A hair less, for cells that are half on the face but for rounding.
+  const least = (Math.min(fullest, 1) / 2) * (1 - 1e-9);
+  return (cell) => measure[cell] > 0 && measure[cell] / size(cell) >= least;
 }

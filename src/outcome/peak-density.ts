@@ -4,9 +4,13 @@ import type { RunTallies } from '../tallies/run-tallies.js';
 import type { Estimate } from './error-bars.js';
 import { type MapField, soundCells } from './map-field.js';
 
+/** Photons of a voxel whose noise, 5 %, does not decide which voxel is the fullest. */
+const PLENTY = 400;
+
 /**
  * The largest voxel value, W/cm³. The voxel is chosen with one half of the histories and valued with the other, both ways, so that the luckiest
- * voxel is not taken for the hottest.
+ * voxel is not taken for the hottest. Where voxels hold few photons, chance picks one that is not quite the hottest and the value may read low;
+ * `note` then says so.
  */
 export function peakDensity(field: MapField): Estimate & { readonly note?: string } {
   const cells = soundCells(field);
@@ -20,9 +24,11 @@ export function peakDensity(field: MapField): Estimate & { readonly note?: strin
   const first = peakOf(even);
   const second = peakOf(odd);
   const errors = [errorAt(field, first, odd), errorAt(field, second, even)];
+  const photons = (field.counts[first] + field.counts[second]) / 2;
   return {
     value: (odd[first] + even[second]) / 2,
-    standardError: errors.every((error) => error !== null) ? Math.hypot(...(errors as number[])) / 2 : null,
+    standardError: errors.every((error) => error !== null) ? Math.hypot(...errors) / 2 : null,
+    ...(photons < PLENTY ? { note: `from voxels of about ${Math.round(photons)} photons; may read low` } : {}),
   };
 }
 

@@ -90,11 +90,24 @@ export function secondMomentWidths(map: PlaneMap, stepU: number, stepV: number):
   return { u: width(0), v: width(1) };
 }
 
+export interface Variation {
+  readonly value: number;
+  readonly standardError: number;
+  /** false: a perfectly even map would often read as much. */
+  readonly resolved: boolean;
+}
+
+/** The square of a variation must be this many of its standard errors above zero to be told from none. */
+const RESOLVED = 4;
+
 /**
  * Coefficient of variation of the true irradiance: covariance of two independent halves over the product of their means. Noise of one
  * half knows nothing of the other, so it drops out without any assumption about its law.
+ *
+ * What is near normal is the square. The error is the longer side of the square's interval of one standard error, so that it does not shrink where
+ * the square is small and the root steep; many errors away from zero it is that of the delta method.
  */
-export function trueVariation(even: PlaneMap, odd: PlaneMap): { value: number; standardError: number } {
+export function trueVariation(even: PlaneMap, odd: PlaneMap): Variation {
   const meanA = mapMean(even);
   const meanB = mapMean(odd);
   let covariance = 0;
@@ -118,21 +131,29 @@ export function trueVariation(even: PlaneMap, odd: PlaneMap): { value: number; s
   const spread = Math.max(0, covariance);
   const errorOfSquare = Math.sqrt((noise * noise + 2 * noise * spread) / cells);
   const value = Math.sqrt(spread);
-  return { value, standardError: value > Math.sqrt(errorOfSquare) ? errorOfSquare / (2 * value) : Math.sqrt(errorOfSquare) };
+  const standardError = spread > errorOfSquare ? value - Math.sqrt(spread - errorOfSquare) : Math.sqrt(errorOfSquare);
+  return { value, standardError, resolved: spread > RESOLVED * errorOfSquare };
 }
 
-/** Joins cells into blocks by whole factors; the rim keeps what is left over. */
-export function coarsen(map: PlaneMap, factor: number): PlaneMap {
-  const cellsU = Math.ceil(map.cellsU / factor);
-  const cellsV = Math.ceil(map.cellsV / factor);
+/**
+ * Joins cells into blocks of at least `factor` a side; where that does not divide, some blocks are one cell wider, so that no thin rim is left over.
+ * @returns the map, and how many cells (on the face or off it) each block has joined
+ */
+export function coarsen(map: PlaneMap, factor: number): PlaneMap & { readonly joined: Float64Array } {
+  const cellsU = Math.max(1, Math.floor(map.cellsU / factor));
+  const cellsV = Math.max(1, Math.floor(map.cellsV / factor));
   const power = new Float64Array(cellsU * cellsV);
   const weights = new Float64Array(cellsU * cellsV);
+  const joined = new Float64Array(cellsU * cellsV);
   map.values.forEach((value, i) => {
+    const u = i % map.cellsU;
+    const v = (i - u) / map.cellsU;
+    const at = Math.floor((u * cellsU) / map.cellsU) + cellsU * Math.floor((v * cellsV) / map.cellsV);
+    joined[at]++;
     if (!(map.weights[i] > 0)) return;
-    const at = Math.floor((i % map.cellsU) / factor) + cellsU * Math.floor(Math.floor(i / map.cellsU) / factor);
     power[at] += value * map.weights[i];
     weights[at] += map.weights[i];
   });
   const values = power.map((p, i) => (weights[i] > 0 ? p / weights[i] : Number.NaN));
-  return { cellsU, cellsV, values, weights };
+  return { cellsU, cellsV, values, weights, joined };
 }

@@ -4,7 +4,7 @@ import { traceDescription } from '../trace/trace-design.js';
 import type { ProofContext } from './proof.js';
 
 /** Starting threads for fewer histories than this takes longer than tracing them; the results are the same bits. */
-const WORTH_THREADS = 100_000;
+const WORTH_THREADS = 150_000;
 
 /** What both ledgers of every run must close to. */
 const CLOSURE = 1e-12;

@@ -43,4 +43,9 @@ describe('checkOutputFolder', () => {
     });
     expect(await readdir(folder)).toEqual(['file']);
   });
+
+  it.skipIf(process.platform !== 'linux')('refuses a place where the system makes no folders, at once', async () => {
+    await expect(checkOutputFolder('/proc/run')).rejects.toMatchObject({ name: 'RunFolderError' });
+    await expect(checkOutputFolder('/proc/a/b')).rejects.toMatchObject({ name: 'RunFolderError' });
+  });
 });

@@ -1,8 +1,8 @@
 /** Run tallies made by hand, so that what is summed from them can be known beforehand. */
 import {
+  type FateSlot,
   FIGURE,
   FIGURE_COUNT,
-  type FateSlot,
   type Moments,
   type RecordedMap,
   type RunTallies,

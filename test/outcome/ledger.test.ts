@@ -15,7 +15,10 @@ const BATCH = 1000;
 /** 20 batches alike: photons of each slot, and what each brings in eV; launched at 2.5 eV. */
 function tallies(photons: readonly number[], energy: readonly number[]) {
   const batch = { histories: BATCH, photons, energy, figures: { launchedEnergy: 2.5 * BATCH } };
-  return syntheticTallies(SLOTS, Array.from({ length: 20 }, () => batch));
+  return syntheticTallies(
+    SLOTS,
+    Array.from({ length: 20 }, () => batch),
+  );
 }
 
 const sum = (rows: readonly { fraction: number }[]) => rows.reduce((total, { fraction }) => total + fraction, 0);
@@ -25,7 +28,8 @@ describe('ledgers', () => {
   const usual = tallies([0, 100, 600, 300, 0], [0, 250, 1200, 750, 300]);
 
   test('give every fate its share of photons and of watts, output first, then the largest; none of zero', () => {
-    const shares = (rows: ReturnType<typeof photonLedger>) => rows.map(({ fate, light, fraction }) => [fate, light, fraction]);
+    const shares = (rows: ReturnType<typeof photonLedger>) =>
+      rows.map(({ fate, light, fraction }) => [fate, light, fraction]);
     expect(shares(photonLedger(usual))).toEqual([
       ['left-by-exit', 'emitted', 0.6],
       ['lost-in-dye', 'pump', 0.3],

@@ -13,11 +13,14 @@ function tallies(histories: number) {
 }
 
 describe('halves', () => {
-  test.each([1, 1023, 1024, 1025, 2048, 3000, 3072, 5000])('of %i histories are those of even and odd batches', (histories) => {
-    const counted = [0, 0];
-    for (let i = 0; i < histories; i++) counted[Math.floor(i / BATCH_HISTORIES) % 2]++;
-    expect(halfHistories(histories)).toEqual(counted);
-  });
+  test.each([1, 1023, 1024, 1025, 2048, 3000, 3072, 5000])(
+    'of %i histories are those of even and odd batches',
+    (histories) => {
+      const counted = [0, 0];
+      for (let i = 0; i < histories; i++) counted[Math.floor(i / BATCH_HISTORIES) % 2]++;
+      expect(halfHistories(histories)).toEqual(counted);
+    },
+  );
 });
 
 describe('a map in watts', () => {
@@ -25,10 +28,14 @@ describe('a map in watts', () => {
 
   test('irradiance: 1 mm² that takes a tenth of 20 W has 200 W/cm²', () => {
     const launched = 2.5 * histories;
-    const map = syntheticMap('exit', [2, 1], [
-      [launched / 15, 0],
-      [launched / 30, 0],
-    ]);
+    const map = syntheticMap(
+      'exit',
+      [2, 1],
+      [
+        [launched / 15, 0],
+        [launched / 30, 0],
+      ],
+    );
     const field = mapField(map, tallies(histories), 20, 2.5);
     expect(field.unit).toBe('W/cm²');
     expect(field.power).toBeCloseTo(2, 12);

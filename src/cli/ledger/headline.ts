@@ -28,7 +28,7 @@ export function headline(record: RunRecord, style: TerminalStyle): string[] {
     ...(dials.length > 0 ? labelled('Dials', [dials.join(', ')], style) : []),
     ...labelled('Output', outputLines(figures, style), style),
     ...labelled('Colour', colourLines(figures, style), style),
-    ...labelled('Pump leak', leakLines(figures, style), style),
+    ...labelled('Pump leak', leakLines(record, style), style),
   ];
 }
 
@@ -66,7 +66,10 @@ function colourLines(figures: Figures, style: TerminalStyle): string[] {
   ].filter((line) => line !== null);
 }
 
-function leakLines(figures: Figures, style: TerminalStyle): string[] {
+function leakLines({ figures, run }: RunRecord, style: TerminalStyle): string[] {
+  if (figures.blueLeak.value === 0) {
+    return [`no pump light through the exit seen in ${groupedCount(run.histories)} histories`];
+  }
   const power = withUnit(figures.blueLeak, 'W', style);
   const share = scaled(figures.blueLeakFraction, 100, '%', style);
   const line = join(', ', [after(power, ' of pump light through the exit'), share]);

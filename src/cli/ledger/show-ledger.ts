@@ -1,11 +1,10 @@
-import type { LedgerRow, RunRecord } from '../../run-folder/run-record.js';
-import { formatWithError } from '../number-format.js';
+import type { RunRecord } from '../../run-folder/run-record.js';
 import { safeText } from '../safe-text.js';
 import { fitToStyle, type TerminalStyle } from '../terminal-style.js';
 import { evenness } from './evenness.js';
-import { fateWords, groupOf } from './fate-words.js';
 import { headline } from './headline.js';
 import { labelled } from './labelled.js';
+import { largestLosses } from './largest-losses.js';
 import { ledgerTable } from './ledger-table.js';
 import { survival } from './survival.js';
 
@@ -27,7 +26,7 @@ export function showLedger(record: RunRecord, view: LedgerView, style: TerminalS
       style.bold(`Where the ${view.count === 'watts' ? 'watts go' : 'photons go'}, % of the pump light`),
       ...ledgerTable(rows, style),
     ],
-    labelled('Win back', largestLoss(rows, style), style),
+    labelled('To win back', largestLosses(rows), style),
     evenness(record, style),
     survival(record, style),
     labelled('Warnings', view.warnings, { ...style, bold: style.warn }),
@@ -43,18 +42,4 @@ export function showLedger(record: RunRecord, view: LedgerView, style: TerminalS
     .map((section) => section.join('\n'))
     .join('\n\n');
   return `${fitToStyle(text, style)}\n`;
-}
-
-/** The largest loss apart from the Stokes heat, which every re-emission costs. */
-function largestLoss(rows: readonly LedgerRow[], style: TerminalStyle): string[] {
-  const losses = rows.filter((row) => groupOf(row) !== 'output' && row.fate !== 'stokes-heat' && row.fraction > 0);
-  const largest = losses.reduce<LedgerRow | null>(
-    (top, row) => (top && top.fraction >= row.fraction ? top : row),
-    null,
-  );
-  if (largest === null) return [];
-  const where = largest.where === null ? '' : ` at ${safeText(largest.where, 60)}`;
-  const error = largest.standardError === null ? null : 100 * largest.standardError;
-  const share = formatWithError(100 * largest.fraction, error, '%', style.plusMinus);
-  return [`largest loss but Stokes heat: ${safeText(fateWords(largest), 60)}${where} (${largest.light}), ${share}`];
 }

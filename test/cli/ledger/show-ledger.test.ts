@@ -46,8 +46,9 @@ heat in the dye                                         34.57
   not re-emitted: fluorescein cell             pump      5.000 ± 0.050 █▏
 total                                                  100.00
 
-Win back    largest loss but Stokes heat: left elsewhere at cell.front
-              (emitted), 13.040 ± 0.070 %
+To win back 17.6 % not re-emitted: fluorescein
+            13 % left elsewhere at cell.front
+            9.16 % absorbed by aluminium
 
 Evenness                              variation  min./mean   mean    peak
   exit lid.top                            4.2 %       0.81     15    31.2 W/cm²
