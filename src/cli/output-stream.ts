@@ -1,3 +1,5 @@
+import { fileSystemReason } from '../run-folder/run-folder-error.js';
+
 /**
  * Guards standard output and error against readers that went away: a closed pipe is no fault and is left quietly, so
  * that a run still writes its files and keeps its exit status. Any other failure (a full disk behind `>`) is handed on.
@@ -5,7 +7,7 @@
 export function guardStreams(onFailure: (reason: string) => void): void {
   for (const stream of [process.stdout, process.stderr]) {
     stream.on('error', (error: NodeJS.ErrnoException) => {
-      if (error.code !== 'EPIPE' && error.code !== 'ERR_STREAM_DESTROYED') onFailure(error.message);
+      if (error.code !== 'EPIPE' && error.code !== 'ERR_STREAM_DESTROYED') onFailure(fileSystemReason(error));
     });
   }
 }

@@ -95,7 +95,6 @@ export async function runBatches(scene: Scene, plan: BatchPlan): Promise<BatchOu
     clearInterval(timer);
     clearTimeout(deadline);
     plan.signal?.removeEventListener('abort', interrupt);
-    await pool.close();
   }
 }
 

@@ -18,8 +18,20 @@ export function mapCoordinate(scene: Scene, recorder: number, axis: 0 | 1, ray: 
   return px * frame[step] + py * frame[step + 1] + pz * frame[step + 2];
 }
 
-/** Adds one photon to a recorder: its point and direction. */
+/** Adds one photon, by its point and direction, to a recorder and to those that share its face. */
 export function recordCrossing(
+  scene: Scene,
+  tally: GrownTally,
+  recorder: number,
+  half: number,
+  light: number,
+  wavelength: number,
+  ray: Float64Array,
+): void {
+  for (let r = recorder; r >= 0; r = scene.recorderNext[r]) recordOne(scene, tally, r, half, light, wavelength, ray);
+}
+
+function recordOne(
   scene: Scene,
   tally: GrownTally,
   recorder: number,

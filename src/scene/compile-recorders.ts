@@ -61,8 +61,7 @@ export function planRecorders(description: Description, solids: CompiledSolids):
       continue;
     }
     const face = faceNamed(detector.target.face);
-    // A detector on the exit face, or a second one on a face, would only repeat the first.
-    if (face === null || isExit || plans.some((plan) => plan.face === face)) continue;
+    if (face === null || isExit) continue;
     plans.push({ ...common, ...everything, ...faceMap(face, detector.pixels) });
   }
   const pumped = new Set(description.pumps.flatMap(({ aim }) => (aim.kind === 'toward' ? [aim.face] : [])));

@@ -41,7 +41,10 @@ export interface CompiledSolids {
 
 /** Surfaces closer than this share of the design's size are one. */
 const RELATIVE_TOLERANCE = 1e-9;
-/** A free plane stands this far beyond where it was put, so that it never coincides with a face: its light has left the face first. */
+/**
+ * A free plane stands this far beyond where it was put, or a few times as far, so that it never coincides with a face or another plane:
+ * its light has left the face first.
+ */
 const PLANE_CLEARANCE = 1e-6;
 
 export function compileSolids(description: Description, parts: readonly PlacedPart[]): CompiledSolids {
@@ -81,7 +84,9 @@ export function compileSolids(description: Description, parts: readonly PlacedPa
   for (const { name, target } of description.detectors) {
     if (target.kind !== 'plane') continue;
     const normal = snapDirection(normalise(target.normal));
-    const offset = dot(normal, target.at) + PLANE_CLEARANCE * Math.max(1, size / 100);
+    const clearance = PLANE_CLEARANCE * Math.max(1, size / 100);
+    let offset = dot(normal, target.at) + clearance;
+    while (!table.isFree(normal, offset)) offset += clearance;
     planes.set(name, table.add({ kind: 'plane', normal, offset }));
   }
 

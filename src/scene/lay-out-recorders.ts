@@ -23,6 +23,7 @@ type RecorderArrays = Pick<
   | 'recorderSpectrum'
   | 'recorderAngles'
   | 'recorderLights'
+  | 'recorderNext'
   | 'voxelOrigin'
   | 'voxelScale'
   | 'voxelCells'
@@ -87,6 +88,7 @@ export function layOutRecorders(
       recorderMap: sharedInts(mapAt),
       recorderSpectrum: sharedInts(spectrumAt),
       recorderAngles: sharedInts(anglesAt),
+      recorderNext: sharedInts(plans.map((plan, i) => nextOnFace(plans, plan, i))),
       recorderLights: sharedInts(plans.map((p) => (p.countsPump ? 1 : 0) | (p.countsEmitted ? 2 : 0))),
       voxelOrigin: sharedDoubles(voxels.origin),
       voxelScale: sharedDoubles(voxels.cells.map((cells, axis) => cells / voxels.size[axis])),
@@ -101,6 +103,12 @@ export function layOutRecorders(
       angleCells: angles.total(),
     },
   };
+}
+
+/** The next recorder of light leaving through the same face, −1 for none. */
+function nextOnFace(plans: readonly RecorderPlan[], plan: RecorderPlan, at: number): number {
+  if (plan.face === null || plan.what === 'pumped-face') return -1;
+  return plans.findIndex((other, i) => i > at && other.face === plan.face && other.what !== 'pumped-face');
 }
 
 const scaleHalf = ([a, b]: readonly [number, number]): [number, number] => [a / 2, b / 2];

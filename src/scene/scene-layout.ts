@@ -161,6 +161,7 @@ export interface Scene {
   readonly recorderMap: Int32Array; // offset of the map in the maps array
   readonly recorderSpectrum: Int32Array; // offset of its pump spectrum (emitted follows), −1
   readonly recorderAngles: Int32Array; // offset, −1
+  readonly recorderNext: Int32Array; // next recorder of light leaving through the same face, −1
   readonly recorderLights: Int32Array; // bit 0: map counts pump, bit 1: emitted
   readonly voxelOrigin: Float64Array; // 3
   readonly voxelScale: Float64Array; // cells per mm, 3

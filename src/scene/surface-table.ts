@@ -43,6 +43,14 @@ export class SurfaceTable {
     return surface.kind === 'plane' ? this.#addPlane(surface.normal, surface.offset) : this.#addCurve(surface);
   }
 
+  /** Whether no plane of the table lies there yet. */
+  isFree(normal: Vector3, offset: number): boolean {
+    const family = this.#normals.findIndex((other) => length(cross(other, normal)) <= PARALLEL);
+    if (family < 0) return true;
+    const wanted = Math.sign(dot(normal, this.#normals[family])) * offset;
+    return this.#offsets[family].every((other) => Math.abs(other - wanted) > this.tolerance);
+  }
+
   #addPlane(normal: Vector3, offset: number): SurfaceSide {
     const family = this.#familyOf(normal);
     const along = Math.sign(dot(normal, this.#normals[family])) as -1 | 1;

@@ -66,7 +66,7 @@ export const enum FIGURE_PLACE {
   dyeAbsorptions = 10,
   /** Of these, absorptions of light that a dye had emitted. */
   reabsorptions = 11,
-  /** Σ path length, mm, all media. */
+  /** Σ path length, mm, inside parts. */
   pumpPath = 12,
   emittedPath = 13,
   /** Pump photons absorbed by a dye. */
@@ -103,14 +103,14 @@ export interface RecordedMap {
   readonly where: string;
   /** Cells along u, v (and w for voxels); value index = iu + nu·(iv + nv·iw). */
   readonly shape: readonly number[];
-  /** Extent along each axis, mm, low and high, in the frame's own coordinates. */
+  /** Extent along each axis, mm, low and high: from the centre of a flat face or plane, in design coordinates for voxels. */
   readonly extent: readonly (readonly [number, number])[];
   readonly axes: readonly string[];
   /** Sum of photon energies, eV, per cell, by half. */
   readonly energy: readonly [Float64Array, Float64Array];
   /** Area (mm²) or volume (mm³) of each cell that belongs to the face or dyed part; 0 outside it. */
   readonly measure: Float64Array;
-  /** Corner of the map and its unit axes in design coordinates; null for wrapped maps (cylinder sides). */
+  /** Corner of the map (its first cell's outer corner) and its unit axes in design coordinates; null for wrapped maps (cylinder sides). */
   readonly frame: {
     readonly origin: readonly [number, number, number];
     readonly u: readonly [number, number, number];
