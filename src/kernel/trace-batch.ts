@@ -11,6 +11,7 @@ import {
   OWNER_SLOT,
   type Scene,
   SLOT,
+  SPLIT,
   SPREAD,
 } from '../scene/scene-layout.js';
 import { type BatchTally, closeGroup, GROUP_HISTORIES } from '../tallies/batch-tally.js';
@@ -53,7 +54,7 @@ export function traceBatch(
   const others = scene.families > 3 || scene.quadrics > 0;
   const maxAbsorbers = scene.maxAbsorbers;
   const { index, attenuation, absorberCount, absorberShare, dyeYield, dyeSpectrum } = scene;
-  const { energyQuanta, faceSlot, ownerSlot, dyeSlot } = scene;
+  const { energyQuanta, finishSplit, finishA, faceSlot, ownerSlot, dyeSlot } = scene;
   const { bound, neighbour, crossing, medium: regionMedium, owner: regionOwner } = graph;
   const { vector, grown } = tally;
   const { maps, spectra } = grown;
@@ -231,10 +232,16 @@ export function traceBatch(
             if (record >= 0 && entered) {
               const flags = interfaces[record + INTERFACE.flags];
               if (flags === 0 || (flags === FLAG.recordsArrival && light === 1)) {
-                shares[SHARES.index] = n1;
-                shares[SHARES.cosine] = Math.abs(way < 2 ? dx : way < 4 ? dy : dz);
-                splitLight(scene, interfaces, record, wavelength, shares);
-                wall = shares[SHARES.reflected];
+                const finish = interfaces[record + INTERFACE.finish];
+                if (finishSplit[finish] === SPLIT.spectral) {
+                  // Total reflection of what it would pass is left to the long way.
+                  wall = finishA[finish * wavelengths + wavelength];
+                } else {
+                  shares[SHARES.index] = n1;
+                  shares[SHARES.cosine] = Math.abs(way < 2 ? dx : way < 4 ? dy : dz);
+                  splitLight(scene, interfaces, record, wavelength, shares);
+                  wall = shares[SHARES.reflected];
+                }
               }
             }
             walls[way] = wall;

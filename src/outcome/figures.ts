@@ -3,12 +3,12 @@ import type { Figure, FigureName } from '../run-folder/run-record.js';
 import type { TraceResult } from '../trace/trace-result.js';
 import { MAXIMUM_LUMINOUS_EFFICACY_LM_PER_W } from '../units/constants.js';
 import { chromaticityX, chromaticityY, dominantWavelength } from './colour.js';
+import { densityFigures } from './density-figures.js';
 import { ErrorBars, oneEventAtLeast } from './error-bars.js';
-import { mapEvenness } from './map-evenness.js';
+import { evennessFigures } from './evenness-figures.js';
 import type { MapField } from './map-field.js';
-import { peakDensity, timeToBoiling } from './peak-density.js';
 
-/** @param fields all maps of the run. */
+/** @param fields maps of the run; those without area say nothing and may be left out. */
 export function runFigures(result: TraceResult, fields: readonly MapField[]): Record<FigureName, Figure> {
   const { description, tallies } = result;
   const bars = new ErrorBars(tallies);
@@ -55,7 +55,7 @@ export function runFigures(result: TraceResult, fields: readonly MapField[]): Re
     ),
     blueLeak: share('leakEnergy', pumpWatts, 'W'),
     blueLeakFraction: share('leakEnergy', 1, 'W/W'),
-    ...evennessFigures(fields),
+    ...evennessFigures(fields, dark),
     ...densityFigures(result, fields),
     absorptionsPerHistory: perHistory('dyeAbsorptions', 'per pump photon'),
     reabsorptionsPerHistory: perHistory('reabsorptions', 'per pump photon'),
@@ -93,7 +93,9 @@ function dominant(bars: ErrorBars, dark: string | undefined): Figure {
     'nm',
   );
   if (dark !== undefined) return noted(figure, dark);
-  return noted(figure, figure.value === null ? 'white and purple light have none' : 'against equal-energy white');
+  if (figure.value === null) return noted(figure, 'white and purple light have none');
+  const untold = bars.tellErrors && figure.standardError === null;
+  return noted(figure, untold ? 'too near to white or purple to tell its error' : 'against equal-energy white');
 }
 
 function colourFigure(bars: ErrorBars, f: (...means: number[]) => number, unit: string): Figure {
@@ -108,53 +110,5 @@ function electricalPower({
   if (silent.length > 0) return { watts: null, note: `no wall-plug efficiency given for ${silent.join(', ')}` };
   const watts = description.pumps.reduce((sum, p) => sum + p.power / ((p.wallPlug ?? 1) * (p.driver ?? 1)), 0);
   const loose = description.pumps.some(({ driver }) => driver === null);
-  return loose ? { watts, note: 'driver losses not counted where no driver efficiency is given' } : { watts };
-}
-
-function evennessFigures(fields: readonly MapField[]) {
-  const exit = fields.find(({ map }) => map.what === 'exit');
-  const evenness = exit === undefined ? null : mapEvenness(exit);
-  const figure = (value: number | null, standardError: number | null, unit: string, note: string): Figure => ({
-    value,
-    standardError,
-    unit,
-    note,
-  });
-  const nothing = figure(null, null, '', NO_OUTPUT);
-  const variation = evenness?.variation ?? null;
-  return {
-    exitUniformityVariation:
-      variation === null
-        ? nothing
-        : figure(
-            variation.value,
-            variation.standardError,
-            '',
-            `coefficient of variation, noise taken out${variation.resolved ? '' : '; not told from perfectly even'}`,
-          ),
-    exitUniformityMinOverMean: evenness === null ? nothing : figure(evenness.minOverMean, null, '', evenness.note),
-    exitFlatness:
-      evenness === null ? nothing : figure(evenness.flatness, null, '', `ISO 13694, threshold 10 %, ${evenness.note}`),
-    exitBeamUniformity:
-      evenness === null
-        ? nothing
-        : figure(evenness.uniformity, null, '', `ISO 13694, threshold 10 %, ${evenness.note}`),
-  };
-}
-
-function densityFigures({ description, tallies }: TraceResult, fields: readonly MapField[]) {
-  const field = fields.find(({ map }) => map.what === 'absorbed-pump');
-  if (field === undefined || !(field.power > 0)) {
-    const note = 'no pump light was absorbed';
-    return {
-      peakAbsorbedPowerDensity: { value: null, standardError: null, unit: 'W/cm³', note },
-      timeToBoiling: { value: null, standardError: null, unit: 's', note },
-    };
-  }
-  const peak = peakDensity(field);
-  const absorbedEv = field.map.energy.reduce((sum, half) => sum + half.reduce((a, b) => a + b, 0), 0);
-  return {
-    peakAbsorbedPowerDensity: { ...peak, unit: 'W/cm³' },
-    timeToBoiling: { ...timeToBoiling(peak, description, tallies, absorbedEv), unit: 's' },
-  };
+  return loose ? { watts, note: 'drivers of no stated efficiency counted as lossless' } : { watts };
 }

@@ -24,7 +24,7 @@ export interface Evenness {
   readonly note: string;
 }
 
-/** null for a map without light or with voxels. */
+/** null for voxels, and for a map without light on sound cells. */
 export function mapEvenness(field: MapField): Evenness | null {
   if (field.map.shape.length !== 2 || !(field.power > 0)) return null;
   const whole = planeMap(field, field.values);
@@ -33,13 +33,12 @@ export function mapEvenness(field: MapField): Evenness | null {
   const joined = coarsen(whole, factor);
   const coarse = dropSlivers(joined, (cell) => joined.joined[cell] * size);
   const mean = mapMean(coarse);
+  if (!(mean > 0)) return null;
   const [even, odd] = field.halves;
   const halfMap = (values: Float64Array) => dropSlivers(planeMap(field, values), () => size);
+  const halves = even === null || odd === null ? [] : [halfMap(even), halfMap(odd)];
   return {
-    variation:
-      even !== null && odd !== null && sum(even) > 0 && sum(odd) > 0
-        ? trueVariation(halfMap(even), halfMap(odd))
-        : null,
+    variation: halves.length === 2 && halves.every(isLit) ? trueVariation(halves[0], halves[1]) : null,
     minOverMean: mapExtremes(coarse).minimum / mean,
     flatness: isoUniformity(coarse).flatness,
     uniformity: isoUniformity(coarse).uniformity,
@@ -47,7 +46,7 @@ export function mapEvenness(field: MapField): Evenness | null {
   };
 }
 
-const sum = (values: Float64Array): number => values.reduce((a, b) => (Number.isNaN(b) ? a : a + b), 0);
+const isLit = (map: PlaneMap): boolean => mapMean(map) > 0;
 
 function planeMap({ map }: MapField, values: Float64Array): PlaneMap {
   return { cellsU: map.shape[0], cellsV: map.shape[1], values, weights: map.measure };
@@ -70,5 +69,5 @@ function joinFactor({ counts }: MapField, { cellsU, cellsV, weights }: PlaneMap)
 function evennessNote(coarse: PlaneMap, { counts }: MapField): string {
   const cells = coarse.weights.reduce((n, weight) => n + (weight > 0 ? 1 : 0), 0);
   const noise = 100 / Math.sqrt(Math.max(1, counts.reduce((a, b) => a + b, 0) / cells));
-  return `on ${coarse.cellsU} × ${coarse.cellsV} cells, each with about ${noise.toPrecision(2)} % of counting noise`;
+  return `on ${coarse.cellsU} × ${coarse.cellsV} cells of ${noise.toPrecision(2)} % counting noise`;
 }

@@ -52,6 +52,9 @@ export function mapField(map: RecordedMap, tallies: RunTallies, pumpWatts: numbe
   };
 }
 
+/** false for a map whose every cell missed its face or liquid (a sliver between the sample points): nothing can be said of it. */
+export const hasMeasure = ({ map }: MapField): boolean => map.measure.some((measure) => measure > 0);
+
 /** Cells of which at least half belongs to the face or the liquid; others are too thin to judge evenness by. */
 export function soundCells({ map }: MapField): number[] {
   const size = cellSize(map);

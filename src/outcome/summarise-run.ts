@@ -7,7 +7,7 @@ import { ErrorBars } from './error-bars.js';
 import { runFigures } from './figures.js';
 import { photonLedger, wattLedger } from './ledger.js';
 import { mapEvenness } from './map-evenness.js';
-import { type MapField, mapField } from './map-field.js';
+import { hasMeasure, type MapField, mapField } from './map-field.js';
 
 /** What only the caller knows of a run. */
 export interface RunAbout {
@@ -28,7 +28,8 @@ export function summariseRun(result: TraceResult, about: RunAbout): { record: Ru
   const { tallies, description } = result;
   const bars = new ErrorBars(tallies);
   const pumpWatts = description.pumps.reduce((sum, { power }) => sum + power, 0);
-  const fields = tallies.maps.map((map) => mapField(map, tallies, pumpWatts, bars.mean('launchedEnergy')));
+  const all = tallies.maps.map((map) => mapField(map, tallies, pumpWatts, bars.mean('launchedEnergy')));
+  const fields = all.filter(hasMeasure);
   const record: RunRecord = {
     format: RUN_FORMAT,
     tool: { name: 'stokeswell', version: about.version },
@@ -65,7 +66,7 @@ export function summariseRun(result: TraceResult, about: RunAbout): { record: Ru
       const all = total(counts);
       return { id, unit, from, width, shares: Array.from(counts, (count) => (all > 0 ? count / all : 0)) };
     }),
-    checks: result.warnings,
+    checks: [...result.warnings, ...all.filter((field) => !hasMeasure(field)).map(leftOut)],
     cautions: cautionsFor({
       pumpWatts,
       solvents: partMedia(result).flatMap(({ kind, base }) => (kind === 'liquid' ? [base] : [])),
@@ -81,6 +82,16 @@ function partMedia({ description }: TraceResult) {
 }
 
 const total = (values: Float64Array): number => values.reduce((a, b) => a + b, 0);
+
+function leftOut({ map: { id } }: MapField): RunRecord['checks'][number] {
+  return {
+    code: 'caution',
+    severity: 'warning',
+    path: [],
+    problem: `map ${id} is left out: none of its cells meets what it maps`,
+    suggestion: 'ask for finer cells',
+  };
+}
 
 function mapRecord(field: MapField): MapRecord {
   const { map, unit, values, power } = field;

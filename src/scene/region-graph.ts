@@ -68,8 +68,11 @@ export class RegionGraph {
   interfaces = new Int32Array(64 * INTERFACE.STRIDE);
 
   #regions = 0;
-  #slab: Int32Array;
-  readonly #known = new Map<string, number>();
+  readonly #slab: Int32Array;
+  /** Open-addressing hash of regions by their sides: region + 1, 0 free. */
+  readonly #table: Int32Array;
+  /** Slab of every family, then side of every quadric, of the region being looked up. */
+  readonly #wanted: Int32Array;
   readonly #knownInterfaces = new Map<string, number>();
 
   constructor(readonly scene: Scene) {
@@ -85,6 +88,8 @@ export class RegionGraph {
     this.owner = new Int32Array(this.capacity);
     this.medium = new Int32Array(this.capacity);
     this.#slab = new Int32Array(this.capacity * this.families);
+    this.#table = new Int32Array(2 ** Math.ceil(Math.log2(2 * this.capacity)));
+    this.#wanted = new Int32Array(this.families + this.quadrics);
   }
 
   get regions(): number {
@@ -98,15 +103,14 @@ export class RegionGraph {
 
   /** Forgets every region; they are worked out anew when light comes there. Results do not depend on it. */
   forget(): void {
-    this.#known.clear();
+    this.#table.fill(0);
     this.#regions = 0;
   }
 
   /** Region of a starting point; on a surface, the side the direction leads to. */
   locate(x: number, y: number, z: number, dx: number, dy: number, dz: number): number {
     const { scene } = this;
-    const slabs: number[] = [];
-    const sides: number[] = [];
+    const wanted = this.#wanted;
     for (let f = 0; f < this.families; f++) {
       const nx = scene.familyNormal[3 * f];
       const ny = scene.familyNormal[3 * f + 1];
@@ -118,7 +122,7 @@ export class RegionGraph {
         const beyond = at - scene.planeOffset[i];
         if (beyond > TIE || (beyond >= -TIE && forward)) slab++;
       }
-      slabs.push(slab);
+      wanted[f] = slab;
     }
     for (let q = 0; q < this.quadrics; q++) {
       const c = q * QUADRIC_STRIDE;
@@ -127,9 +131,9 @@ export class RegionGraph {
       const ahead = quadricValue(scene.quadric, c, x + h * dx, y + h * dy, z + h * dz);
       // q is about 2·radius·distance near its surface.
       const reach = TIE * quadricScale(scene.quadric, c, x, y, z);
-      sides.push((Math.abs(value) > reach ? value : ahead) > 0 ? 1 : -1);
+      wanted[this.families + q] = (Math.abs(value) > reach ? value : ahead) > 0 ? 1 : -1;
     }
-    return this.#intern(slabs, sides);
+    return this.#intern();
   }
 
   /** Whether a point lies well inside a region, so that `locate` would return it. */
@@ -152,45 +156,64 @@ export class RegionGraph {
   resolve(region: number, way: number): number {
     const at = region * this.ways + way;
     if (this.crossing[at] !== CROSSING.unknown) return this.crossing[at];
-    const slabs = Array.from(this.#slab.subarray(region * this.families, (region + 1) * this.families));
-    const sides = Array.from(this.side.subarray(region * this.quadrics, (region + 1) * this.quadrics));
+    const wanted = this.#wanted;
+    for (let f = 0; f < this.families; f++) wanted[f] = this.#slab[region * this.families + f];
+    for (let q = 0; q < this.quadrics; q++) wanted[this.families + q] = this.side[region * this.quadrics + q];
     let surface: number;
     if (way < 2 * this.families) {
       const family = way >> 1;
       const up = way & 1;
-      surface = this.scene.familyStart[family] + slabs[family] - (up ? 0 : 1);
-      slabs[family] += up ? 1 : -1;
+      surface = this.scene.familyStart[family] + wanted[family] - (up ? 0 : 1);
+      wanted[family] += up ? 1 : -1;
     } else {
       const q = way - 2 * this.families;
       surface = this.scene.planeOffset.length + q;
-      sides[q] = -sides[q];
+      wanted[this.families + q] *= -1;
     }
-    const beyond = this.#intern(slabs, sides);
+    const beyond = this.#intern();
     this.neighbour[at] = beyond;
     this.crossing[at] = this.#interface(region, beyond, surface);
     return this.crossing[at];
   }
 
-  #intern(slabs: readonly number[], sides: readonly number[]): number {
-    const key = `${slabs.join(',')}|${sides.join(',')}`;
-    const known = this.#known.get(key);
-    if (known !== undefined) return known;
+  /** Number of the region with the wanted sides; a new one if light has not been there. */
+  #intern(): number {
+    const wanted = this.#wanted;
+    const mask = this.#table.length - 1;
+    // FNV-1a over the sides.
+    let hash = 0x811c9dc5;
+    for (let i = 0; i < wanted.length; i++) hash = Math.imul(hash ^ wanted[i], 0x01000193);
+    let cell = (hash ^ (hash >>> 15)) & mask;
+    for (; this.#table[cell] !== 0; cell = (cell + 1) & mask) {
+      if (this.#isWanted(this.#table[cell] - 1)) return this.#table[cell] - 1;
+    }
     if (this.#regions >= this.capacity) throw new RangeError('more regions in one history than the graph can hold');
     const region = this.#regions++;
-    this.#known.set(key, region);
-    this.#slab.set(slabs, region * this.families);
-    this.side.set(sides, region * this.quadrics);
-    slabs.forEach((slab, f) => {
+    this.#table[cell] = region + 1;
+    for (let f = 0; f < this.families; f++) {
+      const slab = wanted[f];
       const start = this.scene.familyStart[f];
       const count = this.scene.familyStart[f + 1] - start;
       const b = 2 * (region * this.families + f);
+      this.#slab[region * this.families + f] = slab;
       this.bound[b] = slab > 0 ? this.scene.planeOffset[start + slab - 1] : Number.NEGATIVE_INFINITY;
       this.bound[b + 1] = slab < count ? this.scene.planeOffset[start + slab] : Number.POSITIVE_INFINITY;
-    });
+    }
+    for (let q = 0; q < this.quadrics; q++) this.side[region * this.quadrics + q] = wanted[this.families + q];
     this.crossing.fill(CROSSING.unknown, region * this.ways, (region + 1) * this.ways);
     this.owner[region] = this.#ownerOf(region);
     this.medium[region] = this.scene.ownerMedium[this.owner[region]];
     return region;
+  }
+
+  #isWanted(region: number): boolean {
+    for (let f = 0; f < this.families; f++) {
+      if (this.#slab[region * this.families + f] !== this.#wanted[f]) return false;
+    }
+    for (let q = 0; q < this.quadrics; q++) {
+      if (this.side[region * this.quadrics + q] !== this.#wanted[this.families + q]) return false;
+    }
+    return true;
   }
 
   #ownerOf(region: number): number {

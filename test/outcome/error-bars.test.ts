@@ -57,6 +57,20 @@ describe('standard error of a mean', () => {
     expect(Math.abs(covered / repeats - 0.95)).toBeLessThan(4 * Math.sqrt((0.95 * 0.05) / repeats));
   });
 
+  test('at the fewest batches, 16 of 1024, ±1.96 of it covers 90 to 99 % of 400 runs (seeds error-bars-3/0 to 399)', () => {
+    // Binomial law; Student's t with 15 degrees of freedom has 93.1 % within ±1.96.
+    const [p, n, repeats] = [0.3, 1024, 400];
+    let covered = 0;
+    for (let r = 0; r < repeats; r++) {
+      const source = seeded(`error-bars-3/${r}`);
+      const bars = run(Array.from({ length: 16 }, () => batch(n, binomial(n, p, source))));
+      const { value, standardError } = bars.slot(0, 0);
+      if (Math.abs(value - p) <= 1.96 * (standardError ?? Number.NaN)) covered++;
+    }
+    expect(covered / repeats).toBeGreaterThan(0.9);
+    expect(covered / repeats).toBeLessThan(0.99);
+  });
+
   test('counts histories that move together as one (clusters of equal fate: variance times cluster size; Kish, Survey Sampling, 1965, from memory)', () => {
     // All 50 histories of a batch share one fate: 20 independent events, not 1000.
     const bars = run(Array.from({ length: 20 }, (_, i) => batch(50, i % 2 === 0 ? 50 : 0)));

@@ -1,6 +1,9 @@
 import { describe, expect, test } from 'vitest';
 import { runFigures } from '../../src/outcome/figures.js';
-import { BATCH, exitBatch, PUMP_NM, syntheticResult } from './synthetic-result.js';
+import { mapField } from '../../src/outcome/map-field.js';
+import type { RecordedMap } from '../../src/tallies/run-tallies.js';
+import { syntheticMap } from '../helpers/synthetic-tallies.js';
+import { BATCH, exitBatch, PUMP_NM, pumpEv, syntheticResult } from './synthetic-result.js';
 
 /** 20 batches that differ a little. */
 const batches = (out: number, leak: number, nm: number) =>
@@ -11,9 +14,10 @@ const figuresOf = (...result: Parameters<typeof syntheticResult>) => runFigures(
 
 describe('light as people see it', () => {
   test.each([
-    // 683.002 lm/W at the peak of V(λ), CIE 018:2019; V(520 nm) = 0.7100, V(600 nm) = 0.6310, CIE 15:2004 Table T.4.
+    // 683.002 lm/W at the peak of V(λ), CIE 018:2019; V(450 nm) = 0.0380, V(520 nm) = 0.7100, V(600 nm) = 0.6310, CIE 15:2004 Table T.4.
     [555, 683.002],
     [520, 683.002 * 0.71],
+    [450, 25.954],
     [600, 683.002 * 0.631],
   ])('each watt out at %i nm is %d lm', (nm, lumensPerWatt) => {
     const { luminousFlux, exitPower, luminousEfficacyOptical, pumpPower } = figuresOf(batches(500, 10, nm), {
@@ -93,6 +97,72 @@ describe('figures that are not known say why', () => {
     }
   });
 
+  describe('of maps that cannot be judged', () => {
+    const judged = (map: RecordedMap, out = 500) => {
+      const result = syntheticResult(batches(out, 0, 520));
+      return runFigures(result, [mapField(map, result.tallies, 1, pumpEv)]);
+    };
+    const EVENNESS = [
+      'exitUniformityVariation',
+      'exitUniformityMinOverMean',
+      'exitFlatness',
+      'exitBeamUniformity',
+    ] as const;
+    const dark = [0, 0, 0, 0];
+    const lit = [900, 0, 0, 0];
+
+    test.each([
+      ['no light', syntheticMap('exit', [2, 2], [dark, dark]), 1, /no light on whole cells/],
+      ['no area', syntheticMap('exit', [2, 2], [lit, lit], dark), 500, /no map of the exit/],
+      ['light on slivers only', syntheticMap('exit', [2, 2], [lit, lit], [0.1, 1, 1, 1]), 500, /whole cells/],
+    ] as const)('exit with %s', (_, map, out, why) => {
+      const figures = judged(map, out);
+      for (const name of EVENNESS) {
+        expect.soft(figures[name], name).toMatchObject({ value: null, standardError: null });
+        expect.soft(figures[name].note, name).toMatch(why);
+      }
+    });
+
+    test('nothing out at all is said to be so, map or none', () => {
+      const result = syntheticResult(Array.from({ length: 20 }, () => exitBatch(0, 0, 520)));
+      const map = syntheticMap('exit', [2, 2], [dark, dark]);
+      for (const fields of [[], [mapField(map, result.tallies, 1, pumpEv)]]) {
+        const figures = runFigures(result, fields);
+        for (const name of [...EVENNESS, 'chromaticityX', 'dominantWavelength', 'meanExitWavelength'] as const) {
+          expect.soft(figures[name], name).toMatchObject({ value: null, note: 'no light left by the exit' });
+        }
+      }
+    });
+
+    test('a half without light on whole cells leaves the noise in, and no variation', () => {
+      const sliver = syntheticMap('exit', [2, 2], [[9, 9, 9, 9], lit], [0.1, 1, 1, 1]);
+      const figures = judged(sliver);
+      expect(figures.exitUniformityVariation).toMatchObject({ value: null, note: expect.stringMatching(/too few/) });
+      expect(figures.exitUniformityMinOverMean.value).toBeCloseTo(1, 12);
+    });
+
+    test.each([
+      ['no area', [lit, lit], dark, /no voxel/],
+      ['no light', [dark, dark], [1, 1, 1, 1], /no pump light/],
+      // Each half chooses a voxel in which the other saw nothing.
+      [
+        'one photon in either half',
+        [
+          [2.7, 0, 0, 0],
+          [0, 2.7, 0, 0],
+        ],
+        [1, 1, 1, 1],
+        /too few photons/,
+      ],
+    ] as const)('voxels with %s', (_, halves, measure, why) => {
+      const figures = judged(syntheticMap('absorbed-pump', [2, 2, 1], halves, measure));
+      for (const { value, standardError, note } of [figures.peakAbsorbedPowerDensity, figures.timeToBoiling]) {
+        expect.soft([value, standardError]).toEqual([null, null]);
+        expect.soft(note).toMatch(why);
+      }
+    });
+  });
+
   test('purple has no dominant wavelength', () => {
     const blue = exitBatch(500, 0, 440);
     const red = exitBatch(500, 0, 650);
@@ -101,6 +171,15 @@ describe('figures that are not known say why', () => {
     expect(chromaticityX.value).toBeGreaterThan(0);
     expect(dominantWavelength.value).toBeNull();
     expect(dominantWavelength.note).toMatch(/purple/);
+  });
+
+  test('a dominant wavelength so near to white that a step away has none: no error, and why', () => {
+    // X short of equal-energy white by 1e-5: greenish blue; the step of the propagation lands on white.
+    const figures = { ...exitBatch(500, 0, 520).figures, exitX: 1 - 1e-5, exitY: 1, exitZ: 1 };
+    const near = { ...exitBatch(500, 0, 520), figures };
+    const { dominantWavelength } = figuresOf(Array.from({ length: 20 }, () => near));
+    expect(dominantWavelength.value).toBeGreaterThan(480);
+    expect(dominantWavelength).toMatchObject({ standardError: null, note: expect.stringMatching(/too near to white/) });
   });
 
   test('one group of histories: values, and a note in place of each error', () => {

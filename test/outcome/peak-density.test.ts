@@ -39,6 +39,18 @@ describe('peak density', () => {
     expect(Math.abs(stated / (density(400) / 20) - 1)).toBeLessThan(0.02);
   });
 
+  test('of a voxel the other half saw nothing in: not 0 ± 0 but ± one photon', () => {
+    // Nine photons in the even half choose voxel 0, where the odd half has none; three odd ones choose voxel 1, likewise.
+    const halves = [Float64Array.of(9, 0), Float64Array.of(0, 3)] as const;
+    const { value, standardError, note } = peakDensity(
+      mapField(syntheticMap('absorbed-pump', [2, 1, 1], halves), TALLIES, 1, 1),
+    );
+    expect(value).toBe(0);
+    // One photon of a half is density(2); both halves' errors, averaged.
+    expect(standardError).toBeCloseTo((density(2) * Math.SQRT2) / 2, 12);
+    expect(note).toMatch(/photons/);
+  });
+
   test('says so when voxels hold few photons, or when there is only one half (seed peak-density-3)', () => {
     const source = seeded('peak-density-3');
     expect(peakDensity(field(() => 20, source)).note).toMatch(/photons/);
@@ -95,7 +107,31 @@ describe('time to boiling of still liquid', () => {
     const all = timeToBoiling({ value: 5, standardError: null }, design(water), tallies(98), 98).value ?? 0;
     const some = timeToBoiling({ value: 5, standardError: null }, design(water), tallies(24.5), 98);
     expect(some.value).toBeCloseTo(4 * all, 9);
-    expect(some.note).toContain('25.0 % of the absorbed pump power becomes heat');
+    expect(some.note).toContain('25.0 % of absorbed pump power is heat');
+  });
+
+  test('light that heats a clear jacket does not heat the dyed liquid', () => {
+    const jacket = [...SLOTS, slot('absorbed-by-solvent', 'pump', 'jacket', 'water')];
+    const run = syntheticTallies(jacket, [
+      { histories: 100, photons: [0, 0, 0, 0, 0, 0], energy: [0, 49, 24.5, 24.5, 2, 500] },
+    ]);
+    const alone = timeToBoiling({ value: 5, standardError: null }, design(water), tallies(98), 98);
+    expect(timeToBoiling({ value: 5, standardError: null }, design(water), run, 98)).toEqual(alone);
+  });
+
+  test('of two dyed liquids, the one that boils sooner', () => {
+    const one = design(water);
+    const other = design(ethanol);
+    const spirit = [...other.media.values()].find(({ dyes }) => dyes.length > 0);
+    if (spirit === undefined) throw new Error('no dyed liquid');
+    const both = {
+      ...one,
+      media: new Map([...one.media, ['spirit', { ...spirit, name: 'spirit', base: 'spirit' }]]),
+      parts: [...one.parts, part('core', { kind: 'box', size: [0.5, 0.5, 0.5] }, 'spirit')],
+    };
+    const { value, note } = timeToBoiling({ value: 5, standardError: null }, both, tallies(98), 98);
+    expect(Math.abs((value ?? 0) / ((78.42 - 25) / 2.6159) - 1)).toBeLessThan(1e-4);
+    expect(note).toMatch(/^spirit at rest/);
   });
 
   test('unknown without heat data or heat', () => {

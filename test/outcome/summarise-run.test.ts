@@ -3,6 +3,7 @@ import { describe, expect, test } from 'vitest';
 import { summariseRun } from '../../src/outcome/summarise-run.js';
 import { runJson } from '../../src/run-folder/run-json.js';
 import { runRecordSchema } from '../../src/run-folder/run-schema.js';
+import type { RecordedMap } from '../../src/tallies/run-tallies.js';
 import { EV_NM } from '../../src/units/constants.js';
 import { syntheticMap } from '../helpers/synthetic-tallies.js';
 import { BATCH, exitBatch, pumpEv, syntheticResult } from './synthetic-result.js';
@@ -26,7 +27,7 @@ const half = (BATCHES / 2) * OUT * (EV_NM / EXIT_NM);
 const wavelengthsNm = Float64Array.of(500, 510, 530, 560);
 
 /** All light at 530 nm, through one of 4 exit cells, into one of 18 × 36 directions. */
-function run() {
+function run(more: readonly RecordedMap[] = []) {
   const exit = syntheticMap(
     'exit',
     [2, 2],
@@ -51,7 +52,7 @@ function run() {
     {
       pump: { power: 60 },
       tallies: {
-        maps: [exit, voxels],
+        maps: [exit, ...more, voxels],
         wavelengthsNm,
         spectra: [
           {
@@ -116,6 +117,27 @@ describe('the record of a run', () => {
     // All 60 W in one of two voxels of 1 mm³.
     expect(record.maps[1].power).toBeCloseTo(60, 10);
     expect(record.figures.peakAbsorbedPowerDensity.value).toBeCloseTo(60_000, 6);
+  });
+
+  test('a map none of whose cells has area is left out, its array too, and a check says so', () => {
+    const lost = {
+      ...syntheticMap(
+        'detector',
+        [2, 1],
+        [
+          [1, 0],
+          [0, 0],
+        ],
+        [0, 0],
+      ),
+      id: 'detector-sliver',
+    };
+    const { record: besides, arrays: kept } = run([lost]);
+    expect(besides.maps).toEqual(record.maps);
+    expect(kept.maps.map(({ id }) => id)).toEqual(record.maps.map(({ id }) => id));
+    expect(besides.checks).toHaveLength(record.checks.length + 1);
+    expect(besides.checks.at(-1)?.problem).toContain('detector-sliver');
+    expect(runRecordSchema.parse(JSON.parse(runJson(besides)))).toEqual(besides);
   });
 
   test('shares of a histogram add up to one, or to nothing when nothing was counted', () => {

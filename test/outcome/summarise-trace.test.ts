@@ -7,6 +7,7 @@ import { afterAll, beforeAll, describe, expect, test } from 'vitest';
 import { summariseRun } from '../../src/outcome/summarise-run.js';
 import { nameFiles } from '../../src/run-folder/file-names.js';
 import { readRun } from '../../src/run-folder/read-run.js';
+import { runRecordSchema } from '../../src/run-folder/run-schema.js';
 import { writeRun } from '../../src/run-folder/write-run.js';
 import { beam, describeDesign, medium, part, plainDye } from '../helpers/describe.js';
 import { traceHere } from '../helpers/trace.js';
@@ -47,6 +48,10 @@ describe('a traced cell (seed summarise-trace)', () => {
     run = await summary();
   });
   afterAll(() => rm(folder, { recursive: true, force: true }));
+
+  test('keeps to the schema of a record', () => {
+    expect(runRecordSchema.safeParse(run.record).error).toBeUndefined();
+  });
 
   test('both ledgers close, and begin with the output of the figures', () => {
     const { ledger, figures } = run.record;

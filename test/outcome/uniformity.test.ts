@@ -2,6 +2,7 @@
  * Flatness, uniformity, steepness and widths against closed forms. Definitions of ISO 13694 and ISO 11146 from memory; each expected value is the
  * exact integral of its profile.
  */
+import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
 import {
   coarsen,
@@ -155,6 +156,30 @@ describe('joining cells', () => {
     const area = (m: PlaneMap) => m.weights.reduce((a, b) => a + b, 0);
     expect(area(joined)).toBeCloseTo(area(map), 9);
     expect(mapMean(joined)).toBeCloseTo(mapMean(map), 12);
+  });
+
+  test('keeps power and area of any map (fast-check)', () => {
+    const cell = fc.record({ value: fc.double({ min: 0, max: 1e3, noNaN: true }), weight: fc.constantFrom(0, 0.3, 1) });
+    const map = fc.tuple(fc.integer({ min: 1, max: 9 }), fc.integer({ min: 1, max: 9 })).chain(([cellsU, cellsV]) =>
+      fc.array(cell, { minLength: cellsU * cellsV, maxLength: cellsU * cellsV }).map((cells) => ({
+        cellsU,
+        cellsV,
+        // Off the face there is no irradiance.
+        values: Float64Array.from(cells, ({ value, weight }) => (weight > 0 ? value : Number.NaN)),
+        weights: Float64Array.from(cells, ({ weight }) => weight),
+      })),
+    );
+    const power = ({ values, weights }: PlaneMap) =>
+      values.reduce((sum, value, i) => (weights[i] > 0 ? sum + value * weights[i] : sum), 0);
+    const area = ({ weights }: PlaneMap) => weights.reduce((a, b) => a + b, 0);
+    fc.assert(
+      fc.property(map, fc.integer({ min: 1, max: 6 }), (whole, factor) => {
+        const joined = coarsen(whole, factor);
+        expect(Math.abs(power(joined) - power(whole))).toBeLessThanOrEqual(1e-12 * power(whole));
+        expect(Math.abs(area(joined) - area(whole))).toBeLessThanOrEqual(1e-12 * area(whole));
+        expect(joined.joined.reduce((a, b) => a + b, 0)).toBe(whole.cellsU * whole.cellsV);
+      }),
+    );
   });
 
   test('leaves no thin rim of left-over cells, which would be dropped as slivers', () => {
