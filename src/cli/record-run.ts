@@ -1,7 +1,7 @@
 import type { SoundDesign } from '../design/read-design.js';
 import { summariseRun } from '../outcome/summarise-run.js';
-import type { RunArrays } from '../run-folder/run-arrays.js';
-import type { RunRecord } from '../run-folder/run-record.js';
+import type { RunArrays } from '../record/run-arrays.js';
+import type { RunRecord } from '../record/run-record.js';
 import type { TraceResult } from '../trace/trace-result.js';
 import { repeatCommand } from './repeat-command.js';
 import { toolVersion } from './tool-version.js';

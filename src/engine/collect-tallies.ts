@@ -3,13 +3,7 @@ import type { CompiledScene } from '../scene/compile-scene.js';
 import { mapMeasure, voxelMeasure } from '../scene/map-measure.js';
 import { CELLS } from '../scene/scene-layout.js';
 import type { GrownTally } from '../tallies/batch-tally.js';
-import type {
-  Histogram,
-  RecordedAngles,
-  RecordedMap,
-  RecordedSpectrum,
-  RunTallies,
-} from '../tallies/run-tallies.js';
+import type { Histogram, RecordedAngles, RecordedMap, RecordedSpectrum, RunTallies } from '../tallies/run-tallies.js';
 import type { BatchFold } from './fold-batches.js';
 
 export function collectTallies(compiled: CompiledScene, fold: BatchFold, grown: GrownTally): RunTallies {
@@ -78,8 +72,20 @@ function spectra({ scene, legend }: CompiledScene, grown: GrownTally): RecordedS
   const cut = (offset: number) => grown.spectra.slice(offset, offset + scene.wavelengths);
   const everywhere: RecordedSpectrum[] = [
     { id: 'launched', what: 'launched', where: null, light: 'pump', photons: cut(scene.spectrumLaunched) },
-    { id: 'absorbed-pump', what: 'absorbed-pump', where: null, light: 'pump', photons: cut(scene.spectrumAbsorbedPump) },
-    { id: 'emitted-in-dye', what: 'emitted-in-dye', where: null, light: 'emitted', photons: cut(scene.spectrumEmitted) },
+    {
+      id: 'absorbed-pump',
+      what: 'absorbed-pump',
+      where: null,
+      light: 'pump',
+      photons: cut(scene.spectrumAbsorbedPump),
+    },
+    {
+      id: 'emitted-in-dye',
+      what: 'emitted-in-dye',
+      where: null,
+      light: 'emitted',
+      photons: cut(scene.spectrumEmitted),
+    },
   ];
   const recorded = legend.recorders.flatMap(({ what, where }, i): RecordedSpectrum[] => {
     const offset = scene.recorderSpectrum[i];

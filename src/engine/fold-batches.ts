@@ -77,7 +77,10 @@ export class BatchFold {
 
   /** Moments with energies in eV. */
   moments(quantumEv: number): { batch: Moments; group: Moments } {
-    return { batch: inElectronvolts(this.#batch, this.#first, quantumEv), group: inElectronvolts(this.#group, this.#first, quantumEv) };
+    return {
+      batch: inElectronvolts(this.#batch, this.#first, quantumEv),
+      group: inElectronvolts(this.#group, this.#first, quantumEv),
+    };
   }
 }
 

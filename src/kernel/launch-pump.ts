@@ -4,7 +4,15 @@ import { sobolUnit } from '../numerics/sobol.js';
 import { BEAM, OUTLINE, PUMP, type Scene } from '../scene/scene-layout.js';
 
 /** Sobol dimensions of a launch; the last one draws the first free path. */
-export const enum LAUNCH { positionU = 0, positionV = 1, directionU = 2, directionV = 3, wavelength = 4, pump = 5, freePath = 6 }
+export enum LAUNCH {
+  positionU = 0,
+  positionV = 1,
+  directionU = 2,
+  directionV = 3,
+  wavelength = 4,
+  pump = 5,
+  freePath = 6,
+}
 
 /** Beyond this the tangent of an angle is no direction any more; a Gaussian far field is cut here, rad. */
 const WIDEST = 1.55;

@@ -2,9 +2,10 @@
  * Distance to the surfaces that are not axis planes. `ray` holds x y z dx dy dz; results go into `hit`: [0] distance, [1] way.
  * Numbers travel in arrays because a call boxes every fraction it is given.
  */
-import type { Scene } from '../scene/scene-layout.js';
-import type { RegionGraph } from '../scene/region-graph.js';
+
 import { QUADRIC_STRIDE } from '../scene/quadric.js';
+import type { RegionGraph } from '../scene/region-graph.js';
+import type { Scene } from '../scene/scene-layout.js';
 
 /** Shortens `hit` where an oblique plane or a quadric of the region comes first. */
 export function nearestOther(
@@ -72,12 +73,7 @@ export function nearestOther(
 }
 
 /** Unit normal of the surface at a point, turned along the direction of travel, into `out` [0..2]. */
-export function travelNormal(
-  scene: Scene,
-  way: number,
-  ray: Float64Array,
-  out: Float64Array,
-): void {
+export function travelNormal(scene: Scene, way: number, ray: Float64Array, out: Float64Array): void {
   let nx: number;
   let ny: number;
   let nz: number;

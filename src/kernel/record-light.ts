@@ -10,8 +10,10 @@ export function mapCoordinate(scene: Scene, recorder: number, axis: 0 | 1, ray: 
   const py = ray[1] - frame[at + 1];
   const pz = ray[2] - frame[at + 2];
   if (axis === 0 && scene.recorderWrap[recorder] === 1) {
-    const u = px * frame[at + RECORDER.axisU] + py * frame[at + RECORDER.axisU + 1] + pz * frame[at + RECORDER.axisU + 2];
-    const v = px * frame[at + RECORDER.axisV] + py * frame[at + RECORDER.axisV + 1] + pz * frame[at + RECORDER.axisV + 2];
+    const u =
+      px * frame[at + RECORDER.axisU] + py * frame[at + RECORDER.axisU + 1] + pz * frame[at + RECORDER.axisU + 2];
+    const v =
+      px * frame[at + RECORDER.axisV] + py * frame[at + RECORDER.axisV + 1] + pz * frame[at + RECORDER.axisV + 2];
     return (Math.atan2(v, u) / (2 * Math.PI) + 0.5) * scene.recorderCells[2 * recorder];
   }
   const step = at + (axis === 0 ? RECORDER.stepU : RECORDER.stepV);

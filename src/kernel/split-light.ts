@@ -5,7 +5,14 @@ import { INTERFACE } from '../scene/region-graph.js';
 import { type Scene, SPLIT, SPREAD } from '../scene/scene-layout.js';
 
 /** Slots of the array `splitLight` reads and fills. */
-export const enum SHARES { reflected = 0, transmitted = 1, index = 2, cosine = 3, indexBeyond = 4, COUNT = 5 }
+export enum SHARES {
+  reflected = 0,
+  transmitted = 1,
+  index = 2,
+  cosine = 3,
+  indexBeyond = 4,
+  COUNT = 5,
+}
 
 /**
  * Reflected and transmitted share at the interface whose record starts at `record`; what is missing to 1 is absorbed there. Takes the

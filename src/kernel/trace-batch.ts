@@ -5,15 +5,7 @@
 import { BLOCK, fillUnits, nextUnit } from '../numerics/random-stream.js';
 import { SOBOL_DIMENSIONS, sobolUnit, stepSobol } from '../numerics/sobol.js';
 import { CROSSING, FLAG, INTERFACE, type RegionGraph } from '../scene/region-graph.js';
-import {
-  DYE_SLOT,
-  FACE_SLOT,
-  OWNER_SLOT,
-  type Scene,
-  SLOT,
-  SPLIT,
-  SPREAD,
-} from '../scene/scene-layout.js';
+import { DYE_SLOT, FACE_SLOT, OWNER_SLOT, type Scene, SLOT, SPLIT, SPREAD } from '../scene/scene-layout.js';
 import { type BatchTally, closeGroup, GROUP_HISTORIES } from '../tallies/batch-tally.js';
 import { FIGURE_PLACE } from '../tallies/run-tallies.js';
 import { closeHistory } from './close-history.js';
@@ -28,13 +20,13 @@ import { SHARES, splitLight } from './split-light.js';
  * something on the path absorbs, that is its fate, as it would be after more turns; where nothing does within as many
  * boundaries again, it is `trapped`.
  */
-const enum LIMIT {
+enum LIMIT {
   closedPath = 20_000,
   /** An event takes at most this many numbers from the block. */
   draws = 8,
 }
 
-const enum WALL {
+enum WALL {
   unknown = -1,
   slow = 0,
 }

@@ -30,7 +30,7 @@ export function seedStream(state: Int32Array, words: Int32Array): void {
 }
 
 /** Numbers per block of `fillUnits`. */
-export const enum BLOCK {
+export enum BLOCK {
   draws = 256,
 }
 

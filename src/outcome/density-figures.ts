@@ -1,5 +1,5 @@
 /** Peak absorbed power density and time to boiling, as headline figures. */
-import type { Figure } from '../run-folder/run-record.js';
+import type { Figure } from '../record/run-record.js';
 import type { TraceResult } from '../trace/trace-result.js';
 import { hasMeasure, type MapField } from './map-field.js';
 import { peakDensity, timeToBoiling } from './peak-density.js';

@@ -1,5 +1,5 @@
 /** How evenly the exit is lit, as headline figures. */
-import type { Figure } from '../run-folder/run-record.js';
+import type { Figure } from '../record/run-record.js';
 import { mapEvenness } from './map-evenness.js';
 import { hasMeasure, type MapField } from './map-field.js';
 

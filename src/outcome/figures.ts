@@ -1,5 +1,5 @@
 /** The headline figures of a run, each with its standard error. */
-import type { Figure, FigureName } from '../run-folder/run-record.js';
+import type { Figure, FigureName } from '../record/run-record.js';
 import type { TraceResult } from '../trace/trace-result.js';
 import { MAXIMUM_LUMINOUS_EFFICACY_LM_PER_W } from '../units/constants.js';
 import { chromaticityX, chromaticityY, dominantWavelength } from './colour.js';

@@ -1,5 +1,5 @@
 /** Tallies -> the two ledgers: every fate with its share of the launched photons, and of the launched watts. */
-import type { LedgerRow } from '../run-folder/run-record.js';
+import type { LedgerRow } from '../record/run-record.js';
 import type { RunTallies } from '../tallies/run-tallies.js';
 import { ErrorBars } from './error-bars.js';
 

@@ -1,7 +1,7 @@
 /** Trace result -> the record a run keeps, and the arrays of its maps and spectra. */
 import { cautionsFor } from '../materials/cautions.js';
-import type { RunArrays } from '../run-folder/run-arrays.js';
-import { type MapRecord, RUN_FORMAT, type RunRecord } from '../run-folder/run-record.js';
+import type { RunArrays } from '../record/run-arrays.js';
+import { type MapRecord, RUN_FORMAT, type RunRecord } from '../record/run-record.js';
 import type { TraceResult } from '../trace/trace-result.js';
 import { ErrorBars } from './error-bars.js';
 import { runFigures } from './figures.js';

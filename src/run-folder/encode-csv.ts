@@ -1,7 +1,8 @@
 /** The tables of a run folder. Header names carry the unit in plain letters, so that every spreadsheet shows them right. */
+
+import type { AnglesArray, MapArray, SpectraArray } from '../record/run-arrays.js';
+import type { RunRecord } from '../record/run-record.js';
 import { type CsvField, csvText } from './csv-text.js';
-import type { AnglesArray, MapArray, SpectraArray } from './run-arrays.js';
-import type { RunRecord } from './run-record.js';
 
 /** A row per cell: the centre of the cell, the value (blank off the face or liquid), and how much face or liquid the cell holds. */
 export function mapCsv({ shape, extentMm, axes, unit, values, measure }: MapArray): string {

@@ -1,5 +1,5 @@
 /** Names of the files of a run folder. Ids hold names of the design, so they are slugged; no two files are named alike. */
-import type { RunRecord } from './run-record.js';
+import type { RunRecord } from '../record/run-record.js';
 import { uniqueSlugs } from './slug.js';
 
 export const RUN_JSON = 'run.json';

@@ -2,9 +2,9 @@
 import { readFile, stat } from 'node:fs/promises';
 import { join } from 'node:path';
 import { z } from 'zod';
+import { RUN_FORMAT, type RunRecord } from '../record/run-record.js';
 import { RUN_JSON } from './file-names.js';
 import { fileSystemReason, isFileSystemError, RunFolderError } from './run-folder-error.js';
-import { RUN_FORMAT, type RunRecord } from './run-record.js';
 import { runRecordSchema } from './run-schema.js';
 
 /** Far above any record (a design text is at most some MB); keeps a wrong file from filling the memory. */

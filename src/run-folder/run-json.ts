@@ -1,4 +1,4 @@
-import type { RunRecord } from './run-record.js';
+import type { RunRecord } from '../record/run-record.js';
 import { runRecordSchema } from './run-schema.js';
 
 /**

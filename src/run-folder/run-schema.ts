@@ -1,10 +1,10 @@
 /** What a run.json must look like, for reading one back and as a JSON Schema for programs that read it. */
 import { z } from 'zod';
 import type { FaultCode } from '../design/fault.js';
+import { type FigureName, RUN_FORMAT, type RunRecord } from '../record/run-record.js';
 import type { Fate } from '../tallies/run-tallies.js';
 import type { StopReason } from '../trace/trace-result.js';
 import { everyName } from './every-name.js';
-import { type FigureName, RUN_FORMAT, type RunRecord } from './run-record.js';
 
 const count = z.int().nonnegative();
 const text = z.string();

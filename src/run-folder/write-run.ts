@@ -1,14 +1,14 @@
 /** Writes the folder of a run, whole or not at all. */
 import { randomUUID } from 'node:crypto';
 import { dirname, join, resolve } from 'node:path';
+import type { RunArrays } from '../record/run-arrays.js';
+import type { RunRecord } from '../record/run-record.js';
 import { type Disk, disk } from './disk.js';
 import { anglesCsv, ledgerCsv, mapCsv, spectraCsv } from './encode-csv.js';
 import { encodeNpy } from './encode-npy.js';
 import { anglesFileNames, LEDGER_CSV, mapFileNames, nameFiles, RUN_JSON, SPECTRA_CSV } from './file-names.js';
-import type { RunArrays } from './run-arrays.js';
 import { fileSystemReason, isFileSystemError, RunFolderError } from './run-folder-error.js';
 import { runJson } from './run-json.js';
-import type { RunRecord } from './run-record.js';
 
 /**
  * Writes run.json, the ledgers, spectra, maps and angles into `folder`, which must not exist or be empty. Everything goes into a temporary

@@ -185,7 +185,10 @@ function exitFaults(
     { code: 'unreachable', severity: 'error', path, problem, found: name, suggestion },
   ];
   if (view.exposed === 0) {
-    return refuse('the exit is buried in another part, so no light can leave there', 'name the face that light crosses last');
+    return refuse(
+      'the exit is buried in another part, so no light can leave there',
+      'name the face that light crosses last',
+    );
   }
   const finish = description.finishes.get(legend.finishNames[Math.max(0, scene.faceFinish[view.face.index])]);
   return finish !== undefined && opaque(finish)

@@ -23,7 +23,10 @@ export function compileFinishes(description: Description, grid: WavelengthGrid):
   const cells = grid.nm.length;
   const clear: FinishDescription = { name: 'clear', path: [], kind: 'clear' };
   const used = new Set(description.parts.flatMap(({ faces }) => faces.map(({ finish }) => finish)));
-  const finishes = [clear, ...[...used].filter((name) => name !== 'clear').map((name) => finishNamed(description, name))];
+  const finishes = [
+    clear,
+    ...[...used].filter((name) => name !== 'clear').map((name) => finishNamed(description, name)),
+  ];
   const compiled: CompiledFinishes = {
     names: finishes.map(({ name }) => name),
     split: [],
@@ -36,7 +39,7 @@ export function compileFinishes(description: Description, grid: WavelengthGrid):
     tableReflectance: [],
     tableTransmittance: [],
   };
-  finishes.forEach((finish, f) => compileFinish(compiled, finish, f, grid));
+  for (const [f, finish] of finishes.entries()) compileFinish(compiled, finish, f, grid);
   return compiled;
 }
 

@@ -1,7 +1,7 @@
 /** Media -> tables over the wavelength grid. Absorber 0 of a medium is the bare solvent or solid; dyes follow. */
 import type { Description, MediumDescription } from '../design/description.js';
-import { cellPhotons, linePhotons, type WavelengthGrid } from './wavelength-grid.js';
 import type { SpectrumPool } from './spectrum-pool.js';
+import { cellPhotons, linePhotons, type WavelengthGrid } from './wavelength-grid.js';
 
 export interface CompiledMedia {
   readonly names: readonly string[];

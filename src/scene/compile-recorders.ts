@@ -3,7 +3,7 @@ import type { Description, Outline, Vector2, Vector3 } from '../design/descripti
 import type { CompiledSolids, SceneFace } from './compile-solids.js';
 import type { FacePatch } from './convex-solid.js';
 import { patchCentre, patchNormal, patchRange } from './face-patch.js';
-import { partFaces, type PlacedPart } from './place-parts.js';
+import { type PlacedPart, partFaces } from './place-parts.js';
 import { add, dot, frameAbout, normalise, scale, snapDirection, subtract } from './vector.js';
 
 export interface RecorderPlan {
@@ -171,7 +171,13 @@ export interface VoxelPlan {
 export function planVoxels(description: Description, parts: readonly PlacedPart[]): VoxelPlan {
   const dyed = parts.filter(({ description: { medium } }) => (description.media.get(medium)?.dyes.length ?? 0) > 0);
   const within = dyed.length > 0 ? dyed : parts;
-  const ranges = ([[1, 0, 0], [0, 1, 0], [0, 0, 1]] as Vector3[]).map((axis) => {
+  const ranges = (
+    [
+      [1, 0, 0],
+      [0, 1, 0],
+      [0, 0, 1],
+    ] as Vector3[]
+  ).map((axis) => {
     const bodies = within.flatMap((part) => partFaces(part).filter(({ hollow }) => !hollow));
     const all = bodies.map(({ face }) => patchRange(face.patch, axis));
     return [Math.min(...all.map(([a]) => a)), Math.max(...all.map(([, b]) => b))] as const;

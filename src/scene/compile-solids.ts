@@ -1,11 +1,10 @@
 /** Parts -> surfaces, convex primitives, pieces and faces as flat arrays. */
-import type { Description } from '../design/description.js';
+import type { Description, Vector3 } from '../design/description.js';
 import type { Fault } from '../design/fault.js';
 import type { FacePatch } from './convex-solid.js';
 import { patchRange } from './face-patch.js';
-import { findFace, type NamedSolid, partFaces, type PlacedPart } from './place-parts.js';
+import { findFace, type NamedSolid, type PlacedPart, partFaces } from './place-parts.js';
 import { type CurveHandle, type PlaneHandle, type SurfaceSide, SurfaceTable } from './surface-table.js';
-import type { Vector3 } from '../design/description.js';
 import { dot, normalise, snapDirection } from './vector.js';
 
 /** One face of one part, in the numbering of the scene. */
@@ -104,7 +103,8 @@ export function compileSolids(description: Description, parts: readonly PlacedPa
     primitiveStart.push(constraintSurface.length);
   }
   const detectorPlanes = new Map<string, { plane: number; sign: 1 | -1 }>();
-  for (const [name, { handle, side }] of planes) detectorPlanes.set(name, { plane: idOf(handle), sign: -side as 1 | -1 });
+  for (const [name, { handle, side }] of planes)
+    detectorPlanes.set(name, { plane: idOf(handle), sign: -side as 1 | -1 });
   return {
     faces,
     normals,
@@ -138,11 +138,7 @@ export function designSize(parts: readonly PlacedPart[]): number {
 }
 
 /** Faults of face names used by exit, detectors and pumps. */
-export function checkFaceReference(
-  parts: readonly PlacedPart[],
-  reference: string,
-  path: Fault['path'],
-): Fault | null {
+export function checkFaceReference(parts: readonly PlacedPart[], reference: string, path: Fault['path']): Fault | null {
   if (findFace(parts, reference) !== null) return null;
   return { code: 'unknown-name', severity: 'error', path, problem: 'no part has this face', found: reference };
 }

@@ -89,8 +89,7 @@ function sidePoint(patch: Extract<FacePatch, { kind: 'side' }>, s: number, t: nu
   const { bottomRadius: r0, topRadius: r1, height } = patch;
   // Inverse of the area below height fraction h: r0 h + (r1 − r0) h²/2.
   const total = (r0 + r1) / 2;
-  const h =
-    Math.abs(r1 - r0) < 1e-12 * total ? s : (Math.sqrt(r0 * r0 + 2 * (r1 - r0) * total * s) - r0) / (r1 - r0);
+  const h = Math.abs(r1 - r0) < 1e-12 * total ? s : (Math.sqrt(r0 * r0 + 2 * (r1 - r0) * total * s) - r0) / (r1 - r0);
   const angle = 2 * Math.PI * t;
   const radial = add(scale(patch.u, Math.cos(angle)), scale(patch.v, Math.sin(angle)));
   const point = add(add(patch.base, scale(patch.axis, h * height)), scale(radial, r0 + (r1 - r0) * h));

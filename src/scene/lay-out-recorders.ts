@@ -1,6 +1,7 @@
 /** Places in the tally arrays for every map, spectrum and angular map. */
-import type { CompiledSolids } from './compile-solids.js';
+
 import type { RecorderPlan, VoxelPlan } from './compile-recorders.js';
+import type { CompiledSolids } from './compile-solids.js';
 import { CELLS, RECORDER, type Scene } from './scene-layout.js';
 import { sharedBytes, sharedDoubles, sharedInts } from './shared-arrays.js';
 import { frameAbout, scale } from './vector.js';
@@ -46,7 +47,11 @@ export function layOutRecorders(
   const wavelengths = grid.nm.length;
   const counter = () => {
     let next = 0;
-    return { take: (cells: number) => (next += cells) - cells, total: () => next };
+    const take = (cells: number) => {
+      next += cells;
+      return next - cells;
+    };
+    return { take, total: () => next };
   };
   const maps = counter();
   const spectra = counter();

@@ -58,13 +58,17 @@ function inOutline(outline: NonNullable<RecorderPlan['outline']>): (u: number, v
   return () => 1;
 }
 
-function inPolygon(plan: RecorderPlan, patch: Extract<FacePatch, { kind: 'polygon' }>): (u: number, v: number) => number {
+function inPolygon(
+  plan: RecorderPlan,
+  patch: Extract<FacePatch, { kind: 'polygon' }>,
+): (u: number, v: number) => number {
   const centre = add(plan.origin, add(scale(plan.u, -plan.extent[0][0]), scale(plan.v, -plan.extent[1][0])));
   const corners = patch.corners.map((corner): Vector2 => {
     const d = subtract(corner, centre);
     return [dot(d, plan.u), dot(d, plan.v)];
   });
-  const side = ([ax, ay]: Vector2, [bx, by]: Vector2, u: number, v: number) => (bx - ax) * (v - ay) - (by - ay) * (u - ax);
+  const side = ([ax, ay]: Vector2, [bx, by]: Vector2, u: number, v: number) =>
+    (bx - ax) * (v - ay) - (by - ay) * (u - ax);
   return (u, v) => {
     const signs = corners.map((corner, i) => side(corner, corners[(i + 1) % corners.length], u, v));
     return signs.every((s) => s >= 0) || signs.every((s) => s <= 0) ? 1 : 0;

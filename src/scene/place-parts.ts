@@ -113,10 +113,7 @@ function leanOn(part: PlacedPart, against: Against, earlier: readonly PlacedPart
   const patch: FacePatch = target.face.patch;
   const goal = add(
     patchCentre(patch),
-    add(
-      scale(out, against.gap),
-      add(scale(patch.u, against.shift[0]), scale(patch.v, against.shift[1])),
-    ),
+    add(scale(out, against.gap), add(scale(patch.u, against.shift[0]), scale(patch.v, against.shift[1]))),
   );
   return subtract(goal, patchCentre(own.face.patch));
 }

@@ -6,12 +6,13 @@
  * faces or be lost on an edge: it always has a next surface that bounds its region, and crossing it leads to exactly one
  * neighbour. Most surfaces continue beyond the part that they bound; crossing them there changes nothing (`CROSSING.pass`).
  */
+
+import { QUADRIC_STRIDE, quadricValue } from './quadric.js';
 import type { Scene } from './scene-layout.js';
 import { SURROUNDINGS } from './scene-layout.js';
-import { quadricValue, QUADRIC_STRIDE } from './quadric.js';
 
 /** Crossings that are no interface. */
-export const enum CROSSING {
+export enum CROSSING {
   /** Nothing changes here. */
   pass = -1,
   /** Not worked out yet. */
@@ -19,7 +20,7 @@ export const enum CROSSING {
 }
 
 /** Integers per interface in `interfaces`; a crossing is the place of its record there. */
-export const enum INTERFACE {
+export enum INTERFACE {
   flags = 0,
   finish = 1,
   mediumBeyond = 2,
@@ -34,7 +35,7 @@ export const enum INTERFACE {
   recorder = 7,
   STRIDE = 8,
 }
-export const enum FLAG {
+export enum FLAG {
   /** The interface is a free plane. */
   freePlane = 1,
   /** Pump light that arrives here is recorded. */
@@ -306,7 +307,8 @@ export class RegionGraph {
     this.#knownInterfaces.set(key, at);
     const arrival = faceIn < 0 ? -1 : scene.faceRecorderArriving[faceIn];
     const spreads = finish >= 0 && (scene.finishReflectSpread[finish] || scene.finishTransmitSpread[finish]);
-    const flags = (detector >= 0 ? FLAG.freePlane : 0) | (arrival >= 0 ? FLAG.recordsArrival : 0) | (spreads ? FLAG.spreads : 0);
+    const flags =
+      (detector >= 0 ? FLAG.freePlane : 0) | (arrival >= 0 ? FLAG.recordsArrival : 0) | (spreads ? FLAG.spreads : 0);
     const recorder = detector >= 0 ? detector : arrival;
     this.interfaces.set([flags, finish, mediumBeyond, ownerBeyond, faceOut, faceIn, faceActing, recorder], at);
     return at;

@@ -1,4 +1,4 @@
-import type { Figure, FigureName, LedgerRow, RunRecord } from '../../src/run-folder/run-record.js';
+import type { Figure, FigureName, LedgerRow, RunRecord } from '../../src/record/run-record.js';
 
 /** A run record made by hand (invented numbers), for tests of what is printed. */
 export function sampleRecord(): RunRecord {

@@ -4,7 +4,7 @@ import { mkdtemp, readdir, readFile, rm, writeFile } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { afterEach, beforeEach, describe, expect, it } from 'vitest';
-import type { RunRecord } from '../../src/run-folder/run-record.js';
+import type { RunRecord } from '../../src/record/run-record.js';
 import { runCli } from './run-cli.js';
 
 let cwd = '';

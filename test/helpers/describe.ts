@@ -88,7 +88,11 @@ export function part(
       turns: more.turns ?? [],
       against: more.against === undefined ? null : { with: null, shift: [0, 0], gap: 0, path, ...more.against },
     },
-    faces: Object.entries(more.faces ?? {}).map(([face, name]) => ({ face, finish: name, path: [...path, 'faces', face] })),
+    faces: Object.entries(more.faces ?? {}).map(([face, name]) => ({
+      face,
+      finish: name,
+      path: [...path, 'faces', face],
+    })),
   };
 }
 
@@ -127,11 +131,7 @@ export function describeDesign(what: {
     dials: [],
     media: named(media),
     surroundings,
-    finishes: named([
-      finish('clear', { kind: 'clear' }),
-      finish('black', { kind: 'black' }),
-      ...(what.finishes ?? []),
-    ]),
+    finishes: named([finish('clear', { kind: 'clear' }), finish('black', { kind: 'black' }), ...(what.finishes ?? [])]),
     parts: what.parts,
     pumps: what.pumps,
     detectors: what.detectors ?? [],

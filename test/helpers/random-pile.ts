@@ -19,9 +19,9 @@ export const shapeArbitrary: fc.Arbitrary<ShapeDescription> = fc.oneof(
     .tuple(size, size, size)
     .map(([a, b, h]): ShapeDescription => ({ kind: 'cone', bottomRadius: a / 2, topRadius: b / 4, height: h })),
   size.map((r): ShapeDescription => ({ kind: 'sphere', radius: r / 2 })),
-  fc.tuple(size, fc.integer({ min: 1, max: 3 })).map(
-    ([r, h]): ShapeDescription => ({ kind: 'cap', radius: r / 2, height: (r * h) / 4 }),
-  ),
+  fc
+    .tuple(size, fc.integer({ min: 1, max: 3 }))
+    .map(([r, h]): ShapeDescription => ({ kind: 'cap', radius: r / 2, height: (r * h) / 4 })),
   fc.tuple(size, size, size).map(
     ([a, b, h]): ShapeDescription => ({
       kind: 'prism',
@@ -37,17 +37,17 @@ export const shapeArbitrary: fc.Arbitrary<ShapeDescription> = fc.oneof(
 );
 const turnArbitrary: fc.Arbitrary<Turn> = fc.record({
   axis: fc.constantFrom('x', 'y', 'z'),
-  angle: fc.oneof(
-    fc.constantFrom(Math.PI / 2, Math.PI, -Math.PI / 2),
-    fc.double({ min: -3, max: 3, noNaN: true }),
-  ),
+  angle: fc.oneof(fc.constantFrom(Math.PI / 2, Math.PI, -Math.PI / 2), fc.double({ min: -3, max: 3, noNaN: true })),
 });
 export const pilePartArbitrary: fc.Arbitrary<PilePart> = fc.record({
   shape: shapeArbitrary,
   at: fc.tuple(place, place, place),
   turns: fc.oneof(fc.constant([]), fc.array(turnArbitrary, { minLength: 1, maxLength: 2 })),
   hole: fc.option(
-    fc.record({ shape: shapeArbitrary, at: fc.tuple(place, place, place).map((p): Vector3 => [p[0] / 4, p[1] / 4, p[2] / 4]) }),
+    fc.record({
+      shape: shapeArbitrary,
+      at: fc.tuple(place, place, place).map((p): Vector3 => [p[0] / 4, p[1] / 4, p[2] / 4]),
+    }),
     { nil: null },
   ),
 });

@@ -4,9 +4,9 @@
 import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
 import type { Description, FinishDescription, Vector3 } from '../../src/design/description.js';
-import { compileScene } from '../../src/scene/compile-scene.js';
-import { traceBatch } from '../../src/kernel/trace-batch.js';
 import { batchStream } from '../../src/engine/trace-share.js';
+import { traceBatch } from '../../src/kernel/trace-batch.js';
+import { compileScene } from '../../src/scene/compile-scene.js';
 import { RegionGraph } from '../../src/scene/region-graph.js';
 import { clearBatch, createBatchTally, grownBytes, grownTally } from '../../src/tallies/batch-tally.js';
 import { FIGURE } from '../../src/tallies/run-tallies.js';
@@ -49,7 +49,10 @@ function pileDesign(pile: readonly PilePart[], pick: readonly number[], clear: b
       beam([0, 0, 9], [0, 0, -1], {
         beam: { kind: 'lambertian', outline: { kind: 'rectangle', size: [10, 10] } },
       }),
-      beam([0.1, 0.2, 0.3], [0.3, -0.5, 0.7], { name: 'inside', beam: { kind: 'lambertian', outline: { kind: 'disc', radius: 3 } } }),
+      beam([0.1, 0.2, 0.3], [0.3, -0.5, 0.7], {
+        name: 'inside',
+        beam: { kind: 'lambertian', outline: { kind: 'disc', radius: 3 } },
+      }),
     ],
     exit: `p0.${exitFace}`,
   });

@@ -1,5 +1,5 @@
-import type { MapArray, RunArrays } from '../../src/run-folder/run-arrays.js';
-import type { RunRecord } from '../../src/run-folder/run-record.js';
+import type { MapArray, RunArrays } from '../../src/record/run-arrays.js';
+import type { RunRecord } from '../../src/record/run-record.js';
 import { sampleRecord } from '../cli/sample-record.js';
 
 /** A small run made by hand (invented numbers), with names a design could hold to do harm. */

@@ -1,9 +1,9 @@
 import { availableParallelism } from 'node:os';
 import type { LocatedFault } from '../../design/fault.js';
 import type { SoundDesign } from '../../design/read-design.js';
-import type { RunArrays } from '../../run-folder/run-arrays.js';
+import type { RunArrays } from '../../record/run-arrays.js';
+import type { RunRecord } from '../../record/run-record.js';
 import { RunFolderError } from '../../run-folder/run-folder-error.js';
-import type { RunRecord } from '../../run-folder/run-record.js';
 import type { TraceResult } from '../../trace/trace-result.js';
 import { CommandFault } from '../command-fault.js';
 import { EXIT, type ExitCode } from '../exit-codes.js';

@@ -1,4 +1,4 @@
-import type { LedgerRow } from '../../run-folder/run-record.js';
+import type { LedgerRow } from '../../record/run-record.js';
 import { GROUPS, type Group, groupOf } from './fate-words.js';
 
 /** Losses below this share are folded together within their group. */

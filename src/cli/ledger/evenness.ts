@@ -1,4 +1,4 @@
-import type { MapRecord, RunRecord } from '../../run-folder/run-record.js';
+import type { MapRecord, RunRecord } from '../../record/run-record.js';
 import { significant } from '../number-format.js';
 import { safeText } from '../safe-text.js';
 import { fitToStyle, type TerminalStyle } from '../terminal-style.js';

@@ -1,4 +1,4 @@
-import type { LedgerRow } from '../../run-folder/run-record.js';
+import type { LedgerRow } from '../../record/run-record.js';
 
 /** Groups of the ledger, in the order they are shown. */
 export const GROUPS = ['output', 'lost pump light', 'lost emitted light', 'heat in the dye'] as const;

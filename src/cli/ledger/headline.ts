@@ -1,4 +1,4 @@
-import type { Figure, FigureName, RunRecord } from '../../run-folder/run-record.js';
+import type { Figure, FigureName, RunRecord } from '../../record/run-record.js';
 import type { StopReason } from '../../trace/trace-result.js';
 import { formatSeconds, formatWithError, groupedCount } from '../number-format.js';
 import { safeText } from '../safe-text.js';

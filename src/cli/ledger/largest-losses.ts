@@ -1,4 +1,4 @@
-import type { LedgerRow } from '../../run-folder/run-record.js';
+import type { LedgerRow } from '../../record/run-record.js';
 import { significant } from '../number-format.js';
 import { safeText } from '../safe-text.js';
 import { fateWords, groupOf } from './fate-words.js';

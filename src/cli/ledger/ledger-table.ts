@@ -1,4 +1,4 @@
-import type { LedgerRow } from '../../run-folder/run-record.js';
+import type { LedgerRow } from '../../record/run-record.js';
 import { roundToError } from '../number-format.js';
 import { safeText } from '../safe-text.js';
 import { fitToStyle, type TerminalStyle } from '../terminal-style.js';

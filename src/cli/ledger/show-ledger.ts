@@ -1,4 +1,4 @@
-import type { RunRecord } from '../../run-folder/run-record.js';
+import type { RunRecord } from '../../record/run-record.js';
 import { safeText } from '../safe-text.js';
 import { fitToStyle, type TerminalStyle } from '../terminal-style.js';
 import { evenness } from './evenness.js';

@@ -1,4 +1,4 @@
-import type { Figure, RunRecord } from '../../run-folder/run-record.js';
+import type { Figure, RunRecord } from '../../record/run-record.js';
 import { safeText } from '../safe-text.js';
 import type { TerminalStyle } from '../terminal-style.js';
 import { withUnit } from './headline.js';

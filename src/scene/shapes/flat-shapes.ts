@@ -38,7 +38,13 @@ export function prismSolid({ outline, height, sides }: Prism): ConvexSolid {
   const y: Vector3 = [0, 1, 0];
   faces.push(
     flatFace('bottom', [0, 0, -1], outline.map(([a, b]): Vector3 => [a, b, low]).reverse(), x, y),
-    flatFace('top', [0, 0, 1], outline.map(([a, b]): Vector3 => [a, b, high]), x, y),
+    flatFace(
+      'top',
+      [0, 0, 1],
+      outline.map(([a, b]): Vector3 => [a, b, high]),
+      x,
+      y,
+    ),
   );
   return { faces };
 }

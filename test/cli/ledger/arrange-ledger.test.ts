@@ -1,7 +1,7 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { arrangeLedger } from '../../../src/cli/ledger/arrange-ledger.js';
-import type { LedgerRow } from '../../../src/run-folder/run-record.js';
+import type { LedgerRow } from '../../../src/record/run-record.js';
 
 const FATES = [
   'missed',

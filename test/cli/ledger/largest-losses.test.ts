@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { largestLosses } from '../../../src/cli/ledger/largest-losses.js';
-import type { LedgerRow } from '../../../src/run-folder/run-record.js';
+import type { LedgerRow } from '../../../src/record/run-record.js';
 
 const row = (fate: LedgerRow['fate'], where: string, by: string | null, fraction: number): LedgerRow => ({
   fate,
