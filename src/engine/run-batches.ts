@@ -1,29 +1,15 @@
 /** Batches in rounds over all threads, until enough histories, precision or time, or until told to stop. */
 import type { Scene } from '../scene/scene-layout.js';
 import { BATCH_HISTORIES, type GrownTally, grownBytes, grownTally } from '../tallies/batch-tally.js';
+import type { BatchPlan, StopReason } from './batch-plan.js';
 import { BatchFold } from './fold-batches.js';
 import { CONTROL, type ShareTask } from './messages.js';
 import { openPool } from './thread-pool.js';
 
-export interface BatchPlan {
-  readonly histories: number;
-  readonly precision: number | null;
-  readonly seconds: number | null;
-  readonly seed: string;
-  readonly threads: number;
-  readonly signal?: AbortSignal;
-  readonly onProgress?: (progress: {
-    histories: number;
-    ofHistories: number;
-    seconds: number;
-    precision: number | null;
-  }) => void;
-}
-
 export interface BatchOutcome {
   readonly fold: BatchFold;
   readonly grown: GrownTally;
-  readonly stopReason: 'histories' | 'precision' | 'time' | 'interrupted';
+  readonly stopReason: StopReason;
   readonly seconds: number;
 }
 
@@ -58,9 +44,9 @@ export async function runBatches(scene: Scene, plan: BatchPlan): Promise<BatchOu
   );
   const fold = new BatchFold(scene.slots);
   const total = Math.ceil(plan.histories / BATCH_HISTORIES);
-  const stopped: { reason: BatchOutcome['stopReason'] } = { reason: 'histories' };
+  const stopped: { reason: StopReason } = { reason: 'histories' };
   let precision: number | null = null;
-  const stop = (reason: BatchOutcome['stopReason']) => {
+  const stop = (reason: StopReason) => {
     if (Atomics.exchange(control, CONTROL.stop, 1) === 0) stopped.reason = reason;
   };
   const interrupt = () => stop('interrupted');
