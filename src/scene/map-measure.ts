@@ -15,19 +15,39 @@ export function mapMeasure(plan: RecorderPlan): Float64Array {
   const stepU = (uHigh - uLow) / cellsU;
   const stepV = (vHigh - vLow) / cellsV;
   const density = areaDensity(plan);
+  // A flat face is convex: a cell with its four corners on it lies on it as a whole.
+  const convex = plan.outline !== null || plan.face?.patch.kind === 'polygon' || plan.face?.patch.kind === 'disc';
   const measure = new Float64Array(cellsU * cellsV);
   for (let iv = 0; iv < cellsV; iv++) {
     for (let iu = 0; iu < cellsU; iu++) {
+      const left = uLow + iu * stepU;
+      const low = vLow + iv * stepV;
+      if (convex && wholeCell(density, left, low, stepU, stepV)) {
+        measure[iu + cellsU * iv] = stepU * stepV;
+        continue;
+      }
       let sum = 0;
       for (let k = 0; k < SAMPLES * SAMPLES; k++) {
-        const u = uLow + (iu + ((k % SAMPLES) + 0.5) / SAMPLES) * stepU;
-        const v = vLow + (iv + (Math.floor(k / SAMPLES) + 0.5) / SAMPLES) * stepV;
+        const u = left + (((k % SAMPLES) + 0.5) / SAMPLES) * stepU;
+        const v = low + ((Math.floor(k / SAMPLES) + 0.5) / SAMPLES) * stepV;
         sum += density(u, v);
       }
       measure[iu + cellsU * iv] = (sum / SAMPLES ** 2) * stepU * stepV;
     }
   }
   return measure;
+}
+
+function wholeCell(
+  density: (u: number, v: number) => number,
+  left: number,
+  low: number,
+  stepU: number,
+  stepV: number,
+): boolean {
+  const corner = (a: number, b: number) => density(left + a * stepU, low + b * stepV) === 1;
+  const inset = 1e-6;
+  return corner(inset, inset) && corner(1 - inset, inset) && corner(inset, 1 - inset) && corner(1 - inset, 1 - inset);
 }
 
 /** True area per map area at (u, v) from the centre of the map; 0 off the face. */

@@ -2,7 +2,7 @@
 import type { Description } from '../design/description.js';
 import { DesignFaults } from '../design/design-faults.js';
 import { collectTallies } from '../engine/collect-tallies.js';
-import { runBatches } from '../engine/run-batches.js';
+import { MOST_HISTORIES, runBatches } from '../engine/run-batches.js';
 import { checkScene } from '../scene/check-scene.js';
 import { compileScene } from '../scene/compile-scene.js';
 import type { TraceOptions, TraceResult } from './trace-result.js';
@@ -21,7 +21,9 @@ export class NothingTraced extends Error {
  * stopped at once; LostHistories on a defect of the program.
  */
 export async function traceDescription(description: Description, options: TraceOptions): Promise<TraceResult> {
-  if (!(options.histories >= 1)) throw new RangeError(`${options.histories} histories; at least 1 is needed`);
+  if (!(options.histories >= 1 && options.histories <= MOST_HISTORIES)) {
+    throw new RangeError(`${options.histories} histories; between 1 and ${MOST_HISTORIES} can be traced`);
+  }
   const { faults } = checkScene(description);
   if (faults.some(({ severity }) => severity === 'error')) throw new DesignFaults(faults);
   const compiled = compileScene(description);
