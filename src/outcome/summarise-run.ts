@@ -119,6 +119,7 @@ function mapRecord(field: MapField): MapRecord {
     minimum,
     maximum,
     variation: evenness?.variation?.value ?? null,
+    variationError: evenness?.variation?.standardError ?? null,
     minOverMean: evenness?.minOverMean ?? null,
   };
 }

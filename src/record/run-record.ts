@@ -67,8 +67,9 @@ export interface MapRecord {
   readonly mean: number;
   readonly minimum: number;
   readonly maximum: number;
-  /** Coefficient of variation with the shot noise taken out, and its standard error. */
+  /** Coefficient of variation with the shot noise taken out, and its standard error: below twice that it is noise. */
   readonly variation: number | null;
+  readonly variationError: number | null;
   readonly minOverMean: number | null;
 }
 

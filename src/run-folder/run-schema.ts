@@ -93,6 +93,7 @@ const map = z
     minimum: z.number(),
     maximum: z.number(),
     variation: z.number().nullable().describe('coefficient of variation, shot noise taken out'),
+    variationError: z.number().nullable().describe('standard error of the coefficient of variation'),
     minOverMean: z.number().nullable(),
   })
   .refine(({ shape, extentMm, axes }) => shape.length === extentMm.length && shape.length === axes.length, {

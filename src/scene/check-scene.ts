@@ -46,6 +46,7 @@ export function checkScene(description: Description): SceneCheck {
     ...views.flatMap(({ face, exposed, clashes }) => finishFaults(compiled, face, exposed, clashes)),
     ...exitFaults(description, compiled, views),
     ...partFaults(description, views),
+    ...coveredFaults(description, compiled, views),
   ];
   return { faults, faces: views.map(({ face, exposed, touches }) => report(compiled, face, exposed, touches)) };
 }
@@ -176,7 +177,7 @@ function finishFaults(
 function exitFaults(
   description: Description,
   { scene, legend }: CompiledScene,
-  views: readonly { readonly face: SceneFace; readonly exposed: number }[],
+  views: readonly { readonly face: SceneFace; readonly exposed: number; readonly touches: readonly string[] }[],
 ): Fault[] {
   const { name, path } = description.exit;
   const view = views.find(({ face }) => face.reference === name);
@@ -191,9 +192,48 @@ function exitFaults(
     );
   }
   const finish = description.finishes.get(legend.finishNames[Math.max(0, scene.faceFinish[view.face.index])]);
+  const inside = view.touches.filter((name) => name !== 'surroundings');
+  if (inside.length > 0) {
+    return [
+      {
+        code: 'caution',
+        severity: 'warning',
+        path,
+        problem: 'the exit touches another part, so light counts as output before it has left the device',
+        found: `${name}, which touches ${inside.join(', ')}`,
+        suggestion: 'name the face that light crosses last',
+      },
+    ];
+  }
   return finish !== undefined && opaque(finish)
     ? refuse('the finish of the exit lets nothing through', `take ${finish.name} off this face, or name another exit`)
     : [];
+}
+
+/** `others` is quickly said of a wall and then shuts it off from the liquid it holds. */
+function coveredFaults(
+  description: Description,
+  { scene, legend }: CompiledScene,
+  views: readonly { readonly face: SceneFace; readonly touches: readonly string[] }[],
+): Fault[] {
+  return views.flatMap(({ face, touches }): Fault[] => {
+    const part = face.part.description;
+    const rest = part.faces.find((entry) => entry.face === '*');
+    if (rest === undefined || part.faces.some((entry) => `${part.name}.${entry.face}` === face.reference)) return [];
+    const finish = description.finishes.get(legend.finishNames[Math.max(0, scene.faceFinish[face.index])]);
+    const neighbours = touches.filter((name) => name !== 'surroundings');
+    if (finish === undefined || !opaque(finish) || neighbours.length === 0) return [];
+    return [
+      {
+        code: 'caution',
+        severity: 'warning',
+        path: rest.path,
+        problem: `${finish.name} on all other faces also shuts this part off from what it touches`,
+        found: `${face.reference}, which touches ${neighbours.join(', ')}`,
+        suggestion: `give that face a finish of its own, such as clear`,
+      },
+    ];
+  });
 }
 
 function opaque(finish: FinishDescription): boolean {

@@ -31,6 +31,8 @@ export interface RecorderPlan {
 }
 
 const LONG_SIDE_CELLS = 40;
+/** Voxels are fewer: each shares the histories with all others, and the peak is only as sure as one of them. */
+const LONG_SIDE_VOXELS = 24;
 
 export function planRecorders(description: Description, solids: CompiledSolids): RecorderPlan[] {
   const plans: RecorderPlan[] = [];
@@ -184,6 +186,6 @@ export function planVoxels(description: Description, parts: readonly PlacedPart[
   });
   const size = ranges.map(([a, b]) => b - a) as unknown as Vector3;
   const long = Math.max(...size);
-  const wanted = size.map((s) => Math.max(8, Math.round((LONG_SIDE_CELLS * s) / long))) as unknown as Vector3;
+  const wanted = size.map((s) => Math.max(8, Math.round((LONG_SIDE_VOXELS * s) / long))) as unknown as Vector3;
   return { origin: ranges.map(([a]) => a) as unknown as Vector3, size, cells: description.defaults.voxels ?? wanted };
 }

@@ -96,6 +96,7 @@ function map(
     minimum: 1,
     maximum: 31.23,
     variation,
+    variationError: variation === null ? null : 0.002,
     minOverMean,
   };
 }

@@ -1,9 +1,14 @@
 /** Text in columns of characters (code points). */
 
-/** Padded on the right, or cut with `ellipsis`, to exactly `width`. */
+/** Padded on the right, or cut in the middle with `ellipsis`, to exactly `width`: the end of a name is its face. */
 export function fitLeft(text: string, width: number, ellipsis: string): string {
   const characters = [...text];
-  if (characters.length > width) return characters.slice(0, width - 1).join('') + ellipsis;
+  if (characters.length > width) {
+    const tail = Math.floor((width - 1) / 2);
+    return (
+      characters.slice(0, width - 1 - tail).join('') + ellipsis + characters.slice(characters.length - tail).join('')
+    );
+  }
   return text + ' '.repeat(width - characters.length);
 }
 

@@ -32,12 +32,20 @@ export function evenness(record: RunRecord, style: TerminalStyle): string[] {
 function mapRow(map: MapRecord, style: TerminalStyle): string {
   const name = fitToStyle(`${MAP_WORDS[map.what] ?? safeText(map.what, 30)} ${safeText(map.where)}`, style);
   const columns = [
-    map.variation === null ? '' : `${significant(100 * map.variation, 2)} %`,
+    variationText(map),
     map.minOverMean === null ? '' : significant(map.minOverMean, 2),
     significant(map.mean, 3),
-    significant(map.maximum, 3),
+    // The largest voxel is mostly the luckiest one; Survival has the honest peak.
+    map.unit === 'W/cm³' ? '' : significant(map.maximum, 3),
   ];
   return `  ${fitLeft(name, NAME_WIDTH - 2, style.unicode ? '…' : '~')}${numbers(columns)} ${map.unit}`;
+}
+
+/** Evenness that cannot be told from noise is given as what it is below, at two standard errors. */
+function variationText({ variation, variationError }: MapRecord): string {
+  if (variation === null) return '';
+  if (variationError === null || variation >= 2 * variationError) return `${significant(100 * variation, 2)} %`;
+  return `< ${significant(100 * (variation + 2 * variationError), 2)} %`;
 }
 
 function numbers(columns: readonly string[]): string {

@@ -53,7 +53,7 @@ To win back 17.6 % not re-emitted: fluorescein
 Evenness                              variation  min./mean   mean    peak
   exit lid.top                            4.2 %       0.81     15    31.2 W/cm²
   pumped face cell.front                   62 %      0.034     15    31.2 W/cm²
-  pump absorbed in dyed parts                                  15    31.2 W/cm³
+  pump absorbed in dyed parts                                  15         W/cm³
   exit after ISO 13694: flatness 0.87, beam uniformity 0.051
   variation: standard deviation over mean, photon noise taken out
 
