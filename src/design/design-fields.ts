@@ -26,7 +26,7 @@ const exit = either<ExitRecord>({
 });
 
 const trace = record('histories, precision, seed, voxels', {
-  histories: optional(count(1, 1e12), 'Number of histories.'),
+  histories: optional(count(1, 2 ** 31 - 1024), 'Number of histories.'),
   precision: optional(
     quantity('fraction', { above: 0, below: 1 }),
     'Relative standard error of the exit fraction at which tracing may stop.',
