@@ -1,6 +1,7 @@
 /** Raw counters + legend -> run tallies: names, units (eV, mm) and the measure of every map cell. */
 import type { CompiledScene } from '../scene/compile-scene.js';
 import { mapMeasure, voxelMeasure } from '../scene/map-measure.js';
+import { RegionGraph } from '../scene/region-graph.js';
 import { CELLS } from '../scene/scene-layout.js';
 import type { GrownTally } from '../tallies/batch-tally.js';
 import type { Histogram, RecordedAngles, RecordedMap, RecordedSpectrum, RunTallies } from '../tallies/run-tallies.js';
@@ -29,6 +30,7 @@ function halves({ scene, legend }: CompiledScene, grown: GrownTally, offset: num
 }
 
 function recorderMaps(compiled: CompiledScene, grown: GrownTally): RecordedMap[] {
+  const graph = new RegionGraph(compiled.scene);
   return compiled.legend.recorders.map((plan, i): RecordedMap => {
     const [u, v] = plan.cells;
     return {
@@ -39,7 +41,7 @@ function recorderMaps(compiled: CompiledScene, grown: GrownTally): RecordedMap[]
       extent: plan.extent,
       axes: plan.wrapped ? ['round the side', 'along the axis'] : ['u', 'v'],
       energy: halves(compiled, grown, compiled.scene.recorderMap[i], u * v),
-      measure: mapMeasure(plan),
+      measure: mapMeasure(plan, graph),
       frame: plan.wrapped ? null : { origin: plan.origin, u: plan.u, v: plan.v },
     };
   });

@@ -2,10 +2,12 @@
 import type { Description, FinishDescription, Vector3 } from '../design/description.js';
 import { DesignFaults } from '../design/design-faults.js';
 import type { Fault } from '../design/fault.js';
+import { pumpFaults } from './check-pumps.js';
+import { surroundingFaults } from './check-surroundings.js';
 import { type CompiledScene, compileScene } from './compile-scene.js';
 import type { SceneFace } from './compile-solids.js';
 import { patchArea, patchCentre, patchNormal, patchPoint } from './face-patch.js';
-import { RegionGraph } from './region-graph.js';
+import { INTERFACE, RegionGraph } from './region-graph.js';
 import { add, scale } from './vector.js';
 
 export interface SceneCheck {
@@ -46,6 +48,8 @@ export function checkScene(description: Description): SceneCheck {
     ...views.flatMap(({ face, exposed, clashes }) => finishFaults(compiled, face, exposed, clashes)),
     ...exitFaults(description, compiled, views),
     ...partFaults(description, views),
+    ...surroundingFaults(description),
+    ...pumpFaults(description),
     ...coveredFaults(description, compiled, views),
   ];
   return { faults, faces: views.map(({ face, exposed, touches }) => report(compiled, face, exposed, touches)) };
@@ -85,28 +89,40 @@ class FaceLook {
       const beyond = this.#ownerAt(point, out, STEP);
       if (beyond === face.owner) continue;
       exposed++;
-      const partner = this.#faceAt(face, beyond);
-      touches.add(partner?.reference ?? this.#names[beyond]);
-      if (partner === undefined) continue;
-      const [own, other] = [this.#finish[face.index], this.#finish[partner.index]];
-      if (own >= 0 && other >= 0 && own !== other) clashes.add(partner);
+      const [left, entered] = this.#facesAt(face, point, out);
+      touches.add(entered?.reference ?? this.#names[beyond]);
+      for (const partner of [left, entered]) {
+        if (partner === undefined || partner === face) continue;
+        const [own, other] = [this.#finish[face.index], this.#finish[partner.index]];
+        if (own >= 0 && other >= 0 && own !== other) clashes.add(partner);
+      }
     }
     return { exposed: exposed / SAMPLES, touches: [...touches].sort(), clashes: [...clashes] };
   }
 
   #ownerAt(point: Vector3, direction: Vector3, step: number): number {
-    const [x, y, z] = add(point, scale(direction, step));
-    if (this.#graph.crowded) this.#graph.forget();
-    return this.#graph.owner[this.#graph.locate(x, y, z, 0.6, 0.64, 0.48)];
+    return this.#graph.owner[this.#regionAt(point, direction, step)];
   }
 
-  /** Face of another owner on the same surface; its own sample decides whether it is really there. */
-  #faceAt(face: SceneFace, owner: number): SceneFace | undefined {
-    const same = (a: SceneFace['surface'], b: SceneFace['surface']) =>
-      a.kind === 'plane' && b.kind === 'plane'
-        ? a.family === b.family && a.offset === b.offset
-        : a.kind === 'curve' && b.kind === 'curve' && a.index === b.index;
-    return this.#faces.find((other) => other.owner === owner && same(other.surface, face.surface));
+  #regionAt(point: Vector3, direction: Vector3, step: number): number {
+    const [x, y, z] = add(point, scale(direction, step));
+    if (this.#graph.crowded) this.#graph.forget();
+    return this.#graph.locate(x, y, z, 0.6, 0.64, 0.48);
+  }
+
+  /** Faces by which light leaves and enters at a spot of a face: what is traced there is asked, not worked out again. */
+  #facesAt({ surface }: SceneFace, point: Vector3, out: Vector3): readonly (SceneFace | undefined)[] {
+    const graph = this.#graph;
+    const region = this.#regionAt(point, out, -STEP);
+    let way = 2 * graph.families;
+    if (surface.kind === 'curve') way += surface.index;
+    else {
+      const [x, y, z] = graph.scene.familyNormal.subarray(3 * surface.family, 3 * surface.family + 3);
+      way = 2 * surface.family + (x * out[0] + y * out[1] + z * out[2] > 0 ? 1 : 0);
+    }
+    const record = graph.resolve(region, way);
+    if (record < 0) return [];
+    return [INTERFACE.faceOut, INTERFACE.faceIn].map((place) => this.#faces[graph.interfaces[record + place]]);
   }
 }
 
@@ -147,10 +163,12 @@ function finishFaults(
   clashes: readonly SceneFace[],
 ): Fault[] {
   const { name, faces } = face.part.description;
-  const given = faces.find((entry) => `${name}.${entry.face}` === face.reference);
+  const named = faces.find((entry) => `${name}.${entry.face}` === face.reference);
+  const given = named ?? faces.find((entry) => entry.face === '*');
   if (given === undefined) return [];
   const faults: Fault[] = [];
-  if (exposed === 0 && patchArea(face.patch) > 0) {
+  // A finish for all faces need not reach every one of them.
+  if (named !== undefined && exposed === 0 && patchArea(face.patch) > 0) {
     faults.push({
       code: 'finish',
       severity: 'error',

@@ -1,5 +1,6 @@
 /** Area or volume of map cells, by sampling points inside each: cells on the rim of a face or of the liquid count in part. */
 import type { Vector2 } from '../design/description.js';
+import { bareShare } from './bare-face.js';
 import type { RecorderPlan } from './compile-recorders.js';
 import type { CompiledScene } from './compile-scene.js';
 import type { FacePatch } from './convex-solid.js';
@@ -8,13 +9,14 @@ import { add, dot, scale, subtract } from './vector.js';
 
 const SAMPLES = 8;
 
-/** Area, mm², of each cell of a recorder's map. */
-export function mapMeasure(plan: RecorderPlan): Float64Array {
+/** Area, mm², of each cell of a recorder's map: of a face, what of it bounds its part. */
+export function mapMeasure(plan: RecorderPlan, graph: RegionGraph): Float64Array {
   const [cellsU, cellsV] = plan.cells;
   const [[uLow, uHigh], [vLow, vHigh]] = plan.extent;
   const stepU = (uHigh - uLow) / cellsU;
   const stepV = (vHigh - vLow) / cellsV;
   const density = areaDensity(plan);
+  const bare = bareness(plan, density, graph);
   // A flat face is convex: a cell with its four corners on it lies on it as a whole.
   const convex = plan.outline !== null || plan.face?.patch.kind === 'polygon' || plan.face?.patch.kind === 'disc';
   const measure = new Float64Array(cellsU * cellsV);
@@ -22,7 +24,8 @@ export function mapMeasure(plan: RecorderPlan): Float64Array {
     for (let iu = 0; iu < cellsU; iu++) {
       const left = uLow + iu * stepU;
       const low = vLow + iv * stepV;
-      if (convex && wholeCell(density, left, low, stepU, stepV)) {
+      const open = quarters(left, low, stepU, stepV).every(([u, v]) => density(u, v) > 0 && bare(u, v) === 1);
+      if (convex && open && wholeCell(density, left, low, stepU, stepV)) {
         measure[iu + cellsU * iv] = stepU * stepV;
         continue;
       }
@@ -30,12 +33,36 @@ export function mapMeasure(plan: RecorderPlan): Float64Array {
       for (let k = 0; k < SAMPLES * SAMPLES; k++) {
         const u = left + (((k % SAMPLES) + 0.5) / SAMPLES) * stepU;
         const v = low + ((Math.floor(k / SAMPLES) + 0.5) / SAMPLES) * stepV;
-        sum += density(u, v);
+        const here = density(u, v);
+        sum += open || here === 0 ? here : here * bare(u, v);
       }
       measure[iu + cellsU * iv] = (sum / SAMPLES ** 2) * stepU * stepV;
     }
   }
   return measure;
+}
+
+/** Probes along either side of a map: what covers less than one step of a face is overlooked where the rest is bare. */
+const PROBES = 64;
+
+/** Share of the face at (u, v) that bounds its part; of a face that nothing covers, 1 without another look. */
+function bareness(plan: RecorderPlan, density: (u: number, v: number) => number, graph: RegionGraph) {
+  const all = () => 1;
+  if (plan.face === null) return all;
+  const bare = bareShare(plan, plan.face, graph);
+  const [[uLow, uHigh], [vLow, vHigh]] = plan.extent;
+  for (let k = 0; k < PROBES * PROBES; k++) {
+    const u = uLow + (((k % PROBES) + 0.5) / PROBES) * (uHigh - uLow);
+    const v = vLow + ((Math.floor(k / PROBES) + 0.5) / PROBES) * (vHigh - vLow);
+    if (density(u, v) > 0 && bare(u, v) < 1) return bare;
+  }
+  return all;
+}
+
+/** Middles of the four quarters of a cell. */
+function quarters(left: number, low: number, stepU: number, stepV: number): Vector2[] {
+  const at = (a: number, b: number): Vector2 => [left + a * stepU, low + b * stepV];
+  return [at(0.25, 0.25), at(0.75, 0.25), at(0.25, 0.75), at(0.75, 0.75)];
 }
 
 function wholeCell(

@@ -8,6 +8,9 @@ import type { Curve } from '../units/curve.js';
 const STEP_NM = 0.5;
 /** A Gaussian line is cut where it has fallen to 3e-7 of its peak. */
 const LINE_REACH_SIGMA = 5.5;
+/** A broad line is cut where no medium has data any more and an index would be made up, nm. */
+const SHORTEST_NM = 200;
+const LONGEST_NM = 2000;
 export const FWHM_PER_SIGMA = 2 * Math.sqrt(2 * Math.LN2);
 
 export interface WavelengthGrid {
@@ -26,7 +29,10 @@ export function wavelengthGrid(description: Description): WavelengthGrid {
   };
   for (const { wavelengthNm, linewidthNm } of description.pumps) {
     const reach = (LINE_REACH_SIGMA * linewidthNm) / FWHM_PER_SIGMA;
-    cover(wavelengthNm - reach, wavelengthNm + reach);
+    cover(
+      Math.min(wavelengthNm, Math.max(SHORTEST_NM, wavelengthNm - reach)),
+      Math.max(wavelengthNm, Math.min(LONGEST_NM, wavelengthNm + reach)),
+    );
     if (linewidthNm === 0) lines.push(wavelengthNm);
   }
   for (const medium of description.media.values()) {

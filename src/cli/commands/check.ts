@@ -23,7 +23,7 @@ interface DesignCheck {
   readonly faces: readonly FaceReport[];
 }
 
-/** `stokeswell check DESIGN…`: every fault of every design, its media and, when asked for, its faces; nothing is traced. */
+/** `stokeswell check DESIGN…`: every fault of every design, its media and, when asked for, its faces; a short trial tells what the pumps miss. */
 export async function checkCommand(files: readonly string[], options: CheckOptions): Promise<ExitCode> {
   const checks: DesignCheck[] = [];
   const style = styleFor(process.stdout.isTTY === true, process.env);
@@ -40,8 +40,8 @@ async function checkDesign(file: string, dials: Readonly<Record<string, string>>
   const { locateFaults, readDesign } = await import('../../design/read-design.js');
   const reading = await readDesign(file, { dials });
   if (!reading.ok) return { file, ok: false, faults: reading.faults, media: [], faces: [] };
-  const { checkScene } = await import('../../scene/check-scene.js');
-  const scene = checkScene(reading.description);
+  const { checkDesign: checkDescription } = await import('../../trace/check-design.js');
+  const scene = await checkDescription(reading.description);
   const faults = [...reading.warnings, ...locateFaults(reading, scene.faults)];
   const ok = faults.every((fault) => fault.severity !== 'error');
   return { file, ok, faults, media: reportMedia(reading.description), faces: scene.faces };

@@ -37,11 +37,15 @@ export async function traceCommand(file: string, options: TraceCommandOptions): 
   const reading = await readDesign(file, { dials: options.dial });
   if (!reading.ok) throw designFault(reading.faults);
   if (options.files) await checkOutputFolder(options.out);
+  // Before anything listens for Ctrl-C: the trial holds this thread, and there is nothing to keep yet.
+  const { checkDesign } = await import('../../trace/check-design.js');
+  const { faults } = await checkDesign(reading.description);
+  if (faults.some(({ severity }) => severity === 'error')) throw designFault(locateFaults(reading, faults));
 
   const startedAt = new Date();
   const interrupt = listenForInterrupt(() => tell(INTERRUPT_NOTE));
   try {
-    const result = await traceReading(reading, options, interrupt.signal);
+    const result = { ...(await traceReading(reading, options, interrupt.signal)), warnings: faults };
     const { recordRun } = await import('../record-run.js');
     const { record, arrays } = recordRun(result, reading, options.dial, startedAt);
     const show = async (folder: string | null): Promise<void> => {
@@ -67,9 +71,10 @@ export async function traceCommand(file: string, options: TraceCommandOptions): 
 async function keep(record: RunRecord, arrays: RunArrays, out: string | undefined): Promise<string> {
   const { runFolderPath } = await import('../../run-folder/run-folder-path.js');
   const { writeRun } = await import('../../run-folder/write-run.js');
+  const { REPORT_HTML, runPage } = await import('../../report/run-page.js');
   const { hash, title } = record.design;
   const folder = out ?? (await runFolderPath(RESULTS, title, { hash, ...record.run }));
-  await writeRun(folder, record, arrays);
+  await writeRun(folder, record, arrays, undefined, [[REPORT_HTML, runPage]]);
   return folder;
 }
 
