@@ -7,7 +7,7 @@ import { ErrorBars } from './error-bars.js';
 import { runFigures } from './figures.js';
 import { photonLedger, wattLedger } from './ledger.js';
 import { mapEvenness } from './map-evenness.js';
-import { hasMeasure, type MapField, mapField } from './map-field.js';
+import { hasMeasure, type MapField, mapField, soundCells } from './map-field.js';
 
 /** What only the caller knows of a run. */
 export interface RunAbout {
@@ -97,13 +97,12 @@ function mapRecord(field: MapField): MapRecord {
   const { map, unit, values, power } = field;
   let minimum = Number.POSITIVE_INFINITY;
   let maximum = 0;
-  let measure = 0;
-  map.measure.forEach((m, i) => {
-    if (m <= 0) return;
-    measure += m;
+  const measure = map.measure.reduce((a, b) => a + b, 0);
+  // Slivers of cells on a rim hold too few photons to be an extreme.
+  for (const i of soundCells(field)) {
     minimum = Math.min(minimum, values[i]);
     maximum = Math.max(maximum, values[i]);
-  });
+  }
   const evenness = mapEvenness(field);
   return {
     id: map.id,

@@ -1,5 +1,7 @@
 /** What records light where: the exit, detectors, pumped faces; and the voxels of the dyed liquid. */
 import type { Description, Outline, Vector2, Vector3 } from '../design/description.js';
+import { aimedFace } from './aimed-face.js';
+import type { BeamFrame } from './compile-pumps.js';
 import type { CompiledSolids, SceneFace } from './compile-solids.js';
 import type { FacePatch } from './convex-solid.js';
 import { patchCentre, patchNormal, patchRange } from './face-patch.js';
@@ -34,7 +36,12 @@ const LONG_SIDE_CELLS = 40;
 /** Voxels are fewer: each shares the histories with all others, and the peak is only as sure as one of them. */
 const LONG_SIDE_VOXELS = 24;
 
-export function planRecorders(description: Description, solids: CompiledSolids): RecorderPlan[] {
+/** @param beams frames of the pumps, in order */
+export function planRecorders(
+  description: Description,
+  solids: CompiledSolids,
+  beams: readonly BeamFrame[],
+): RecorderPlan[] {
   const plans: RecorderPlan[] = [];
   const faceNamed = (reference: string) => solids.faces.find((face) => face.reference === reference) ?? null;
   const exitDetector = description.detectors.find(({ name }) => name === description.exit.name);
@@ -66,13 +73,14 @@ export function planRecorders(description: Description, solids: CompiledSolids):
     if (face === null || isExit) continue;
     plans.push({ ...common, ...everything, ...faceMap(face, detector.pixels) });
   }
-  const pumped = new Set(description.pumps.flatMap(({ aim }) => (aim.kind === 'toward' ? [aim.face] : [])));
-  for (const reference of pumped) {
-    const face = faceNamed(reference);
+  const aimed = description.pumps.map(({ aim }, i) =>
+    aim.kind === 'toward' ? faceNamed(aim.face) : aimedFace(beams[i], solids.faces),
+  );
+  for (const face of new Set(aimed)) {
     if (face === null) continue;
     plans.push({
       what: 'pumped-face',
-      where: reference,
+      where: face.reference,
       isExit: false,
       countsPump: true,
       countsEmitted: false,

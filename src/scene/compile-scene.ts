@@ -52,7 +52,7 @@ export function compileScene(description: Description): CompiledScene {
   const media = compileMedia(description, grid, pool);
   const finishes = compileFinishes(description, grid);
   const pumps = compilePumps(description, parts, grid, pool);
-  const recorders = planRecorders(description, solids);
+  const recorders = planRecorders(description, solids, pumps.frames);
   const voxels = planVoxels(description, parts);
   const owners = parts.length + 1;
   const ownerMedia = [description.surroundings, ...parts.map(({ description: { medium } }) => medium)];

@@ -12,7 +12,7 @@ import type { Scene } from './scene-layout.js';
 import { SURROUNDINGS } from './scene-layout.js';
 
 /** Crossings that are no interface. */
-export enum CROSSING {
+export const enum CROSSING {
   /** Nothing changes here. */
   pass = -1,
   /** Not worked out yet. */
@@ -20,7 +20,7 @@ export enum CROSSING {
 }
 
 /** Integers per interface in `interfaces`; a crossing is the place of its record there. */
-export enum INTERFACE {
+export const enum INTERFACE {
   flags = 0,
   finish = 1,
   mediumBeyond = 2,
@@ -35,7 +35,7 @@ export enum INTERFACE {
   recorder = 7,
   STRIDE = 8,
 }
-export enum FLAG {
+export const enum FLAG {
   /** The interface is a free plane. */
   freePlane = 1,
   /** Pump light that arrives here is recorded. */

@@ -9,32 +9,32 @@ export const SCENE_VERSION = 1;
 export const SURROUNDINGS = 0;
 
 /** How a finish decides between reflection, transmission and absorption. */
-export enum SPLIT {
+export const enum SPLIT {
   fresnel = 0,
   spectral = 1,
   metal = 2,
   table = 3,
 }
 /** Where reflected or transmitted light goes. */
-export enum SPREAD {
+export const enum SPREAD {
   specular = 0,
   lambertian = 1,
   gaussian = 2,
   topHat = 3,
 }
-export enum BEAM {
+export const enum BEAM {
   patch = 0,
   gaussian = 1,
   lambertian = 2,
   diodes = 3,
 }
-export enum OUTLINE {
+export const enum OUTLINE {
   rectangle = 0,
   disc = 1,
 }
 
 /** Slots of a face's fates, counted from `faceSlot[face]`. */
-export enum FACE_SLOT {
+export const enum FACE_SLOT {
   reflectedAtEntry = 0,
   leftPump = 1,
   leftEmitted = 2,
@@ -43,7 +43,7 @@ export enum FACE_SLOT {
   COUNT = 5,
 }
 /** Slots of an owner's fates, counted from `ownerSlot[owner]`. */
-export enum OWNER_SLOT {
+export const enum OWNER_SLOT {
   bulkPump = 0,
   bulkEmitted = 1,
   trappedPump = 2,
@@ -51,7 +51,7 @@ export enum OWNER_SLOT {
   COUNT = 4,
 }
 /** Slots of one dye in one owner, counted from `dyeSlot[owner · maxAbsorbers + absorber]`. */
-export enum DYE_SLOT {
+export const enum DYE_SLOT {
   lostPump = 0,
   lostEmitted = 1,
   stokesPump = 2,
@@ -59,14 +59,14 @@ export enum DYE_SLOT {
   COUNT = 4,
 }
 /** Slots that every scene has. */
-export enum SLOT {
+export const enum SLOT {
   missed = 0,
   exitPump = 1,
   exitEmitted = 2,
 }
 
 /** Doubles per pump in `pumps`. */
-export enum PUMP {
+export const enum PUMP {
   originX = 0, // origin of the beam, mm
   axisU = 3, // unit vectors
   axisV = 6,
@@ -85,7 +85,7 @@ export enum PUMP {
 }
 
 /** Doubles per recorder in `recorderFrame`. */
-export enum RECORDER {
+export const enum RECORDER {
   originX = 0,
   stepU = 3, // unit axis u divided by the cell width, so that a dot product gives the cell
   stepV = 6,
@@ -95,7 +95,7 @@ export enum RECORDER {
   STRIDE = 18,
 }
 /** Cells of angular maps and histograms. */
-export enum CELLS {
+export const enum CELLS {
   polar = 45,
   azimuth = 72,
   absorptions = 64,
