@@ -84,6 +84,15 @@ export function buildProgram(done: (code: ExitCode) => void): Command {
     });
 
   program
+    .command('report')
+    .description('make the page of a run again from its record')
+    .argument('<folder>', 'folder of a run')
+    .action(async (folder: string) => {
+      const { reportCommand } = await import('./commands/report.js');
+      done(await reportCommand(folder));
+    });
+
+  program
     .command('prove')
     .description('hold the tracer against laws and tables from outside, on this machine')
     .option('--quick', 'fewer histories, wider bands')

@@ -10,9 +10,13 @@ import { anglesFileNames, LEDGER_CSV, mapFileNames, nameFiles, RUN_JSON, SPECTRA
 import { fileSystemReason, isFileSystemError, RunFolderError } from './run-folder-error.js';
 import { runJson } from './run-json.js';
 
+/** A file that the caller adds to the folder of a run: its name, and what makes its contents. */
+export type ExtraFile = readonly [name: string, make: (record: RunRecord, arrays: RunArrays) => string | Uint8Array];
+
 /**
  * Writes run.json, the ledgers, spectra, maps and angles into `folder`, which must not exist or be empty. Everything goes into a temporary
  * folder beside it first, which then takes its name in one step; on a failure it is taken away again.
+ * @param extras files of the caller's, made of the record as written
  * @returns names of the files written
  * @throws RunFolderError when the file system refuses
  */
@@ -21,6 +25,7 @@ export async function writeRun(
   record: RunRecord,
   arrays: RunArrays,
   on: Disk = disk,
+  extras: readonly ExtraFile[] = [],
 ): Promise<readonly string[]> {
   const target = await freeFolder(folder, on);
   const parent = dirname(target);
@@ -30,7 +35,7 @@ export async function writeRun(
   try {
     made = await on.mkdir(parent, { recursive: true });
     await on.mkdir(partial);
-    for (const [name, content] of runFiles(record, arrays)) {
+    for (const [name, content] of runFiles(nameFiles(record), arrays, extras)) {
       // Flushed, so that after a power cut a folder with its final name has its files' contents too.
       await on.writeFile(join(partial, name), content, { flag: 'wx', flush: true });
       names.push(name);
@@ -49,8 +54,9 @@ export async function writeRun(
 function* runFiles(
   record: RunRecord,
   arrays: RunArrays,
+  extras: readonly ExtraFile[],
 ): Generator<readonly [name: string, content: string | Uint8Array]> {
-  yield [RUN_JSON, runJson(nameFiles(record))];
+  yield [RUN_JSON, runJson(record)];
   yield [LEDGER_CSV, ledgerCsv(record)];
   yield [SPECTRA_CSV, spectraCsv(arrays.spectra)];
   const mapNames = mapFileNames(arrays.maps.map(({ id }) => id));
@@ -61,6 +67,7 @@ function* runFiles(
   }
   const angleNames = anglesFileNames(arrays.angles.map(({ id }) => id));
   for (const [i, angles] of arrays.angles.entries()) yield [angleNames[i], anglesCsv(angles)];
+  for (const [name, make] of extras) yield [name, make(record, arrays)];
 }
 
 /** Full path of a folder that is not there yet or is empty, links followed. */

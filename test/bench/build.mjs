@@ -5,6 +5,7 @@ import { pathToFileURL } from 'node:url';
 const MODULES = {
   readDesign: 'design/read-design.js',
   compileScene: 'scene/compile-scene.js',
+  RegionGraph: 'scene/region-graph.js',
   mapMeasure: 'scene/map-measure.js',
   voxelMeasure: 'scene/map-measure.js',
   runBatches: 'engine/run-batches.js',

@@ -28,7 +28,8 @@ export async function measureFixedCosts(build, design) {
   const read = await repeated(() => describe(build, design));
   const compile = await repeated(() => build.compileScene(read.value));
   const measure = await repeated(() => {
-    for (const plan of compile.value.legend.recorders) build.mapMeasure(plan);
+    const graph = new build.RegionGraph(compile.value.scene);
+    for (const plan of compile.value.legend.recorders) build.mapMeasure(plan, graph);
     build.voxelMeasure(compile.value);
   });
   return {

@@ -43,6 +43,8 @@ const FORBIDDEN: readonly (readonly [string, string])[] = [
   ['src/outcome/planted.ts', "import { Worker } from 'node:worker_threads';"],
   ['src/outcome/planted.ts', "import { runBatches } from '../engine/run-batches.js';"],
   ['src/run-folder/planted.ts', "import { print } from '../cli/output-stream.js';"],
+  ['src/report/planted.ts', "import { print } from '../cli/output-stream.js';"],
+  ['src/run-folder/planted.ts', "import { runPage } from '../report/run-page.js';"],
   ['src/proofs/planted.ts', "import { traceBatch } from '../kernel/trace-batch.js';"],
   ['src/engine/planted.ts', "import { flat } from '../../test/helpers/describe.js';"],
 ];

@@ -1,0 +1,154 @@
+/** All the style of a page: light and dark, phone to desktop, and print. */
+export const PAGE_STYLE = `
+:root{--paper:#faf8f3;--panel:#fff;--ink:#1b2226;--soft:#565f66;--line:#d9d4c8;--pump:#2a66ad;--heat:#b4461f;--stray:#c99a1b;--output:#0b7a5c;--focus:#7a2fa0}
+@media screen and (prefers-color-scheme:dark){:root{--paper:#12171a;--panel:#1a2125;--ink:#e9e6df;--soft:#a7b0b6;--line:#364046;--pump:#6ea9ec;--heat:#f08b63;--stray:#e3bb52;--output:#3ccda2;--focus:#d79bf5}}
+*{box-sizing:border-box}
+html{scroll-behavior:smooth}
+@media (prefers-reduced-motion:reduce){html{scroll-behavior:auto}}
+body{margin:0;background:var(--paper);color:var(--ink);font:15px/1.45 system-ui,"Segoe UI",Roboto,"Helvetica Neue",sans-serif;font-variant-numeric:tabular-nums;overflow-wrap:anywhere}
+header,main{max-width:1200px;margin:0 auto;padding:0 16px}
+header{padding-top:14px}
+h1{font-size:1.35rem;line-height:1.2;margin:0;font-weight:650}
+header p{margin:2px 0 6px;color:var(--soft);font-size:.86rem}
+nav{display:flex;flex-wrap:wrap;gap:2px 16px;font-size:.86rem}
+nav a{padding:3px 0}
+a{color:inherit;text-decoration:underline;text-decoration-color:var(--soft);text-underline-offset:3px}
+a:hover{text-decoration-color:currentColor}
+:focus-visible{outline:3px solid var(--focus);outline-offset:2px;border-radius:2px}
+.skip{position:absolute;left:-999px}
+.skip:focus{left:8px;top:8px;background:var(--panel);padding:6px 10px;z-index:2}
+section{margin:34px 0}
+section>h2{font-size:1.25rem;margin:0 0 4px;padding-top:10px;border-top:2px solid var(--ink)}
+h3{font-size:1rem;margin:22px 0 4px}
+p{margin:4px 0}
+.lead{max-width:70ch;color:var(--soft)}
+.note,.facts{color:var(--soft);font-size:.86rem;max-width:75ch}
+.facts b{color:var(--ink)}
+.unseen{position:absolute;width:1px;height:1px;overflow:hidden;clip-path:inset(50%)}
+.print-only{display:none}
+.needs-script{display:none}
+.scripted .needs-script{display:block}
+#answers{display:grid;gap:0;grid-template-columns:repeat(4,1fr);margin:14px 0 26px;border:1px solid var(--line);background:var(--panel)}
+.answer{padding:12px 16px 14px;min-width:0;border-left:1px solid var(--line)}
+.answer:first-child{border-left:0}
+.answer h2{font-size:.92rem;font-weight:600;margin:0;color:var(--soft)}
+.answer p{margin:3px 0}
+.answer .note{font-size:.8rem}
+.big{font-size:1.55rem;font-weight:650;line-height:1.15;letter-spacing:-.01em}
+.figure{white-space:nowrap}.figures .figure,.figure.long{white-space:normal}
+.swatch{display:inline-block;width:2.2em;height:1em;vertical-align:-.12em;margin-right:.5em;border:1px solid var(--line)}
+.thumbnail{display:block;max-width:100%;image-rendering:pixelated;margin:6px 0;border:1px solid var(--line)}
+.share-bar{display:flex;height:16px;margin:8px 0 5px;background:var(--line)}
+.share-bar span+span{border-left:1px solid var(--panel)}
+.legend,.checks,.cautions,.losses{margin:0;padding:0 0 0 1.2em}
+.legend{list-style:none;padding:0;font-size:.84rem}
+.legend li{padding-left:1.35em;position:relative}
+.key{position:absolute;left:0;top:.28em;width:.8em;height:.8em}
+.output{background:var(--output)}.pump-lost{background:var(--pump)}.heat{background:var(--heat)}.light-lost{background:var(--stray)}
+.losses li,.cautions li,.checks li{margin:3px 0;max-width:80ch}
+figure{margin:12px 0;min-width:0}
+.picture{display:block;width:100%;height:auto;overflow:hidden;font-size:11.5px}
+.picture text{fill:var(--ink);unicode-bidi:isolate}
+.picture .caption,.picture .axis text,.mean-text{fill:var(--soft);font-size:11px}
+.picture .axis .axis-title{fill:var(--ink);font-size:11.5px}
+.axis line{stroke:var(--soft);stroke-width:1}
+.ring{fill:none;stroke:var(--line);stroke-width:1}
+.flow{font-size:14px;max-width:860px}
+.flow .flow-strong{font-weight:650;font-size:15px}
+.flow .flow-heading{font-size:13px;font-weight:600;fill:var(--soft)}
+.flow-small{font-size:13px}.flow-small .flow-heading{font-size:12.5px}
+.flow-number{font-weight:600}
+.stream{outline-offset:1px}
+.flow-pump-lost path,rect.flow-pump-lost{fill:var(--pump)}
+.flow-heat path{fill:var(--heat)}.flow-light-lost path{fill:var(--stray)}.flow-output path{fill:var(--output)}
+.stream path{stroke:var(--paper);stroke-width:.7}
+.stream:hover path,.stream:focus path{stroke:var(--ink);stroke-width:2}
+.flow-dye{stroke:var(--ink);stroke-width:1.5;stroke-dasharray:5 4}
+.where{display:grid;grid-template-columns:minmax(0,3fr) minmax(220px,1fr);gap:8px 40px;align-items:start}
+.narrow-only{display:none}
+.readout{min-height:1.5em;font-size:.9rem;padding:4px 0;color:var(--ink)}
+.scripted .readout{display:block}
+.ledgers{display:grid;grid-template-columns:repeat(auto-fit,minmax(min(100%,440px),1fr));gap:8px 36px}
+table{border-collapse:collapse;width:100%;font-size:.86rem}
+caption{text-align:left;font-weight:600;padding:6px 0}
+th,td{text-align:left;font-weight:400;padding:3px 10px 3px 0;border-bottom:1px solid var(--line);vertical-align:baseline}
+thead th{color:var(--soft);font-size:.8rem}
+.number{text-align:right;white-space:nowrap}
+.ledger .sum th,.ledger .sum td,.own th,.own td{font-weight:650}
+.ledger tbody .sum th,.ledger tbody .sum td{padding-top:10px}
+.place{color:var(--soft)}
+.light{font-size:.74rem;color:var(--soft);border:1px solid var(--line);border-radius:3px;padding:0 4px;white-space:nowrap}
+.bar{width:24%;padding-right:0}
+.bar span{display:block;height:.7em;min-width:1px}
+.maps{display:grid;grid-template-columns:repeat(auto-fill,minmax(min(100%,350px),1fr));gap:10px 40px;align-items:start}
+.volume{grid-column:1/-1}
+.cuts{display:grid;grid-template-columns:repeat(auto-fill,minmax(min(100%,330px),1fr));gap:10px 32px;align-items:start}
+.cut{padding:4px 0}
+.cut label{font-size:.88rem}
+.cut input{width:100%;max-width:340px;display:block;accent-color:var(--output)}
+.heat-map image{image-rendering:pixelated}
+.heat-map{touch-action:pan-y;max-width:520px}
+.frame{fill:none;stroke:var(--soft);stroke-width:1}
+.cross{pointer-events:none}
+.cross line{stroke:#fff;stroke-width:1.2;mix-blend-mode:difference}
+.profile-field{fill:none;stroke:var(--line)}
+.profile-line{fill:none;stroke:var(--output);stroke-width:1.6}
+.mean-mark{fill:var(--ink)}
+.spectra,.chromaticity,.polar{max-width:520px}
+.spectrum.pump{fill:var(--pump)}.spectrum.emitted{fill:var(--output)}
+.shape{fill:none;stroke:var(--ink);stroke-width:1.2;stroke-dasharray:4 3}
+.base{stroke:var(--line)}
+.locus{fill:none;stroke:var(--soft)}.locus-dot{fill:var(--ink)}
+.locus-line{stroke:#000;stroke-width:1.2;stroke-dasharray:4 3}
+.white-point{fill:#fff;stroke:#000}
+.point-halo{fill:none;stroke:#fff;stroke-width:5}.point{fill:none;stroke:#000;stroke-width:2.4}
+.error-ellipse{fill:#000}
+.picture .point-text,.picture .on-colour{fill:#000;font-weight:600}
+.picture .point-text{paint-order:stroke;stroke:#fff;stroke-opacity:.75;stroke-width:3px}
+.picture .on-colour{font-weight:400;font-size:11px}
+.intensity{fill:none;stroke:var(--output);stroke-width:2}
+.lambert{fill:none;stroke:var(--ink);stroke-width:1.1;stroke-dasharray:5 4}
+.chain{list-style:none;margin:14px 0;padding:0;display:grid;grid-template-columns:repeat(auto-fit,minmax(min(100%,170px),1fr));border:1px solid var(--line);background:var(--panel)}
+.chain li{padding:10px 14px;border-right:1px solid var(--line);border-bottom:1px solid var(--line);margin:0 -1px -1px 0;display:flex;flex-direction:column;gap:2px}
+.chain .start{justify-content:end}
+.factor{font-size:1.15rem;font-weight:650}
+.step-name{color:var(--soft);font-size:.84rem;flex:1}
+.scroll{overflow-x:auto}
+.comparison th[scope=row]{min-width:8em;overflow-wrap:normal}
+.comparison .number .note{display:block}
+.comparison .range{position:relative;width:36%;min-width:70px;height:1.9em;padding:0}
+.range span{position:absolute;top:.55em;height:.8em}
+.spread{background:var(--soft);opacity:.55}
+.middle{width:3px;margin-left:-1px;background:var(--ink)}
+.record div{display:grid;grid-template-columns:minmax(110px,190px) 1fr;gap:0 14px;padding:4px 0;border-bottom:1px solid var(--line)}
+.record{margin:10px 0}
+dt{color:var(--soft)}dd{margin:0;min-width:0}
+code,pre{font-family:ui-monospace,"DejaVu Sans Mono",Consolas,monospace;font-size:.84rem}
+pre{background:var(--panel);border:1px solid var(--line);padding:12px;max-height:70vh;overflow:auto;white-space:pre-wrap;overflow-wrap:anywhere;unicode-bidi:plaintext}
+.figures th{white-space:nowrap}
+@media (max-width:1080px){#answers{grid-template-columns:1fr 1fr}.answer:nth-child(odd){border-left:0}.answer:nth-child(n+3){border-top:1px solid var(--line)}}
+@media (max-width:900px){.where{grid-template-columns:minmax(0,1fr)}}
+@media (max-width:640px){
+body{font-size:14.5px}
+.wide-only{display:none}.narrow-only{display:block}
+.answer{padding:9px 11px}
+.big{font-size:1.2rem}
+.answer p{font-size:.86rem;line-height:1.35}.answer .note,.legend{font-size:.76rem}
+.answer .big{font-size:1.08rem}
+.bar{width:16%}
+.record div{grid-template-columns:1fr}
+}
+@media print{
+@page{margin:14mm}
+body{background:#fff;font-size:10.5pt}
+nav,.skip,.scripted .needs-script,.scripted .readout{display:none}
+.print-only{display:block;font-size:.85rem}
+figure,.answer,tr,.cut,.chain li{break-inside:avoid}
+h2,h3{break-after:avoid}
+section{margin:16px 0}
+#answers{grid-template-columns:1fr 1fr}
+pre{max-height:none;border:0;padding:0}
+*{-webkit-print-color-adjust:exact;print-color-adjust:exact}
+.maps,.cuts{grid-template-columns:1fr 1fr}
+}
+`;

@@ -1,0 +1,50 @@
+/** Reads the arrays of a run back from the tables beside its run.json. */
+import { join } from 'node:path';
+import type { AnglesArray, MapArray, RunArrays, SpectraArray } from '../record/run-arrays.js';
+import type { RunRecord } from '../record/run-record.js';
+import { columnOf, readNumberTable, unreadable } from './read-csv.js';
+
+type MapRecord = RunRecord['maps'][number];
+
+/** @param record as read from the folder's run.json. @throws RunFolderError when a table is missing, damaged or of another run */
+export async function readArrays(folder: string, record: RunRecord): Promise<RunArrays> {
+  const maps: MapArray[] = [];
+  for (const map of record.maps) maps.push(await readMap(folder, map));
+  const angles: AnglesArray[] = [];
+  for (const one of record.angles) angles.push(await readAngles(folder, one));
+  return { maps, spectra: await readSpectra(folder, record.spectra), angles };
+}
+
+async function readMap(folder: string, { id, shape, extentMm, axes, unit, files }: MapRecord): Promise<MapArray> {
+  const name = files.find((file) => file.endsWith('.csv'));
+  if (name === undefined) throw unreadable(folder, `run.json names no table of the map ${id}`);
+  const table = await readNumberTable(folder, name, shape.length + 2);
+  const values = columnOf(table, shape.length);
+  const cells = shape.reduce((product, n) => product * n, 1);
+  if (values.length !== cells) {
+    throw unreadable(join(folder, name), `it has ${values.length} cells, and run.json says ${cells}`);
+  }
+  return { id, shape, extentMm, axes, unit, values, measure: columnOf(table, shape.length + 1) };
+}
+
+async function readSpectra(folder: string, spectra: RunRecord['spectra']): Promise<SpectraArray> {
+  const [first] = spectra;
+  if (first === undefined) return { wavelengthsNm: new Float64Array(0), columns: [] };
+  const table = await readNumberTable(folder, first.file, spectra.length + 1);
+  return {
+    wavelengthsNm: columnOf(table, 0),
+    columns: spectra.map(({ id }, i) => ({ id, values: columnOf(table, i + 1) })),
+  };
+}
+
+async function readAngles(folder: string, { id, file }: RunRecord['angles'][number]): Promise<AnglesArray> {
+  const table = await readNumberTable(folder, file, 3);
+  const polar = columnOf(table, 0);
+  const next = polar.findIndex((angle) => angle !== polar[0]);
+  const azimuthCells = next < 0 ? polar.length : next;
+  const polarCells = polar.length / Math.max(1, azimuthCells);
+  if (azimuthCells === 0 || !Number.isInteger(polarCells)) {
+    throw unreadable(join(folder, file), 'its rows make no whole rings of directions');
+  }
+  return { id, polarCells, azimuthCells, wattsPerSr: columnOf(table, 2) };
+}
