@@ -1,17 +1,14 @@
 import { CELLS, type Scene, SLOT } from '../scene/scene-layout.js';
 import type { BatchTally } from '../tallies/batch-tally.js';
 import { FIGURE_PLACE } from '../tallies/run-tallies.js';
+import { NOW, RAY } from './photon.js';
 
-/** Books the fate of a history and, for output, what people see of it. Path lengths in mm inside parts. */
-export function closeHistory(
-  scene: Scene,
-  tally: BatchTally,
-  fate: number,
-  wavelength: number,
-  absorptions: number,
-  pumpPath: number,
-  emittedPath: number,
-): void {
+/** Books the fate of a history and, for output, what people see of it.  */
+export function closeHistory(scene: Scene, tally: BatchTally, fate: number, ray: Float64Array, now: Int32Array): void {
+  const wavelength = now[NOW.wavelength];
+  const absorptions = now[NOW.absorptions];
+  const pumpPath = now[NOW.light] === 0 ? ray[RAY.path] : ray[RAY.pumpPath];
+  const emittedPath = now[NOW.light] === 0 ? 0 : ray[RAY.path];
   const { vector, grown } = tally;
   const figures = 2 * scene.slots;
   const quanta = scene.energyQuanta[wavelength];

@@ -1,10 +1,13 @@
 /** Where a pump photon starts, where it goes and what colour it has. */
+import { exponentialOf } from '../numerics/random-stream.js';
 import { drawIndex } from '../numerics/sample-table.js';
 import { sobolUnit } from '../numerics/sobol.js';
-import { BEAM, OUTLINE, PUMP, type Scene } from '../scene/scene-layout.js';
+import type { RegionGraph } from '../scene/region-graph.js';
+import { BEAM, OUTLINE, PUMP, type Scene, SURROUNDINGS } from '../scene/scene-layout.js';
+import { NOW, RAY } from './photon.js';
 
 /** Sobol dimensions of a launch; the last one draws the first free path. */
-export enum LAUNCH {
+export const enum LAUNCH {
   positionU = 0,
   positionV = 1,
   directionU = 2,
@@ -17,18 +20,42 @@ export enum LAUNCH {
 /** Beyond this the tangent of an angle is no direction any more; a Gaussian far field is cut here, rad. */
 const WIDEST = 1.55;
 
-export function choosePump(scene: Scene, points: Int32Array): number {
+/** Starts a photon in `ray` and `now`. */
+export function launchPump(
+  scene: Scene,
+  graph: RegionGraph,
+  points: Int32Array,
+  startRegion: Int32Array,
+  ray: Float64Array,
+  now: Int32Array,
+): void {
   const unit = sobolUnit(points, LAUNCH.pump);
   let pump = 0;
   while (pump < scene.pumpCount - 1 && unit >= scene.pumpCumulative[pump]) pump++;
-  return pump;
+  placeInBeam(scene, pump, points, ray);
+  ray[RAY.depth] = exponentialOf(points[LAUNCH.freePath]);
+  const cells = scene.wavelengths;
+  const table = scene.pumpSpectrum[pump] * cells;
+  const colour = sobolUnit(points, LAUNCH.wavelength);
+  now[NOW.wavelength] = drawIndex(scene.spectrumKeep, scene.spectrumOther, table, cells, colour);
+  let region = startRegion[pump];
+  if (region < 0 || !graph.holds(region, ray)) {
+    region = graph.locate(ray[0], ray[1], ray[2], ray[3], ray[4], ray[5]);
+    startRegion[pump] = region;
+  }
+  now[NOW.region] = region;
+  now[NOW.medium] = graph.medium[region];
+  now[NOW.owner] = graph.owner[region];
+  now[NOW.entered] = graph.owner[region] !== SURROUNDINGS ? 1 : 0;
+  now[NOW.light] = 0;
+  now[NOW.lastFace] = -1;
+  now[NOW.closed] = 0;
+  now[NOW.absorptions] = 0;
+  ray[RAY.path] = 0;
 }
 
-/**
- * Writes position and direction of a new photon into `ray` (x y z dx dy dz).
- * @returns its wavelength index.
- */
-export function launchPump(scene: Scene, pump: number, points: Int32Array, ray: Float64Array): number {
+/** Writes position and direction of a new photon into `ray`. */
+function placeInBeam(scene: Scene, pump: number, points: Int32Array, ray: Float64Array): void {
   const p = scene.pumps;
   const at = pump * PUMP.STRIDE;
   const unitA = sobolUnit(points, LAUNCH.positionU);
@@ -85,16 +112,21 @@ export function launchPump(scene: Scene, pump: number, points: Int32Array, ray: 
   du *= norm;
   dv *= norm;
   dw *= norm;
-  for (let i = 0; i < 3; i++) {
-    const u = p[at + PUMP.axisU + i];
-    const v = p[at + PUMP.axisV + i];
-    const w = p[at + PUMP.axisW + i];
-    ray[i] = p[at + PUMP.originX + i] + a * u + b * v + forward * w;
-    ray[3 + i] = du * u + dv * v + dw * w;
-  }
-  const cells = scene.wavelengths;
-  const unit = sobolUnit(points, LAUNCH.wavelength);
-  return drawIndex(scene.spectrumKeep, scene.spectrumOther, scene.pumpSpectrum[pump] * cells, cells, unit);
+  const ux = p[at + PUMP.axisU];
+  const uy = p[at + PUMP.axisU + 1];
+  const uz = p[at + PUMP.axisU + 2];
+  const vx = p[at + PUMP.axisV];
+  const vy = p[at + PUMP.axisV + 1];
+  const vz = p[at + PUMP.axisV + 2];
+  const wx = p[at + PUMP.axisW];
+  const wy = p[at + PUMP.axisW + 1];
+  const wz = p[at + PUMP.axisW + 2];
+  ray[RAY.x] = p[at + PUMP.originX] + a * ux + b * vx + forward * wx;
+  ray[RAY.y] = p[at + PUMP.originX + 1] + a * uy + b * vy + forward * wy;
+  ray[RAY.z] = p[at + PUMP.originX + 2] + a * uz + b * vz + forward * wz;
+  ray[RAY.dx] = du * ux + dv * vx + dw * wx;
+  ray[RAY.dy] = du * uy + dv * vy + dw * wy;
+  ray[RAY.dz] = du * uz + dv * vz + dw * wz;
 }
 
 function slope(angle: number): number {

@@ -1,31 +1,44 @@
-/**
- * Distance to the surfaces that are not axis planes. `ray` holds x y z dx dy dz; results go into `hit`: [0] distance, [1] way.
- * Numbers travel in arrays because a call boxes every fraction it is given.
- */
+/** Distance to the surfaces that bound a region, where not all are axis planes, and their normals. */
 
 import { QUADRIC_STRIDE } from '../scene/quadric.js';
 import type { RegionGraph } from '../scene/region-graph.js';
 import type { Scene } from '../scene/scene-layout.js';
+import { NOW, RAY } from './photon.js';
 
-/** Shortens `hit` where an oblique plane or a quadric of the region comes first. */
-export function nearestOther(
-  scene: Scene,
-  graph: RegionGraph,
-  region: number,
-  ray: Float64Array,
-  hit: Float64Array,
-): void {
+/** Next boundary of the photon's region among surfaces of every kind. */
+export function findBoundary(scene: Scene, graph: RegionGraph, ray: Float64Array, now: Int32Array): void {
+  const region = now[NOW.region];
   const x = ray[0];
   const y = ray[1];
   const z = ray[2];
   const dx = ray[3];
   const dy = ray[4];
   const dz = ray[5];
-  let nearest = hit[0];
-  let way = hit[1];
+  let nearest = Number.POSITIVE_INFINITY;
+  let way = -1;
   const families = scene.families;
   const normal = scene.familyNormal;
   const bound = graph.bound;
+  // A ray that lies in a plane has no distance to it (0 · ∞ is no number) and never wins.
+  const b = 2 * region * families;
+  const wayX = dx >= 0 ? 1 : 0;
+  const wayY = dy >= 0 ? 3 : 2;
+  const wayZ = dz >= 0 ? 5 : 4;
+  const toX = (bound[b + wayX] - x) * ray[RAY.perDx];
+  const toY = (bound[b + wayY] - y) * ray[RAY.perDy];
+  const toZ = (bound[b + wayZ] - z) * ray[RAY.perDz];
+  if (toX < nearest) {
+    nearest = toX;
+    way = wayX;
+  }
+  if (toY < nearest) {
+    nearest = toY;
+    way = wayY;
+  }
+  if (toZ < nearest) {
+    nearest = toZ;
+    way = wayZ;
+  }
   for (let f = 3; f < families; f++) {
     const nx = normal[3 * f];
     const ny = normal[3 * f + 1];
@@ -68,8 +81,8 @@ export function nearestOther(
       way = 2 * families + k;
     }
   }
-  hit[0] = nearest;
-  hit[1] = way;
+  ray[RAY.ahead] = nearest > 0 ? nearest : 0;
+  now[NOW.way] = way;
 }
 
 /** Unit normal of the surface at a point, turned along the direction of travel, into `out` [0..2]. */

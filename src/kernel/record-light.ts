@@ -1,4 +1,4 @@
-/** Maps, spectra and angles of light that crosses a recorded face or plane, and the voxels where light is absorbed. */
+/** Maps, spectra and angles of light that crosses a recorded face or plane. */
 import { CELLS, RECORDER, type Scene } from '../scene/scene-layout.js';
 import type { GrownTally } from '../tallies/batch-tally.js';
 
@@ -42,12 +42,28 @@ function recordOne(
   wavelength: number,
   ray: Float64Array,
 ): void {
-  if ((scene.recorderLights[recorder] >> light) & 1) {
+  if (((scene.recorderLights[recorder] >> light) & 1) === 1) {
     const cellsU = scene.recorderCells[2 * recorder];
     const cellsV = scene.recorderCells[2 * recorder + 1];
     const quanta = scene.energyQuanta[wavelength];
-    const iu = clampCell(mapCoordinate(scene, recorder, 0, ray), cellsU);
-    const iv = clampCell(mapCoordinate(scene, recorder, 1, ray), cellsV);
+    let u: number;
+    let v: number;
+    if (scene.recorderWrap[recorder] === 1) {
+      u = mapCoordinate(scene, recorder, 0, ray);
+      v = mapCoordinate(scene, recorder, 1, ray);
+    } else {
+      // mapCoordinate of a flat recorder, written out: a call would box what it returns.
+      const frame = scene.recorderFrame;
+      const at = recorder * RECORDER.STRIDE;
+      const px = ray[0] - frame[at];
+      const py = ray[1] - frame[at + 1];
+      const pz = ray[2] - frame[at + 2];
+      u = px * frame[at + RECORDER.stepU] + py * frame[at + RECORDER.stepU + 1] + pz * frame[at + RECORDER.stepU + 2];
+      v = px * frame[at + RECORDER.stepV] + py * frame[at + RECORDER.stepV + 1] + pz * frame[at + RECORDER.stepV + 2];
+    }
+    // A photon on the very edge of a face belongs to its last cell.
+    const iu = u < 0 ? 0 : u >= cellsU ? cellsU - 1 : u | 0;
+    const iv = v < 0 ? 0 : v >= cellsV ? cellsV - 1 : v | 0;
     tally.maps[half * scene.mapCells + scene.recorderMap[recorder] + iu + cellsU * iv] += quanta;
     const angles = scene.recorderAngles[recorder];
     if (angles >= 0) tally.angles[angles + angularCell(scene.recorderFrame, recorder, ray)] += quanta;
@@ -66,7 +82,6 @@ export function inAperture(scene: Scene, recorder: number, way: number, ray: Flo
   return u >= 0 && u < 1 && v >= 0 && v < 1;
 }
 
-/** A photon on the very edge of a face belongs to its last cell. */
 function clampCell(coordinate: number, cells: number): number {
   const cell = Math.floor(coordinate);
   return cell < 0 ? 0 : cell >= cells ? cells - 1 : cell;
@@ -85,24 +100,4 @@ function angularCell(frame: Float64Array, recorder: number, ray: Float64Array): 
   // Light that leaves a curved face backwards of its axis is kept in the last polar cell.
   const row = clampCell((polar / (Math.PI / 2)) * CELLS.polar, CELLS.polar);
   return row * CELLS.azimuth + clampCell((turn < 0 ? turn + 1 : turn) * CELLS.azimuth, CELLS.azimuth);
-}
-
-/** Adds an absorbed photon to the voxel maps. */
-export function depositVoxel(
-  scene: Scene,
-  maps: Float64Array,
-  half: number,
-  light: number,
-  wavelength: number,
-  ray: Float64Array,
-): void {
-  const { voxelOrigin, voxelScale, voxelCells } = scene;
-  const cellsX = voxelCells[0];
-  const cellsY = voxelCells[1];
-  const ix = Math.floor((ray[0] - voxelOrigin[0]) * voxelScale[0]);
-  const iy = Math.floor((ray[1] - voxelOrigin[1]) * voxelScale[1]);
-  const iz = Math.floor((ray[2] - voxelOrigin[2]) * voxelScale[2]);
-  if (ix < 0 || iy < 0 || iz < 0 || ix >= cellsX || iy >= cellsY || iz >= voxelCells[2]) return;
-  const cell = half * scene.mapCells + ix + cellsX * (iy + cellsY * iz);
-  maps[(light === 0 ? scene.voxelPumpMap : scene.voxelEmittedMap) + cell] += scene.energyQuanta[wavelength];
 }

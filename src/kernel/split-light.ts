@@ -5,7 +5,7 @@ import { INTERFACE } from '../scene/region-graph.js';
 import { type Scene, SPLIT, SPREAD } from '../scene/scene-layout.js';
 
 /** Slots of the array `splitLight` reads and fills. */
-export enum SHARES {
+export const enum SHARES {
   reflected = 0,
   transmitted = 1,
   index = 2,

@@ -44,6 +44,9 @@ export const enum FLAG {
   spreads = 4,
 }
 
+/** Doubles the kernel keeps for each wall. */
+const WALL_DOUBLES = 4;
+
 /** Closer than this to a surface, the direction of travel decides on which side a starting point lies, mm. */
 const TIE = 1e-9;
 
@@ -65,6 +68,13 @@ export class RegionGraph {
   readonly owner: Int32Array;
   readonly medium: Int32Array;
 
+  /**
+   * Regions between axis planes only, empty in other scenes: what the kernel knows of their walls (kernel/wall.ts), and since when;
+   * −1 while the ways out are not all resolved.
+   */
+  readonly walls: Float64Array;
+  readonly wallsSince: Int32Array;
+
   /** Records of INTERFACE.STRIDE integers. Grows: read it anew after `resolve`. */
   interfaces = new Int32Array(64 * INTERFACE.STRIDE);
 
@@ -74,6 +84,7 @@ export class RegionGraph {
   readonly #table: Int32Array;
   /** Slab of every family, then side of every quadric, of the region being looked up. */
   readonly #wanted: Int32Array;
+  readonly #point = new Float64Array(3);
   readonly #knownInterfaces = new Map<string, number>();
 
   constructor(readonly scene: Scene) {
@@ -88,6 +99,9 @@ export class RegionGraph {
     this.crossing = new Int32Array(this.capacity * this.ways);
     this.owner = new Int32Array(this.capacity);
     this.medium = new Int32Array(this.capacity);
+    const boxes = this.ways === 6 ? this.capacity : 0;
+    this.walls = new Float64Array(boxes * 6 * WALL_DOUBLES);
+    this.wallsSince = new Int32Array(boxes);
     this.#slab = new Int32Array(this.capacity * this.families);
     this.#table = new Int32Array(2 ** Math.ceil(Math.log2(2 * this.capacity)));
     this.#wanted = new Int32Array(this.families + this.quadrics);
@@ -99,7 +113,7 @@ export class RegionGraph {
 
   /** Almost full: the kernel calls this between histories, when no region number is held. */
   get crowded(): boolean {
-    return this.#regions > this.capacity - 256;
+    return this.#regions > 0.75 * this.capacity;
   }
 
   /** Forgets every region; they are worked out anew when light comes there. Results do not depend on it. */
@@ -139,6 +153,17 @@ export class RegionGraph {
 
   /** Whether a point lies well inside a region, so that `locate` would return it. */
   contains(region: number, x: number, y: number, z: number): boolean {
+    this.#point[0] = x;
+    this.#point[1] = y;
+    this.#point[2] = z;
+    return this.holds(region, this.#point);
+  }
+
+  /** As `contains`, of the first three numbers of an array. */
+  holds(region: number, point: Float64Array): boolean {
+    const x = point[0];
+    const y = point[1];
+    const z = point[2];
     const { scene } = this;
     for (let f = 0; f < this.families; f++) {
       const at = scene.familyNormal[3 * f] * x + scene.familyNormal[3 * f + 1] * y + scene.familyNormal[3 * f + 2] * z;
@@ -177,6 +202,21 @@ export class RegionGraph {
     return this.crossing[at];
   }
 
+  /** Works out all six ways of a region between axis planes. */
+  resolveAll(region: number): void {
+    for (let way = 0; way < 6; way++) {
+      if (Number.isFinite(this.bound[region * 6 + way])) this.resolve(region, way);
+    }
+    this.wallsSince[region] = 0;
+  }
+
+  /** What is known of walls holds no longer. */
+  forgetWalls(): void {
+    for (let region = 0; region < Math.min(this.#regions, this.wallsSince.length); region++) {
+      if (this.wallsSince[region] > 0) this.wallsSince[region] = 0;
+    }
+  }
+
   /** Number of the region with the wanted sides; a new one if light has not been there. */
   #intern(): number {
     const wanted = this.#wanted;
@@ -190,6 +230,7 @@ export class RegionGraph {
     }
     if (this.#regions >= this.capacity) throw new RangeError('more regions in one history than the graph can hold');
     const region = this.#regions++;
+    if (region < this.wallsSince.length) this.wallsSince[region] = -1;
     this.#table[cell] = region + 1;
     for (let f = 0; f < this.families; f++) {
       const slab = wanted[f];

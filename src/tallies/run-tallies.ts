@@ -47,7 +47,7 @@ export interface Moments {
 }
 
 /** Place of each figure sum inside the figure part of the vector. Emitted light through the exit unless said otherwise. */
-export enum FIGURE_PLACE {
+export const enum FIGURE_PLACE {
   launchedPhotons = 0,
   launchedEnergy = 1,
   exitPhotons = 2,

@@ -1,7 +1,15 @@
 /** The generator against its published definition worked out again in whole numbers without limit. */
 import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
-import { BLOCK, fillUnits, nextBits, nextUnit, seedStream } from '../../src/numerics/random-stream.js';
+import {
+  BLOCK,
+  exponentialOf,
+  fillExponentials,
+  fillUnits,
+  nextBits,
+  nextUnit,
+  seedStream,
+} from '../../src/numerics/random-stream.js';
 
 const MASK = 0xffffffffn;
 
@@ -108,5 +116,26 @@ describe('fillUnits', () => {
       }),
       { numRuns: 20 },
     );
+  });
+});
+
+describe('exponentialOf', () => {
+  test('is -ln of the unit the bits stand for, against Math.log', () => {
+    const check = (bits: number) => {
+      const wanted = -Math.log(((bits >>> 0) + 0.5) * 2 ** -32);
+      expect(Math.abs(exponentialOf(bits) - wanted)).toBeLessThan(1e-14 * Math.max(1, wanted));
+    };
+    for (const bits of [0, 1, 2, 3, 4095, 4096, 4097, -1, -2, -(2 ** 31), 2 ** 31 - 1, 2 ** 30]) check(bits);
+    fc.assert(fc.property(fc.integer({ min: -(2 ** 31), max: 2 ** 31 - 1 }), check), { numRuns: 20_000 });
+    fc.assert(fc.property(fc.integer({ min: 0, max: 2 ** 16 }), check), { numRuns: 5000 });
+  });
+
+  test('fills blocks from the same bits', () => {
+    const one = Int32Array.of(1, 2, 3, 4);
+    const other = one.slice();
+    const block = new Float64Array(BLOCK.draws);
+    fillExponentials(one, block);
+    expect(Array.from(block)).toEqual(Array.from({ length: BLOCK.draws }, () => exponentialOf(nextBits(other))));
+    expect(one).toEqual(other);
   });
 });
