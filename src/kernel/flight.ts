@@ -79,6 +79,8 @@ export function createFlight(scene: Scene, graph: RegionGraph, desk: FlightDesk)
   const { bound, neighbour, crossing, walls, wallsSince } = graph;
   const { ray, now, units, exponentials, vector, spectra, depositCell, depositQuanta } = desk;
   const figures = 2 * scene.slots;
+  // The voxel maps show what holds dye; where nothing does, everything.
+  const leastAbsorbers = scene.maxAbsorbers > 1 ? 1 : 0;
   const { spectrumAbsorbedPump, spectrumEmitted, voxelPumpMap, voxelEmittedMap } = scene;
   const [voxelX, voxelY, voxelZ] = scene.voxelOrigin;
   const [perVoxelX, perVoxelY, perVoxelZ] = scene.voxelScale;
@@ -365,7 +367,8 @@ export function createFlight(scene: Scene, graph: RegionGraph, desk: FlightDesk)
         const u = (x - voxelX) * perVoxelX;
         const v = (y - voxelY) * perVoxelY;
         const s = (z - voxelZ) * perVoxelZ;
-        if (u >= 0 && v >= 0 && s >= 0 && u < voxelsX && v < voxelsY && s < voxelsZ) {
+        const mapped = absorberCount[medium] > leastAbsorbers;
+        if (mapped && u >= 0 && v >= 0 && s >= 0 && u < voxelsX && v < voxelsY && s < voxelsZ) {
           const row = Math.imul(voxelsX, ((v | 0) + Math.imul(voxelsY, s | 0)) | 0);
           depositCell[deposits] = ((light === 0 ? voxelPumpMap : voxelEmittedMap) + row + (u | 0)) | 0;
           depositQuanta[deposits] = quanta;

@@ -66,7 +66,9 @@ function recordOne(
     const iv = v < 0 ? 0 : v >= cellsV ? cellsV - 1 : v | 0;
     tally.maps[half * scene.mapCells + scene.recorderMap[recorder] + iu + cellsU * iv] += quanta;
     const angles = scene.recorderAngles[recorder];
-    if (angles >= 0) tally.angles[angles + angularCell(scene.recorderFrame, recorder, ray)] += quanta;
+    if (angles >= 0)
+      tally.angles[angles + angularCell(scene.recorderFrame, recorder, scene.recorderWrap[recorder] === 1, ray)] +=
+        quanta;
   }
   const spectrum = scene.recorderSpectrum[recorder];
   if (spectrum >= 0) tally.spectra[spectrum + light * scene.wavelengths + wavelength]++;
@@ -87,15 +89,38 @@ function clampCell(coordinate: number, cells: number): number {
   return cell < 0 ? 0 : cell >= cells ? cells - 1 : cell;
 }
 
-function angularCell(frame: Float64Array, recorder: number, ray: Float64Array): number {
+function angularCell(frame: Float64Array, recorder: number, wrapped: boolean, ray: Float64Array): number {
   const at = recorder * RECORDER.STRIDE;
   const n = at + RECORDER.axisN;
   const u = at + RECORDER.axisU;
   const v = at + RECORDER.axisV;
+  if (wrapped) return angularCellOfSide(frame, at, ray);
   const along = ray[3] * frame[n] + ray[4] * frame[n + 1] + ray[5] * frame[n + 2];
-  const polar = Math.acos(Math.max(-1, Math.min(1, along)));
   const a = ray[3] * frame[u] + ray[4] * frame[u + 1] + ray[5] * frame[u + 2];
   const b = ray[3] * frame[v] + ray[4] * frame[v + 1] + ray[5] * frame[v + 2];
+  return cellOfAngles(along, a, b);
+}
+
+/** On the side of a cylinder or cone the angles are taken where light leaves: from the radius, with azimuth 0 round the side and 90° along the axis. */
+function angularCellOfSide(frame: Float64Array, at: number, ray: Float64Array): number {
+  const n = at + RECORDER.axisN;
+  const u = at + RECORDER.axisU;
+  const v = at + RECORDER.axisV;
+  const px = ray[0] - frame[at];
+  const py = ray[1] - frame[at + 1];
+  const pz = ray[2] - frame[at + 2];
+  const pu = px * frame[u] + py * frame[u + 1] + pz * frame[u + 2];
+  const pv = px * frame[v] + py * frame[v + 1] + pz * frame[v + 2];
+  const radius = Math.sqrt(pu * pu + pv * pv);
+  const du = ray[3] * frame[u] + ray[4] * frame[u + 1] + ray[5] * frame[u + 2];
+  const dv = ray[3] * frame[v] + ray[4] * frame[v + 1] + ray[5] * frame[v + 2];
+  const along = ray[3] * frame[n] + ray[4] * frame[n + 1] + ray[5] * frame[n + 2];
+  return cellOfAngles((du * pu + dv * pv) / radius, (dv * pu - du * pv) / radius, along);
+}
+
+/** Cell of a direction by its parts along the normal and along azimuth 0 and 90°. */
+function cellOfAngles(out: number, a: number, b: number): number {
+  const polar = Math.acos(Math.max(-1, Math.min(1, out)));
   const turn = Math.atan2(b, a) / (2 * Math.PI);
   // Light that leaves a curved face backwards of its axis is kept in the last polar cell.
   const row = clampCell((polar / (Math.PI / 2)) * CELLS.polar, CELLS.polar);

@@ -50,7 +50,9 @@ export function splitLight(
   const ratio = index / beyond;
   if (ratio > 1 && ratio * ratio * (1 - cosine * cosine) >= 1) {
     if (scene.finishTransmitSpread[finish] === SPREAD.lambertian) return;
-    shares[SHARES.reflected] += shares[SHARES.transmitted];
+    const reflected = shares[SHARES.reflected] + shares[SHARES.transmitted];
+    // Shares that miss 1 by a rounding absorb nothing.
+    shares[SHARES.reflected] = reflected > 1 - 1e-12 ? 1 : reflected;
     shares[SHARES.transmitted] = 0;
   }
 }

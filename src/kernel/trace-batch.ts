@@ -5,7 +5,7 @@
 import { BLOCK, fillExponentials, fillUnits, nextUnit } from '../numerics/random-stream.js';
 import { SOBOL_DIMENSIONS, stepSobol } from '../numerics/sobol.js';
 import type { RegionGraph } from '../scene/region-graph.js';
-import type { Scene } from '../scene/scene-layout.js';
+import { OWNER_SLOT, type Scene } from '../scene/scene-layout.js';
 import { type BatchTally, closeGroup, GROUP_HISTORIES, type GrownTally } from '../tallies/batch-tally.js';
 import { FIGURE_PLACE } from '../tallies/run-tallies.js';
 import { closeHistory } from './close-history.js';
@@ -13,9 +13,18 @@ import { createFlight, createFlightDesk, type FlightDesk, LIMIT, STOP } from './
 import { launchPump } from './launch-pump.js';
 import { meetInterface } from './meet-interface.js';
 import { findBoundary } from './next-boundary.js';
-import { NOW, turnTo } from './photon.js';
+import { NOW, RAY, turnTo } from './photon.js';
 import { SHARES } from './split-light.js';
 import { workOutWall } from './wall.js';
+
+/**
+ * Turns of the outer loop after which a history counts as endless: light between reflectors that lose nothing, however they scatter it. A
+ * turn is one boundary, or between axis planes up to a block of draws.
+ */
+const enum TURNS {
+  surfaces = 1_000_000,
+  boxes = 100_000,
+}
 
 type BatchTracer = (tally: BatchTally, random: Int32Array, half: number, histories: number) => number;
 
@@ -48,6 +57,7 @@ function createTracer(scene: Scene, graph: RegionGraph): BatchTracer {
   const startRegion = new Int32Array(scene.pumpCount);
   const others = graph.ways !== 6;
   const figures = 2 * scene.slots;
+  const mostTurns = others ? TURNS.surfaces : TURNS.boxes;
 
   return (tally, random, half, histories) => {
     const { vector, grown } = tally;
@@ -77,8 +87,17 @@ function createTracer(scene: Scene, graph: RegionGraph): BatchTracer {
       now[NOW.bentAxis] = -1;
 
       let end: number = STOP.again;
+      let turns = 0;
       while (end < 0) {
+        if (++turns > mostTurns && endless(scene, ray, now) && turns > 2 * mostTurns) {
+          end = scene.ownerSlot[now[NOW.owner]] + OWNER_SLOT.trappedPump + now[NOW.light];
+          break;
+        }
         if (others) {
+          if (graph.crowded) {
+            now[NOW.region] = graph.renew(now[NOW.region]);
+            startRegion.fill(-1);
+          }
           findBoundary(scene, graph, ray, now);
           if (now[NOW.way] >= 0) graph.resolve(now[NOW.region], now[NOW.way]);
         }
@@ -100,6 +119,11 @@ function createTracer(scene: Scene, graph: RegionGraph): BatchTracer {
         } else if (end === STOP.wall) {
           workOutWall(scene, graph, ray, now, shares);
         } else if (end === STOP.region) {
+          if (graph.crowded) {
+            now[NOW.region] = graph.renew(now[NOW.region]);
+            now[NOW.era]++;
+            startRegion.fill(-1);
+          }
           graph.resolveAll(now[NOW.region]);
         } else if (end === STOP.defect) break;
       }
@@ -121,6 +145,13 @@ function createTracer(scene: Scene, graph: RegionGraph): BatchTracer {
     bookDeposits(scene, desk, half, grown);
     return defects;
   };
+}
+
+/** Ends endless light where its medium absorbs anything at all. @returns whether nothing does, so that only time can end it */
+function endless(scene: Scene, ray: Float64Array, now: Int32Array): boolean {
+  if (scene.attenuation[now[NOW.medium] * scene.wavelengths + now[NOW.wavelength]] === 0) return true;
+  ray[RAY.depth] = 0;
+  return false;
 }
 
 /** Adds counts to where they belong and sets them to 0. */

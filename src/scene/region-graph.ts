@@ -122,6 +122,20 @@ export class RegionGraph {
     this.#regions = 0;
   }
 
+  /** As `forget`, for light under way: keeps its region. @returns its new number */
+  renew(region: number): number {
+    this.#want(region);
+    this.forget();
+    return this.#intern();
+  }
+
+  #want(region: number): void {
+    for (let f = 0; f < this.families; f++) this.#wanted[f] = this.#slab[region * this.families + f];
+    for (let q = 0; q < this.quadrics; q++) {
+      this.#wanted[this.families + q] = this.side[region * this.quadrics + q];
+    }
+  }
+
   /** Region of a starting point; on a surface, the side the direction leads to. */
   locate(x: number, y: number, z: number, dx: number, dy: number, dz: number): number {
     const { scene } = this;
@@ -182,9 +196,8 @@ export class RegionGraph {
   resolve(region: number, way: number): number {
     const at = region * this.ways + way;
     if (this.crossing[at] !== CROSSING.unknown) return this.crossing[at];
+    this.#want(region);
     const wanted = this.#wanted;
-    for (let f = 0; f < this.families; f++) wanted[f] = this.#slab[region * this.families + f];
-    for (let q = 0; q < this.quadrics; q++) wanted[this.families + q] = this.side[region * this.quadrics + q];
     let surface: number;
     if (way < 2 * this.families) {
       const family = way >> 1;
