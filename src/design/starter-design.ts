@@ -49,7 +49,7 @@ pumps:
     power: bank-power
     wavelength: 445 nm
     linewidth: 2 nm
-    divergence: [2 deg, 6 deg]
+    divergence: [2 deg, 4 deg]
     toward: cell.front
     distance: 40 mm
     wall-plug: 32 %
@@ -59,7 +59,7 @@ pumps:
     power: bank-power
     wavelength: 445 nm
     linewidth: 2 nm
-    divergence: [2 deg, 6 deg]
+    divergence: [2 deg, 4 deg]
     toward: cell.back
     distance: 40 mm
     wall-plug: 32 %

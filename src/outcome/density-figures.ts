@@ -4,6 +4,11 @@ import type { TraceResult } from '../trace/trace-result.js';
 import { hasMeasure, type MapField } from './map-field.js';
 import { peakDensity, timeToBoiling } from './peak-density.js';
 
+function voxelSize({ map: { shape, extent } }: MapField): string {
+  const sides = extent.map(([low, high], axis) => Number(((high - low) / shape[axis]).toPrecision(2)));
+  return `${sides.join(' × ')} mm`;
+}
+
 type DensityFigureName = 'peakAbsorbedPowerDensity' | 'timeToBoiling';
 
 export function densityFigures(
@@ -22,10 +27,12 @@ export function densityFigures(
   if (!(peak.value > 0)) return nothing('too few photons a voxel');
   const absorbedEv = field.map.energy.reduce((sum, half) => sum + half.reduce((a, b) => a + b, 0), 0);
   const time = timeToBoiling(peak, description, tallies, absorbedEv);
-  const inherited =
-    time.value === null || note === undefined ? time : { ...time, note: `${time.note}; peak from ${note}` };
+  // A mean over a voxel hides what is finer: the truth boils no later than this.
+  const size = voxelSize(field);
+  const bound = `mean over a voxel of ${size}, so at least this${note === undefined ? '' : `; ${note}`}`;
+  const soon = `at the peak voxel of ${size}; a finer hot spot boils sooner`;
   return {
-    peakAbsorbedPowerDensity: { ...peak, unit: 'W/cm³', ...(note === undefined ? {} : { note }) },
-    timeToBoiling: { ...inherited, unit: 's' },
+    peakAbsorbedPowerDensity: { ...peak, unit: 'W/cm³', note: bound },
+    timeToBoiling: { ...time, unit: 's', note: time.value === null ? time.note : `${time.note}; ${soon}` },
   };
 }

@@ -19,7 +19,7 @@ export function peakDensity(field: MapField): Estimate & { readonly note?: strin
   const peakOf = (values: Float64Array) => cells.reduce((best, i) => (values[i] > values[best] ? i : best), cells[0]);
   if (even === null || odd === null) {
     const peak = peakOf(field.values);
-    const note = 'too few histories for two halves; reads high';
+    const note = 'too few histories to choose the voxel by one half and value it by the other';
     return { value: field.values[peak], standardError: errorAt(field, peak, field.values), note };
   }
   const first = peakOf(even);
@@ -29,7 +29,7 @@ export function peakDensity(field: MapField): Estimate & { readonly note?: strin
   return {
     value: (odd[first] + even[second]) / 2,
     standardError: errors.every((error) => error !== null) ? Math.hypot(...errors) / 2 : null,
-    ...(photons < PLENTY ? { note: `about ${Math.round(photons)} photons a voxel; may read low` } : {}),
+    ...(photons < PLENTY ? { note: `about ${Math.round(photons)} photons in it` } : {}),
   };
 }
 

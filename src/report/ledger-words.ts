@@ -5,9 +5,9 @@ export const GROUPS = ['pump-lost', 'heat', 'light-lost', 'output'] as const;
 export type Group = (typeof GROUPS)[number];
 
 export const GROUP_WORDS: Readonly<Record<Group, string>> = {
-  'pump-lost': 'pump light that no dye took',
+  'pump-lost': 'lost pump light',
   heat: 'heat in the dye',
-  'light-lost': 'emitted light gone astray',
+  'light-lost': 'lost emitted light',
   output: 'output',
 };
 

@@ -5,7 +5,7 @@ import { slug } from './slug.js';
 
 /** What tells the runs of a design apart. */
 export interface RunIdentity {
-  /** SHA-256 of the design text, hex. */
+  /** Hash of the design as used, hex; its first eight digits name the run. */
   readonly hash: string;
   readonly seed: string;
   readonly histories: number;

@@ -3,6 +3,7 @@ import type { Description, FinishDescription, Vector3 } from '../design/descript
 import { DesignFaults } from '../design/design-faults.js';
 import type { Fault } from '../design/fault.js';
 import { pumpFaults } from './check-pumps.js';
+import { strengthFaults, voxelFaults } from './check-strength.js';
 import { surroundingFaults } from './check-surroundings.js';
 import { type CompiledScene, compileScene } from './compile-scene.js';
 import type { SceneFace } from './compile-solids.js';
@@ -48,6 +49,8 @@ export function checkScene(description: Description): SceneCheck {
     ...views.flatMap(({ face, exposed, clashes }) => finishFaults(compiled, face, exposed, clashes)),
     ...exitFaults(description, compiled, views),
     ...partFaults(description, views),
+    ...strengthFaults(description),
+    ...voxelFaults(description, compiled.legend.voxels, compiled.legend.beams),
     ...surroundingFaults(description),
     ...pumpFaults(description),
     ...coveredFaults(description, compiled, views),

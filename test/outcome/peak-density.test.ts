@@ -60,7 +60,7 @@ describe('peak density', () => {
     const { value, standardError, note } = peakDensity(lone);
     expect(value).toBeCloseTo((9 / BATCH_HISTORIES) * 1000, 12);
     expect(standardError).toBeCloseTo(value / 3, 12);
-    expect(note).toMatch(/reads high/);
+    expect(note).toMatch(/too few histories/);
   });
 });
 

@@ -1,3 +1,4 @@
+import { createHash } from 'node:crypto';
 import { availableParallelism } from 'node:os';
 import type { LocatedFault } from '../../design/fault.js';
 import type { SoundDesign } from '../../design/read-design.js';
@@ -67,13 +68,18 @@ export async function traceCommand(file: string, options: TraceCommandOptions): 
   }
 }
 
+/** The text and the dials as used: runs of one file with other dials are not alike. */
+function designMark({ design: { hash, dials } }: RunRecord): string {
+  return createHash('sha256').update(hash).update(JSON.stringify(dials)).digest('hex');
+}
+
 /** Writes the run and gives back its folder. */
 async function keep(record: RunRecord, arrays: RunArrays, out: string | undefined): Promise<string> {
   const { runFolderPath } = await import('../../run-folder/run-folder-path.js');
   const { writeRun } = await import('../../run-folder/write-run.js');
   const { REPORT_HTML, runPage } = await import('../../report/run-page.js');
-  const { hash, title } = record.design;
-  const folder = out ?? (await runFolderPath(RESULTS, title, { hash, ...record.run }));
+  const folder =
+    out ?? (await runFolderPath(RESULTS, record.design.title, { hash: designMark(record), ...record.run }));
   await writeRun(folder, record, arrays, undefined, [[REPORT_HTML, runPage]]);
   return folder;
 }
