@@ -1,9 +1,10 @@
 /** Raw counters + legend -> run tallies: names, units (eV, mm) and the measure of every map cell. */
+
+import type { GrownTally } from '../kernel/batch-tally.js';
 import type { CompiledScene } from '../scene/compile-scene.js';
 import { mapMeasure, voxelMeasure } from '../scene/map-measure.js';
 import { RegionGraph } from '../scene/region-graph.js';
 import { CELLS } from '../scene/scene-layout.js';
-import type { GrownTally } from '../tallies/batch-tally.js';
 import type { Histogram, RecordedAngles, RecordedMap, RecordedSpectrum, RunTallies } from '../tallies/run-tallies.js';
 import type { BatchFold } from './fold-batches.js';
 

@@ -1,6 +1,5 @@
 /** Sums over batches, always in batch order: floating-point sums then have the same bits whatever the threads did. */
-import { GROUP_HISTORIES } from '../tallies/batch-tally.js';
-import { FIGURE, FIGURE_COUNT, type Moments } from '../tallies/run-tallies.js';
+import { FIGURE, FIGURE_COUNT, GROUP_HISTORIES, type Moments } from '../tallies/run-tallies.js';
 import type { BatchResult } from './messages.js';
 
 interface RunningMoments {

@@ -1,6 +1,8 @@
 /** Batches in rounds over all threads, until enough histories, precision or time, or until told to stop. */
+
+import { type GrownTally, grownBytes, grownTally } from '../kernel/batch-tally.js';
 import type { Scene } from '../scene/scene-layout.js';
-import { BATCH_HISTORIES, type GrownTally, grownBytes, grownTally } from '../tallies/batch-tally.js';
+import { BATCH_HISTORIES } from '../tallies/run-tallies.js';
 import type { BatchPlan, StopReason } from './batch-plan.js';
 import { BatchFold } from './fold-batches.js';
 import { CONTROL, type ShareTask } from './messages.js';

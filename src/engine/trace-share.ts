@@ -1,9 +1,10 @@
 /** One thread's work in a round. The same function runs in worker threads and, for small runs, in the calling thread. */
 import seedrandom from 'seedrandom';
+import { type BatchTally, clearBatch, createBatchTally, grownTally } from '../kernel/batch-tally.js';
 import { traceBatch } from '../kernel/trace-batch.js';
 import { seedStream } from '../numerics/random-stream.js';
 import { RegionGraph } from '../scene/region-graph.js';
-import { BATCH_HISTORIES, type BatchTally, clearBatch, createBatchTally, grownTally } from '../tallies/batch-tally.js';
+import { BATCH_HISTORIES } from '../tallies/run-tallies.js';
 import { type BatchResult, CONTROL, type ShareResult, type ShareTask } from './messages.js';
 
 let held: { runId: number; graph: RegionGraph } | null = null;

@@ -1,6 +1,6 @@
 import { CELLS, type Scene, SLOT } from '../scene/scene-layout.js';
-import type { BatchTally } from '../tallies/batch-tally.js';
 import { FIGURE_PLACE } from '../tallies/run-tallies.js';
+import type { BatchTally } from './batch-tally.js';
 import { NOW, RAY } from './photon.js';
 
 /** Books the fate of a history and, for output, what people see of it.  */

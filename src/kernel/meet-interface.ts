@@ -1,7 +1,7 @@
 /** Light at an interface, in full: free planes, recorders, every finish, refraction and scatter. */
 import { FLAG, INTERFACE, type RegionGraph } from '../scene/region-graph.js';
 import { FACE_SLOT, type Scene, SLOT, SPREAD } from '../scene/scene-layout.js';
-import type { GrownTally } from '../tallies/batch-tally.js';
+import type { GrownTally } from './batch-tally.js';
 import { travelNormal } from './next-boundary.js';
 import { NOW, RAY } from './photon.js';
 import { inAperture, recordCrossing } from './record-light.js';

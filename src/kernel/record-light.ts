@@ -1,6 +1,6 @@
 /** Maps, spectra and angles of light that crosses a recorded face or plane. */
 import { CELLS, RECORDER, type Scene } from '../scene/scene-layout.js';
-import type { GrownTally } from '../tallies/batch-tally.js';
+import type { GrownTally } from './batch-tally.js';
 
 /** Cell coordinate along the map's u and v of a point on the recorder, in cells (not rounded). */
 export function mapCoordinate(scene: Scene, recorder: number, axis: 0 | 1, ray: Float64Array): number {

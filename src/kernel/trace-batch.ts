@@ -6,8 +6,8 @@ import { BLOCK, fillExponentials, fillUnits, nextUnit } from '../numerics/random
 import { SOBOL_DIMENSIONS, stepSobol } from '../numerics/sobol.js';
 import type { RegionGraph } from '../scene/region-graph.js';
 import { OWNER_SLOT, type Scene } from '../scene/scene-layout.js';
-import { type BatchTally, closeGroup, GROUP_HISTORIES, type GrownTally } from '../tallies/batch-tally.js';
-import { FIGURE_PLACE } from '../tallies/run-tallies.js';
+import { FIGURE_PLACE, GROUP_HISTORIES } from '../tallies/run-tallies.js';
+import { type BatchTally, closeGroup, type GrownTally } from './batch-tally.js';
 import { closeHistory } from './close-history.js';
 import { createFlight, createFlightDesk, type FlightDesk, LIMIT, STOP } from './flight.js';
 import { launchPump } from './launch-pump.js';

@@ -1,7 +1,7 @@
 /** Recorded energies -> irradiance or absorbed power density, per half and together. */
 
-import { BATCH_HISTORIES } from '../tallies/batch-tally.js';
 import type { RecordedMap, RunTallies } from '../tallies/run-tallies.js';
+import { BATCH_HISTORIES } from '../tallies/run-tallies.js';
 
 /** A map in W/cm² (faces) or W/cm³ (voxels). */
 export interface MapField {

@@ -4,6 +4,11 @@
  * in eV; W = eV/launched eV × pump power.
  */
 
+/** Histories of one random stream, and the unit of the error bars. A power of two: a whole Sobol net. */
+export const BATCH_HISTORIES = 1024;
+/** Histories of one group: errors of runs too short for batches. */
+export const GROUP_HISTORIES = 64;
+
 /** Fates a history, or a bundle of its energy, can have. Exhaustive and exclusive. */
 export type Fate =
   | 'missed' // pump light that met no part at all

@@ -12,10 +12,10 @@ const MODULES = {
   openPool: 'engine/thread-pool.js',
   traceShare: 'engine/trace-share.js',
   CONTROL: 'engine/messages.js',
-  grownBytes: 'tallies/batch-tally.js',
-  BATCH_HISTORIES: 'tallies/batch-tally.js',
-  createBatchTally: 'tallies/batch-tally.js',
-  grownTally: 'tallies/batch-tally.js',
+  grownBytes: 'kernel/batch-tally.js',
+  BATCH_HISTORIES: 'tallies/run-tallies.js',
+  createBatchTally: 'kernel/batch-tally.js',
+  grownTally: 'kernel/batch-tally.js',
   FIGURE: 'tallies/run-tallies.js',
 };
 

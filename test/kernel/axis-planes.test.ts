@@ -5,18 +5,12 @@
 import { describe, expect, test } from 'vitest';
 import type { Description } from '../../src/design/description.js';
 import { batchStream } from '../../src/engine/trace-share.js';
+import { clearBatch, createBatchTally, grownBytes, grownTally } from '../../src/kernel/batch-tally.js';
 import { traceBatch } from '../../src/kernel/trace-batch.js';
 import { compileScene } from '../../src/scene/compile-scene.js';
 import { RegionGraph } from '../../src/scene/region-graph.js';
 import type { Scene } from '../../src/scene/scene-layout.js';
-import {
-  BATCH_HISTORIES,
-  clearBatch,
-  createBatchTally,
-  grownBytes,
-  grownTally,
-} from '../../src/tallies/batch-tally.js';
-import { FIGURE_PLACE } from '../../src/tallies/run-tallies.js';
+import { BATCH_HISTORIES, FIGURE_PLACE } from '../../src/tallies/run-tallies.js';
 import { beam, describeDesign, finish, flat, medium, part, plainDye } from '../helpers/describe.js';
 
 /** Liquid inside a glass jacket: light comes back to it through other walls than it left by, with another direction. */

@@ -1,7 +1,7 @@
 import { describe, expect, test } from 'vitest';
 import { mapEvenness } from '../../src/outcome/map-evenness.js';
 import { mapField } from '../../src/outcome/map-field.js';
-import { BATCH_HISTORIES } from '../../src/tallies/batch-tally.js';
+import { BATCH_HISTORIES } from '../../src/tallies/run-tallies.js';
 import { poisson, seeded } from '../helpers/random-laws.js';
 import { syntheticMap, syntheticTallies } from '../helpers/synthetic-tallies.js';
 

@@ -1,7 +1,7 @@
 import { describe, expect, test } from 'vitest';
 import { mapField } from '../../src/outcome/map-field.js';
 import { peakDensity, timeToBoiling } from '../../src/outcome/peak-density.js';
-import { BATCH_HISTORIES } from '../../src/tallies/batch-tally.js';
+import { BATCH_HISTORIES } from '../../src/tallies/run-tallies.js';
 import { beam, describeDesign, medium, part, plainDye } from '../helpers/describe.js';
 import { poisson, sampleOf, seeded } from '../helpers/random-laws.js';
 import { slot, syntheticMap, syntheticTallies } from '../helpers/synthetic-tallies.js';

@@ -133,9 +133,9 @@ function part(group: Group, stream: Stream, watts: number, contents: Markup): Ma
 function label({ words, fraction }: Stream, x: number, middle: number, size: FlowSize, watts: number): Markup {
   const number = percent(fraction);
   if (size.pitch < 30) {
-    return markup`<text class="flow-words" x="${x}" y="${round(middle + 5)}"><tspan class="flow-number">${number}</tspan><tspan x="${x + 72}">${significant(fraction * watts, 3)} W</tspan><tspan x="${x + 150}">${shortName(words, size.letters)}</tspan></text>`;
+    return markup`<text class="flow-words" x="${x}" y="${round(middle + 5)}"><tspan class="flow-number">${number}</tspan><tspan x="${x + 72}">${wattText(fraction * watts)}</tspan><tspan x="${x + 150}">${shortName(words, size.letters)}</tspan></text>`;
   }
-  return markup`<text class="flow-words" x="${x}" y="${round(middle - 2)}"><tspan class="flow-number">${number}</tspan><tspan dx="8">${significant(fraction * watts, 3)} W</tspan><tspan x="${x}" dy="15">${shortName(words, size.letters)}</tspan></text>`;
+  return markup`<text class="flow-words" x="${x}" y="${round(middle - 2)}"><tspan class="flow-number">${number}</tspan><tspan dx="8">${wattText(fraction * watts)}</tspan><tspan x="${x}" dy="15">${shortName(words, size.letters)}</tspan></text>`;
 }
 
 function spelt({ fraction, standardError }: Stream, watts: number): string {
@@ -143,4 +143,8 @@ function spelt({ fraction, standardError }: Stream, watts: number): string {
   return `${formatWithError(100 * fraction, error(100), '%', '±')}, ${formatWithError(fraction * watts, error(watts), 'W', '±')}`;
 }
 
-const percent = (fraction: number): string => `${significant(100 * fraction, 3)} %`;
+// Long tails of noughts would run into the next column; the tables below hold the number itself.
+const percent = (fraction: number): string =>
+  Math.abs(fraction) < 1e-4 ? '< 0.01\u00a0%' : `${significant(100 * fraction, 3)}\u00a0%`;
+
+const wattText = (watts: number): string => (Math.abs(watts) < 1e-3 ? '< 1 mW' : `${significant(watts, 3)} W`);

@@ -1,11 +1,6 @@
 /** Counters a thread writes while it traces. One batch's vector is handed on; maps and histograms stay and grow. */
 import { CELLS, type Scene } from '../scene/scene-layout.js';
-import { FIGURE_COUNT } from './run-tallies.js';
-
-/** Histories of one random stream, and the unit of the error bars. A power of two: a whole Sobol net. */
-export const BATCH_HISTORIES = 1024;
-/** Histories of one group: errors of runs too short for batches. */
-export const GROUP_HISTORIES = 64;
+import { FIGURE_COUNT } from '../tallies/run-tallies.js';
 
 export interface BatchTally {
   /** [2·slots + FIGURE_COUNT]: photons and quanta of each slot, then the figure sums, of the batch in hand. */
