@@ -8,7 +8,7 @@ const UP: Vector3 = [0, 0, 1];
 
 function cell(pumps: readonly PumpDescription[], more: { exit?: string; detectors?: Description['detectors'] } = {}) {
   return describeDesign({
-    media: [medium('bath', 1.36, { dyes: [plainDye(0.5, 0.9, 520)] })],
+    media: [medium('bath', 1.36, { dyes: [plainDye(0.1, 0.9, 520)] })],
     finishes: [finish('silver', { kind: 'mirror', reflectance: 0.95 })],
     parts: [
       part('cell', { kind: 'box', size: [10, 10, 10] }, 'bath'),
