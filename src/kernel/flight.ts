@@ -1,6 +1,7 @@
 /**
  * The hot loop: light between axis planes from one event that needs help to the next. It calls nothing and keeps what it needs in locals,
  * so that the machine code has registers to spare; integer sums end in `| 0`, which spares it overflow checks.
+ * That is why this file is long: split into functions, the loop spills its locals at every call and fractions are boxed on the way (DEVELOPERS.md, D7).
  */
 import { BLOCK } from '../numerics/random-stream.js';
 import { CROSSING, FLAG, INTERFACE, type RegionGraph } from '../scene/region-graph.js';
