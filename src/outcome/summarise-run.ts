@@ -152,6 +152,7 @@ function runArrays({ tallies }: TraceResult, fields: readonly MapField[], pumpWa
         (ev, i) => (ev * wattsPerEv) / cellSolidAngle(Math.floor(i / azimuthCells), polarCells, azimuthCells),
       ),
     })),
+    drawing: null,
   };
 }
 

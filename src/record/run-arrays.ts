@@ -1,4 +1,5 @@
 /** The arrays of a run: what its folder keeps beside run.json. The outcome stage fills them. */
+import type { Drawing } from './drawing.js';
 
 export interface MapArray {
   readonly id: string;
@@ -33,4 +34,6 @@ export interface RunArrays {
   readonly maps: readonly MapArray[];
   readonly spectra: SpectraArray;
   readonly angles: readonly AnglesArray[];
+  /** The design in space and some histories; null where it was not made. */
+  readonly drawing: Drawing | null;
 }

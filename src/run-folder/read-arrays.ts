@@ -12,7 +12,7 @@ export async function readArrays(folder: string, record: RunRecord): Promise<Run
   for (const map of record.maps) maps.push(await readMap(folder, map));
   const angles: AnglesArray[] = [];
   for (const one of record.angles) angles.push(await readAngles(folder, one));
-  return { maps, spectra: await readSpectra(folder, record.spectra), angles };
+  return { maps, spectra: await readSpectra(folder, record.spectra), angles, drawing: null };
 }
 
 async function readMap(folder: string, { id, shape, extentMm, axes, unit, files }: MapRecord): Promise<MapArray> {

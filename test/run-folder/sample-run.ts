@@ -23,6 +23,7 @@ export function sampleRun(): { record: RunRecord; arrays: RunArrays } {
     checks: [{ code: 'caution', severity: 'warning', path: ['parts', 'cell', 0], problem: 'thin wall', found: '1 µm' }],
   };
   const arrays: RunArrays = {
+    drawing: null,
     maps,
     spectra: {
       wavelengthsNm: Float64Array.of(500, 550),
