@@ -72,7 +72,7 @@ export function createFlight(scene: Scene, graph: RegionGraph, desk: FlightDesk)
   const wavelengths = scene.wavelengths;
   const families2 = 2 * scene.families;
   const ways = graph.ways;
-  const others = ways !== 6;
+  const others = graph.stepwise;
   const maxAbsorbers = scene.maxAbsorbers;
   const { index, attenuation, absorberCount, absorberShare, dyeYield, dyeSpectrum } = scene;
   const { energyQuanta, faceSlot, ownerSlot, dyeSlot, faceRecorderOut } = scene;

@@ -16,6 +16,7 @@ import { findBoundary } from './next-boundary.js';
 import { NOW, RAY, turnTo } from './photon.js';
 import { SHARES } from './split-light.js';
 import { workOutWall } from './wall.js';
+import type { Witness } from './witness.js';
 
 /**
  * Turns of the outer loop after which a history counts as endless: light between reflectors that lose nothing, however they scatter it. A
@@ -47,15 +48,27 @@ export function traceBatch(
   return tracer(tally, random, half, histories);
 }
 
+/** As `traceBatch`, with someone who sees every turn of a photon's path. The graph must be stepwise. */
+export function traceWitnessed(
+  scene: Scene,
+  graph: RegionGraph,
+  tally: BatchTally,
+  random: Int32Array,
+  histories: number,
+  witness: Witness,
+): number {
+  return createTracer(scene, graph, witness)(tally, random, 0, histories);
+}
+
 /** Working memory and flight of a thread, made once for a run: what a closure made but once holds is fixed to the optimiser. */
-function createTracer(scene: Scene, graph: RegionGraph): BatchTracer {
+function createTracer(scene: Scene, graph: RegionGraph, witness: Witness | null = null): BatchTracer {
   const desk = createFlightDesk(scene);
   const { ray, now, units, exponentials } = desk;
   const fly = createFlight(scene, graph, desk);
   const shares = new Float64Array(SHARES.COUNT);
   const points = new Int32Array(SOBOL_DIMENSIONS);
   const startRegion = new Int32Array(scene.pumpCount);
-  const others = graph.ways !== 6;
+  const others = graph.stepwise;
   const figures = 2 * scene.slots;
   const mostTurns = others ? TURNS.surfaces : TURNS.boxes;
 
@@ -110,6 +123,7 @@ function createTracer(scene: Scene, graph: RegionGraph): BatchTracer {
           now[NOW.exponential] = 0;
         }
         if (now[NOW.deposits] > LIMIT.lastDeposit) bookDeposits(scene, desk, half, grown);
+        witness?.see(ray, now);
         end = fly();
         if (end === STOP.boundary) {
           end = meetInterface(scene, graph, grown, half, ray, now, shares, random);
@@ -132,6 +146,7 @@ function createTracer(scene: Scene, graph: RegionGraph): BatchTracer {
         defects++;
         continue;
       }
+      witness?.close(end, ray, now);
       closeHistory(scene, tally, end, ray, now);
       if (++inGroup === GROUP_HISTORIES) {
         moveCounts(desk.vector, vector);

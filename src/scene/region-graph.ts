@@ -53,6 +53,8 @@ const TIE = 1e-9;
 export class RegionGraph {
   /** Ways out of a region: low and high plane of every family, then every quadric. */
   readonly ways: number;
+  /** Light is flown from one boundary to the next; otherwise all surfaces are axis planes and it is flown from event to event. */
+  readonly stepwise: boolean;
   readonly families: number;
   readonly quadrics: number;
   readonly capacity: number;
@@ -87,10 +89,15 @@ export class RegionGraph {
   readonly #point = new Float64Array(3);
   readonly #knownInterfaces = new Map<string, number>();
 
-  constructor(readonly scene: Scene) {
+  /** @param stepwise also where all surfaces are axis planes: slower, but the flight stops at every boundary. */
+  constructor(
+    readonly scene: Scene,
+    stepwise = false,
+  ) {
     this.families = scene.families;
     this.quadrics = scene.quadrics;
     this.ways = 2 * this.families + this.quadrics;
+    this.stepwise = stepwise || this.ways !== 6;
     const bytes = this.ways * 8 + this.families * 20 + this.quadrics + 8;
     this.capacity = Math.max(64, Math.min(1 << 16, Math.floor(2 ** 28 / bytes)));
     this.bound = new Float64Array(this.capacity * 2 * this.families);
@@ -99,7 +106,7 @@ export class RegionGraph {
     this.crossing = new Int32Array(this.capacity * this.ways);
     this.owner = new Int32Array(this.capacity);
     this.medium = new Int32Array(this.capacity);
-    const boxes = this.ways === 6 ? this.capacity : 0;
+    const boxes = this.stepwise ? 0 : this.capacity;
     this.walls = new Float64Array(boxes * 6 * WALL_DOUBLES);
     this.wallsSince = new Int32Array(boxes);
     this.#slab = new Int32Array(this.capacity * this.families);
