@@ -72,6 +72,12 @@ export function buildProgram(done: (code: ExitCode) => void): Command {
     )
     .option('--threads <number>', 'worker threads (default: all cores); the results do not depend on it', parseThreads)
     .option('--out <folder>', 'new or empty folder for the run (default: a new one below results)')
+    .addOption(
+      new Option(
+        '--polarisation <mode>',
+        "whether light keeps its polarisation (default: the design's, else carried where a pump is polarised)",
+      ).choices(['carried', 'averaged']),
+    )
     .option('--no-files', 'write no files')
     .option('--plain', 'print the record of the run as JSON and nothing else')
     .addOption(new Option('--ledger <of>', 'ledger to print').choices(['watts', 'photons']).default('watts'))

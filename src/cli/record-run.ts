@@ -15,6 +15,7 @@ export function recordRun(
   reading: SoundDesign,
   turned: Readonly<Record<string, string>>,
   startedAt: Date,
+  polarisation?: 'carried' | 'averaged',
 ): { record: RunRecord; arrays: RunArrays } {
   const { description, file, text, hash } = reading;
   const { histories } = result.tallies.moments;
@@ -27,7 +28,7 @@ export function recordRun(
       hash,
       dials: Object.fromEntries(description.dials.map((dial) => [dial.name, dial.text])),
       startedAt,
-      repeat: repeatCommand(file, histories, result.seed, turned),
+      repeat: repeatCommand(file, histories, result.seed, turned, polarisation),
     },
   );
 }

@@ -6,8 +6,10 @@ export function repeatCommand(
   histories: number,
   seed: string,
   dials: Readonly<Record<string, string>>,
+  polarisation?: 'carried' | 'averaged',
 ): string {
   const turned = Object.entries(dials).flatMap(([name, value]) => ['--dial', `${name}=${value}`]);
   const words = ['stokeswell', 'trace', file, '--histories', String(histories), '--seed', seed, ...turned];
+  if (polarisation !== undefined) words.push('--polarisation', polarisation);
   return words.map(shellQuote).join(' ');
 }

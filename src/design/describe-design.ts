@@ -40,8 +40,8 @@ export function describeDesign(design: DesignRecord, dials: readonly Dial[], rea
 }
 
 function describeDefaults(trace: DesignRecord['trace'], reading: Reading): TraceDefaults {
-  if (trace === null) return { histories: null, precision: null, seed: null, voxels: null };
-  const { histories, precision, seed, voxels } = trace;
+  if (trace === null) return { histories: null, precision: null, seed: null, voxels: null, polarisation: null };
+  const { histories, precision, seed, voxels, polarisation } = trace;
   checkCells(voxels, ['trace', 'voxels'], 'voxels', reading);
-  return { histories, precision, seed, voxels };
+  return { histories, precision, seed, voxels, polarisation };
 }

@@ -13,8 +13,15 @@ export function describePumps(design: DesignRecord, faces: FaceIndex, reading: R
     const aim = describeAim(value, path, faces, reading);
     const beam = describeBeam(value, path, reading);
     if (aim === null || beam === null) return [];
-    const { power, wavelength, linewidth, driver } = value;
-    const given = { power, wavelengthNm: wavelength, linewidthNm: linewidth, wallPlug: value['wall-plug'], driver };
+    const { power, wavelength, linewidth, driver, polarised } = value;
+    const given = {
+      power,
+      wavelengthNm: wavelength,
+      linewidthNm: linewidth,
+      wallPlug: value['wall-plug'],
+      driver,
+      polarised,
+    };
     return [{ name, path, ...given, aim, beam }];
   });
 }

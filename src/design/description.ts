@@ -41,6 +41,8 @@ export interface TraceDefaults {
   readonly seed: string | null;
   /** Voxels along x, y, z of the absorbed-power map over the bounding box of all dyed parts. */
   readonly voxels: Vector3 | null;
+  /** Whether every photon keeps its polarisation, or interfaces treat all light as unpolarised; null: carried where a pump is polarised. */
+  readonly polarisation: 'carried' | 'averaged' | null;
 }
 
 // ------------------------------------------------------------------------------------------------ media
@@ -223,6 +225,8 @@ export interface PumpDescription {
   readonly wallPlug: number | null;
   /** Efficiency of the driver, 0..1; null when not given. */
   readonly driver: number | null;
+  /** Angle of the electric field from the beam's u towards its v, rad; null: unpolarised. */
+  readonly polarised: number | null;
   readonly aim: Aim;
   readonly beam: BeamDescription;
 }

@@ -6,7 +6,7 @@ import { either, mapped } from './form-either.js';
 import { triple } from './form-lists.js';
 import { count, quantity } from './form-quantities.js';
 import { mapOf, record } from './form-record.js';
-import { freeText, type Reference, reference } from './form-scalars.js';
+import { freeText, oneWord, type Reference, reference } from './form-scalars.js';
 import { dyesForm, mediaForm } from './media-fields.js';
 import { partsForm } from './part-fields.js';
 import { detectorsForm, pixels, pumpsForm } from './pump-fields.js';
@@ -25,7 +25,7 @@ const exit = either<ExitRecord>({
   map: record('face and pixels', { face: required(exitName, 'part.face or the name of a detector.'), pixels }),
 });
 
-const trace = record('histories, precision, seed, voxels', {
+const trace = record('histories, precision, seed, voxels, polarisation', {
   histories: optional(count(1, 2 ** 31 - 1024), 'Number of histories.'),
   precision: optional(
     quantity('fraction', { above: 0, below: 1 }),
@@ -35,6 +35,10 @@ const trace = record('histories, precision, seed, voxels', {
   voxels: optional(
     triple(count(1, 1000), 'numbers of voxels [x, y, z]'),
     'Voxels of the absorbed-power map over all dyed parts.',
+  ),
+  polarisation: optional(
+    oneWord('carried', 'averaged'),
+    'Whether light keeps its polarisation, or faces treat all light as unpolarised. Default: carried where a pump is polarised.',
   ),
 });
 

@@ -64,6 +64,10 @@ const pumpRecord = record(
     divergence: optional(divergence, 'Far field, full width at half maximum: [fast, slow], or one angle for both.'),
     'fast-axis': optional(oneWord('along', 'across'), 'Which way the fast axis lies. Default: along.'),
     lens: optional(lens, 'A thin lens in front of the whole bank.'),
+    polarised: optional(
+      quantity('angle'),
+      'Angle of the electric field from across (the u axis) towards along (v). Default: unpolarised.',
+    ),
     'wall-plug': optional(efficiency, 'Optical power per electrical power of the diodes.'),
     driver: optional(efficiency, 'Efficiency of the driver.'),
     toward: optional(reference('part.face', ['cell.front']), 'Aims at the centre of a face, along its inward normal.'),

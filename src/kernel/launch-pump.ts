@@ -5,6 +5,7 @@ import { sobolUnit } from '../numerics/sobol.js';
 import type { RegionGraph } from '../scene/region-graph.js';
 import { BEAM, OUTLINE, PUMP, type Scene, SURROUNDINGS } from '../scene/scene-layout.js';
 import { NOW, RAY } from './photon.js';
+import { startPolarised } from './polarised-light.js';
 
 /** Sobol dimensions of a launch; the last one draws the first free path. */
 export const enum LAUNCH {
@@ -33,6 +34,7 @@ export function launchPump(
   let pump = 0;
   while (pump < scene.pumpCount - 1 && unit >= scene.pumpCumulative[pump]) pump++;
   placeInBeam(scene, pump, points, ray);
+  if (scene.polarised !== 0) startPolarised(scene, pump, ray);
   ray[RAY.depth] = exponentialOf(points[LAUNCH.freePath]);
   const cells = scene.wavelengths;
   const table = scene.pumpSpectrum[pump] * cells;

@@ -4,6 +4,7 @@ import { FACE_SLOT, type Scene, SLOT, SPREAD } from '../scene/scene-layout.js';
 import type { GrownTally } from './batch-tally.js';
 import { travelNormal } from './next-boundary.js';
 import { NOW, RAY } from './photon.js';
+import { carryPolarisation, holdDirection, losePolarisation, splitPolarised } from './polarised-light.js';
 import { inAperture, recordCrossing } from './record-light.js';
 import { scatterAbout, scatterLambertian } from './scatter.js';
 import { SHARES, splitLight } from './split-light.js';
@@ -67,6 +68,8 @@ export function meetInterface(
   shares[SHARES.index] = n1;
   shares[SHARES.cosine] = cosine;
   splitLight(scene, interfaces, record, wavelength, shares);
+  const polarised = scene.polarised !== 0;
+  if (polarised) splitPolarised(scene, interfaces, record, wavelength, ray, gx, gy, gz, shares);
   const reflected = shares[SHARES.reflected];
   const transmitted = shares[SHARES.transmitted];
   const n2 = shares[SHARES.indexBeyond];
@@ -92,6 +95,10 @@ export function meetInterface(
     spread = reflects ? scene.finishReflectSpread[finish] : scene.finishTransmitSpread[finish];
   }
   const sign = reflects ? -1 : 1;
+  if (polarised) {
+    if (spread === SPREAD.specular) carryPolarisation(shares, reflects, ray);
+    else losePolarisation(ray);
+  }
   if (spread === SPREAD.lambertian) {
     now[NOW.closed] = 0;
     scatterLambertian(ray, sign * gx, sign * gy, sign * gz, random);
@@ -115,6 +122,7 @@ export function meetInterface(
       scatterAbout(ray, spread, scene.finishWidth[finish], sign * gx, sign * gy, sign * gz, random);
     }
   }
+  if (polarised) holdDirection(ray);
   if (reflects) return -1;
 
   // ---- through: another medium, another owner

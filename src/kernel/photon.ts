@@ -23,7 +23,20 @@ export const enum RAY {
   perDx = 12,
   perDy = 13,
   perDz = 14,
-  COUNT = 16,
+  // Polarised light only; see kernel/polarised-light.ts.
+  /** Stokes parameters over the first one, about the axis below. */
+  stokesQ = 15,
+  stokesU = 16,
+  stokesV = 17,
+  /** Unit vector across the direction, to which the Stokes parameters refer. */
+  axisX = 18,
+  axisY = 19,
+  axisZ = 20,
+  /** Direction for which they hold: light that a dye or scatterer has turned since is unpolarised. */
+  heldX = 21,
+  heldY = 22,
+  heldZ = 23,
+  COUNT = 24,
 }
 
 /** Places of what is counted. */

@@ -11,7 +11,16 @@ export const enum SHARES {
   index = 2,
   cosine = 3,
   indexBeyond = 4,
-  COUNT = 5,
+  // Polarised light only: shares of s and p, and the product of one amplitude with the other's conjugate.
+  reflectedS = 5,
+  reflectedP = 6,
+  reflectedReal = 7,
+  reflectedImaginary = 8,
+  transmittedS = 9,
+  transmittedP = 10,
+  transmittedReal = 11,
+  transmittedImaginary = 12,
+  COUNT = 13,
 }
 
 /**

@@ -1,4 +1,5 @@
 /** Trace result -> the record a run keeps, and the arrays of its maps and spectra. */
+import { carriesPolarisation } from '../design/carries-polarisation.js';
 import { cautionsFor } from '../materials/cautions.js';
 import type { RunArrays } from '../record/run-arrays.js';
 import { type MapRecord, RUN_FORMAT, type RunRecord } from '../record/run-record.js';
@@ -47,6 +48,7 @@ export function summariseRun(result: TraceResult, about: RunAbout): { record: Ru
       threads: result.threads,
       seconds: result.seconds,
       stopReason: result.stopReason,
+      polarisation: carriesPolarisation(description) ? 'carried' : 'averaged',
       startedAt: about.startedAt.toISOString(),
       repeat: about.repeat,
     },

@@ -14,6 +14,7 @@ import { metalMirrorProof } from './metal-mirror-proof.js';
 import { mixingRodProof } from './mixing-rod-proof.js';
 import { parallelBeamProof } from './parallel-beam-proof.js';
 import { photometryProof } from './photometry-proof.js';
+import { polarisedLightProof } from './polarised-light-proof.js';
 import { prismProof } from './prism-proof.js';
 import type { Proof } from './proof.js';
 import { reciprocityProof } from './reciprocity-proof.js';
@@ -29,6 +30,7 @@ export const allProofs: readonly Proof[] = [
   fresnelProof,
   diffuseFresnelProof,
   metalMirrorProof,
+  polarisedLightProof,
   prismProof,
   beamSpreadProof,
   viewFactorProof,

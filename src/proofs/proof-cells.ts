@@ -149,6 +149,7 @@ export function pump(
     linewidthNm: 0,
     wallPlug: null,
     driver: null,
+    polarised: null,
     aim: { kind: 'along', at, direction, roll: 0 },
     beam,
   };
@@ -188,9 +189,11 @@ export function cell(
     pumps: readonly PumpDescription[];
     detectors?: readonly DetectorDescription[];
     exit: string;
+    /** Carried where a pump is polarised when left out. */
+    polarisation?: 'carried' | 'averaged';
   },
 ): Description {
-  const { media, around = 'air', finishes = [], parts, pumps, detectors = [], exit } = contents;
+  const { media, around = 'air', finishes = [], parts, pumps, detectors = [], exit, polarisation = null } = contents;
   return {
     title,
     about: null,
@@ -203,6 +206,6 @@ export function cell(
     detectors,
     // No proof reads the maps of the exit or of the absorbed power: a single cell costs nothing.
     exit: { name: exit, path: ['exit'], pixels: [1, 1] },
-    defaults: { histories: null, precision: null, seed: null, voxels: [1, 1, 1] },
+    defaults: { histories: null, precision: null, seed: null, voxels: [1, 1, 1], polarisation },
   };
 }

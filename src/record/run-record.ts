@@ -91,6 +91,8 @@ export interface RunRecord {
     readonly threads: number;
     readonly seconds: number;
     readonly stopReason: StopReason;
+    /** Whether photons kept their polarisation, or faces treated all light as unpolarised. */
+    readonly polarisation: 'carried' | 'averaged';
     readonly startedAt: string;
     /** Command that repeats this run to the same bits. */
     readonly repeat: string;

@@ -147,6 +147,7 @@ export const runRecordSchema = z.object({
     threads: count,
     seconds: z.number().nonnegative(),
     stopReason: z.enum(everyName<StopReason>()(['histories', 'precision', 'time', 'interrupted'])),
+    polarisation: z.enum(['carried', 'averaged']),
     startedAt: z.iso.datetime(),
     repeat: text,
   }),

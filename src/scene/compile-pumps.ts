@@ -47,6 +47,10 @@ export function compilePumps(
     const at = i * PUMP.STRIDE;
     pumps.set([...frame.origin, ...frame.u, ...frame.v, ...frame.w], at);
     writeBeam(pump, pumps, at);
+    if (pump.polarised !== null) {
+      const field = add(scale(frame.u, Math.cos(pump.polarised)), scale(frame.v, Math.sin(pump.polarised)));
+      pumps.set(field, at + PUMP.fieldX);
+    }
     beam.push(BEAMS[pump.beam.kind]);
     outline.push(
       pump.beam.kind === 'patch' || pump.beam.kind === 'lambertian'

@@ -1,4 +1,5 @@
 /** Description -> scene: the flat arrays the kernel reads, and the legend that gives its numbers their names back. */
+import { carriesPolarisation } from '../design/carries-polarisation.js';
 import type { Description } from '../design/description.js';
 import { DesignFaults } from '../design/design-faults.js';
 import type { Fault } from '../design/fault.js';
@@ -67,6 +68,7 @@ export function compileScene(description: Description): CompiledScene {
   const scene: Scene = {
     version: SCENE_VERSION,
     wavelengths: grid.nm.length,
+    polarised: carriesPolarisation(description) ? 1 : 0,
     families: solids.normals.length,
     familyNormal: sharedDoubles(solids.normals.flat()),
     familyStart: sharedInts(solids.starts),

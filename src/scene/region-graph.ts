@@ -53,7 +53,10 @@ const TIE = 1e-9;
 export class RegionGraph {
   /** Ways out of a region: low and high plane of every family, then every quadric. */
   readonly ways: number;
-  /** Light is flown from one boundary to the next; otherwise all surfaces are axis planes and it is flown from event to event. */
+  /**
+   * Light is flown from one boundary to the next; otherwise all surfaces are axis planes, polarisation is not carried, and light is flown
+   * from event to event.
+   */
   readonly stepwise: boolean;
   readonly families: number;
   readonly quadrics: number;
@@ -97,7 +100,7 @@ export class RegionGraph {
     this.families = scene.families;
     this.quadrics = scene.quadrics;
     this.ways = 2 * this.families + this.quadrics;
-    this.stepwise = stepwise || this.ways !== 6;
+    this.stepwise = stepwise || scene.polarised !== 0 || this.ways !== 6;
     const bytes = this.ways * 8 + this.families * 20 + this.quadrics + 8;
     this.capacity = Math.max(64, Math.min(1 << 16, Math.floor(2 ** 28 / bytes)));
     this.bound = new Float64Array(this.capacity * 2 * this.families);

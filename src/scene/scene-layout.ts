@@ -81,7 +81,8 @@ export const enum PUMP {
   pitchV = 19,
   lensPower = 20, // 1/focal length, 1/mm, 0 without lens
   lensDistance = 21,
-  STRIDE = 22,
+  fieldX = 22, // unit vector of the electric field across the beam; 0, 0, 0: unpolarised
+  STRIDE = 25,
 }
 
 /** Doubles per recorder in `recorderFrame`. */
@@ -105,6 +106,8 @@ export const enum CELLS {
 export interface Scene {
   readonly version: number;
   readonly wavelengths: number;
+  /** 1: the polarisation of light is carried. Then light is flown from boundary to boundary everywhere. */
+  readonly polarised: number;
 
   // ---- surfaces. Families of parallel planes come first; families 0, 1, 2 are the design axes x, y, z.
   readonly families: number;

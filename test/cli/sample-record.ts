@@ -19,6 +19,7 @@ export function sampleRecord(): RunRecord {
       threads: 2,
       seconds: 4.2134,
       stopReason: 'histories',
+      polarisation: 'averaged',
       startedAt: '2026-12-01T12:00:00.000Z',
       repeat: 'stokeswell trace geometries/loom.yaml --histories 200000 --seed 1',
     },

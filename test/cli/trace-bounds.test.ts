@@ -6,6 +6,7 @@ const design = (histories: number | null, precision: number | null) => ({
   precision,
   seed: null,
   voxels: null,
+  polarisation: null,
 });
 
 describe('traceBounds', () => {

@@ -45,7 +45,7 @@ detectors:
   side: { face: wedge.z }
 exit: { face: eye, pixels: [64, 32] }
 surroundings: water
-trace: { histories: 1e6, precision: 0.2 %, seed: 42, voxels: [8, 9, 10] }
+trace: { histories: 1e6, precision: 0.2 %, seed: 42, voxels: [8, 9, 10], polarisation: carried }
 `;
 
 const reading = readDesignText(RICH, 'rich.yaml');
@@ -61,7 +61,13 @@ function faultsOf(from: string, to: string): readonly LocatedFault[] {
 test('no warnings, whole and in order', () => {
   expect(reading.warnings).toEqual([]);
   expect(description.parts.map(({ name }) => name)).toEqual(['wedge', 'joined', 'dome', 'funnel']);
-  expect(description.defaults).toEqual({ histories: 1e6, precision: 0.002, seed: '42', voxels: [8, 9, 10] });
+  expect(description.defaults).toEqual({
+    histories: 1e6,
+    precision: 0.002,
+    seed: '42',
+    voxels: [8, 9, 10],
+    polarisation: 'carried',
+  });
   expect(description.exit).toEqual({ name: 'eye', path: ['exit', 'face'], pixels: [64, 32] });
   expect(description.surroundings).toBe('water');
 });

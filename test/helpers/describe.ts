@@ -105,6 +105,7 @@ export function beam(at: Vector3, direction: Vector3, more: Partial<PumpDescript
     linewidthNm: 0,
     wallPlug: null,
     driver: null,
+    polarised: null,
     aim: { kind: 'along', at, direction, roll: 0 },
     beam: { kind: 'patch', outline: { kind: 'disc', radius: 0 }, divergence: [0, 0] },
     ...more,
@@ -136,6 +137,6 @@ export function describeDesign(what: {
     pumps: what.pumps,
     detectors: what.detectors ?? [],
     exit: { name: what.exit, path: ['exit'], pixels: null },
-    defaults: { histories: null, precision: null, seed: null, voxels: null },
+    defaults: { histories: null, precision: null, seed: null, voxels: null, polarisation: null },
   };
 }

@@ -27,6 +27,7 @@ export interface TraceCommandOptions extends WantedBounds {
   /** undefined: on a terminal only. */
   readonly progress?: boolean;
   readonly dial: Readonly<Record<string, string>>;
+  readonly polarisation?: 'carried' | 'averaged';
 }
 
 const SEED_BY_DEFAULT = '1';
@@ -35,8 +36,9 @@ const INTERRUPT_NOTE = '\nStopping: what is traced will be kept. Ctrl-C again qu
 /** `stokeswell trace DESIGN`: one run from its design file to its ledger and its folder. */
 export async function traceCommand(file: string, options: TraceCommandOptions): Promise<ExitCode> {
   const { locateFaults, readDesign } = await import('../../design/read-design.js');
-  const reading = await readDesign(file, { dials: options.dial });
-  if (!reading.ok) throw designFault(reading.faults);
+  const read = await readDesign(file, { dials: options.dial });
+  if (!read.ok) throw designFault(read.faults);
+  const reading = withPolarisation(read, options.polarisation);
   if (options.files) await checkOutputFolder(options.out);
   // Before anything listens for Ctrl-C: the trial holds this thread, and there is nothing to keep yet.
   const { checkDesign } = await import('../../trace/check-design.js');
@@ -48,7 +50,7 @@ export async function traceCommand(file: string, options: TraceCommandOptions): 
   try {
     const result = { ...(await traceReading(reading, options, interrupt.signal)), warnings: faults };
     const { recordRun } = await import('../record-run.js');
-    const { record, arrays } = recordRun(result, reading, options.dial, startedAt);
+    const { record, arrays } = recordRun(result, reading, options.dial, startedAt, options.polarisation);
     const show = async (folder: string | null): Promise<void> => {
       if (options.plain) return showPlain(record, folder);
       const warnings = [...reading.warnings, ...locateFaults(reading, result.warnings)].flatMap(faultLines);
@@ -68,9 +70,16 @@ export async function traceCommand(file: string, options: TraceCommandOptions): 
   }
 }
 
-/** The text and the dials as used: runs of one file with other dials are not alike. */
-function designMark({ design: { hash, dials } }: RunRecord): string {
-  return createHash('sha256').update(hash).update(JSON.stringify(dials)).digest('hex');
+/** The command line overrides the design. */
+function withPolarisation(reading: SoundDesign, polarisation: TraceCommandOptions['polarisation']): SoundDesign {
+  if (polarisation === undefined) return reading;
+  const { description } = reading;
+  return { ...reading, description: { ...description, defaults: { ...description.defaults, polarisation } } };
+}
+
+/** The text, the dials and the mode as used: runs of one file with others are not alike. */
+function designMark({ design: { hash, dials }, run }: RunRecord): string {
+  return createHash('sha256').update(hash).update(JSON.stringify(dials)).update(run.polarisation).digest('hex');
 }
 
 /** Writes the run and gives back its folder. */

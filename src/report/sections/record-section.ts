@@ -28,7 +28,7 @@ export function recordSection(record: RunRecord): Markup {
   )}${item('Seed', shortName(run.seed, LONGEST_LINE))}${item('Histories', `${groupedCount(run.histories)} in ${groupedCount(run.batches)} ${run.batches === 1 ? 'batch' : 'batches'}; ${STOP_WORDS[run.stopReason]}`)}${item(
     'Traced',
     `${run.startedAt}, ${formatSeconds(run.seconds)} on ${run.threads} ${run.threads === 1 ? 'thread' : 'threads'}`,
-  )}${item('Version', `${tool.name} ${tool.version}, record format ${record.format}`)}${item('Tables beside this page', shortName(tablesOf(record).join(', '), 2000))}${item('To repeat it', markup`<code>${shortName(run.repeat, LONGEST_LINE)}</code>`)}</dl><h3 id="cautions">Cautions</h3>${
+  )}${item('Polarisation', run.polarisation === 'carried' ? 'carried by every photon' : 'averaged: faces treat all light as unpolarised')}${item('Version', `${tool.name} ${tool.version}, record format ${record.format}`)}${item('Tables beside this page', shortName(tablesOf(record).join(', '), 2000))}${item('To repeat it', markup`<code>${shortName(run.repeat, LONGEST_LINE)}</code>`)}</dl><h3 id="cautions">Cautions</h3>${
     cautions.length === 0
       ? markup`<p>None are held for what this design uses; follow your local codes all the same.</p>`
       : markup`<ul class="cautions">${cautions.map((text) => markup`<li>${shortName(text, 1000)}</li>`)}</ul>`
