@@ -1,7 +1,8 @@
 /** Detectors and exit as written -> those of the description. */
 
+import { describeOutline } from './describe-beam.js';
 import { checkFace, type FaceIndex } from './describe-parts.js';
-import { checkDirection, describeOutline } from './describe-pumps.js';
+import { checkDirection } from './describe-pumps.js';
 import type { DetectorDescription, DetectorTarget, ExitDescription, Vector2 } from './description.js';
 import type { DesignRecord } from './design-fields.js';
 import type { DesignPath } from './fault.js';

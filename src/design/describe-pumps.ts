@@ -1,10 +1,11 @@
 /** Pumps as written -> pumps of the description. */
 
+import { describeBeam, describeColour } from './describe-beam.js';
 import { checkFace, type FaceIndex, reportNone } from './describe-parts.js';
-import type { Aim, BeamDescription, Outline, PumpDescription, Vector2, Vector3 } from './description.js';
+import type { Aim, PumpDescription, Vector3 } from './description.js';
 import type { DesignRecord } from './design-fields.js';
 import type { DesignPath } from './fault.js';
-import type { OutlineFields, PumpRecord } from './pump-fields.js';
+import type { PumpRecord } from './pump-fields.js';
 import type { Reading } from './reading.js';
 
 export function describePumps(design: DesignRecord, faces: FaceIndex, reading: Reading): PumpDescription[] {
@@ -12,17 +13,16 @@ export function describePumps(design: DesignRecord, faces: FaceIndex, reading: R
   return design.pumps.flatMap(({ name, path, value }) => {
     const aim = describeAim(value, path, faces, reading);
     const beam = describeBeam(value, path, reading);
-    if (aim === null || beam === null) return [];
-    const { power, wavelength, linewidth, driver, polarised } = value;
-    const given = {
-      power,
-      wavelengthNm: wavelength,
-      linewidthNm: linewidth,
-      wallPlug: value['wall-plug'],
-      driver,
-      polarised,
-    };
-    return [{ name, path, ...given, aim, beam }];
+    const colour = beam && describeColour(value, beam, path, reading);
+    if (aim === null || beam === null || colour === null) return [];
+    const { power, driver, polarised, ring } = value;
+    const given = { ...colour, wallPlug: value['wall-plug'], driver, polarised, beam };
+    if (ring === null) return [{ name, path, power, ...given, aim }];
+    const { count, axis, through } = ring;
+    return Array.from({ length: count }, (_, i): PumpDescription => {
+      const turned = { axis, through, angle: (2 * Math.PI * i) / count };
+      return { name: `${name} ${i + 1}`, path, power: power / count, ...given, aim: { ...aim, turned } };
+    });
   });
 }
 
@@ -67,56 +67,4 @@ export function checkDirection(direction: Vector3 | null, path: DesignPath, read
     found: '[0, 0, 0]',
     expected: 'a direction such as [0, 0, -1]',
   });
-}
-
-export function describeOutline({ rectangle, disc }: Pick<OutlineFields, 'rectangle' | 'disc'>): Outline {
-  if (rectangle !== null) return { kind: 'rectangle', size: rectangle };
-  return { kind: 'disc', radius: disc ?? Number.NaN };
-}
-
-function describeBeam(pump: PumpRecord, path: DesignPath, reading: Reading): BeamDescription | null {
-  const { diodes, patch, gaussian, lambertian, lens, divergence } = pump;
-  const misplace = (field: string, given: unknown, owner: string) => {
-    if (given === null) return;
-    const problem = `${field} belongs to ${owner}`;
-    reading.report({ code: 'unknown-key', path: [...path, field], problem, found: field });
-  };
-  if (diodes === null) misplace('lens', lens, 'a bank of diodes');
-  if (diodes === null && patch === null) {
-    misplace('divergence', divergence, 'diodes or a patch');
-    misplace('fast-axis', pump['fast-axis'], 'diodes or a patch');
-  }
-  if (diodes !== null) {
-    if (divergence === null) {
-      const expected = 'the far field [fast, slow] such as [30 deg, 8 deg]';
-      reading.report({
-        code: 'missing',
-        path: [...path, 'divergence'],
-        problem: 'a required field is missing',
-        expected,
-      });
-    }
-    return { kind: 'diodes', ...bank(diodes), divergence: alongAxes(pump), lens: describeLens(lens, path, reading) };
-  }
-  if (patch !== null) return { kind: 'patch', outline: describeOutline(patch), divergence: alongAxes(pump) };
-  if (gaussian !== null) return { kind: 'gaussian', radius: gaussian.radius, halfAngle: gaussian['half-angle'] };
-  return lambertian && { kind: 'lambertian', outline: describeOutline(lambertian) };
-}
-
-const bank = ({ across, along, pitch }: NonNullable<PumpRecord['diodes']>) => ({ across, along, pitch });
-
-/** From [fast, slow] to [u (across), v (along)]. */
-function alongAxes(pump: PumpRecord): Vector2 {
-  const [fast, slow] = pump.divergence ?? [0, 0];
-  return pump['fast-axis'] === 'across' ? [fast, slow] : [slow, fast];
-}
-
-function describeLens(lens: PumpRecord['lens'], path: DesignPath, reading: Reading) {
-  if (lens === null) return null;
-  if (lens['focal-length'] === 0) {
-    const problem = 'a lens of focal length zero cannot be';
-    const expected = 'a focal length above or below 0 mm';
-    reading.report({ code: 'range', path: [...path, 'lens', 'focal-length'], problem, found: '0 mm', expected });
-  }
-  return { focalLength: lens['focal-length'], distance: lens.distance };
 }

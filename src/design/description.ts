@@ -42,7 +42,7 @@ export interface TraceDefaults {
   /** Voxels along x, y, z of the absorbed-power map over the bounding box of all dyed parts. */
   readonly voxels: Vector3 | null;
   /** Whether every photon keeps its polarisation, or interfaces treat all light as unpolarised; null: carried where a pump is polarised. */
-  readonly polarisation: 'carried' | 'averaged' | null;
+  readonly polarisation?: 'carried' | 'averaged' | null;
 }
 
 // ------------------------------------------------------------------------------------------------ media
@@ -218,20 +218,41 @@ export interface PumpDescription {
   readonly path: DesignPath;
   /** Optical power, W. */
   readonly power: number;
+  /** Centre of the line; photon mean of a spectrum. */
   readonly wavelengthNm: number;
   /** Full width at half maximum of the Gaussian line, nm; 0 is a line. */
   readonly linewidthNm: number;
+  /** Measured spectrum, in place of the line. */
+  readonly spectrum?: PumpSpectrum | null;
   /** Optical power per electrical power of the diode; null when not given. */
   readonly wallPlug: number | null;
   /** Efficiency of the driver, 0..1; null when not given. */
   readonly driver: number | null;
   /** Angle of the electric field from the beam's u towards its v, rad; null: unpolarised. */
-  readonly polarised: number | null;
+  readonly polarised?: number | null;
   readonly aim: Aim;
   readonly beam: BeamDescription;
 }
 
-export type Aim =
+export interface PumpSpectrum {
+  /** Relative. */
+  readonly photonsPerNm: Curve;
+  readonly fromNm: number;
+  readonly toNm: number;
+  /** Over photons. */
+  readonly meanNm: number;
+}
+
+/** A turn of the whole pump about an axis of the design through a point, rad, once it is aimed. */
+export interface AboutAxis {
+  readonly axis: 'x' | 'y' | 'z';
+  readonly through: Vector3;
+  readonly angle: number;
+}
+
+export type Aim = AimedAt & { readonly turned?: AboutAxis | null };
+
+type AimedAt =
   /** From `distance` in front of a face's centre (shifted along its u, v), along its inward normal, then tilted about u and v. */
   | {
       readonly kind: 'toward';
@@ -249,13 +270,19 @@ export type Outline =
 
 export type BeamDescription =
   /** Evenly filled, collimated, or Gaussian in angle with the FWHM given for u and v, rad. */
-  | { readonly kind: 'patch'; readonly outline: Outline; readonly divergence: Vector2 }
+  | {
+      readonly kind: 'patch';
+      readonly outline: Outline;
+      readonly divergence: Vector2;
+      readonly farField?: FarField | null;
+    }
   /** 1/e² radius at the origin of the beam and 1/e² half angle of divergence, rad (independent draws: geometric optics). */
   | { readonly kind: 'gaussian'; readonly radius: number; readonly halfAngle: number }
   | { readonly kind: 'lambertian'; readonly outline: Outline }
   /**
    * A bank: `across` emitters along u by `along` emitters along v, centre to centre `pitch`; each emits a Gaussian far field
-   * with FWHM `divergence` [u, v], rad. A thin lens in front bends every ray by tan' = tan − r/f.
+   * with FWHM `divergence` [u, v], rad, or the measured one. A thin lens in front bends every ray by tan' = tan − r/f. Of a stack,
+   * `rows` such banks lie `pitch` apart along v, each `step` further from the target than the one before.
    */
   | {
       readonly kind: 'diodes';
@@ -263,8 +290,30 @@ export type BeamDescription =
       readonly along: number;
       readonly pitch: Vector2;
       readonly divergence: Vector2;
+      readonly farField?: FarField | null;
+      readonly stack?: { readonly rows: number; readonly pitch: number; readonly step: number } | null;
+      /** Standard deviation of each emitter's direction about u and about v, rad, and the seed of its draws. */
+      readonly pointing?: { readonly spread: number; readonly seed: string } | null;
       readonly lens: { readonly focalLength: number; readonly distance: number } | null;
-    };
+    }
+  | { readonly kind: 'rays'; readonly rays: RayTable };
+
+/** Cuts through a far field: relative intensity along u and along v at the same angles, rad. */
+export interface FarField {
+  readonly anglesRad: readonly number[];
+  readonly u: readonly number[];
+  readonly v: readonly number[];
+}
+
+/** Rays in the axes u, v, w of the pump; w is where it looks. Three numbers a ray in `position` (mm) and `direction` (unit). */
+export interface RayTable {
+  readonly position: readonly number[];
+  readonly direction: readonly number[];
+  /** Relative. */
+  readonly watts: readonly number[];
+  /** null: as the pump says. */
+  readonly wavelengthNm: readonly number[] | null;
+}
 
 // --------------------------------------------------------------------------------------------- detectors
 

@@ -4,7 +4,7 @@ import { either, mapped } from './form-either.js';
 import { pair, triple } from './form-lists.js';
 import { count, quantity } from './form-quantities.js';
 import { mapOf, record } from './form-record.js';
-import { oneWord, reference } from './form-scalars.js';
+import { freeText, oneWord, reference } from './form-scalars.js';
 import { WAVELENGTH_RANGE } from './media-fields.js';
 import { anyLength, size } from './part-fields.js';
 
@@ -24,6 +24,34 @@ const diodes = record('across, along and pitch', {
   across: required(count(1, 10_000), 'Emitters side by side, along u.'),
   along: required(count(1, 10_000), 'Emitters one above the other, along v.'),
   pitch: required(pair(size, 'a pitch [u, v]'), 'Distance from centre to centre along u and v.'),
+  stack: optional(
+    record('rows, pitch and step', {
+      rows: required(count(2, 100), 'Banks whose beams knife-edge mirrors fold into one, row upon row.'),
+      pitch: required(size, 'Distance of the rows along v once they are folded.'),
+      step: withDefault(
+        quantity('length', { min: 0 }),
+        0,
+        '0 mm',
+        'How much further each row has to go than the last.',
+      ),
+    }),
+    'A mirrored stack of such banks. The power of the pump is that behind the mirrors.',
+  ),
+  pointing: optional(
+    record('spread and seed', {
+      spread: required(quantity('angle', { above: 0, max: 0.5 }), 'Standard deviation about u and about v.'),
+      seed: withDefault(freeText('a word or number', 100), 'pointing', 'pointing', 'Another seed is another bank.'),
+    }),
+    'Errors of direction, drawn once for each emitter.',
+  ),
+});
+
+const tableName = freeText('a CSV file in the folder of the design', 300);
+
+const ring = record('count, axis and through', {
+  count: required(count(2, 360), 'Number of pumps, evenly round a full turn; they share the power.'),
+  axis: withDefault(oneWord('x', 'y', 'z'), 'z', 'z', 'Axis of the ring, one of the design.'),
+  through: withDefault(triple(anyLength, 'a place [x, y, z]'), [0, 0, 0], '[0 mm, 0 mm, 0 mm]', 'A point on the axis.'),
 });
 
 const gaussian = record('radius and half-angle', {
@@ -53,8 +81,10 @@ const pumpRecord = record(
     patch: optional(outline, 'An evenly filled beam.'),
     gaussian: optional(gaussian, 'A Gaussian beam.'),
     lambertian: optional(outline, 'A Lambertian emitter.'),
+    rays: optional(tableName, 'Rays from a CSV file beside the design, in the axes of the pump.'),
     power: required(quantity('power', { above: 0 }), 'Optical power of the whole pump.'),
-    wavelength: required(quantity('wavelength', WAVELENGTH_RANGE), 'Centre wavelength.'),
+    wavelength: optional(quantity('wavelength', WAVELENGTH_RANGE), 'Centre wavelength.'),
+    spectrum: optional(tableName, 'A measured spectrum from a CSV file beside the design, in place of `wavelength`.'),
     linewidth: withDefault(
       quantity('wavelength', { min: 0, max: 200 }),
       0,
@@ -62,6 +92,10 @@ const pumpRecord = record(
       'Full width of the line at half maximum.',
     ),
     divergence: optional(divergence, 'Far field, full width at half maximum: [fast, slow], or one angle for both.'),
+    'far-field': optional(
+      tableName,
+      'A measured far field from a CSV file beside the design, in place of `divergence`.',
+    ),
     'fast-axis': optional(oneWord('along', 'across'), 'Which way the fast axis lies. Default: along.'),
     lens: optional(lens, 'A thin lens in front of the whole bank.'),
     polarised: optional(
@@ -80,10 +114,11 @@ const pumpRecord = record(
       'Where the pump at `at` looks; its length does not matter.',
     ),
     roll: optional(quantity('angle'), 'Turn of a pump at `at` about its beam. Default: none.'),
+    ring: optional(ring, 'Repeats the pump round an axis.'),
   },
   {
     exactlyOne: [
-      ['diodes', 'patch', 'gaussian', 'lambertian'],
+      ['diodes', 'patch', 'gaussian', 'lambertian', 'rays'],
       ['toward', 'at'],
     ],
   },

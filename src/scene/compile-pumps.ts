@@ -1,14 +1,20 @@
 /** Pumps -> frames, beam shapes and spectra. */
-import type { Description, PumpDescription, Vector3 } from '../design/description.js';
+import type { Aim, Description, PumpDescription, Vector3 } from '../design/description.js';
 import { EV_NM } from '../units/constants.js';
 import { patchAim } from './face-patch.js';
 import { faceNormal, findFace, type PlacedPart } from './place-parts.js';
 import { BEAM, OUTLINE, PUMP } from './scene-layout.js';
 import type { SpectrumPool } from './spectrum-pool.js';
 import { add, cross, dot, frameAbout, normalise, scale, snapDirection, subtract } from './vector.js';
-import { FWHM_PER_SIGMA, linePhotons, type WavelengthGrid } from './wavelength-grid.js';
+import { cellPhotons, FWHM_PER_SIGMA, linePhotons, nearestIndex, type WavelengthGrid } from './wavelength-grid.js';
 
-const BEAMS = { patch: BEAM.patch, gaussian: BEAM.gaussian, lambertian: BEAM.lambertian, diodes: BEAM.diodes } as const;
+const BEAMS = {
+  patch: BEAM.patch,
+  gaussian: BEAM.gaussian,
+  lambertian: BEAM.lambertian,
+  diodes: BEAM.diodes,
+  rays: BEAM.rays,
+} as const;
 const OUTLINES = { rectangle: OUTLINE.rectangle, disc: OUTLINE.disc } as const;
 
 export interface BeamFrame {
@@ -47,8 +53,9 @@ export function compilePumps(
     const at = i * PUMP.STRIDE;
     pumps.set([...frame.origin, ...frame.u, ...frame.v, ...frame.w], at);
     writeBeam(pump, pumps, at);
-    if (pump.polarised !== null) {
-      const field = add(scale(frame.u, Math.cos(pump.polarised)), scale(frame.v, Math.sin(pump.polarised)));
+    const { polarised = null } = pump;
+    if (polarised !== null) {
+      const field = add(scale(frame.u, Math.cos(polarised)), scale(frame.v, Math.sin(polarised)));
       pumps.set(field, at + PUMP.fieldX);
     }
     beam.push(BEAMS[pump.beam.kind]);
@@ -57,7 +64,7 @@ export function compilePumps(
         ? OUTLINES[pump.beam.outline.kind]
         : OUTLINE.rectangle,
     );
-    const photons = linePhotons(grid, pump.wavelengthNm, pump.linewidthNm);
+    const photons = pumpPhotons(pump, grid);
     spectrum.push(pool.add(photons));
     photonRates.push(pump.power / meanPhotonEnergy(photons, grid));
   });
@@ -68,6 +75,20 @@ export function compilePumps(
     return sum / total;
   });
   return { pumps, beam, outline, spectrum, cumulative, frames };
+}
+
+/** Photons of a pump in each cell of the grid, relative. */
+function pumpPhotons(
+  { beam, spectrum = null, wavelengthNm, linewidthNm }: PumpDescription,
+  grid: WavelengthGrid,
+): Float64Array {
+  if (spectrum !== null) return cellPhotons(grid, spectrum.photonsPerNm, spectrum.fromNm, spectrum.toNm);
+  if (beam.kind !== 'rays' || beam.rays.wavelengthNm === null) return linePhotons(grid, wavelengthNm, linewidthNm);
+  const photons = new Float64Array(grid.nm.length);
+  beam.rays.wavelengthNm.forEach((nm, i) => {
+    photons[nearestIndex(grid.nm, nm)] += beam.rays.watts[i] * nm;
+  });
+  return photons;
 }
 
 function meanPhotonEnergy(photons: Float64Array, grid: WavelengthGrid): number {
@@ -82,6 +103,18 @@ function meanPhotonEnergy(photons: Float64Array, grid: WavelengthGrid): number {
 
 /** Where a pump sits and looks. Its face must exist (checked before). */
 export function beamFrame({ aim }: PumpDescription, parts: readonly PlacedPart[]): BeamFrame {
+  const frame = aimedFrame(aim, parts);
+  const { turned = null } = aim;
+  if (turned === null) return frame;
+  const { axis, through, angle } = turned;
+  const turn = (vector: Vector3) => turnAbout(vector, AXES[axis], angle);
+  const origin = add(through, turn(subtract(frame.origin, through)));
+  return { origin, u: turn(frame.u), v: turn(frame.v), w: snapDirection(turn(frame.w)) };
+}
+
+const AXES: Readonly<Record<'x' | 'y' | 'z', Vector3>> = { x: [1, 0, 0], y: [0, 1, 0], z: [0, 0, 1] };
+
+function aimedFrame(aim: Aim, parts: readonly PlacedPart[]): BeamFrame {
   if (aim.kind === 'along') {
     const w = snapDirection(aim.direction);
     const start = frameAbout(w);
@@ -125,6 +158,7 @@ function writeBeam({ beam }: PumpDescription, pumps: Float64Array, at: number): 
       set(PUMP.spreadV, beam.halfAngle / 2);
       break;
     case 'lambertian':
+    case 'rays':
       break;
     case 'diodes':
       set(PUMP.across, beam.across);
@@ -133,6 +167,9 @@ function writeBeam({ beam }: PumpDescription, pumps: Float64Array, at: number): 
       set(PUMP.pitchV, beam.pitch[1]);
       set(PUMP.spreadU, beam.divergence[0] / FWHM_PER_SIGMA);
       set(PUMP.spreadV, beam.divergence[1] / FWHM_PER_SIGMA);
+      set(PUMP.rows, beam.stack?.rows ?? 1);
+      set(PUMP.rowPitch, beam.stack?.pitch ?? 0);
+      set(PUMP.rowStep, beam.stack?.step ?? 0);
       if (beam.lens !== null) {
         set(PUMP.lensPower, 1 / beam.lens.focalLength);
         set(PUMP.lensDistance, beam.lens.distance);

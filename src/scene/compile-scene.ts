@@ -6,6 +6,7 @@ import type { Fault } from '../design/fault.js';
 import { colourMatching } from '../materials/observer.js';
 import type { FateSlot } from '../tallies/run-tallies.js';
 import { EV_NM } from '../units/constants.js';
+import { compileEmitters } from './compile-emitters.js';
 import { compileFinishes, TABLE_ANGLES } from './compile-finishes.js';
 import { compileMedia } from './compile-media.js';
 import { type BeamFrame, compilePumps } from './compile-pumps.js';
@@ -53,6 +54,7 @@ export function compileScene(description: Description): CompiledScene {
   const media = compileMedia(description, grid, pool);
   const finishes = compileFinishes(description, grid);
   const pumps = compilePumps(description, parts, grid, pool);
+  const emitters = compileEmitters(description.pumps, grid);
   const recorders = planRecorders(description, solids, pumps.frames);
   const voxels = planVoxels(description, parts);
   const owners = parts.length + 1;
@@ -113,6 +115,17 @@ export function compileScene(description: Description): CompiledScene {
     pumpOutline: sharedInts(pumps.outline),
     pumpSpectrum: sharedInts(pumps.spectrum),
     pumpCumulative: sharedDoubles(pumps.cumulative),
+    farFieldStart: sharedInts(emitters.farFieldStart),
+    farFieldPoints: sharedInts(emitters.farFieldPoints),
+    farFields: sharedDoubles(emitters.farFields),
+    pointingStart: sharedInts(emitters.pointingStart),
+    pointing: sharedDoubles(emitters.pointing),
+    rayStart: sharedInts(emitters.rayStart),
+    rayCount: sharedInts(emitters.rayCount),
+    rays: sharedDoubles(emitters.rays),
+    rayKeep: sharedDoubles(emitters.rayKeep),
+    rayOther: sharedInts(emitters.rayOther),
+    rayWavelength: sharedInts(emitters.rayWavelength),
     spectrumKeep: sharedDoubles(spectra.keep),
     spectrumOther: sharedInts(spectra.other),
     energyQuanta: sharedDoubles(energyQuanta),

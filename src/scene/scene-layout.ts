@@ -27,6 +27,7 @@ export const enum BEAM {
   gaussian = 1,
   lambertian = 2,
   diodes = 3,
+  rays = 4,
 }
 export const enum OUTLINE {
   rectangle = 0,
@@ -82,7 +83,10 @@ export const enum PUMP {
   lensPower = 20, // 1/focal length, 1/mm, 0 without lens
   lensDistance = 21,
   fieldX = 22, // unit vector of the electric field across the beam; 0, 0, 0: unpolarised
-  STRIDE = 25,
+  rows = 25, // of a stack; pitch along v, and how much further back each starts, mm
+  rowPitch = 26,
+  rowStep = 27,
+  STRIDE = 28,
 }
 
 /** Doubles per recorder in `recorderFrame`. */
@@ -170,6 +174,18 @@ export interface Scene {
   readonly pumpOutline: Int32Array;
   readonly pumpSpectrum: Int32Array;
   readonly pumpCumulative: Float64Array; // cumulative share of photons
+  // What follows is laid out in compile-emitters.ts.
+  readonly farFieldStart: Int32Array; // [pump], −1
+  readonly farFieldPoints: Int32Array; // [pump]
+  readonly farFields: Float64Array;
+  readonly pointingStart: Int32Array; // [pump], −1
+  readonly pointing: Float64Array; // [emitter · 2], rad
+  readonly rayStart: Int32Array; // [pump], −1
+  readonly rayCount: Int32Array; // [pump]
+  readonly rays: Float64Array; // [ray · 6]
+  readonly rayKeep: Float64Array; // [ray]
+  readonly rayOther: Int32Array;
+  readonly rayWavelength: Int32Array; // [ray], −1: drawn from the pump's spectrum
 
   // ---- pooled alias tables of spectra, [table · wavelengths]
   readonly spectrumKeep: Float64Array;

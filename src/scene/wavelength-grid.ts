@@ -27,7 +27,19 @@ export function wavelengthGrid(description: Description): WavelengthGrid {
     low = Math.min(low, from);
     high = Math.max(high, to);
   };
-  for (const { wavelengthNm, linewidthNm } of description.pumps) {
+  for (const { wavelengthNm, linewidthNm, spectrum = null, beam } of description.pumps) {
+    const ownColours = beam.kind === 'rays' ? beam.rays.wavelengthNm : null;
+    if (spectrum !== null) {
+      cover(spectrum.fromNm, spectrum.toNm);
+      continue;
+    }
+    if (ownColours !== null) {
+      cover(
+        ownColours.reduce((a, b) => Math.min(a, b)),
+        ownColours.reduce((a, b) => Math.max(a, b)),
+      );
+      continue;
+    }
     const reach = (LINE_REACH_SIGMA * linewidthNm) / FWHM_PER_SIGMA;
     cover(
       Math.min(wavelengthNm, Math.max(SHORTEST_NM, wavelengthNm - reach)),
