@@ -1,3 +1,4 @@
+import { mapWords as wordsOfKind } from '../../terms/map-words.js';
 import { cellCentre, heatMap, isStretched } from '../charts/heat-map.js';
 import { type Markup, markup } from '../markup.js';
 import { nameText, shortName } from '../name-text.js';
@@ -6,17 +7,10 @@ import { cutOf, packValues, peakCell, type ShownMap } from '../shown-map.js';
 
 const AXIS_LETTERS = 16;
 
-const MAP_WORDS: Readonly<Record<string, string>> = {
-  exit: 'Light out of',
-  'pumped-face': 'Pump light onto',
-  detector: 'Light at detector',
-  'absorbed-pump': 'Pump light absorbed in',
-  'absorbed-all': 'All light absorbed in',
-};
-
 /** What a map shows, in words, without its place. */
 export function mapWords({ record: { what } }: ShownMap): string {
-  return MAP_WORDS[what] ?? 'Light at';
+  const words = wordsOfKind(what);
+  return words.charAt(0).toUpperCase() + words.slice(1);
 }
 
 /** One map of a face with its numbers, or the three cuts through a volume. @param id unique on the page */

@@ -1,4 +1,5 @@
 import type { FigureName, RunRecord } from '../../record/run-record.js';
+import { STOP_WORDS } from '../../terms/stop-words.js';
 import { figureText, noteText } from '../figure-text.js';
 import { type Markup, markup } from '../markup.js';
 import { shortName } from '../name-text.js';
@@ -7,13 +8,6 @@ import { formatSeconds, groupedCount } from '../number-format.js';
 /** A longer design text would fill the page; run.json has it whole. */
 const LONGEST_TEXT = 200_000;
 const LONGEST_LINE = 400;
-
-const STOP_WORDS: Readonly<Record<RunRecord['run']['stopReason'], string>> = {
-  histories: 'all histories traced',
-  precision: 'wanted precision reached',
-  time: 'time used up',
-  interrupted: 'interrupted: what was traced until then',
-};
 
 /** What was run, with what, and how to run it again. */
 export function recordSection(record: RunRecord): Markup {
