@@ -31,7 +31,7 @@ const TEXTS: Readonly<Record<FigureName, TermText>> = {
     name: 'luminous flux',
     also: ['lumens', 'lm'],
     means: 'light out of the exit as the eye weighs it, lumens',
-    formula: '683.002 lm/W × pump power × Σ E·V(λ) of the exit ÷ Σ E launched',
+    formula: '683.002 lm/W × pump power × Σ E × V(λ) of the exit ÷ Σ E launched',
     assumes: 'daylight vision, 2° observer; pump light by the exit left out',
     source: 'CIE 15:2004 (V(λ)); CIE 018:2019 (683.002 lm/W)',
   },
