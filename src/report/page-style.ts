@@ -36,7 +36,7 @@ p{margin:4px 0}
 .answer .note{font-size:.8rem}
 .big{font-size:1.55rem;font-weight:650;line-height:1.15;letter-spacing:-.01em}
 .figure{white-space:nowrap}.figures .figure,.figure.long{white-space:normal}
-.mark{position:relative;display:inline-block;width:9px;height:9px;margin:0 2px 0 1px;padding:0;border:0;border-radius:0;background:linear-gradient(var(--soft) 0 0) 0 0/9px 1px no-repeat,linear-gradient(var(--soft) 0 0) 0 50%/9px 1px no-repeat,linear-gradient(var(--soft) 0 0) 0 100%/5px 1px no-repeat;vertical-align:baseline;cursor:pointer}
+.mark{position:relative;display:inline-block;width:9px;height:9px;margin:0 2px 0 4px;padding:0;border:0;border-radius:0;background:linear-gradient(var(--soft) 0 0) 0 0/9px 1px no-repeat,linear-gradient(var(--soft) 0 0) 0 50%/9px 1px no-repeat,linear-gradient(var(--soft) 0 0) 0 100%/5px 1px no-repeat;vertical-align:baseline;cursor:pointer}
 .mark::after{content:"";position:absolute;inset:-8px}
 .mark:hover,.mark:focus-visible{background-color:var(--line);box-shadow:0 0 0 4px var(--line)}
 @supports not selector(:popover-open){.mark,.close{display:none}}
@@ -144,7 +144,7 @@ pre{background:var(--panel);border:1px solid var(--line);padding:12px;max-height
 @media (max-width:640px){
 body{font-size:14.5px}
 .wide-only{display:none}.narrow-only{display:block}
-.answer{padding:9px}
+.answer{padding:9px 8px}.answer .big .mark{margin-right:0}
 .big{font-size:1.2rem}
 .answer p{font-size:.86rem;line-height:1.35}.answer .note,.legend{font-size:.76rem}
 .answer .big{font-size:1rem}.answer .figure{white-space:normal}.answer .figure:not(.long) data{white-space:nowrap}

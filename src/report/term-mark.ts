@@ -14,8 +14,13 @@ export const termAnchor = (id: string): string => PREFIX + id;
 export function termMark(id: string): Markup | null {
   const term = termById(id);
   if (term === undefined) return null;
-  // The space that does not break keeps the mark with its word.
-  return markup`\u00a0<button type="button" class="mark" popovertarget="${termAnchor(id)}" aria-label="what ${term.name} means"></button>`;
+  return markup`<button type="button" class="mark" popovertarget="${termAnchor(id)}" aria-label="what ${term.name} means"></button>`;
+}
+
+/** Words of our own with their mark, which stays on the line of the last of them. */
+export function markedWords(words: string, id: string): Markup {
+  const at = words.lastIndexOf(' ') + 1;
+  return markup`${words.slice(0, at)}<span class="figure">${words.slice(at)}${termMark(id)}</span>`;
 }
 
 /** Ids of the terms whose marks stand in a part of the page. Text from outside cannot hold a mark: its quotes are escaped. */

@@ -11,7 +11,7 @@ import { type Markup, markup } from '../markup.js';
 import { nameText, shortName } from '../name-text.js';
 import { groupedCount, significant } from '../number-format.js';
 import { cutOf, type ShownMap } from '../shown-map.js';
-import { termMark } from '../term-mark.js';
+import { markedWords, termMark } from '../term-mark.js';
 
 export function answers(record: RunRecord, maps: readonly ShownMap[]): Markup {
   return markup`<section id="answers" aria-label="The four questions">${howMuch(record)}${whereTo(record)}${howEven(record, maps)}${survives(record)}</section>`;
@@ -56,7 +56,7 @@ function whereTo({ ledger: { watts } }: RunRecord): Markup {
         markup`<span class="${group}" style="width:${(100 * Math.max(0, fraction)).toFixed(2)}%"></span>`,
     )}</div><ul class="legend">${shares.map(
       ({ group, fraction }) =>
-        markup`<li><span class="key ${group}" aria-hidden="true"></span>${significant(100 * fraction, 3)} % ${GROUP_WORDS[group]}${termMark(group)}</li>`,
+        markup`<li><span class="key ${group}" aria-hidden="true"></span>${significant(100 * fraction, 3)} % ${markedWords(GROUP_WORDS[group], group)}</li>`,
     )}</ul>`,
   );
 }

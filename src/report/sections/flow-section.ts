@@ -5,7 +5,7 @@ import { flowPicture, NARROW_FLOW, WIDE_FLOW } from '../charts/flow-picture.js';
 import { largestLosses, lossText } from '../largest-losses.js';
 import { type Markup, markup } from '../markup.js';
 import { nameText } from '../name-text.js';
-import { termMark } from '../term-mark.js';
+import { markedWords, termMark } from '../term-mark.js';
 import { ledgerTable } from './ledger-table.js';
 
 const LOSSES_LISTED = 5;
@@ -27,5 +27,5 @@ export function flowSection(record: RunRecord): Markup {
 function legend({ ledger: { watts } }: RunRecord): Markup | null {
   const ids = [...new Set(watts.filter(({ fraction }) => fraction > 0).map(termOfRow))];
   if (ids.length === 0) return null;
-  return markup`<p class="note fates">Fates: ${ids.map((id) => markup`<span class="figure">${termById(id)?.name ?? id}${termMark(id)}</span> `)}</p>`;
+  return markup`<p class="note fates">Fates: ${ids.map((id) => markup`${markedWords(termById(id)?.name ?? id, id)} `)}</p>`;
 }

@@ -4,7 +4,7 @@ import { fateWords, GROUP_WORDS, GROUPS, groupOf, totalOf } from '../ledger-word
 import { type Markup, markup } from '../markup.js';
 import { nameText } from '../name-text.js';
 import { roundToError, significant } from '../number-format.js';
-import { termMark } from '../term-mark.js';
+import { markedWords, termMark } from '../term-mark.js';
 
 /** A ledger as a table: every fate with its share, standard error and a bar; groups and the whole summed. */
 export function ledgerTable(rows: readonly LedgerRow[], of: 'watts' | 'photons'): Markup {
@@ -17,7 +17,7 @@ export function ledgerTable(rows: readonly LedgerRow[], of: 'watts' | 'photons')
     ({ group, mine }) =>
       mine.length === 0 && group !== 'output'
         ? null
-        : markup`<tbody><tr class="sum"><th scope="rowgroup">${GROUP_WORDS[group]}${termMark(group)}</th><td class="number">${significant(100 * totalOf(mine), 4)}</td><td></td><td></td></tr>${mine.map((row) => line(row, longest))}</tbody>`,
+        : markup`<tbody><tr class="sum"><th scope="rowgroup">${markedWords(GROUP_WORDS[group], group)}</th><td class="number">${significant(100 * totalOf(mine), 4)}</td><td></td><td></td></tr>${mine.map((row) => line(row, longest))}</tbody>`,
   )}<tfoot><tr class="sum"><th scope="row">all of it</th><td class="number">${(100 * totalOf(rows)).toFixed(2)}</td><td></td><td></td></tr></tfoot></table>`;
 }
 
