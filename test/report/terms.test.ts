@@ -74,12 +74,15 @@ describe('terms of the page', () => {
       expect(answers).toContain(`popovertarget="term-${name}"`);
   });
 
-  it.each(HOSTILE_TEXTS)('text from outside makes no mark: %s', (text) => {
-    const { record, arrays } = hostileRun(`${text} " popovertarget="term-no-such" class="mark"`);
-    const page = runPage(record, arrays);
-    expectWhole(page);
-    expect(page).not.toContain('popovertarget="term-no-such"');
-  });
+  it.each(HOSTILE_TEXTS.map((text) => [text.slice(0, 50), text] as const))(
+    'text from outside makes no mark: %s',
+    (_, text) => {
+      const { record, arrays } = hostileRun(`${text} " popovertarget="term-no-such" class="mark"`);
+      const page = runPage(record, arrays);
+      expectWhole(page);
+      expect(page).not.toContain('popovertarget="term-no-such"');
+    },
+  );
 
   it('names a mark by its term', () => {
     const name = termById('exitPower')?.name;
