@@ -147,7 +147,7 @@ body{font-size:14.5px}
 .answer{padding:9px 8px}.answer .big .mark{margin-right:0}
 .big{font-size:1.2rem}
 .answer p{font-size:.86rem;line-height:1.35}.answer .note,.legend{font-size:.76rem}
-.answer .big{font-size:1rem}.answer .figure{white-space:normal}.answer .figure:not(.long) data{white-space:nowrap}
+.answer .big{font-size:1rem}.answer .big .figure{white-space:normal}.answer .big .figure:not(.long) data{white-space:nowrap}
 .term:popover-open{inset:auto 12px 12px 12px}
 .bar{width:16%}
 .record div{grid-template-columns:1fr}
