@@ -1,5 +1,6 @@
 import { Argument, Command, Option } from 'commander';
 import type { CheckOptions } from './commands/check.js';
+import type { ExplainOptions } from './commands/explain.js';
 import type { ProveOptions } from './commands/prove.js';
 import type { TraceCommandOptions } from './commands/trace.js';
 import { EXIT_CODES_HELP, type ExitCode } from './exit-codes.js';
@@ -106,6 +107,17 @@ export function buildProgram(done: (code: ExitCode) => void): Command {
     .action(async (options: ProveOptions) => {
       const { proveCommand } = await import('./commands/prove.js');
       done(await proveCommand(options));
+    });
+
+  program
+    .command('explain')
+    .description('say what a word on the terminal or the page means, its formula, assumptions and source')
+    .argument('[term...]', 'a figure, fate, check or other word, for example exit power; without one, the list')
+    .option('--json', 'print JSON instead of text')
+    .addOption(new Option('--markdown', 'print the glossary of README, a line a term').hideHelp())
+    .action(async (words: string[], options: ExplainOptions) => {
+      const { explainCommand } = await import('./commands/explain.js');
+      done(explainCommand(words, options));
     });
 
   program

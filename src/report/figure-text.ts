@@ -1,6 +1,7 @@
 import type { Figure, FigureName, RunRecord } from '../record/run-record.js';
 import { type Markup, markup } from './markup.js';
 import { formatWithError } from './number-format.js';
+import { termMark } from './term-mark.js';
 
 /** A figure keeps its error and unit on one line up to this many characters. */
 const LONGEST_UNBROKEN = 28;
@@ -10,6 +11,8 @@ export interface FigureShow {
   /** Multiplies value and error; 100 for per cent. */
   readonly factor?: number;
   readonly unit?: string;
+  /** false: without the mark that opens its meaning. */
+  readonly mark?: false;
 }
 
 /**
@@ -21,7 +24,13 @@ export function figureText(record: RunRecord, name: FigureName, show: FigureShow
   const text = plainFigure(figure, show);
   if (text === null) return null;
   const error = figure.standardError === null ? '' : String(figure.standardError);
-  return markup`<data class="figure${text.length > LONGEST_UNBROKEN ? ' long' : ''}" data-figure="${name}" value="${String(figure.value)}" data-error="${error}">${text}</data>`;
+  const mark = show.mark === false ? null : termMark(name);
+  return markup`<span class="figure${text.length > LONGEST_UNBROKEN ? ' long' : ''}"><data data-figure="${name}" value="${String(figure.value)}" data-error="${error}">${text}</data>${mark}</span>`;
+}
+
+/** The same; words with the mark of the figure where it is undefined for this run. */
+export function figureOr(record: RunRecord, name: FigureName, words: string, show: FigureShow = {}): Markup {
+  return figureText(record, name, show) ?? markup`${words}${termMark(name)}`;
 }
 
 /** The same as plain text. */

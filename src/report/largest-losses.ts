@@ -1,5 +1,6 @@
 import type { LedgerRow } from '../record/run-record.js';
-import { fateWords, groupOf, totalOf } from './ledger-words.js';
+import { causeWords } from '../terms/ledger-words.js';
+import { groupOf, totalOf } from './ledger-words.js';
 import { formatWithError, significant } from './number-format.js';
 
 export interface Loss {
@@ -17,7 +18,7 @@ export function largestLosses(rows: readonly LedgerRow[]): readonly Loss[] {
   const byCause = new Map<string, LedgerRow[]>();
   for (const row of rows) {
     if (groupOf(row) === 'output' || row.fate === 'stokes-heat' || row.fraction <= 0) continue;
-    const cause = row.by !== null || row.where === null ? fateWords(row) : `${fateWords(row)}, ${row.where}`;
+    const cause = causeWords(row);
     byCause.set(cause, [...(byCause.get(cause) ?? []), row]);
   }
   return [...byCause]

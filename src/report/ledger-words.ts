@@ -1,49 +1,9 @@
 import type { LedgerRow } from '../record/run-record.js';
+import { fateWords, groupOf } from '../terms/ledger-words.js';
 
-/** What became of the light, in the order in which a photon meets it. */
-export const GROUPS = ['pump-lost', 'heat', 'light-lost', 'output'] as const;
-export type Group = (typeof GROUPS)[number];
+export { fateWords, GROUP_WORDS, GROUPS, type Group, groupOf } from '../terms/ledger-words.js';
 
-export const GROUP_WORDS: Readonly<Record<Group, string>> = {
-  'pump-lost': 'lost pump light',
-  heat: 'heat in the dye',
-  'light-lost': 'lost emitted light',
-  output: 'output',
-};
-
-export function groupOf({ fate, light }: LedgerRow): Group {
-  if (fate === 'stokes-heat' || fate === 'lost-in-dye') return 'heat';
-  if (light === 'pump') return 'pump-lost';
-  return fate === 'left-by-exit' ? 'output' : 'light-lost';
-}
-
-/** A fate in plain words, without its place. */
-export function fateWords({ fate, light, by }: LedgerRow): string {
-  switch (fate) {
-    case 'missed':
-      return 'missed every part';
-    case 'reflected-at-entry':
-      return 'reflected at entry';
-    case 'left-by-exit':
-      return light === 'pump' ? 'pump light by the exit' : 'left by the exit';
-    case 'left-elsewhere':
-      return light === 'pump' ? 'left again unabsorbed' : 'left elsewhere';
-    case 'absorbed-by-finish':
-      return `absorbed by ${by ?? 'the finish'}`;
-    case 'absorbed-by-solid':
-      return 'absorbed by the solid';
-    case 'absorbed-by-solvent':
-      return `absorbed by ${by ?? 'the solvent'}`;
-    case 'lost-in-dye':
-      return `not re-emitted by ${by ?? 'the dye'}`;
-    case 'stokes-heat':
-      return `Stokes heat in ${by ?? 'the dye'}`;
-    case 'trapped':
-      return 'trapped for good';
-  }
-}
-
-/** The same with its place; where a dye keeps energy, also of which light. */
+/** A fate with its place; where a dye keeps energy, also of which light. */
 export function placedWords(row: LedgerRow): string {
   const words = groupOf(row) === 'heat' ? heatWords(row) : fateWords(row);
   return row.where === null ? words : `${words}, ${row.where}`;

@@ -9,6 +9,7 @@ const PLACES = [
   ['light', 'Colour and direction'],
   ['chain', 'Wall to lumens'],
   ['record', 'This run'],
+  ['terms', 'Words'],
 ] as const;
 
 /** Title, what was traced, and the way to each section. */

@@ -36,6 +36,19 @@ p{margin:4px 0}
 .answer .note{font-size:.8rem}
 .big{font-size:1.55rem;font-weight:650;line-height:1.15;letter-spacing:-.01em}
 .figure{white-space:nowrap}.figures .figure,.figure.long{white-space:normal}
+.mark{position:relative;display:inline-block;width:9px;height:9px;margin:0 2px 0 4px;padding:0;border:0;border-radius:0;background:linear-gradient(var(--soft) 0 0) 0 0/9px 1px no-repeat,linear-gradient(var(--soft) 0 0) 0 50%/9px 1px no-repeat,linear-gradient(var(--soft) 0 0) 0 100%/5px 1px no-repeat;vertical-align:baseline;cursor:pointer}
+.mark::after{content:"";position:absolute;inset:-8px}
+.mark:hover,.mark:focus-visible{background-color:var(--line);box-shadow:0 0 0 4px var(--line)}
+@supports not selector(:popover-open){.mark,.close{display:none}}
+.terms{display:grid;grid-template-columns:repeat(auto-fill,minmax(min(100%,340px),1fr));gap:14px 32px;margin:12px 0}
+.term{display:block;position:static;width:auto;height:auto;margin:0;padding:0;border:0;background:none;color:inherit;font-size:.86rem;overflow:visible}
+.term dt{color:var(--ink);font-weight:650;font-size:.95rem}
+.term .label{color:var(--soft)}
+.term .close{display:none}
+.term:popover-open{position:fixed;inset:auto 16px 16px auto;width:min(27rem,100vw - 24px);max-height:80vh;overflow:auto;padding:12px 16px;border:2px solid var(--ink);background:var(--panel)}
+.term:popover-open .close{display:block;text-align:right}
+.close button{font:inherit;color:inherit;background:none;border:1px solid var(--line);padding:3px 12px;cursor:pointer}
+@supports (position-area:block-end){@media (min-width:641px){.term:popover-open{inset:auto;margin:6px 0;position-area:block-end span-inline-end;position-try-fallbacks:flip-block,flip-inline,flip-block flip-inline}}}
 .swatch{display:inline-block;width:2.2em;height:1em;vertical-align:-.12em;margin-right:.5em;border:1px solid var(--line)}
 .thumbnail{display:block;max-width:100%;image-rendering:pixelated;margin:6px 0;border:1px solid var(--line)}
 .share-bar{display:flex;height:16px;margin:8px 0 5px;background:var(--line)}
@@ -131,19 +144,21 @@ pre{background:var(--panel);border:1px solid var(--line);padding:12px;max-height
 @media (max-width:640px){
 body{font-size:14.5px}
 .wide-only{display:none}.narrow-only{display:block}
-.answer{padding:9px 11px}
+.answer{padding:9px 8px}.answer .big .mark{margin-right:0}
 .big{font-size:1.2rem}
 .answer p{font-size:.86rem;line-height:1.35}.answer .note,.legend{font-size:.76rem}
-.answer .big{font-size:1.08rem}
+.answer .big{font-size:1rem}.answer .big .figure{white-space:normal}.answer .big .figure:not(.long) data{white-space:nowrap}
+.term:popover-open{inset:auto 12px 12px 12px}
 .bar{width:16%}
 .record div{grid-template-columns:1fr}
 }
 @media print{
 @page{margin:14mm}
 body{background:#fff;font-size:10.5pt}
-nav,.skip,.scripted .needs-script,.scripted .readout{display:none}
+nav,.skip,.mark,.scripted .needs-script,.scripted .readout{display:none}
 .print-only{display:block;font-size:.85rem}
-figure,.answer,tr,.cut,.chain li{break-inside:avoid}
+figure,.answer,tr,.cut,.chain li,.term{break-inside:avoid}
+.terms{grid-template-columns:1fr 1fr}
 h2,h3{break-after:avoid}
 section{margin:16px 0}
 #answers{grid-template-columns:1fr 1fr}

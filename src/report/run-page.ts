@@ -11,6 +11,7 @@ import { flowSection } from './sections/flow-section.js';
 import { lightSection } from './sections/light-section.js';
 import { mapsSection } from './sections/maps-section.js';
 import { recordSection } from './sections/record-section.js';
+import { termsSection } from './sections/terms-section.js';
 import { shownMaps } from './shown-map.js';
 
 /** File name of the page in the folder of its run. */
@@ -22,8 +23,6 @@ export const REPORT_HTML = 'report.html';
  */
 export function runPage(record: RunRecord, arrays: RunArrays): string {
   const maps = shownMaps(record, arrays);
-  return pageShell(
-    record.design.title,
-    markup`${pageHead(record)}<main>${answers(record, maps)}${checksSection(record)}${flowSection(record)}${mapsSection(record, maps)}${lightSection(record, arrays)}${chainSection(record)}${recordSection(record)}</main>`,
-  );
+  const sections = markup`${answers(record, maps)}${checksSection(record)}${flowSection(record)}${mapsSection(record, maps)}${lightSection(record, arrays)}${chainSection(record)}${recordSection(record)}`;
+  return pageShell(record.design.title, markup`${pageHead(record)}<main>${sections}${termsSection(sections)}</main>`);
 }

@@ -24,7 +24,7 @@ describe('command line', () => {
   it('--help documents commands and every exit status', async () => {
     const { code, out, err } = await run('--help');
     expect({ code, err }).toEqual({ code: 0, err: '' });
-    for (const word of ['new', 'check', 'trace', 'prove', 'schema'])
+    for (const word of ['new', 'check', 'trace', 'explain', 'prove', 'schema'])
       expect(out).toMatch(new RegExp(`^ +${word} `, 'm'));
     for (const status of ['0', '1', '2', '3', '4', '70', '130'])
       expect(out).toMatch(new RegExp(`^ +${status} +\\w`, 'm'));
@@ -50,6 +50,7 @@ describe('command line', () => {
     [['trace', 'a.yaml', '--ledger', 'lumens']],
     [['trace', 'a.yaml', '--dial', 'depth']],
     [['schema', 'page']],
+    [['explain', 'no-such-word-at-all']],
   ])('usage fault %j ends with 2 and a sentence', async (words) => {
     const { code, out, err } = await run(...words);
     expect({ code, out }).toEqual({ code: 2, out: '' });

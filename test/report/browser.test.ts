@@ -161,6 +161,36 @@ describe('the page of a real run', () => {
     expect(papers[0]).not.toBe(papers[1]);
   });
 
+  it.each([1280, 400])('opens what a word means by mouse and keys, without script, %i pixels wide', async (width) => {
+    const still = await browser.newContext({ javaScriptEnabled: false, viewport: { width, height: 800 } });
+    const quiet = await still.newPage();
+    quiet.setDefaultTimeout(10_000);
+    await quiet.goto(url);
+    const term = quiet.locator('#term-exitPower');
+    const mark = quiet.locator('#answers').getByRole('button', { name: 'what exit power means' });
+    expect(await quiet.locator('.term:popover-open').count()).toBe(0);
+    await mark.click();
+    const card = await quiet.locator('.term:popover-open').boundingBox();
+    expect(card).not.toBeNull();
+    if (card === null) return;
+    expect(card.x).toBeGreaterThanOrEqual(0);
+    expect(card.x + card.width).toBeLessThanOrEqual(width);
+    expect(card.y).toBeGreaterThanOrEqual(0);
+    expect(card.y + card.height).toBeLessThanOrEqual(800);
+    for (const label of ['formula', 'assumes', 'source']) expect(await term.textContent()).toContain(label);
+    await quiet.keyboard.press('Escape');
+    expect(await quiet.locator('.term:popover-open').count()).toBe(0);
+    await mark.focus();
+    await quiet.keyboard.press('Enter');
+    await quiet.locator('.term:popover-open').getByRole('button', { name: 'close' }).click();
+    expect(await quiet.locator('.term:popover-open').count()).toBe(0);
+    // On paper the marks are gone and the texts stay.
+    await quiet.emulateMedia({ media: 'print' });
+    expect(await mark.isVisible()).toBe(false);
+    expect(await term.isVisible()).toBe(true);
+    await still.close();
+  });
+
   it('answers the four questions without script, and prints', async () => {
     const still = await browser.newContext({ javaScriptEnabled: false });
     const quiet = await still.newPage();

@@ -1,5 +1,8 @@
 import type { LedgerRow } from '../../record/run-record.js';
-import { GROUPS, type Group, groupOf } from './fate-words.js';
+import { GROUPS, type Group, groupOf } from '../../terms/ledger-words.js';
+
+/** What is wanted comes first. */
+const ORDER: readonly Group[] = ['output', ...GROUPS.filter((group) => group !== 'output' && group !== 'heat'), 'heat'];
 
 /** Losses below this share are folded together within their group. */
 const SMALLEST_SHOWN = 0.001;
@@ -23,7 +26,7 @@ export interface ArrangedLedger {
  * add up to the total.
  */
 export function arrangeLedger(rows: readonly LedgerRow[]): ArrangedLedger {
-  const groups = GROUPS.map((name) => arrangeGroup(name, rows));
+  const groups = ORDER.map((name) => arrangeGroup(name, rows));
   // The output is named even when there is none: that is the first question.
   return {
     groups: groups.filter((group) => group.name === 'output' || group.rows.length + group.folded.rows > 0),

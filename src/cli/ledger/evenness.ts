@@ -1,17 +1,11 @@
 import type { MapRecord, RunRecord } from '../../record/run-record.js';
+import { mapWords } from '../../terms/map-words.js';
 import { significant } from '../number-format.js';
 import { safeText } from '../safe-text.js';
 import { fitToStyle, type TerminalStyle } from '../terminal-style.js';
 import { fitLeft } from './columns.js';
 import { withUnit } from './headline.js';
 
-const MAP_WORDS: Readonly<Record<string, string>> = {
-  exit: 'exit',
-  'pumped-face': 'pumped face',
-  detector: 'detector',
-  'absorbed-pump': 'pump absorbed in',
-  'absorbed-all': 'all absorbed in',
-};
 const NAME_WIDTH = 36;
 const NUMBER_WIDTHS = [11, 11, 7, 8] as const;
 
@@ -30,7 +24,7 @@ export function evenness(record: RunRecord, style: TerminalStyle): string[] {
 }
 
 function mapRow(map: MapRecord, style: TerminalStyle): string {
-  const name = fitToStyle(`${MAP_WORDS[map.what] ?? safeText(map.what, 30)} ${safeText(map.where)}`, style);
+  const name = fitToStyle(`${mapWords(map.what)} ${safeText(map.where)}`, style);
   const columns = [
     variationText(map),
     map.minOverMean === null ? '' : significant(map.minOverMean, 2),

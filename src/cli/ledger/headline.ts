@@ -1,16 +1,9 @@
 import type { Figure, FigureName, RunRecord } from '../../record/run-record.js';
-import type { StopReason } from '../../trace/trace-result.js';
+import { STOP_WORDS } from '../../terms/stop-words.js';
 import { formatSeconds, formatWithError, groupedCount } from '../number-format.js';
 import { safeText } from '../safe-text.js';
 import type { TerminalStyle } from '../terminal-style.js';
 import { labelled } from './labelled.js';
-
-const STOP_WORDS: Readonly<Record<StopReason, string>> = {
-  histories: 'all histories traced',
-  precision: 'wanted precision reached',
-  time: 'time used up',
-  interrupted: 'interrupted: what was traced until then',
-};
 
 /** Title, what was traced, and the first question: how much comes out, and how sure is that. */
 export function headline(record: RunRecord, style: TerminalStyle): string[] {

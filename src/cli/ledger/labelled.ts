@@ -14,7 +14,7 @@ export function labelled(label: string, lines: readonly string[], style: Termina
 }
 
 /** Breaks between words; continuation lines are indented by two. A word longer than a line stands alone, whole. */
-function breakLine(line: string, width: number): string[] {
+export function breakLine(line: string, width: number): string[] {
   // A number keeps its sign, its error and its unit.
   const glued = line.replace(/(\d\)?|±|\+-) (?=\S)/g, `$1${GLUE}`);
   const lines: string[] = [];

@@ -1,7 +1,7 @@
 import type { LedgerRow } from '../../record/run-record.js';
+import { causeWords, groupOf } from '../../terms/ledger-words.js';
 import { significant } from '../number-format.js';
 import { safeText } from '../safe-text.js';
-import { fateWords, groupOf } from './fate-words.js';
 
 const SHOWN = 3;
 
@@ -13,7 +13,7 @@ export function largestLosses(rows: readonly LedgerRow[]): string[] {
   const losses = new Map<string, number>();
   for (const row of rows) {
     if (groupOf(row) === 'output' || row.fate === 'stokes-heat' || row.fraction <= 0) continue;
-    const name = row.by !== null || row.where === null ? fateWords(row) : `${fateWords(row)} at ${row.where}`;
+    const name = causeWords(row);
     losses.set(name, (losses.get(name) ?? 0) + row.fraction);
   }
   return [...losses]

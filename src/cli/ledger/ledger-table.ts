@@ -1,14 +1,14 @@
 import type { LedgerRow } from '../../record/run-record.js';
+import { fateWords, GROUP_WORDS } from '../../terms/ledger-words.js';
 import { roundToError } from '../number-format.js';
 import { safeText } from '../safe-text.js';
 import { fitToStyle, type TerminalStyle } from '../terminal-style.js';
 import { arrangeLedger } from './arrange-ledger.js';
 import { alignDecimals, fitLeft } from './columns.js';
 import { drawBar } from './draw-bar.js';
-import { fateWords } from './fate-words.js';
 
 const LEDGER_WIDTH = 80;
-const FATE_WIDTH = 30;
+const FATE_WIDTH = 32;
 const WHERE_WIDTH = 17;
 const LIGHT_WIDTH = 8;
 const SHORTEST_BAR = 4;
@@ -55,7 +55,7 @@ function toLines(rows: readonly LedgerRow[]): Line[] {
   const ledger = arrangeLedger(rows);
   const lines: Line[] = [];
   for (const group of ledger.groups) {
-    lines.push(withoutError('sum', group.name, group.fraction));
+    lines.push(withoutError('sum', GROUP_WORDS[group.name], group.fraction));
     for (const row of group.rows) lines.push(rowLine(row, group.name === 'output'));
     if (group.folded.rows > 0) {
       const count = group.folded.rows === 1 ? '1 row' : `${group.folded.rows} rows`;

@@ -1,8 +1,9 @@
 /** The four questions, answered in one screen. */
 
 import type { RunRecord } from '../../record/run-record.js';
+import { termOfRow } from '../../terms/fate-terms.js';
 import { planePng } from '../charts/raster.js';
-import { figureText, noteText } from '../figure-text.js';
+import { figureOr, figureText, noteText } from '../figure-text.js';
 import { largestLosses, lossText } from '../largest-losses.js';
 import { GROUP_WORDS, GROUPS, groupOf, totalOf } from '../ledger-words.js';
 import { screenHex } from '../light-colour.js';
@@ -10,6 +11,7 @@ import { type Markup, markup } from '../markup.js';
 import { nameText, shortName } from '../name-text.js';
 import { groupedCount, significant } from '../number-format.js';
 import { cutOf, type ShownMap } from '../shown-map.js';
+import { markedWords, termMark } from '../term-mark.js';
 
 export function answers(record: RunRecord, maps: readonly ShownMap[]): Markup {
   return markup`<section id="answers" aria-label="The four questions">${howMuch(record)}${whereTo(record)}${howEven(record, maps)}${survives(record)}</section>`;
@@ -28,12 +30,12 @@ function howMuch(record: RunRecord): Markup {
       : markup`<span class="swatch" style="background:${screenHex(x.value, y.value)}" aria-hidden="true"></span>`;
   const leak =
     figures.blueLeak.value === 0
-      ? markup`no pump light through the exit seen in ${groupedCount(run.histories)} histories`
-      : markup`${figureText(record, 'blueLeak') ?? '?'} of pump light leaks through the exit`;
+      ? markup`no pump light through the exit seen in ${groupedCount(run.histories)} histories${termMark('blueLeak')}`
+      : markup`${figureOr(record, 'blueLeak', '?')} of pump light leaks through the exit`;
   const dominant = figureText(record, 'dominantWavelength');
   return answer(
     'How much comes out?',
-    markup`<p class="big">${figureText(record, 'exitPower') ?? 'nothing'}</p><p>${figureText(record, 'luminousFlux') ?? 'no lumens'}, ${figureText(record, 'opticalEfficiency', { factor: 100, unit: '%' }) ?? '0 %'} of ${figureText(record, 'pumpPower') ?? '?'} of pump light</p><p>${swatch}${dominant === null ? 'no colour to name' : markup`dominant ${dominant}`}</p><p class="note">${leak}</p>`,
+    markup`<p class="big">${figureOr(record, 'exitPower', 'nothing')}</p><p>${figureOr(record, 'luminousFlux', 'no lumens')}, ${figureOr(record, 'opticalEfficiency', '0 %', { factor: 100, unit: '%' })} of ${figureOr(record, 'pumpPower', '?')} of pump light</p><p>${swatch}${dominant === null ? markup`no colour to name${termMark('dominantWavelength')}` : markup`dominant ${dominant}`}</p><p class="note">${leak}</p>`,
   );
 }
 
@@ -46,7 +48,7 @@ function whereTo({ ledger: { watts } }: RunRecord): Markup {
   const told =
     worst === undefined
       ? markup`<p class="big">nothing is lost</p>`
-      : markup`<p class="big">${lossText(worst)}</p><p>${nameText(worst.words, 80)}: the loss that costs most${worst.rows.length > 1 ? markup`, at ${worst.rows.length} places` : null}</p>`;
+      : markup`<p class="big">${lossText(worst)}</p><p>${nameText(worst.words, 80)}: the loss that costs most${worst.rows.length > 1 ? markup`, at ${worst.rows.length} places` : null}${termMark(termOfRow(worst.rows[0]))}</p>`;
   return answer(
     'Where did the rest go?',
     markup`${told}<div class="share-bar" aria-hidden="true">${shares.map(
@@ -54,7 +56,7 @@ function whereTo({ ledger: { watts } }: RunRecord): Markup {
         markup`<span class="${group}" style="width:${(100 * Math.max(0, fraction)).toFixed(2)}%"></span>`,
     )}</div><ul class="legend">${shares.map(
       ({ group, fraction }) =>
-        markup`<li><span class="key ${group}" aria-hidden="true"></span>${significant(100 * fraction, 3)} % ${GROUP_WORDS[group]}</li>`,
+        markup`<li><span class="key ${group}" aria-hidden="true"></span>${significant(100 * fraction, 3)} % ${markedWords(GROUP_WORDS[group], group)}</li>`,
     )}</ul>`,
   );
 }
@@ -62,18 +64,17 @@ function whereTo({ ledger: { watts } }: RunRecord): Markup {
 function howEven(record: RunRecord, maps: readonly ShownMap[]): Markup {
   const { figures } = record;
   const exit = maps.find(({ record: { what } }) => what === 'exit');
-  const variation = figureText(record, 'exitUniformityVariation', { factor: 100, unit: '%' });
   const least = figureText(record, 'exitUniformityMinOverMean');
   const faces = maps.filter(({ record: { what, variation: v } }) => what === 'pumped-face' && v !== null);
   const worst = faces.toSorted((a, b) => (b.record.variation ?? 0) - (a.record.variation ?? 0))[0]?.record;
   return answer(
     'How even is it?',
-    markup`<p class="big">${variation ?? 'not known'}</p><p>spread of the light over the exit, noise taken out${
-      variation === null ? noteText(figures.exitUniformityVariation) : null
+    markup`<p class="big">${figureOr(record, 'exitUniformityVariation', 'not known', { factor: 100, unit: '%' })}</p><p>spread of the light over the exit, noise taken out${
+      figures.exitUniformityVariation.value === null ? noteText(figures.exitUniformityVariation) : null
     }</p>${exit === undefined ? null : thumbnail(exit)}<p>${least === null ? null : markup`least over mean ${least}. `}${
       worst === undefined
         ? null
-        : markup`Pumped face ${nameText(worst.where, 30)}: ${significant(100 * (worst.variation ?? 0), 2)} %`
+        : markup`Pumped face ${nameText(worst.where, 30)}: ${significant(100 * (worst.variation ?? 0), 2)} %${termMark('map-pumped-face')}`
     }</p>`,
   );
 }
@@ -87,7 +88,6 @@ function thumbnail(map: ShownMap): Markup {
 
 function survives(record: RunRecord): Markup {
   const { figures, checks } = record;
-  const peak = figureText(record, 'peakAbsorbedPowerDensity');
   const time = figureText(record, 'timeToBoiling');
   const warnings =
     checks.length === 0
@@ -95,8 +95,10 @@ function survives(record: RunRecord): Markup {
       : `${checks.length} ${checks.length === 1 ? 'warning' : 'warnings'}`;
   return answer(
     'Will it survive?',
-    markup`<p class="big">${peak ?? 'not known'}</p><p>absorbed at the hottest spot${noteText(figures.peakAbsorbedPowerDensity)}</p><p>${
-      time === null ? 'Time to boiling not known' : markup`At rest it boils after <b>${time}</b>`
+    markup`<p class="big">${figureOr(record, 'peakAbsorbedPowerDensity', 'not known')}</p><p>absorbed at the hottest spot${noteText(figures.peakAbsorbedPowerDensity)}</p><p>${
+      time === null
+        ? markup`Time to boiling not known${termMark('timeToBoiling')}`
+        : markup`At rest it boils after <b>${time}</b>`
     }${noteText(figures.timeToBoiling)}</p><p>${checks.length === 0 ? warnings : markup`<a href="#checks">${warnings}</a>`} <a href="#cautions">Cautions</a></p>`,
   );
 }

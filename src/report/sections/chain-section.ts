@@ -5,6 +5,7 @@ import { groupOf, totalOf } from '../ledger-words.js';
 import { type Markup, markup } from '../markup.js';
 import { significant } from '../number-format.js';
 import { otherEmitters } from '../other-emitters.js';
+import { termMark } from '../term-mark.js';
 import { comparison } from './comparison.js';
 
 interface Step {
@@ -17,7 +18,7 @@ export function chainSection(record: RunRecord): Markup {
   const { figures } = record;
   const wall = wallWatts(record);
   const total = figureText(record, 'luminousEfficacyWallPlug');
-  return markup`<section id="chain"><h2>From the wall socket to lumens</h2>${
+  return markup`<section id="chain"><h2>From the wall socket to lumens${termMark('wall-to-lumens')}</h2>${
     wall === null
       ? markup`<p class="lead">What the wall socket gives is not known${noteText(figures.luminousEfficacyWallPlug)}, so the chain begins with the pump light.</p>`
       : markup`<p class="lead">${significant(wall, 4)} W from the wall make ${figureText(record, 'luminousFlux') ?? 'no lumens'}: <b>${total}</b>${noteText(figures.luminousEfficacyWallPlug)}.</p>`

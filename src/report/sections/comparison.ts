@@ -1,6 +1,7 @@
 import { type Markup, markup } from '../markup.js';
 import { significant } from '../number-format.js';
 import type { OtherEmitter } from '../other-emitters.js';
+import { termMark } from '../term-mark.js';
 
 /** This design beside direct emitters, in lumens per watt from the wall. @param own null: not known. @param wall W, null: not known */
 export function comparison(others: readonly OtherEmitter[], own: number | null, wall: number | null): Markup {
@@ -8,7 +9,7 @@ export function comparison(others: readonly OtherEmitter[], own: number | null, 
   const at = (value: number) => (100 * value) / most;
   const lumens = (value: number) =>
     wall === null ? null : markup`<td class="number">${significant(value * wall, 3)}</td>`;
-  return markup`<h3>The same wall power in other hands</h3><div class="scroll"><table class="comparison"><thead><tr><th scope="col">emitter</th><th scope="col" class="number">lm/W</th>${
+  return markup`<h3>The same wall power in other hands${termMark('direct-emitters')}</h3><div class="scroll"><table class="comparison"><thead><tr><th scope="col">emitter</th><th scope="col" class="number">lm/W</th>${
     wall === null ? null : markup`<th scope="col" class="number">lm from ${significant(wall, 3)} W</th>`
   }<th scope="col"><span class="unseen">bar</span></th></tr></thead><tbody><tr class="own"><th scope="row">this design</th><td class="number">${own === null ? 'not known' : significant(own, 3)}</td>${
     own === null ? (wall === null ? null : markup`<td></td>`) : lumens(own)

@@ -8,6 +8,7 @@ import { figureText, noteText, plainFigure } from '../figure-text.js';
 import { type Markup, markup } from '../markup.js';
 import { nameText, shortName } from '../name-text.js';
 import { groupedCount } from '../number-format.js';
+import { termMark } from '../term-mark.js';
 
 const MOST_SPECTRA = 24;
 const MOST_ANGLES = 12;
@@ -47,7 +48,7 @@ function spectra(record: RunRecord, { spectra: { wavelengthsNm, columns } }: Run
   });
   if (strips.length === 0) return null;
   const empty = record.spectra.filter(({ photonFraction }) => !(photonFraction > 0)).map(spectrumWords);
-  return markup`<figure><figcaption><h3>Spectra</h3><p class="facts">Each strip to its own height. The line over the exit is the shape of what the dye emits, at equal area: where the exit falls below it, the dye took the light back.</p>${
+  return markup`<figure><figcaption><h3>Spectra${termMark('spectrum')}</h3><p class="facts">Each strip to its own height. The line over the exit is the shape of what the dye emits, at equal area: where the exit falls below it, the dye took the light back.</p>${
     empty.length === 0
       ? null
       : markup`<p class="facts">None seen in ${groupedCount(record.run.histories)} histories: ${shortName(empty.join('; '), 300)}.</p>`
@@ -57,12 +58,12 @@ function spectra(record: RunRecord, { spectra: { wavelengthsNm, columns } }: Run
 function chromaticity(record: RunRecord): Markup {
   const { chromaticityX: x, chromaticityY: y, dominantWavelength } = record.figures;
   if (x.value === null || y.value === null) {
-    return markup`<figure><figcaption><h3>Chromaticity</h3><p class="facts">Not known${noteText(x)}.</p></figcaption></figure>`;
+    return markup`<figure><figcaption><h3>Chromaticity${termMark('chromaticity')}</h3><p class="facts">Not known${noteText(x)}.</p></figcaption></figure>`;
   }
   const error =
     x.standardError === null || y.standardError === null ? null : ([x.standardError, y.standardError] as const);
   const words = `x ${plainFigure(x)}, y ${plainFigure(y)}`;
-  return markup`<figure><figcaption><h3>Chromaticity</h3><p class="facts">CIE 1931, x ${figureText(record, 'chromaticityX')}, y ${figureText(record, 'chromaticityY')}; dominant ${figureText(record, 'dominantWavelength') ?? 'wavelength none'}${noteText(dominantWavelength)}; mean ${figureText(record, 'meanExitWavelength') ?? 'not known'}. The edge of the coloured field is pure light of the wavelength written beside it, in nm.</p></figcaption>${chromaticityDiagram('chromaticity', [x.value, y.value], error, words)}</figure>`;
+  return markup`<figure><figcaption><h3>Chromaticity${termMark('chromaticity')}</h3><p class="facts">CIE 1931, x ${figureText(record, 'chromaticityX')}, y ${figureText(record, 'chromaticityY')}; dominant ${figureText(record, 'dominantWavelength') ?? 'wavelength none'}${noteText(dominantWavelength)}; mean ${figureText(record, 'meanExitWavelength') ?? 'not known'}. The edge of the coloured field is pure light of the wavelength written beside it, in nm.</p></figcaption>${chromaticityDiagram('chromaticity', [x.value, y.value], error, words)}</figure>`;
 }
 
 function angles(record: RunRecord, arrays: RunArrays): readonly Markup[] {
@@ -71,7 +72,7 @@ function angles(record: RunRecord, arrays: RunArrays): readonly Markup[] {
     if (array === undefined || !array.wattsPerSr.some((value) => value > 0)) return [];
     const title = `Directions of the light at ${shortName(where)}`;
     return [
-      markup`<figure><figcaption><h3>Directions at ${nameText(where)}</h3><p class="facts">Radiant intensity against the angle from the normal, averaged over azimuth, drawn to both sides. Dashed: the same power after Lambert’s cosine law. Near 0° few photons fall into each step, so the curve is roughest there.</p></figcaption>${polarPlot(`angles-${i}`, array, title)}</figure>`,
+      markup`<figure><figcaption><h3>Directions at ${nameText(where)}${termMark('radiant-intensity')}</h3><p class="facts">Radiant intensity against the angle from the normal, averaged over azimuth, drawn to both sides. Dashed: the same power after Lambert’s cosine law${termMark('lambert')}. Near 0° few photons fall into each step, so the curve is roughest there.</p></figcaption>${polarPlot(`angles-${i}`, array, title)}</figure>`,
     ];
   });
 }

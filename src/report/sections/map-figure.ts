@@ -1,22 +1,18 @@
+import { mapWords as wordsOfKind } from '../../terms/map-words.js';
+import { termOfMap } from '../../terms/picture-terms.js';
 import { cellCentre, heatMap, isStretched } from '../charts/heat-map.js';
 import { type Markup, markup } from '../markup.js';
 import { nameText, shortName } from '../name-text.js';
 import { significant } from '../number-format.js';
 import { cutOf, packValues, peakCell, type ShownMap } from '../shown-map.js';
+import { termMark } from '../term-mark.js';
 
 const AXIS_LETTERS = 16;
 
-const MAP_WORDS: Readonly<Record<string, string>> = {
-  exit: 'Light out of',
-  'pumped-face': 'Pump light onto',
-  detector: 'Light at detector',
-  'absorbed-pump': 'Pump light absorbed in',
-  'absorbed-all': 'All light absorbed in',
-};
-
 /** What a map shows, in words, without its place. */
 export function mapWords({ record: { what } }: ShownMap): string {
-  return MAP_WORDS[what] ?? 'Light at';
+  const words = wordsOfKind(what);
+  return words.charAt(0).toUpperCase() + words.slice(1);
 }
 
 /** One map of a face with its numbers, or the three cuts through a volume. @param id unique on the page */
@@ -31,7 +27,7 @@ export function mapFigure(map: ShownMap, id: string, histories: number, pumpWatt
     .join(
       '|',
     )}" data-unit="${record.unit}" data-maximum="${record.maximum}" data-top="${map.top}" data-values="${packValues(map)}"`;
-  return markup`<figure class="map${volume ? ' volume' : ''}" ${data}><figcaption><h3>${title}</h3><p class="facts"><b>${significant(record.mean, 4)}</b> ${record.unit} mean, ${significant(record.minimum, 4)} least, ${significant(record.maximum, 4)} most, ${significant(record.power, 4)} W in all</p><p class="facts">${noiseWords(map, histories, pumpWatts)}</p></figcaption>${
+  return markup`<figure class="map${volume ? ' volume' : ''}" ${data}><figcaption><h3>${title}${termMark(termOfMap(record.what))}</h3><p class="facts"><b>${significant(record.mean, 4)}</b> ${record.unit} mean, ${significant(record.minimum, 4)} least, ${significant(record.maximum, 4)} most, ${significant(record.power, 4)} W in all</p><p class="facts">${noiseWords(map, histories, pumpWatts)}</p></figcaption>${
     volume ? cuts(map, id) : cut(map, id, [0, 1], 2, middleCell(map))
   }</figure>`;
 }

@@ -24,8 +24,8 @@ describe('largestLosses', () => {
     ];
     expect(largestLosses(rows)).toEqual([
       '15 % absorbed by silvered',
-      '10 % left elsewhere at lid.left',
-      '9 % left elsewhere at lid.right',
+      '10 % left elsewhere, lid.left',
+      '9 % left elsewhere, lid.right',
     ]);
   });
   it('has nothing to say when nothing is lost', () => {
