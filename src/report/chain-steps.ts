@@ -22,6 +22,9 @@ export interface Chain {
   readonly steps: readonly ChainStep[];
 }
 
+/** What the chain begins with. */
+export const WALL_WORDS = { wall: 'from the wall', pump: 'of pump light' } as const;
+
 export function chainOf(record: RunRecord): Chain {
   const { figures, ledger, pumps } = record;
   const pumpWatts = figures.pumpPower.value ?? 0;
@@ -42,9 +45,9 @@ export function chainOf(record: RunRecord): Chain {
     pumpWatts,
     steps: [
       ...supply,
-      step('optics: taken up by the dye, not reflected, missed or let through', 'pump', taken, 1, 'in the dye'),
-      step('dye: given back as light over all re-emissions, not heat', 'emitted', emitted, taken, 'of emitted light'),
-      step('way out: finds the exit, not a finish, a solid or another face', 'emitted', out, emitted, 'out'),
+      step('optics: bring into the dye', 'pump', taken, 1, 'in the dye'),
+      step('dye: gives back as light, not heat', 'emitted', emitted, taken, 'of emitted light'),
+      step('way out: finds the exit', 'emitted', out, emitted, 'out'),
       {
         name: 'eye: lm per W of this light',
         kind: 'emitted',
@@ -69,23 +72,19 @@ function supplySteps(pumps: RunRecord['pumps'], pumpWatts: number): { steps: Cha
   );
   const loose = pumps.filter(({ driverEfficiency }) => driverEfficiency === null).length;
   const unstated =
-    loose === 0
-      ? ''
-      : loose === pumps.length
-        ? ' (not given, counted as lossless)'
-        : ' (some not given, those counted as lossless)';
+    loose === 0 ? '' : loose === pumps.length ? ' (not given: as if lossless)' : ' (where given, else lossless)';
   return {
     wallWatts,
     steps: [
       {
-        name: `driver${unstated}: passed on to the diodes`,
+        name: `driver: passes on${unstated}`,
         kind: 'electrical',
         factor: quotient(into, wallWatts),
         watts: into,
         result: `${wattText(into)} into the diodes`,
       },
       {
-        name: 'diode: made into light',
+        name: 'diode: makes light of',
         kind: 'pump',
         factor: quotient(pumpWatts, into),
         watts: pumpWatts,

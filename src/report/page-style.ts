@@ -76,6 +76,7 @@ thead th{color:var(--soft);font-size:.8rem}
 .cut{padding:4px 0}
 .cut label{font-size:.88rem}
 .cut input{width:100%;max-width:340px;display:block;accent-color:var(--output)}
+.heat-map image{image-rendering:pixelated}
 .heat-map{touch-action:pan-y;max-width:520px}
 .cross{pointer-events:none}
 .spectra,.chromaticity,.polar,.histogram{max-width:520px}

@@ -10,7 +10,7 @@ export const CHART_STYLE = `
 .axis line{stroke:var(--soft);stroke-width:1}
 .ring{fill:none;stroke:var(--line);stroke-width:1}
 .flow{font-size:14px}
-.flow .flow-strong{font-weight:650;font-size:15px}
+.flow .flow-strong{font-weight:700;font-size:15px}
 .flow .flow-heading{font-size:13px;font-weight:600;fill:var(--soft)}
 .flow-small{font-size:13px}
 .flow-small .flow-heading{font-size:12.5px}
@@ -21,7 +21,6 @@ export const CHART_STYLE = `
 .flow-output path{fill:var(--output)}
 .stream path{stroke:var(--paper);stroke-width:.7}
 .flow-dye{stroke:var(--ink);stroke-width:1.5;stroke-dasharray:5 4}
-.heat-map image{image-rendering:pixelated}
 .frame{fill:none;stroke:var(--soft);stroke-width:1}
 .cross line{stroke:#fff;stroke-width:1.2;mix-blend-mode:difference}
 .profile-field{fill:none;stroke:var(--line)}

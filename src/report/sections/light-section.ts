@@ -4,7 +4,7 @@ import type { RunRecord } from '../../record/run-record.js';
 import { backgroundCurves } from '../charts/background-curves.js';
 import { chromaticityDiagram } from '../charts/chromaticity-diagram.js';
 import { histogramBars } from '../charts/histogram-bars.js';
-import { polarPlot } from '../charts/polar-plot.js';
+import { POLAR_WORDS, polarPlot } from '../charts/polar-plot.js';
 import { spectraStrips } from '../charts/spectra-strips.js';
 import { figureText, noteText, plainFigure } from '../figure-text.js';
 import { type Markup, markup } from '../markup.js';
@@ -48,7 +48,7 @@ function angles(record: RunRecord, arrays: RunArrays): readonly Markup[] {
     if (array === undefined || !array.wattsPerSr.some((value) => value > 0)) return [];
     const title = `Directions of the light at ${shortName(where)}`;
     return [
-      markup`<figure><figcaption><h3>Directions at ${nameText(where)}</h3><p class="facts">Radiant intensity against the angle from the normal, averaged over azimuth, drawn to both sides. Dashed: the same power after Lambert’s cosine law. Near 0° few photons fall into each step, so the curve is roughest there.</p></figcaption>${polarPlot(`angles-${i}`, array, title)}</figure>`,
+      markup`<figure><figcaption><h3>Directions at ${nameText(where)}</h3><p class="facts">${POLAR_WORDS}</p></figcaption>${polarPlot(`angles-${i}`, array, title)}</figure>`,
     ];
   });
 }
