@@ -1,6 +1,8 @@
 import { Argument, Command, Option } from 'commander';
+import { PICTURE_CHOICES } from '../report/pictures/picture-choice.js';
 import type { CheckOptions } from './commands/check.js';
 import type { ProveOptions } from './commands/prove.js';
+import type { ReportOptions } from './commands/report.js';
 import type { TraceCommandOptions } from './commands/trace.js';
 import { EXIT_CODES_HELP, type ExitCode } from './exit-codes.js';
 import {
@@ -73,6 +75,7 @@ export function buildProgram(done: (code: ExitCode) => void): Command {
     .option('--threads <number>', 'worker threads (default: all cores); the results do not depend on it', parseThreads)
     .option('--out <folder>', 'new or empty folder for the run (default: a new one below results)')
     .option('--no-files', 'write no files')
+    .addOption(picturesOption().default('all'))
     .option('--plain', 'print the record of the run as JSON and nothing else')
     .addOption(new Option('--ledger <of>', 'ledger to print').choices(['watts', 'photons']).default('watts'))
     .option('--progress', 'progress also where standard error is no terminal, a line per quarter')
@@ -85,11 +88,12 @@ export function buildProgram(done: (code: ExitCode) => void): Command {
 
   program
     .command('report')
-    .description('make the page of a run again from its record')
+    .description('make the page and the pictures of a run again from its record')
     .argument('<folder>', 'folder of a run')
-    .action(async (folder: string) => {
+    .addOption(picturesOption().default(undefined, 'those the run has'))
+    .action(async (folder: string, options: ReportOptions) => {
       const { reportCommand } = await import('./commands/report.js');
-      done(await reportCommand(folder));
+      done(await reportCommand(folder, options));
     });
 
   program
@@ -112,6 +116,10 @@ export function buildProgram(done: (code: ExitCode) => void): Command {
     });
 
   return program;
+}
+
+function picturesOption(): Option {
+  return new Option('--pictures <which>', 'plots as files: svg, svg and png (all), or none').choices(PICTURE_CHOICES);
 }
 
 function dialOption(): Option {

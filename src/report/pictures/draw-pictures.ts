@@ -1,55 +1,55 @@
 import type { RunArrays } from '../../record/run-arrays.js';
 import type { PictureRecord, RunRecord } from '../../record/run-record.js';
-import { runPictures } from './run-pictures.js';
+import type { PictureChoice } from './picture-choice.js';
+import { type RunPicture, runPictures } from './run-pictures.js';
+import type { DrawnPicture } from './standalone-picture.js';
 
-/** none; svg: drawings alone; all: drawings and PNG of them. */
-export const PICTURE_CHOICES = ['none', 'svg', 'all'] as const;
-export type PictureChoice = (typeof PICTURE_CHOICES)[number];
+export type PictureFiles = readonly (readonly [name: string, content: string | Uint8Array])[];
 
 export interface DrawnPictures {
   /** For run.json. */
   readonly records: readonly PictureRecord[];
-  readonly files: readonly (readonly [name: string, content: string | Uint8Array])[];
+  readonly files: PictureFiles;
   /** Why there is no PNG although it was asked for; null when there is. */
   readonly noPng: string | null;
 }
 
-/** Every plot of a run as files. PNG files are drawn on several threads; a machine without their drawer still gets the SVG files. */
+type Drawn = RunPicture & { readonly drawn: DrawnPicture };
+
+/**
+ * Every plot of a run as files. A machine on which PNG files cannot be drawn still gets the SVG files: a run may have taken hours, and its
+ * pictures can be made again.
+ */
 export async function drawPictures(
   record: RunRecord,
   arrays: RunArrays,
   choice: PictureChoice,
 ): Promise<DrawnPictures> {
   if (choice === 'none') return { records: [], files: [], noPng: null };
-  const pictures = runPictures(record, arrays).map((picture) => ({ ...picture, drawn: picture.draw() }));
-  const png = choice === 'all' ? await loadPng() : null;
-  const toPng = png === null || typeof png === 'string' ? null : png;
-  const files = await Promise.all(
-    pictures.map(
-      async ({ name, drawn }): Promise<(readonly [string, string | Uint8Array])[]> => [
-        [`${name}.svg`, drawn.svg],
-        ...(toPng === null ? [] : [[`${name}.png`, await toPng(drawn)] as const]),
-      ],
-    ),
-  );
+  const pictures = runPictures(record, arrays).map((picture): Drawn => ({ ...picture, drawn: picture.draw() }));
+  const png = choice === 'all' ? await pngFiles(pictures) : { files: [], problem: null };
+  const files = pictures.flatMap(({ name, drawn }, i) => [
+    [`${name}.svg`, drawn.svg] as const,
+    ...png.files.slice(i, i + 1),
+  ]);
   return {
-    records: pictures.map(({ id, title }, i) => ({ id, title, files: files[i].map(([name]) => name) })),
-    files: files.flat(),
-    noPng: typeof png === 'string' ? png : null,
+    records: pictures.map(({ id, title, name }) => ({
+      id,
+      title,
+      files: png.files.length > 0 ? [`${name}.svg`, `${name}.png`] : [`${name}.svg`],
+    })),
+    files,
+    noPng: png.problem,
   };
 }
 
-/** What was drawn for a record: pictures are made again in the same formats. */
-export function choiceOf({ pictures }: RunRecord): PictureChoice {
-  if (pictures.length === 0) return 'none';
-  return pictures.some(({ files }) => files.some((file) => file.endsWith('.png'))) ? 'all' : 'svg';
-}
-
-/** The drawer of PNG files is machine code, built for most systems; its reason where it does not load. */
-async function loadPng() {
+/** All of them, or none and why. The drawer is machine code, built for most systems but not for all. */
+async function pngFiles(pictures: readonly Drawn[]): Promise<{ files: PictureFiles; problem: string | null }> {
   try {
-    return (await import('./picture-png.js')).picturePng;
+    const { picturePng } = await import('./picture-png.js');
+    const files = pictures.map(async ({ name, drawn }) => [`${name}.png`, await picturePng(drawn)] as const);
+    return { files: await Promise.all(files), problem: null };
   } catch (error) {
-    return error instanceof Error ? error.message : String(error);
+    return { files: [], problem: error instanceof Error ? error.message : String(error) };
   }
 }

@@ -7,7 +7,7 @@ import { type Markup, markup, trusted } from '../markup.js';
 /** Paper of a file is white, for print. */
 const COLOURS: Readonly<Record<ColourName, string>> = { ...LIGHT, paper: '#ffffff' };
 /** By name, the nearest in width first; a system without any of them takes its own. */
-export const FONT_FAMILY = "'DejaVu Sans Condensed', 'DejaVu Sans', Arial, 'Liberation Sans', sans-serif";
+const FONT_FAMILY = 'DejaVu Sans Condensed, DejaVu Sans, Arial, Liberation Sans, sans-serif';
 
 const MARGIN = 16;
 const GAP = 22;

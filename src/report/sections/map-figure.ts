@@ -18,7 +18,7 @@ export function mapFigure(map: ShownMap, id: string, histories: number, pumpWatt
     )}" data-unit="${record.unit}" data-maximum="${record.maximum}" data-top="${map.top}" data-values="${packValues(map)}"`;
   const { mean, others } = mapNumbers(map);
   const cuts = cutsOf(map).map((one) => cut(map, volume ? `${id}-${one.along}` : id, one));
-  return markup`<figure class="map${volume ? ' volume' : ''}" ${data}><figcaption><h3>${title}</h3><p class="facts"><b>${mean}</b> ${others}</p><p class="facts">${noiseWords(map, histories, pumpWatts)}</p></figcaption>${
+  return markup`<figure class="map${volume ? ' volume' : ''}" ${data}><figcaption><h3>${title}</h3><p class="facts"><b>${mean}</b>\u00a0${others}</p><p class="facts">${noiseWords(map, histories, pumpWatts)}</p></figcaption>${
     volume ? markup`<div class="cuts">${cuts}</div>` : cuts
   }</figure>`;
 }
