@@ -78,6 +78,8 @@ export function buildProgram(done: (code: ExitCode) => void): Command {
     .addOption(picturesOption().default('all'))
     .option('--plain', 'print the record of the run as JSON and nothing else')
     .addOption(new Option('--ledger <of>', 'ledger to print').choices(['watts', 'photons']).default('watts'))
+    .option('--map', 'a small map of the exit also where standard output is no terminal')
+    .option('--no-map', 'no map')
     .option('--progress', 'progress also where standard error is no terminal, a line per quarter')
     .option('--no-progress', 'no progress')
     .addOption(dialOption())

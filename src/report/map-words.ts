@@ -24,7 +24,7 @@ export function mapWords({ record: { what } }: ShownMap): string {
 export function mapNumbers({ record }: ShownMap): { readonly mean: string; readonly others: string } {
   return {
     mean: significant(record.mean, 4),
-    others: `${record.unit} mean, ${significant(record.minimum, 4)} least, ${significant(record.maximum, 4)} most, ${significant(record.power, 4)} W in all`,
+    others: `${record.unit} mean, ${significant(record.minimum, 4)} least, ${significant(record.maximum, 4)} most, ${significant(record.power, 4)}\u00a0W in all`,
   };
 }
 

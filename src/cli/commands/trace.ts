@@ -8,11 +8,13 @@ import type { PictureFiles } from '../../report/pictures/draw-pictures.js';
 import type { PictureChoice } from '../../report/pictures/picture-choice.js';
 import { RunFolderError } from '../../run-folder/run-folder-error.js';
 import type { TraceResult } from '../../trace/trace-result.js';
+import { colourDepth } from '../colour-depth.js';
 import { CommandFault } from '../command-fault.js';
 import { drawnPictures } from '../drawn-pictures.js';
 import { EXIT, type ExitCode } from '../exit-codes.js';
 import { countFaults, faultLines } from '../fault-lines.js';
 import { listenForInterrupt } from '../interrupt.js';
+import { faceMap } from '../ledger/face-map.js';
 import { showLedger } from '../ledger/show-ledger.js';
 import { checkOutputFolder, RESULTS } from '../output-folder.js';
 import { print, tell } from '../output-stream.js';
@@ -26,6 +28,8 @@ export interface TraceCommandOptions extends WantedBounds {
   readonly out?: string;
   readonly files: boolean;
   readonly pictures: PictureChoice;
+  /** undefined: on a terminal only. */
+  readonly map?: boolean;
   readonly plain?: boolean;
   readonly ledger: 'watts' | 'photons';
   /** undefined: on a terminal only. */
@@ -58,8 +62,11 @@ export async function traceCommand(file: string, options: TraceCommandOptions): 
     const show = async (folder: string | null): Promise<void> => {
       if (options.plain) return showPlain(folder === null ? bare : record, folder);
       const warnings = [...reading.warnings, ...locateFaults(reading, result.warnings)].flatMap(faultLines);
-      const style = styleFor(process.stdout.isTTY === true, process.env);
-      print(showLedger(record, { count: options.ledger, warnings, folder }, style));
+      const onTerminal = process.stdout.isTTY === true;
+      const style = styleFor(onTerminal, process.env);
+      const depth = colourDepth(onTerminal, process.env);
+      const map = (options.map ?? onTerminal) ? faceMap(record, arrays, style, depth) : [];
+      print(showLedger(record, { count: options.ledger, warnings, map, folder }, style));
     };
     try {
       await show(options.files ? await keep(record, arrays, options.out, drawn?.files ?? []) : null);
