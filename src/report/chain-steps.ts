@@ -32,7 +32,8 @@ export function chainOf(record: RunRecord): Chain {
   const taken = 1 - share('pump-lost');
   const emitted = taken - share('heat');
   const out = share('output');
-  const { steps: supply, wallWatts } = supplySteps(pumps, pumpWatts);
+  const told = figures.luminousEfficacyWallPlug.value !== null;
+  const { steps: supply, wallWatts } = told ? supplySteps(pumps, pumpWatts) : { steps: [], wallWatts: null };
   const step = (name: string, kind: ChainStep['kind'], part: number, whole: number, result: string): ChainStep => ({
     name,
     kind,

@@ -121,11 +121,13 @@ describe('drawPictures', () => {
     ['svg', ['.svg']],
     ['all', ['.svg', '.png']],
   ] as const)('%s', async (choice, endings) => {
-    const { records, files, noPng } = await drawPictures(record, arrays, choice);
+    // Enough of a run to see how files are named; each PNG takes its time.
+    const short = { ...record, maps: record.maps.slice(0, 1), spectra: [], angles: [] };
+    const { records, files, noPng } = await drawPictures(short, arrays, choice);
     expect(noPng).toBeNull();
     expect(files.map(([name]) => name).sort()).toEqual(records.flatMap((one) => one.files).sort());
     expect(new Set(files.map(([name]) => name.replace(/^[^.]*/, '')))).toEqual(new Set(endings));
-    expect(records).toHaveLength(choice === 'none' ? 0 : pictures.length);
+    expect(records).toHaveLength(choice === 'none' ? 0 : runPictures(short, arrays).length);
     expect(choiceOf({ ...record, pictures: records })).toBe(choice);
   });
 });
