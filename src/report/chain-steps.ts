@@ -85,7 +85,7 @@ function supplySteps(pumps: RunRecord['pumps'], pumpWatts: number): { steps: Cha
         result: `${wattText(into)} into the diodes`,
       },
       {
-        name: 'diode: makes light of',
+        name: 'diode: makes light',
         kind: 'pump',
         factor: quotient(pumpWatts, into),
         watts: pumpWatts,

@@ -11,7 +11,7 @@ const MOST_SPECTRA = 24;
 export const STRIPS_WORDS =
   'Each strip to its own height. The dashed line over the exit is the shape of what the dye emits, at equal area: where the exit falls below it, the dye took the light back.';
 export const CURVES_WORDS =
-  'Lines behind: what the dyes absorb and emit, each to its peak in this range, and what the finishes pass at normal incidence, by the scale on the right.';
+  'Lines behind: what the dyes absorb and emit, each to its peak in this range, and what the finishes pass at normal incidence (or reflect, if they pass nothing), by the scale on the right.';
 
 export interface SpectrumStrips {
   readonly strips: readonly SpectrumStrip[];

@@ -31,7 +31,7 @@ export function backgroundCurves({ curves }: RunRecord, arrays: RunArrays): read
       const values = arrays.curves.columns.find((column) => column.id === id)?.values;
       if (values === undefined || !values.some((value) => value > 0)) return [];
       return [
-        { kind, values, words: words(`${shortName(name, 24)}${where === null ? '' : ` in ${shortName(where, 20)}`}`) },
+        { kind, values, words: words(`${shortName(name, 18)}${where === null ? '' : ` in ${shortName(where, 14)}`}`) },
       ];
     });
   const what = (wanted: RunRecord['curves'][number]['what']) => curves.filter((curve) => curve.what === wanted);

@@ -8,8 +8,9 @@ type Histogram = RunRecord['histograms'][number];
 
 const LEFT = 46;
 const RIGHT = 352;
-const TOP = 12;
-const BOTTOM = 150;
+/** Above it stands what the last bar holds, clear of the bar. */
+const TOP = 24;
+const BOTTOM = 162;
 const WIDTH = 372;
 /** The bar for everything above the last cell stands apart by this much. */
 const GAP = 10;
@@ -64,7 +65,7 @@ export function histogramBars(id: string, histogram: Histogram, words: Histogram
     },
     WIDTH,
     BOTTOM + 36,
-    markup`${bars.map((share, i) => bar(x(start + i * width), x(start + (i + 1) * width), share, 'bar-share'))}${bar(RIGHT - OVERFLOW_WIDTH, RIGHT, above, 'bar-above')}<line class="base" x1="${RIGHT - OVERFLOW_WIDTH - 3}" x2="${RIGHT + 3}" y1="${BOTTOM}" y2="${BOTTOM}"/><text class="caption" x="${RIGHT + 4}" y="${TOP + 4}" text-anchor="end">${beyond}</text><text class="caption" x="${RIGHT - OVERFLOW_WIDTH / 2}" y="${BOTTOM + 15}" text-anchor="middle">above</text>${bottomAxis(across, BOTTOM)}${leftAxis(up, LEFT, 12)}`,
+    markup`${bars.map((share, i) => bar(x(start + i * width), x(start + (i + 1) * width), share, 'bar-share'))}${bar(RIGHT - OVERFLOW_WIDTH, RIGHT, above, 'bar-above')}<line class="base" x1="${RIGHT - OVERFLOW_WIDTH - 3}" x2="${RIGHT + 3}" y1="${BOTTOM}" y2="${BOTTOM}"/><text class="caption" x="${RIGHT + 4}" y="${TOP - 10}" text-anchor="end">${beyond}</text><text class="caption" x="${RIGHT - OVERFLOW_WIDTH / 2}" y="${BOTTOM + 15}" text-anchor="middle">above</text>${bottomAxis(across, BOTTOM)}${leftAxis(up, LEFT, 12)}`,
     'histogram',
   );
 }

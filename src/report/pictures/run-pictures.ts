@@ -125,7 +125,7 @@ function chromaticity({ figures }: RunRecord): readonly Planned[] {
       id: 'chromaticity',
       title: 'Chromaticity of the exit light',
       facts: [
-        `CIE 1931, ${words}; dominant wavelength ${plainFigure(dominantWavelength) ?? 'none'}. Along the edge: wavelengths in nm.`,
+        `CIE 1931, ${words}; dominant wavelength ${plainFigure(dominantWavelength) ?? 'none'}. Along the edge: wavelengths in\u00a0nm.`,
       ],
       charts: () => [chromaticityDiagram('chromaticity', point, error, words)],
     },
