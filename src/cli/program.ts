@@ -1,7 +1,9 @@
 import { Argument, Command, Option } from 'commander';
+import { PICTURE_CHOICES } from '../report/pictures/picture-choice.js';
 import type { CheckOptions } from './commands/check.js';
 import type { ExplainOptions } from './commands/explain.js';
 import type { ProveOptions } from './commands/prove.js';
+import type { ReportOptions } from './commands/report.js';
 import type { TraceCommandOptions } from './commands/trace.js';
 import { EXIT_CODES_HELP, type ExitCode } from './exit-codes.js';
 import {
@@ -80,8 +82,11 @@ export function buildProgram(done: (code: ExitCode) => void): Command {
       ).choices(['carried', 'averaged']),
     )
     .option('--no-files', 'write no files')
+    .addOption(picturesOption().default('all'))
     .option('--plain', 'print the record of the run as JSON and nothing else')
     .addOption(new Option('--ledger <of>', 'ledger to print').choices(['watts', 'photons']).default('watts'))
+    .option('--map', 'a small map of the exit also where standard output is no terminal')
+    .option('--no-map', 'no map')
     .option('--progress', 'progress also where standard error is no terminal, a line per quarter')
     .option('--no-progress', 'no progress')
     .addOption(dialOption())
@@ -92,11 +97,12 @@ export function buildProgram(done: (code: ExitCode) => void): Command {
 
   program
     .command('report')
-    .description('make the page of a run again from its record')
+    .description('make the page and the pictures of a run again from its record')
     .argument('<folder>', 'folder of a run')
-    .action(async (folder: string) => {
+    .addOption(picturesOption().default(undefined, 'those the run has'))
+    .action(async (folder: string, options: ReportOptions) => {
       const { reportCommand } = await import('./commands/report.js');
-      done(await reportCommand(folder));
+      done(await reportCommand(folder, options));
     });
 
   program
@@ -130,6 +136,10 @@ export function buildProgram(done: (code: ExitCode) => void): Command {
     });
 
   return program;
+}
+
+function picturesOption(): Option {
+  return new Option('--pictures <which>', 'plots as files: svg, svg and png (all), or none').choices(PICTURE_CHOICES);
 }
 
 function dialOption(): Option {

@@ -13,15 +13,19 @@ export interface TerminalStyle {
   readonly good: (text: string) => string;
 }
 
-type Environment = Readonly<Record<string, string | undefined>>;
+export type Environment = Readonly<Record<string, string | undefined>>;
+
+/** Colour only on a terminal (whatever CI says) and without NO_COLOR. */
+export function wantsColour(isTerminal: boolean, environment: Environment): boolean {
+  return isTerminal && !environment.NO_COLOR && environment.TERM !== 'dumb';
+}
 
 /**
- * Style for a stream. Colour only on a terminal (whatever CI says) and without NO_COLOR; signs beyond ASCII where the
+ * Style for a stream. Signs beyond ASCII where the
  * locale is UTF-8, or on a terminal that names no locale.
  */
 export function styleFor(isTerminal: boolean, environment: Environment): TerminalStyle {
-  const wantsColour = isTerminal && !environment.NO_COLOR && environment.TERM !== 'dumb';
-  const colours = pc.createColors(wantsColour);
+  const colours = pc.createColors(wantsColour(isTerminal, environment));
   const locale = environment.LC_ALL || environment.LC_CTYPE || environment.LANG;
   const unicode = locale ? /utf-?8/i.test(locale) : isTerminal;
   return {

@@ -52,6 +52,14 @@ export function summariseRun(result: TraceResult, about: RunAbout): { record: Ru
       startedAt: about.startedAt.toISOString(),
       repeat: about.repeat,
     },
+    pumps: description.pumps.map(({ name, power, wavelengthNm, linewidthNm, wallPlug, driver }) => ({
+      name,
+      power,
+      wavelengthNm,
+      linewidthNm,
+      diodeEfficiency: wallPlug,
+      driverEfficiency: driver,
+    })),
     figures: runFigures(result, fields),
     ledger: { photons: photonLedger(tallies), watts: wattLedger(tallies) },
     maps: fields.map(mapRecord),
@@ -63,11 +71,13 @@ export function summariseRun(result: TraceResult, about: RunAbout): { record: Ru
       file: '',
       photonFraction: total(photons) / tallies.moments.histories,
     })),
+    curves: result.curves.map(({ id, what, name, where, unit }) => ({ id, what, name, where, unit, file: '' })),
     angles: tallies.angles.map(({ id, where }) => ({ id, where, file: '' })),
     histograms: tallies.histograms.map(({ id, unit, from, width, counts }) => {
       const all = total(counts);
       return { id, unit, from, width, shares: Array.from(counts, (count) => (all > 0 ? count / all : 0)) };
     }),
+    pictures: [],
     checks: [...result.warnings, ...all.filter((field) => !hasMeasure(field)).map(leftOut)],
     cautions: cautionsFor({
       pumpWatts,
@@ -125,7 +135,7 @@ function mapRecord(field: MapField): MapRecord {
   };
 }
 
-function runArrays({ tallies }: TraceResult, fields: readonly MapField[], pumpWatts: number): RunArrays {
+function runArrays({ tallies, curves }: TraceResult, fields: readonly MapField[], pumpWatts: number): RunArrays {
   const { histories } = tallies.moments;
   const wattsPerEv = pumpWatts / (histories * new ErrorBars(tallies).mean('launchedEnergy'));
   const widths = cellWidths(tallies.wavelengthsNm);
@@ -146,6 +156,7 @@ function runArrays({ tallies }: TraceResult, fields: readonly MapField[], pumpWa
         values: photons.map((count, i) => count / histories / widths[i]),
       })),
     },
+    curves: { wavelengthsNm: tallies.wavelengthsNm, columns: curves.map(({ id, values }) => ({ id, values })) },
     angles: tallies.angles.map(({ id, polarCells, azimuthCells, energy }) => ({
       id,
       polarCells,

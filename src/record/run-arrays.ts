@@ -21,6 +21,13 @@ export interface SpectraArray {
   readonly columns: readonly { readonly id: string; readonly values: Float64Array }[];
 }
 
+/** What the trace went by; the record says which column is what. */
+export interface CurvesArray {
+  readonly wavelengthsNm: Float64Array;
+  /** In the unit the record gives, one value per wavelength. */
+  readonly columns: readonly { readonly id: string; readonly values: Float64Array }[];
+}
+
 export interface AnglesArray {
   readonly id: string;
   /** Polar cells of equal width from 0 to 90°, azimuth cells of equal width from 0 to 360°. */
@@ -33,6 +40,7 @@ export interface AnglesArray {
 export interface RunArrays {
   readonly maps: readonly MapArray[];
   readonly spectra: SpectraArray;
+  readonly curves: CurvesArray;
   readonly angles: readonly AnglesArray[];
   /** The design in space and some histories; null where it was not made. */
   readonly drawing: Drawing | null;

@@ -4,9 +4,9 @@
  */
 import type { Fault } from '../design/fault.js';
 import type { Fate, Light } from '../tallies/run-tallies.js';
-import type { StopReason } from '../trace/trace-result.js';
+import type { CurveKind, StopReason, UsedCurve } from '../trace/trace-result.js';
 
-export const RUN_FORMAT = 1;
+export const RUN_FORMAT = 2;
 
 export interface Figure {
   /** null: undefined for this run (no light left by the exit, wall-plug efficiency not given, …). */
@@ -73,6 +73,26 @@ export interface MapRecord {
   readonly minOverMean: number | null;
 }
 
+export interface PumpRecord {
+  readonly name: string;
+  /** Optical, W. */
+  readonly power: number;
+  readonly wavelengthNm: number;
+  /** Full width at half maximum; 0 is a line. */
+  readonly linewidthNm: number;
+  /** Optical per electrical power of the diodes; null: not given. */
+  readonly diodeEfficiency: number | null;
+  /** Power to the diodes per power from the wall; null: not given. */
+  readonly driverEfficiency: number | null;
+}
+
+export interface PictureRecord {
+  readonly id: string;
+  readonly title: string;
+  /** Files beside run.json. */
+  readonly files: readonly string[];
+}
+
 export interface RunRecord {
   readonly format: typeof RUN_FORMAT;
   readonly tool: { readonly name: 'stokeswell'; readonly version: string };
@@ -97,6 +117,7 @@ export interface RunRecord {
     /** Command that repeats this run to the same bits. */
     readonly repeat: string;
   };
+  readonly pumps: readonly PumpRecord[];
   readonly figures: Readonly<Record<FigureName, Figure>>;
   readonly ledger: { readonly photons: readonly LedgerRow[]; readonly watts: readonly LedgerRow[] };
   readonly maps: readonly MapRecord[];
@@ -108,6 +129,15 @@ export interface RunRecord {
     readonly file: string;
     readonly photonFraction: number;
   }[];
+  /** Curves of dyes, finishes and media the trace went by. */
+  readonly curves: readonly {
+    readonly id: string;
+    readonly what: CurveKind;
+    readonly name: string;
+    readonly where: string | null;
+    readonly unit: UsedCurve['unit'];
+    readonly file: string;
+  }[];
   readonly angles: readonly { readonly id: string; readonly where: string; readonly file: string }[];
   readonly histograms: readonly {
     readonly id: string;
@@ -117,6 +147,7 @@ export interface RunRecord {
     /** Share of its histories or photons per cell; the last cell holds everything above. */
     readonly shares: readonly number[];
   }[];
+  readonly pictures: readonly PictureRecord[];
   readonly checks: readonly Fault[];
   readonly cautions: readonly string[];
 }

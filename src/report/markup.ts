@@ -41,8 +41,8 @@ const ENTITIES: Readonly<Record<string, string>> = {
   "'": '&#39;',
 };
 
-/** Control characters but tab and line feed, format characters (bidirectional marks among them), lone surrogates, odd line ends. */
-const UNSEEN = /(?![\t\n])[\p{Cc}\p{Cf}\p{Cs}\p{Zl}\p{Zp}]/gu;
+/** Control characters but tab and line feed, format characters (bidirectional marks among them), lone surrogates, odd line ends, and what XML forbids. */
+const UNSEEN = /(?![\t\n])[\p{Cc}\p{Cf}\p{Cs}\p{Zl}\p{Zp}\uFFFE\uFFFF]/gu;
 
 /** Fit for element content and quoted attributes. What cannot be seen, or would reorder its neighbours, shows as its code point. */
 export function escapeText(text: string): string {

@@ -1,7 +1,10 @@
+import { CHART_STYLE } from './charts/chart-style.js';
+import { colourVariables, DARK, LIGHT } from './colours.js';
+
 /** All the style of a page: light and dark, phone to desktop, and print. */
 export const PAGE_STYLE = `
-:root{--paper:#faf8f3;--panel:#fff;--ink:#1b2226;--soft:#565f66;--line:#d9d4c8;--pump:#2a66ad;--heat:#b4461f;--stray:#c99a1b;--output:#0b7a5c;--focus:#7a2fa0}
-@media screen and (prefers-color-scheme:dark){:root{--paper:#12171a;--panel:#1a2125;--ink:#e9e6df;--soft:#a7b0b6;--line:#364046;--pump:#6ea9ec;--heat:#f08b63;--stray:#e3bb52;--output:#3ccda2;--focus:#d79bf5}}
+:root{${colourVariables(LIGHT)}}
+@media screen and (prefers-color-scheme:dark){:root{${colourVariables(DARK)}}}
 *{box-sizing:border-box}
 html{scroll-behavior:smooth}
 @media (prefers-reduced-motion:reduce){html{scroll-behavior:auto}}
@@ -60,23 +63,10 @@ p{margin:4px 0}
 .output{background:var(--output)}.pump-lost{background:var(--pump)}.heat{background:var(--heat)}.light-lost{background:var(--stray)}
 .losses li,.cautions li,.checks li{margin:3px 0;max-width:80ch}
 figure{margin:12px 0;min-width:0}
-.picture{display:block;width:100%;height:auto;overflow:hidden;font-size:11.5px}
-.picture text{fill:var(--ink);unicode-bidi:isolate}
-.picture .caption,.picture .axis text,.mean-text{fill:var(--soft);font-size:11px}
-.picture .axis .axis-title{fill:var(--ink);font-size:11.5px}
-.axis line{stroke:var(--soft);stroke-width:1}
-.ring{fill:none;stroke:var(--line);stroke-width:1}
-.flow{font-size:14px;max-width:860px}
-.flow .flow-strong{font-weight:650;font-size:15px}
-.flow .flow-heading{font-size:13px;font-weight:600;fill:var(--soft)}
-.flow-small{font-size:13px}.flow-small .flow-heading{font-size:12.5px}
-.flow-number{font-weight:600}
+${CHART_STYLE}.picture{display:block;width:100%;height:auto;overflow:hidden}
+.flow{max-width:860px}
 .stream{outline-offset:1px}
-.flow-pump-lost path,rect.flow-pump-lost{fill:var(--pump)}
-.flow-heat path{fill:var(--heat)}.flow-light-lost path{fill:var(--stray)}.flow-output path{fill:var(--output)}
-.stream path{stroke:var(--paper);stroke-width:.7}
 .stream:hover path,.stream:focus path{stroke:var(--ink);stroke-width:2}
-.flow-dye{stroke:var(--ink);stroke-width:1.5;stroke-dasharray:5 4}
 .where{display:grid;grid-template-columns:minmax(0,3fr) minmax(220px,1fr);gap:8px 40px;align-items:start}
 .narrow-only{display:none}
 .readout{min-height:1.5em;font-size:.9rem;padding:4px 0;color:var(--ink)}
@@ -101,27 +91,9 @@ thead th{color:var(--soft);font-size:.8rem}
 .cut input{width:100%;max-width:340px;display:block;accent-color:var(--output)}
 .heat-map image{image-rendering:pixelated}
 .heat-map{touch-action:pan-y;max-width:520px}
-.frame{fill:none;stroke:var(--soft);stroke-width:1}
 .cross{pointer-events:none}
-.cross line{stroke:#fff;stroke-width:1.2;mix-blend-mode:difference}
-.profile-field{fill:none;stroke:var(--line)}
-.profile-line{fill:none;stroke:var(--output);stroke-width:1.6}
-.mean-mark{fill:var(--ink)}
-.spectra,.chromaticity,.polar{max-width:520px}
-.spectrum.pump{fill:var(--pump)}.spectrum.emitted{fill:var(--output)}
-.shape{fill:none;stroke:var(--ink);stroke-width:1.2;stroke-dasharray:4 3}
-.base{stroke:var(--line)}
-.locus{fill:none;stroke:var(--soft)}.locus-dot{fill:var(--ink)}
-.locus-line{stroke:#000;stroke-width:1.2;stroke-dasharray:4 3}
-.white-point{fill:#fff;stroke:#000}
-.point-halo{fill:none;stroke:#fff;stroke-width:5}.point{fill:none;stroke:#000;stroke-width:2.4}
-.error-ellipse{fill:#000}
-.picture .point-text,.picture .on-colour{fill:#000;font-weight:600}
-.picture .point-text{paint-order:stroke;stroke:#fff;stroke-opacity:.75;stroke-width:3px}
-.picture .on-colour{font-weight:400;font-size:11px}
-.intensity{fill:none;stroke:var(--output);stroke-width:2}
-.lambert{fill:none;stroke:var(--ink);stroke-width:1.1;stroke-dasharray:5 4}
-.chain{list-style:none;margin:14px 0;padding:0;display:grid;grid-template-columns:repeat(auto-fit,minmax(min(100%,170px),1fr));border:1px solid var(--line);background:var(--panel)}
+.spectra,.chromaticity,.polar,.histogram{max-width:520px}
+.chain{list-style:none;margin:14px 0;padding:0;display:grid;grid-template-columns:repeat(auto-fit,minmax(min(100%,150px),1fr));border:1px solid var(--line);background:var(--panel)}
 .chain li{padding:10px 14px;border-right:1px solid var(--line);border-bottom:1px solid var(--line);margin:0 -1px -1px 0;display:flex;flex-direction:column;gap:2px}
 .chain .start{justify-content:end}
 .factor{font-size:1.15rem;font-weight:650}

@@ -1,6 +1,6 @@
 /** The tables of a run folder. Header names carry the unit in plain letters, so that every spreadsheet shows them right. */
 
-import type { AnglesArray, MapArray, SpectraArray } from '../record/run-arrays.js';
+import type { AnglesArray, CurvesArray, MapArray, SpectraArray } from '../record/run-arrays.js';
 import type { RunRecord } from '../record/run-record.js';
 import { type CsvField, csvText } from './csv-text.js';
 
@@ -30,6 +30,25 @@ export function spectraCsv({ wavelengthsNm, columns }: SpectraArray): string {
   const header = ['wavelength_nm', ...columns.map(({ id }) => `${id}_per_nm`)];
   return csvText(
     header,
+    Array.from(wavelengthsNm, (nm, i) => [nm, ...columns.map(({ values }) => values[i])]),
+  );
+}
+
+const UNIT_WORDS: Readonly<Record<RunRecord['curves'][number]['unit'], string>> = {
+  '1/mm': '_per_mm',
+  'L/(mol cm)': '_L_per_mol_cm',
+  '1/nm': '_per_nm',
+  '1': '',
+};
+
+/** A row per wavelength; a column per curve, in the unit its name ends with. @param records of the same curves, in the same order */
+export function curvesCsv({ wavelengthsNm, columns }: CurvesArray, records: RunRecord['curves']): string {
+  const header = columns.map(({ id }) => {
+    const record = records.find((curve) => curve.id === id);
+    return `${id.replaceAll(' ', '_')}${record === undefined ? '' : UNIT_WORDS[record.unit]}`;
+  });
+  return csvText(
+    ['wavelength_nm', ...header],
     Array.from(wavelengthsNm, (nm, i) => [nm, ...columns.map(({ values }) => values[i])]),
   );
 }

@@ -4,6 +4,7 @@ import { uniqueSlugs } from './slug.js';
 
 export const RUN_JSON = 'run.json';
 export const SPECTRA_CSV = 'spectra.csv';
+export const CURVES_CSV = 'curves.csv';
 export const LEDGER_CSV = 'ledger.csv';
 
 /** The record with the names of the files its folder holds filled in. */
@@ -14,6 +15,7 @@ export function nameFiles(record: RunRecord): RunRecord {
     ...record,
     maps: record.maps.map((map, i) => ({ ...map, files: [maps[i].npy, maps[i].csv] })),
     spectra: record.spectra.map((spectrum) => ({ ...spectrum, file: SPECTRA_CSV })),
+    curves: record.curves.map((curve) => ({ ...curve, file: CURVES_CSV })),
     angles: record.angles.map((one, i) => ({ ...one, file: angles[i] })),
   };
 }

@@ -12,7 +12,13 @@ export async function readArrays(folder: string, record: RunRecord): Promise<Run
   for (const map of record.maps) maps.push(await readMap(folder, map));
   const angles: AnglesArray[] = [];
   for (const one of record.angles) angles.push(await readAngles(folder, one));
-  return { maps, spectra: await readSpectra(folder, record.spectra), angles, drawing: null };
+  return {
+    maps,
+    spectra: await readColumns(folder, record.spectra),
+    curves: await readColumns(folder, record.curves),
+    angles,
+    drawing: null,
+  };
 }
 
 async function readMap(folder: string, { id, shape, extentMm, axes, unit, files }: MapRecord): Promise<MapArray> {
@@ -27,13 +33,17 @@ async function readMap(folder: string, { id, shape, extentMm, axes, unit, files 
   return { id, shape, extentMm, axes, unit, values, measure: columnOf(table, shape.length + 1) };
 }
 
-async function readSpectra(folder: string, spectra: RunRecord['spectra']): Promise<SpectraArray> {
-  const [first] = spectra;
+/** A column for each entry of the record, beside the wavelengths. */
+async function readColumns(
+  folder: string,
+  entries: readonly { readonly id: string; readonly file: string }[],
+): Promise<SpectraArray> {
+  const [first] = entries;
   if (first === undefined) return { wavelengthsNm: new Float64Array(0), columns: [] };
-  const table = await readNumberTable(folder, first.file, spectra.length + 1);
+  const table = await readNumberTable(folder, first.file, entries.length + 1);
   return {
     wavelengthsNm: columnOf(table, 0),
-    columns: spectra.map(({ id }, i) => ({ id, values: columnOf(table, i + 1) })),
+    columns: entries.map(({ id }, i) => ({ id, values: columnOf(table, i + 1) })),
   };
 }
 

@@ -55,12 +55,14 @@ function checkFormat(path: string, written: unknown): void {
   if (!head.success)
     throw new RunFolderError('read', path, `it is no record of a run: ${firstIssue(head.error)}`, TRACE_AGAIN);
   const { format, tool } = head.data;
-  if (format > RUN_FORMAT) {
+  if (format !== RUN_FORMAT) {
     throw new RunFolderError(
       'read',
       path,
-      `stokeswell ${tool.version} wrote it in format ${format}, and this one reads formats up to ${RUN_FORMAT}`,
-      'Read it with the version that wrote it, or a later one.',
+      `stokeswell ${tool.version} wrote it in format ${format}, and this one reads format ${RUN_FORMAT}`,
+      format > RUN_FORMAT
+        ? 'Read it with the version that wrote it, or a later one.'
+        : 'Trace the design again, or read it with the version that wrote it.',
     );
   }
 }

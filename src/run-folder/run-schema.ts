@@ -3,7 +3,7 @@ import { z } from 'zod';
 import type { FaultCode } from '../design/fault.js';
 import { type FigureName, RUN_FORMAT, type RunRecord } from '../record/run-record.js';
 import type { Fate } from '../tallies/run-tallies.js';
-import type { StopReason } from '../trace/trace-result.js';
+import type { CurveKind, StopReason } from '../trace/trace-result.js';
 import { everyName } from './every-name.js';
 
 const count = z.int().nonnegative();
@@ -100,6 +100,34 @@ const map = z
     error: 'shape, extentMm and axes must be equally long',
   });
 
+const share = z.number().positive().max(1).nullable();
+const pump = z.object({
+  name: text,
+  power: z.number().describe('optical, W'),
+  wavelengthNm: z.number(),
+  linewidthNm: z.number().describe('full width at half maximum, 0 is a line'),
+  diodeEfficiency: share.describe('optical per electrical power; null: not given'),
+  driverEfficiency: share.describe('power to the diodes per power from the wall; null: not given'),
+});
+
+const curve = z.object({
+  id: text,
+  what: z.enum(
+    everyName<CurveKind>()([
+      'dye-absorption',
+      'dye-extinction',
+      'dye-emission',
+      'medium-absorption',
+      'finish-transmittance',
+      'finish-reflectance',
+    ]),
+  ),
+  name: text,
+  where: line,
+  unit: z.enum(everyName<RunRecord['curves'][number]['unit']>()(['1/mm', 'L/(mol cm)', '1/nm', '1'])),
+  file: fileName,
+});
+
 const fault = z.object({
   code: z.enum(
     everyName<FaultCode>()([
@@ -151,12 +179,14 @@ export const runRecordSchema = z.object({
     startedAt: z.iso.datetime(),
     repeat: text,
   }),
+  pumps: z.array(pump),
   figures: z.record(z.enum(FIGURE_NAMES), figure),
   ledger: z.object({ photons: ledger, watts: ledger }),
   maps: z.array(map),
   spectra: z.array(
     z.object({ id: text, what: text, where: line, light, file: fileName, photonFraction: z.number().nonnegative() }),
   ),
+  curves: z.array(curve),
   angles: z.array(z.object({ id: text, where: text, file: fileName })),
   histograms: z.array(
     z.object({
@@ -167,6 +197,7 @@ export const runRecordSchema = z.object({
       shares: z.array(z.number().nonnegative()),
     }),
   ),
+  pictures: z.array(z.object({ id: text, title: text, files: z.array(fileName) })),
   checks: z.array(fault),
   cautions: z.array(text),
 }) satisfies z.ZodType<RunRecord>;

@@ -4,9 +4,17 @@ import { dirname, join, resolve } from 'node:path';
 import type { RunArrays } from '../record/run-arrays.js';
 import type { RunRecord } from '../record/run-record.js';
 import { type Disk, disk } from './disk.js';
-import { anglesCsv, ledgerCsv, mapCsv, spectraCsv } from './encode-csv.js';
+import { anglesCsv, curvesCsv, ledgerCsv, mapCsv, spectraCsv } from './encode-csv.js';
 import { encodeNpy } from './encode-npy.js';
-import { anglesFileNames, LEDGER_CSV, mapFileNames, nameFiles, RUN_JSON, SPECTRA_CSV } from './file-names.js';
+import {
+  anglesFileNames,
+  CURVES_CSV,
+  LEDGER_CSV,
+  mapFileNames,
+  nameFiles,
+  RUN_JSON,
+  SPECTRA_CSV,
+} from './file-names.js';
 import { fileSystemReason, isFileSystemError, RunFolderError } from './run-folder-error.js';
 import { runJson } from './run-json.js';
 
@@ -59,6 +67,7 @@ function* runFiles(
   yield [RUN_JSON, runJson(record)];
   yield [LEDGER_CSV, ledgerCsv(record)];
   yield [SPECTRA_CSV, spectraCsv(arrays.spectra)];
+  yield [CURVES_CSV, curvesCsv(arrays.curves, record.curves)];
   const mapNames = mapFileNames(arrays.maps.map(({ id }) => id));
   for (const [i, map] of arrays.maps.entries()) {
     // NumPy counts the slowest axis first: [w][v][u].

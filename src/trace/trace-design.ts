@@ -5,6 +5,7 @@ import { collectTallies } from '../engine/collect-tallies.js';
 import { MOST_HISTORIES, runBatches } from '../engine/run-batches.js';
 import { checkScene } from '../scene/check-scene.js';
 import { compileScene } from '../scene/compile-scene.js';
+import { usedCurves } from '../scene/used-curves.js';
 import type { TraceOptions, TraceResult } from './trace-result.js';
 
 /** The trace was stopped before its first batch was done: there is nothing to keep. */
@@ -32,6 +33,7 @@ export async function traceDescription(description: Description, options: TraceO
   return {
     description,
     tallies: collectTallies(compiled, outcome.fold, outcome.grown),
+    curves: usedCurves(description, compiled),
     stopReason: outcome.stopReason,
     seed: options.seed,
     threads: options.threads,

@@ -2,15 +2,18 @@
 import type { Description } from '../design/description.js';
 import type { Fault } from '../design/fault.js';
 import type { BatchPlan, BatchProgress, StopReason } from '../engine/batch-plan.js';
+import type { CurveKind, UsedCurve } from '../scene/used-curves.js';
 import type { RunTallies } from '../tallies/run-tallies.js';
 
 export type TraceOptions = BatchPlan;
 export type TraceProgress = BatchProgress;
-export type { StopReason };
+export type { CurveKind, StopReason, UsedCurve };
 
 export interface TraceResult {
   readonly description: Description;
   readonly tallies: RunTallies;
+  /** Over the wavelengths of the tallies. */
+  readonly curves: readonly UsedCurve[];
   readonly stopReason: StopReason;
   readonly seed: string;
   readonly threads: number;

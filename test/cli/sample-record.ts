@@ -3,7 +3,7 @@ import type { Figure, FigureName, LedgerRow, RunRecord } from '../../src/record/
 /** A run record made by hand (invented numbers), for tests of what is printed. */
 export function sampleRecord(): RunRecord {
   return {
-    format: 1,
+    format: 2,
     tool: { name: 'stokeswell', version: '0.0.0' },
     design: {
       title: 'Loom strobe, two-bank box cell',
@@ -23,6 +23,7 @@ export function sampleRecord(): RunRecord {
       startedAt: '2026-12-01T12:00:00.000Z',
       repeat: 'stokeswell trace geometries/loom.yaml --histories 200000 --seed 1',
     },
+    pumps: [pump('front-bank'), { ...pump('back-bank'), driverEfficiency: null }],
     figures: figures(),
     ledger: { photons: rows(0.5), watts: rows(0.4) },
     maps: [
@@ -31,12 +32,23 @@ export function sampleRecord(): RunRecord {
       map('absorbed-pump', 'dyed parts', null, null, 'W/cm³'),
     ],
     spectra: [],
+    curves: [],
     angles: [],
     histograms: [],
+    pictures: [],
     checks: [],
     cautions: ['Class 4 laser light: eyewear and interlocks after IEC 60825-1 and local rules.'],
   };
 }
+
+const pump = (name: string): RunRecord['pumps'][number] => ({
+  name,
+  power: 30,
+  wavelengthNm: 445,
+  linewidthNm: 2,
+  diodeEfficiency: 0.32,
+  driverEfficiency: 0.9,
+});
 
 const OUTPUT_ERROR = 0.0011;
 

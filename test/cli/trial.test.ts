@@ -61,6 +61,7 @@ test('trace ends with the same sentence and writes nothing', async () => {
     out: join(cwd, 'run'),
     files: true,
     ledger: 'watts',
+    pictures: 'none',
     dial: {},
     threads: 0,
     histories: 1024,
@@ -71,7 +72,7 @@ test('trace ends with the same sentence and writes nothing', async () => {
 
 test('trace keeps the warning of a pump that often misses', async () => {
   const file = await design('5 mm');
-  const options = { files: false, ledger: 'watts', dial: {}, threads: 0, histories: 1024 } as const;
+  const options = { files: false, ledger: 'watts', pictures: 'none', dial: {}, threads: 0, histories: 1024 } as const;
   expect(await traceCommand(file, options)).toBe(EXIT.ok);
   expect(printed).toMatch(/much\s+of\s+this\s+pump\s+meets\s+no\s+part/);
 });

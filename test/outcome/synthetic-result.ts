@@ -59,6 +59,7 @@ export function syntheticResult(
   return {
     description,
     tallies: syntheticTallies(SLOTS, batches, more.tallies),
+    curves: [],
     stopReason: 'histories',
     seed: '1',
     threads: 1,

@@ -3,25 +3,19 @@
  * change in the last digit does not. Take over a wanted change with `npx vitest run test/report -u` and look at it.
  */
 import { describe, expect, it } from 'vitest';
+import { chainOf } from '../../src/report/chain-steps.js';
+import { chainPicture } from '../../src/report/charts/chain-picture.js';
 import { chromaticityDiagram } from '../../src/report/charts/chromaticity-diagram.js';
 import { flowPicture, NARROW_FLOW } from '../../src/report/charts/flow-picture.js';
+import { histogramBars } from '../../src/report/charts/histogram-bars.js';
 import { polarPlot } from '../../src/report/charts/polar-plot.js';
 import { spectraStrips } from '../../src/report/charts/spectra-strips.js';
 import { mapFigure } from '../../src/report/sections/map-figure.js';
 import { shownMaps } from '../../src/report/shown-map.js';
 import { sampleRun } from '../run-folder/sample-run.js';
+import { outline } from './outline.js';
 
 const { record, arrays } = sampleRun();
-
-/** One tag or text a line, numbers rounded, packed data and colour lists left out. */
-function outline(svg: string): string {
-  return svg
-    .replace(/data:image\/png;base64,[^"]+/g, 'PNG')
-    .replace(/data-values="[^"]+"/g, 'data-values="PACKED"')
-    .replace(/<stop[^>]*><\/stop>|<stop[^>]*\/>/g, '')
-    .replace(/(?<![\w#])-?\d+\.\d+/g, (number) => String(Math.round(Number(number))))
-    .replace(/></g, '>\n<');
-}
 
 const first = shownMaps(record, arrays)[0];
 const volume = shownMaps(record, arrays)[3];
@@ -40,6 +34,29 @@ describe('pictures keep their structure', () => {
     ['face-map', () => mapFigure(first, 'map', 200_000, 60).text],
     ['volume-map', () => mapFigure(volume, 'map', 200_000, 60).text],
     ['spectra', () => spectraStrips('spectra', nm, [strip('in', 'pump', 450), strip('out', 'emitted', 540)]).text],
+    [
+      'spectra-with-curves',
+      () =>
+        spectraStrips(
+          'spectra',
+          nm,
+          [strip('in', 'pump', 450), strip('out', 'emitted', 540)],
+          [
+            {
+              kind: 'absorption',
+              words: 'absorption of dye',
+              values: nm.map((x) => 3 * Math.exp(-(((x - 490) / 25) ** 2))),
+            },
+            { kind: 'emission', words: 'emission of dye', values: nm.map((x) => Math.exp(-(((x - 530) / 25) ** 2))) },
+            { kind: 'finish', words: 'pass', values: nm.map((x) => (x < 500 ? 0.95 : 0.02)) },
+          ],
+        ).text,
+    ],
+    [
+      'histogram',
+      () => histogramBars('h', record.histograms[0], { title: 'Absorptions', across: 'number', of: 'histories' }).text,
+    ],
+    ['chain', () => chainPicture('chain', chainOf(record)).text],
     ['chromaticity', () => chromaticityDiagram('xy', [0.37, 0.62], [0.01, 0.01], 'x 0.37, y 0.62').text],
     ['polar', () => polarPlot('polar', arrays.angles[0], 'directions').text],
   ] as const)('%s', async (name, draw) => {

@@ -14,7 +14,7 @@ describe('runRecordSchema', () => {
   });
 
   it.each<[string, (of: typeof record) => unknown]>([
-    ['another format', (of) => ({ ...of, format: 2 })],
+    ['another format', (of) => ({ ...of, format: 1 })],
     ['a figure short', ({ figures: { luminousFlux: _, ...figures }, ...of }) => ({ ...of, figures })],
     ['a figure that is text', (of) => ({ ...of, figures: { ...of.figures, luminousFlux: '12 lm' } })],
     [
@@ -28,6 +28,12 @@ describe('runRecordSchema', () => {
     ['a ledger that does not close', (of) => ({ ...of, ledger: { ...of.ledger, watts: of.ledger.watts.slice(1) } })],
     ['a path for a file name', (of) => ({ ...of, angles: [{ ...of.angles[0], file: '../../secret' }] })],
     ['a hidden file', (of) => ({ ...of, maps: [{ ...of.maps[0], files: ['.profile'] }] })],
+    [
+      'a path among the pictures',
+      (of) => ({ ...of, pictures: [{ id: 'flow', title: '', files: ['pictures/flow.svg'] }] }),
+    ],
+    ['a driver that creates power', (of) => ({ ...of, pumps: [{ ...of.pumps[0], driverEfficiency: 1.1 }] })],
+    ['a curve of an unknown kind', (of) => ({ ...of, curves: [{ ...of.curves[0], what: 'smell' }] })],
     ['a map of too few axes', (of) => ({ ...of, maps: [{ ...of.maps[0], axes: ['u'] }] })],
     ['a broken hash', (of) => ({ ...of, design: { ...of.design, hash: 'abc' } })],
     ['a time that is none', (of) => ({ ...of, run: { ...of.run, startedAt: 'yesterday' } })],
@@ -44,7 +50,7 @@ describe('runJsonSchema', () => {
     expect(schema).toMatchObject({
       $schema: 'http://json-schema.org/draft-07/schema#',
       type: 'object',
-      properties: { format: { const: 1 }, ledger: { type: 'object' } },
+      properties: { format: { const: 2 }, ledger: { type: 'object' } },
     });
     expect(schema).toHaveProperty('required', Object.keys(record));
     expect(schema).not.toHaveProperty('additionalProperties');

@@ -18,6 +18,10 @@ export function sampleRun(): { record: RunRecord; arrays: RunArrays } {
       files: [],
     })),
     spectra: [{ id: 'exit', what: 'exit', where: 'lid.top', light: 'emitted', file: '', photonFraction: 0.5 }],
+    curves: [
+      { id: 'dye-absorption dye in bath', what: 'dye-absorption', name: 'dye', where: 'bath', unit: '1/mm', file: '' },
+      { id: 'finish-transmittance pass', what: 'finish-transmittance', name: 'pass', where: null, unit: '1', file: '' },
+    ],
     angles: [{ id: 'exit-lid.top', where: 'lid.top', file: '' }],
     histograms: [{ id: 'absorptions-per-history', unit: '', from: 0, width: 1, shares: [0.25, 0.5, 0.25] }],
     checks: [{ code: 'caution', severity: 'warning', path: ['parts', 'cell', 0], problem: 'thin wall', found: '1 µm' }],
@@ -30,6 +34,13 @@ export function sampleRun(): { record: RunRecord; arrays: RunArrays } {
       columns: [
         { id: 'exit', values: Float64Array.of(0.001, 1 / 3) },
         { id: 'detector-=a,"b"\n-pump', values: Float64Array.of(0, 1e-300) },
+      ],
+    },
+    curves: {
+      wavelengthsNm: Float64Array.of(500, 550),
+      columns: [
+        { id: 'dye-absorption dye in bath', values: Float64Array.of(1.25, 1 / 7) },
+        { id: 'finish-transmittance pass', values: Float64Array.of(0.95, 0.02) },
       ],
     },
     angles: [{ id: 'exit-lid.top', polarCells: 3, azimuthCells: 2, wattsPerSr: Float64Array.of(1, 2, 3, 4, 5, 6) }],

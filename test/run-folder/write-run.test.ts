@@ -34,8 +34,8 @@ describe('writeRun', () => {
     expect(await readdir(join(root, 'loom'))).toEqual(['run']);
     expect((await readdir(join(root, 'loom/run'))).sort()).toEqual([...names].sort());
     const read = await readRun(join(root, 'loom/run'));
-    const named = [...read.maps.flatMap(({ files }) => files), ...read.angles, ...read.spectra].map((of) =>
-      typeof of === 'string' ? of : of.file,
+    const named = [...read.maps.flatMap(({ files }) => files), ...read.angles, ...read.spectra, ...read.curves].map(
+      (of) => (typeof of === 'string' ? of : of.file),
     );
     expect([...new Set([...named, 'run.json', 'ledger.csv'])].sort()).toEqual([...names].sort());
     expect(names).toContain('map-detector-etc.npy');
@@ -50,6 +50,7 @@ describe('writeRun', () => {
       ...of,
       maps: of.maps.map((map) => ({ ...map, files: [] })),
       spectra: of.spectra.map((spectrum) => ({ ...spectrum, file: '' })),
+      curves: of.curves.map((curve) => ({ ...curve, file: '' })),
       angles: of.angles.map((one) => ({ ...one, file: '' })),
     });
     expect(blank(await readRun(join(root, 'run')))).toEqual(record);

@@ -4,12 +4,17 @@ import type { LocatedFault } from '../../design/fault.js';
 import type { SoundDesign } from '../../design/read-design.js';
 import type { RunArrays } from '../../record/run-arrays.js';
 import type { RunRecord } from '../../record/run-record.js';
+import type { PictureFiles } from '../../report/pictures/draw-pictures.js';
+import type { PictureChoice } from '../../report/pictures/picture-choice.js';
 import { RunFolderError } from '../../run-folder/run-folder-error.js';
 import type { TraceResult } from '../../trace/trace-result.js';
+import { colourDepth } from '../colour-depth.js';
 import { CommandFault } from '../command-fault.js';
+import { drawnPictures } from '../drawn-pictures.js';
 import { EXIT, type ExitCode } from '../exit-codes.js';
 import { countFaults, faultLines } from '../fault-lines.js';
 import { listenForInterrupt } from '../interrupt.js';
+import { faceMap } from '../ledger/face-map.js';
 import { showLedger } from '../ledger/show-ledger.js';
 import { checkOutputFolder, RESULTS } from '../output-folder.js';
 import { print, tell } from '../output-stream.js';
@@ -22,6 +27,9 @@ export interface TraceCommandOptions extends WantedBounds {
   readonly threads?: number;
   readonly out?: string;
   readonly files: boolean;
+  readonly pictures: PictureChoice;
+  /** undefined: on a terminal only. */
+  readonly map?: boolean;
   readonly plain?: boolean;
   readonly ledger: 'watts' | 'photons';
   /** undefined: on a terminal only. */
@@ -50,15 +58,20 @@ export async function traceCommand(file: string, options: TraceCommandOptions): 
   try {
     const result = { ...(await traceReading(reading, options, interrupt.signal)), warnings: faults };
     const { recordRun } = await import('../record-run.js');
-    const { record, arrays } = recordRun(result, reading, options.dial, startedAt, options.polarisation);
+    const { record: bare, arrays } = recordRun(result, reading, options.dial, startedAt, options.polarisation);
+    const drawn = options.files ? await drawnPictures(bare, arrays, options.pictures) : null;
+    const record = drawn === null ? bare : { ...bare, pictures: drawn.records };
     const show = async (folder: string | null): Promise<void> => {
-      if (options.plain) return showPlain(record, folder);
+      if (options.plain) return showPlain(folder === null ? bare : record, folder);
       const warnings = [...reading.warnings, ...locateFaults(reading, result.warnings)].flatMap(faultLines);
-      const style = styleFor(process.stdout.isTTY === true, process.env);
-      print(showLedger(record, { count: options.ledger, warnings, folder }, style));
+      const onTerminal = process.stdout.isTTY === true;
+      const style = styleFor(onTerminal, process.env);
+      const depth = colourDepth(onTerminal, process.env);
+      const map = (options.map ?? onTerminal) ? faceMap(record, arrays, style, depth) : [];
+      print(showLedger(record, { count: options.ledger, warnings, map, folder }, style));
     };
     try {
-      await show(options.files ? await keep(record, arrays, options.out) : null);
+      await show(options.files ? await keep(record, arrays, options.out, drawn?.files ?? []) : null);
     } catch (error) {
       // The answer is not lost when the disk would not have it.
       if (error instanceof RunFolderError) await show(null);
@@ -83,13 +96,21 @@ function designMark({ design: { hash, dials }, run }: RunRecord): string {
 }
 
 /** Writes the run and gives back its folder. */
-async function keep(record: RunRecord, arrays: RunArrays, out: string | undefined): Promise<string> {
+async function keep(
+  record: RunRecord,
+  arrays: RunArrays,
+  out: string | undefined,
+  pictures: PictureFiles,
+): Promise<string> {
   const { runFolderPath } = await import('../../run-folder/run-folder-path.js');
   const { writeRun } = await import('../../run-folder/write-run.js');
   const { REPORT_HTML, runPage } = await import('../../report/run-page.js');
   const folder =
     out ?? (await runFolderPath(RESULTS, record.design.title, { hash: designMark(record), ...record.run }));
-  await writeRun(folder, record, arrays, undefined, [[REPORT_HTML, runPage]]);
+  await writeRun(folder, record, arrays, undefined, [
+    [REPORT_HTML, runPage],
+    ...pictures.map(([name, content]) => [name, () => content] as const),
+  ]);
   return folder;
 }
 

@@ -13,6 +13,8 @@ export interface LedgerView {
   readonly count: 'watts' | 'photons';
   /** One text per warning. */
   readonly warnings: readonly string[];
+  /** A small map of a face, ready to print; none where it is not wanted. */
+  readonly map?: readonly string[];
   /** Folder of the run, null when no files were written. */
   readonly folder: string | null;
 }
@@ -28,6 +30,7 @@ export function showLedger(record: RunRecord, view: LedgerView, style: TerminalS
     ],
     labelled('To win back', largestLosses(rows), style),
     evenness(record, style),
+    view.map ?? [],
     survival(record, style),
     labelled('Warnings', view.warnings, { ...style, bold: style.warn }),
     labelled(

@@ -2,7 +2,7 @@ import { observerTable } from '../../materials/observer.js';
 import { screenColour } from '../light-colour.js';
 import { type Markup, markup } from '../markup.js';
 import { bottomAxis, leftAxis } from './axis.js';
-import { picture, round } from './picture.js';
+import { type Picture, picture, round } from './picture.js';
 import { pngUrl } from './raster.js';
 
 const SCALE = 400;
@@ -20,7 +20,7 @@ export function chromaticityDiagram(
   point: readonly [number, number],
   error: readonly [number, number] | null,
   words: string,
-): Markup {
+): Picture {
   const [x, y] = point;
   const locus = spectralLocus();
   const outline = locus.map((p, i) => `${i === 0 ? 'M' : 'L'}${placeOf(p.x, p.y)}`).join('');

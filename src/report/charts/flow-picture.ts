@@ -5,7 +5,7 @@ import { type Markup, markup } from '../markup.js';
 import { shortName } from '../name-text.js';
 import { formatWithError, significant } from '../number-format.js';
 import { type Stream, streamsOf } from './flow-rows.js';
-import { picture, round } from './picture.js';
+import { type Picture, picture, round } from './picture.js';
 
 export interface FlowSize {
   readonly width: number;
@@ -44,7 +44,7 @@ interface Heading {
 }
 
 /** @param id unique on the page */
-export function flowPicture({ ledger, figures }: RunRecord, id: string, size: FlowSize): Markup {
+export function flowPicture({ ledger, figures }: RunRecord, id: string, size: FlowSize): Picture {
   const watts = figures.pumpPower.value ?? 0;
   const { bands, headings, dyeAt, bottom } = layOut(ledger.watts, size);
   const turned = bands.filter(({ group }) => group !== 'output');

@@ -1,8 +1,8 @@
-import { type Markup, markup } from '../markup.js';
+import { markup } from '../markup.js';
 import { significant } from '../number-format.js';
 import { bottomAxis, leftAxis } from './axis.js';
 import { colourBar } from './colour-bar.js';
-import { type PictureText, picture, round } from './picture.js';
+import { type Picture, type PictureText, picture, round } from './picture.js';
 import { profile } from './profile.js';
 import { type Plane, planePng } from './raster.js';
 
@@ -30,7 +30,7 @@ const PROFILE = 44;
 const WIDTH = LEFT + LONGEST + 12;
 
 /** A map with axes in mm, its colour scale, and cross-sections through one cell. */
-export function heatMap(map: HeatMap): Markup {
+export function heatMap(map: HeatMap): Picture {
   const { plane, extentMm, spanMm, axes, maximum, mean, unit, at } = map;
   const [width, height] = plotSize(extentMm, spanMm);
   const bottom = TOP + height;

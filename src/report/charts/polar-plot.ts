@@ -1,16 +1,19 @@
 import { scaleLinear } from 'd3-scale';
 import type { AnglesArray } from '../../record/run-arrays.js';
-import { type Markup, markup } from '../markup.js';
+import { markup } from '../markup.js';
 import { significant } from '../number-format.js';
-import { picture, round } from './picture.js';
+import { type Picture, picture, round } from './picture.js';
 
 const WIDTH = 372;
 const RADIUS = 158;
 const CENTRE = [WIDTH / 2, RADIUS + 24] as const;
 const SPOKES = [-90, -60, -30, 0, 30, 60, 90];
 
+export const POLAR_WORDS =
+  'Radiant intensity against the angle from the normal, averaged over azimuth, drawn to both sides. Dashed: the same power after Lambert’s cosine law. Near 0° few photons fall into each step, so the curve is roughest there.';
+
 /** Radiant intensity against the angle from the normal, averaged over azimuth. @param id unique on the page */
-export function polarPlot(id: string, angles: AnglesArray, title: string): Markup {
+export function polarPlot(id: string, angles: AnglesArray, title: string): Picture {
   const intensity = azimuthMeans(angles);
   const even = watts(angles, intensity) / Math.PI;
   const highest = Math.max(even, ...intensity);

@@ -1,58 +1,35 @@
 /** Colour and direction: spectra, chromaticity, angles. */
 import type { RunArrays } from '../../record/run-arrays.js';
 import type { RunRecord } from '../../record/run-record.js';
+import { backgroundCurves } from '../charts/background-curves.js';
 import { chromaticityDiagram } from '../charts/chromaticity-diagram.js';
-import { polarPlot } from '../charts/polar-plot.js';
-import { type SpectrumStrip, spectraStrips } from '../charts/spectra-strips.js';
+import { histogramBars } from '../charts/histogram-bars.js';
+import { POLAR_WORDS, polarPlot } from '../charts/polar-plot.js';
+import { spectraStrips } from '../charts/spectra-strips.js';
 import { figureText, noteText, plainFigure } from '../figure-text.js';
 import { type Markup, markup } from '../markup.js';
 import { nameText, shortName } from '../name-text.js';
 import { groupedCount } from '../number-format.js';
+import { shownHistograms } from '../shown-histograms.js';
+import { CURVES_WORDS, STRIPS_WORDS, spectrumStrips } from '../spectrum-strips.js';
 import { termMark } from '../term-mark.js';
 
-const MOST_SPECTRA = 24;
 const MOST_ANGLES = 12;
 
 export function lightSection(record: RunRecord, arrays: RunArrays): Markup {
-  return markup`<section id="light"><h2>Colour and direction</h2><div class="maps">${spectra(record, arrays)}${chromaticity(record)}${angles(record, arrays)}</div></section>`;
+  return markup`<section id="light"><h2>Colour and direction</h2><div class="maps">${spectra(record, arrays)}${chromaticity(record)}${angles(record, arrays)}${histograms(record)}</div></section>`;
 }
 
-type SpectrumRecord = RunRecord['spectra'][number];
-
-function spectrumWords({ what, where, light }: SpectrumRecord): string {
-  switch (what) {
-    case 'launched':
-      return 'launched by the pumps';
-    case 'absorbed-pump':
-      return 'pump light absorbed by dye';
-    case 'emitted-in-dye':
-      return 'emitted in the dye, all re-emissions';
-    case 'exit':
-      return `out by the exit ${where ?? ''}`;
-    case 'leak':
-      return `pump light out by the exit ${where ?? ''}`;
-    default:
-      return `${light} light at ${where ?? what}`;
-  }
-}
-
-function spectra(record: RunRecord, { spectra: { wavelengthsNm, columns } }: RunArrays): Markup | null {
-  const valuesOf = (id: string) => columns.find((column) => column.id === id)?.values ?? null;
-  const emitted = record.spectra.find(({ what }) => what === 'emitted-in-dye');
-  const strips = record.spectra.flatMap((spectrum): SpectrumStrip[] => {
-    const values = valuesOf(spectrum.id);
-    if (values === null || !(spectrum.photonFraction > 0)) return [];
-    const { light, photonFraction } = spectrum;
-    const shape = spectrum.what === 'exit' && emitted !== undefined ? valuesOf(emitted.id) : null;
-    return [{ title: shortName(spectrumWords(spectrum), 48), light, photonFraction, values, shape }];
-  });
+/** The strips, what was not seen, and whether some were left out. */
+function spectra(record: RunRecord, arrays: RunArrays): Markup | null {
+  const { strips, empty, more } = spectrumStrips(record, arrays);
   if (strips.length === 0) return null;
-  const empty = record.spectra.filter(({ photonFraction }) => !(photonFraction > 0)).map(spectrumWords);
-  return markup`<figure><figcaption><h3>Spectra${termMark('spectrum')}</h3><p class="facts">Each strip to its own height. The line over the exit is the shape of what the dye emits, at equal area: where the exit falls below it, the dye took the light back.</p>${
+  const curves = backgroundCurves(record, arrays);
+  return markup`<figure><figcaption><h3>Spectra${termMark('spectrum')}</h3><p class="facts">${STRIPS_WORDS}${curves.length === 0 ? '' : ` ${CURVES_WORDS}`}</p>${
     empty.length === 0
       ? null
       : markup`<p class="facts">None seen in ${groupedCount(record.run.histories)} histories: ${shortName(empty.join('; '), 300)}.</p>`
-  }${strips.length > MOST_SPECTRA ? markup`<p class="facts">More spectra are in the folder of the run.</p>` : null}</figcaption>${spectraStrips('spectra', wavelengthsNm, strips.slice(0, MOST_SPECTRA))}</figure>`;
+  }${more ? markup`<p class="facts">More spectra are in the folder of the run.</p>` : null}</figcaption>${spectraStrips('spectra', arrays.spectra.wavelengthsNm, strips, curves)}</figure>`;
 }
 
 function chromaticity(record: RunRecord): Markup {
@@ -72,7 +49,15 @@ function angles(record: RunRecord, arrays: RunArrays): readonly Markup[] {
     if (array === undefined || !array.wattsPerSr.some((value) => value > 0)) return [];
     const title = `Directions of the light at ${shortName(where)}`;
     return [
-      markup`<figure><figcaption><h3>Directions at ${nameText(where)}${termMark('radiant-intensity')}</h3><p class="facts">Radiant intensity against the angle from the normal, averaged over azimuth, drawn to both sides. Dashed: the same power after Lambert’s cosine law${termMark('lambert')}. Near 0° few photons fall into each step, so the curve is roughest there.</p></figcaption>${polarPlot(`angles-${i}`, array, title)}</figure>`,
+      markup`<figure><figcaption><h3>Directions at ${nameText(where)}${termMark('radiant-intensity')}</h3><p class="facts">${POLAR_WORDS}${termMark('lambert')}</p></figcaption>${polarPlot(`angles-${i}`, array, title)}</figure>`,
     ];
   });
+}
+
+/** How often a photon was absorbed, and how far the light went. */
+function histograms(record: RunRecord): readonly Markup[] {
+  return shownHistograms(record).map(
+    ({ histogram, words, facts }, i) =>
+      markup`<figure><figcaption><h3>${words.title}</h3><p class="facts">${facts}</p></figcaption>${histogramBars(`histogram-${i}`, histogram, words)}</figure>`,
+  );
 }

@@ -23,7 +23,7 @@ export function recordSection(record: RunRecord): Markup {
   )}${item('Seed', shortName(run.seed, LONGEST_LINE))}${item('Histories', `${groupedCount(run.histories)} in ${groupedCount(run.batches)} ${run.batches === 1 ? 'batch' : 'batches'}; ${STOP_WORDS[run.stopReason]}`, termMark(`stop-${run.stopReason}`))}${item(
     'Traced',
     `${run.startedAt}, ${formatSeconds(run.seconds)} on ${run.threads} ${run.threads === 1 ? 'thread' : 'threads'}`,
-  )}${item('Polarisation', run.polarisation === 'carried' ? 'carried by every photon' : 'averaged: faces treat all light as unpolarised', termMark('polarisation'))}${item('Version', `${tool.name} ${tool.version}, record format ${record.format}`)}${item('Tables beside this page', shortName(tablesOf(record).join(', '), 2000))}${item('To repeat it', markup`<code>${shortName(run.repeat, LONGEST_LINE)}</code>`)}</dl><h3 id="cautions">Cautions${termMark('cautions')}</h3>${
+  )}${item('Polarisation', run.polarisation === 'carried' ? 'carried by every photon' : 'averaged: faces treat all light as unpolarised', termMark('polarisation'))}${item('Version', `${tool.name} ${tool.version}, record format ${record.format}`)}${item('Tables beside this page', shortName(tablesOf(record).join(', '), 2000))}${pictureItem(record)}${item('To repeat it', markup`<code>${shortName(run.repeat, LONGEST_LINE)}</code>`)}</dl><h3 id="cautions">Cautions${termMark('cautions')}</h3>${
     cautions.length === 0
       ? markup`<p>None are held for what this design uses; follow your local codes all the same.</p>`
       : markup`<ul class="cautions">${cautions.map((text) => markup`<li>${shortName(text, 1000)}</li>`)}</ul>`
@@ -36,10 +36,19 @@ function item(term: string, value: Markup | string, mark: Markup | null = null):
   return markup`<div><dt>${term}</dt><dd>${value}${mark}</dd></div>`;
 }
 
-function tablesOf({ maps, spectra, angles }: RunRecord): readonly string[] {
+/** Names without their endings, which are alike for all. */
+function pictureItem({ pictures }: RunRecord): Markup | null {
+  if (pictures.length === 0) return null;
+  const names = pictures.flatMap(({ files }) => files.slice(0, 1).map((file) => file.replace(/\.[^.]*$/, '')));
+  const endings = [...new Set(pictures.flatMap(({ files }) => files.map((file) => file.replace(/^.*\./, ''))))];
+  return item('Pictures beside this page', shortName(`${names.join(', ')}; each as ${endings.join(' and ')}`, 2000));
+}
+
+function tablesOf({ maps, spectra, curves, angles }: RunRecord): readonly string[] {
   const files = [
     ...maps.flatMap((map) => map.files),
     ...spectra.map(({ file }) => file),
+    ...curves.map(({ file }) => file),
     ...angles.map(({ file }) => file),
   ];
   return ['run.json', 'ledger.csv', ...new Set(files.filter((file) => file !== ''))];
