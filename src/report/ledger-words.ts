@@ -11,14 +11,17 @@ export const GROUP_WORDS: Readonly<Record<Group, string>> = {
   output: 'output',
 };
 
-export function groupOf({ fate, light }: LedgerRow): Group {
+/** How light ended: a row of a ledger, or the end of a traced path. */
+export type Ending = Pick<LedgerRow, 'fate' | 'light' | 'where' | 'by'>;
+
+export function groupOf({ fate, light }: Pick<Ending, 'fate' | 'light'>): Group {
   if (fate === 'stokes-heat' || fate === 'lost-in-dye') return 'heat';
   if (light === 'pump') return 'pump-lost';
   return fate === 'left-by-exit' ? 'output' : 'light-lost';
 }
 
 /** A fate in plain words, without its place. */
-export function fateWords({ fate, light, by }: LedgerRow): string {
+export function fateWords({ fate, light, by }: Ending): string {
   switch (fate) {
     case 'missed':
       return 'missed every part';
@@ -44,12 +47,12 @@ export function fateWords({ fate, light, by }: LedgerRow): string {
 }
 
 /** The same with its place; where a dye keeps energy, also of which light. */
-export function placedWords(row: LedgerRow): string {
+export function placedWords(row: Ending): string {
   const words = groupOf(row) === 'heat' ? heatWords(row) : fateWords(row);
   return row.where === null ? words : `${words}, ${row.where}`;
 }
 
-function heatWords({ fate, light, by }: LedgerRow): string {
+function heatWords({ fate, light, by }: Ending): string {
   const of = light === 'pump' ? 'pump light' : 'light taken back';
   const dye = by ?? 'the dye';
   return fate === 'stokes-heat' ? `Stokes heat of ${of} in ${dye}` : `${of} not re-emitted by ${dye}`;
