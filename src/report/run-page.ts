@@ -11,7 +11,9 @@ import { flowSection } from './sections/flow-section.js';
 import { lightSection } from './sections/light-section.js';
 import { mapsSection } from './sections/maps-section.js';
 import { recordSection } from './sections/record-section.js';
+import { viewSection } from './sections/view-section.js';
 import { shownMaps } from './shown-map.js';
+import { VIEW_BUNDLE } from './view/view-bundle.js';
 
 /** File name of the page in the folder of its run. */
 export const REPORT_HTML = 'report.html';
@@ -22,8 +24,10 @@ export const REPORT_HTML = 'report.html';
  */
 export function runPage(record: RunRecord, arrays: RunArrays): string {
   const maps = shownMaps(record, arrays);
+  const view = viewSection(arrays.drawing);
   return pageShell(
     record.design.title,
-    markup`${pageHead(record)}<main>${answers(record, maps)}${checksSection(record)}${flowSection(record)}${mapsSection(record, maps)}${lightSection(record, arrays)}${chainSection(record)}${recordSection(record)}</main>`,
+    markup`${pageHead(record, view !== null)}<main>${answers(record, maps)}${checksSection(record)}${flowSection(record)}${view}${mapsSection(record, maps)}${lightSection(record, arrays)}${chainSection(record)}${recordSection(record)}</main>`,
+    view === null ? [] : [VIEW_BUNDLE],
   );
 }

@@ -43,7 +43,8 @@ export function fatesOfRows(
   const wanted = fates.flatMap((fate, i) =>
     others.some((row) => row.fate === fate.fate && row.light === fate.light && row.where === fate.where) ? [i] : [],
   );
-  const reemitted = heat.length === 0 || others.length > 0 ? 'any' : heat.some(({ light }) => light === 'pump') ? 'once' : 'again';
+  const reemitted =
+    heat.length === 0 || others.length > 0 ? 'any' : heat.some(({ light }) => light === 'pump') ? 'once' : 'again';
   return { fates: new Set(wanted), reemitted };
 }
 

@@ -66,5 +66,7 @@ function endInRoom(points: readonly number[], { low, high }: Bounds): readonly n
     return way === 0 || (value - wall) * way <= 0 ? 1 : (wall - from[i]) / way;
   });
   const share = Math.max(0, Math.min(1, ...shares));
-  return share === 1 ? points : [...points.slice(0, n - 3), ...to.map((value, i) => from[i] + share * (value - from[i]))];
+  return share === 1
+    ? points
+    : [...points.slice(0, n - 3), ...to.map((value, i) => from[i] + share * (value - from[i]))];
 }

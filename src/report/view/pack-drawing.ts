@@ -2,11 +2,12 @@ import type { Drawing } from '../../record/drawing.js';
 import { visibleText } from '../markup.js';
 import { shortName } from '../name-text.js';
 import { type Bounds, boundsOf, widened } from './bounds.js';
+import { type KeptPath, keptPaths } from './kept-paths.js';
 import { lightIndex } from './light-index.js';
 import { lightTable } from './light-table.js';
-import { type KeptPath, keptPaths } from './kept-paths.js';
 import type { PackedDrawing, PackedFace } from './packed-drawing.js';
 import { pumpArrow } from './pump-arrow.js';
+import { viewName } from './view-name.js';
 import { type Welded, weld } from './weld.js';
 
 /** What a page of 3 MB has room for beside its maps. */
@@ -14,10 +15,7 @@ const MOST_TRIANGLES = 16_000;
 const MOST_EDGES = 12_000;
 const MOST_POINTS = 36_000;
 const CELLS = 65_535;
-const NAME_LETTERS = 60;
-
-/** A name as both the page's script and its text know it: cut, and with nothing unseen in it. */
-export const viewName = (name: string): string => visibleText(shortName(name, NAME_LETTERS));
+const FATE_LETTERS = 120;
 
 /** A drawing for the 3D view of the page. Coordinates lie on a grid of 65 535 cells; meshes too fine for a page are made coarser. */
 export function packDrawing(drawing: Drawing): PackedDrawing {
@@ -75,7 +73,7 @@ export function packDrawing(drawing: Drawing): PackedDrawing {
     fates: fates.map((fate) => ({
       ...fate,
       where: fate.where === null ? null : viewName(fate.where),
-      words: visibleText(shortName(fate.words, 2 * NAME_LETTERS)),
+      words: visibleText(shortName(fate.words, FATE_LETTERS)),
     })),
     paths: paths.map(({ fate, points, pumpSegments, cutAfter }) => [fate, points.length / 3, pumpSegments, cutAfter]),
     vertices: words16(welded.flatMap(({ vertices }) => vertices)),
@@ -99,7 +97,9 @@ export function partBounds(drawing: Drawing): Bounds {
 /** The box around parts, pumps and planes. */
 function roomOf({ pumps, planes }: Drawing, solid: Bounds | null): Bounds {
   const lists = [...pumps.flatMap(({ at, edges }) => [at, edges]), ...planes.map(({ edges }) => edges)];
-  return boundsOf([...(solid === null ? [] : [solid.low, solid.high]), ...lists]) ?? { low: [0, 0, 0], high: [1, 1, 1] };
+  return (
+    boundsOf([...(solid === null ? [] : [solid.low, solid.high]), ...lists]) ?? { low: [0, 0, 0], high: [1, 1, 1] }
+  );
 }
 
 function weldAll(

@@ -29,7 +29,8 @@ export interface OpenDrawing {
 /** The packed drawing opened again, in mm. */
 export function unpackDrawing(packed: PackedDrawing): OpenDrawing {
   const { low, step } = packed;
-  const millimetres = (cells: Uint16Array): Float32Array => Float32Array.from(cells, (cell, i) => low[i % 3] + step * cell);
+  const millimetres = (cells: Uint16Array): Float32Array =>
+    Float32Array.from(cells, (cell, i) => low[i % 3] + step * cell);
   const vertices = reader(words16(packed.vertices));
   const normals = reader(new Int8Array(bytesOf(packed.normals).buffer));
   const corners = reader(words16(packed.corners));

@@ -20,7 +20,11 @@ export function weld(
   coarse: number,
 ): Welded {
   const known = new Map<string, number>();
-  const welded: { vertices: number[]; normals: number[]; corners: number[] } = { vertices: [], normals: [], corners: [] };
+  const welded: { vertices: number[]; normals: number[]; corners: number[] } = {
+    vertices: [],
+    normals: [],
+    corners: [],
+  };
   const place = (value: number, axis: number) => Math.round(cellOf(value, axis) / coarse) * coarse;
   for (let i = 0; i + 9 <= triangles.length; i += 9) {
     const corners = [0, 3, 6].map((c) => [0, 1, 2].map((axis) => place(triangles[i + c + axis], axis)));

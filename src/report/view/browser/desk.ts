@@ -90,7 +90,13 @@ export class Desk {
       nearer: () => eye.nearer(KEY_NEARER),
       farther: () => eye.nearer(1 / KEY_NEARER),
     };
-    const keys: Readonly<Record<string, string>> = { '0': 'first', '1': 'front', '2': 'left', '3': 'above', '4': 'all' };
+    const keys: Readonly<Record<string, string>> = {
+      '0': 'first',
+      '1': 'front',
+      '2': 'left',
+      '3': 'above',
+      '4': 'all',
+    };
     const act = (name: string | undefined) => {
       if (name === undefined || actions[name] === undefined) return false;
       actions[name]();
@@ -215,7 +221,8 @@ export class Desk {
     const part = this.#drawing.parts.find(({ name }) => name === place);
     if (part === undefined) return '';
     const size = part.high.map((value, i) => Number((value - part.low[i]).toPrecision(4))).join(' × ');
-    const ended = this.#drawing.paths.length > 0 ? `; ${this.#endedAt(place)} of the paths at hand ended in or at it` : '';
+    const ended =
+      this.#drawing.paths.length > 0 ? `; ${this.#endedAt(place)} of the paths at hand ended in or at it` : '';
     return `${part.name}: ${part.medium}${part.dyed ? ', dyed' : ''}, ${size} mm${ended}`;
   }
 

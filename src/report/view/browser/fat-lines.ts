@@ -13,7 +13,10 @@ export interface LineLook {
 }
 
 /** Segments as lines some pixels wide, which plain WebGL lines are not. @param positions 6 numbers a segment */
-export function fatLines(positions: Float32Array, { width, colour, opacity = 1, planes = [] }: LineLook): LineSegments2 {
+export function fatLines(
+  positions: Float32Array,
+  { width, colour, opacity = 1, planes = [] }: LineLook,
+): LineSegments2 {
   const geometry = new LineSegmentsGeometry();
   geometry.setPositions(positions);
   const varied = colour instanceof Float32Array;

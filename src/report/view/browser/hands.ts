@@ -18,7 +18,12 @@ const TURNS: Readonly<Record<string, readonly [number, number]>> = {
  * Mouse, touch and keys turn the eye. One finger turns sideways only, so that a page can still be scrolled; the wheel
  * works while the picture has the focus or Ctrl is held.
  */
-export function handsOn(canvas: HTMLElement, eye: Eye, changed: () => void, chosen: (x: number, y: number) => void): void {
+export function handsOn(
+  canvas: HTMLElement,
+  eye: Eye,
+  changed: () => void,
+  chosen: (x: number, y: number) => void,
+): void {
   const down = new Map<number, { x: number; y: number }>();
   let moved = 0;
 

@@ -1,4 +1,14 @@
-import { BufferGeometry, CanvasTexture, Color, Float32BufferAttribute, Group, type Plane, Points, PointsMaterial, SRGBColorSpace } from 'three';
+import {
+  BufferGeometry,
+  CanvasTexture,
+  Color,
+  Float32BufferAttribute,
+  Group,
+  type Plane,
+  Points,
+  PointsMaterial,
+  SRGBColorSpace,
+} from 'three';
 import { ON_DARK, ON_LIGHT, shade } from '../light-shade.js';
 import type { OpenDrawing, OpenPath } from '../unpack-drawing.js';
 import { empty } from './dispose.js';

@@ -1,4 +1,4 @@
-import { Color, ConeGeometry, Group, Mesh, MeshBasicMaterial, Vector3 } from 'three';
+import { type Color, ConeGeometry, Group, Mesh, MeshBasicMaterial, Vector3 } from 'three';
 import type { OpenDrawing } from '../unpack-drawing.js';
 import { empty } from './dispose.js';
 import { fatLines } from './fat-lines.js';
@@ -30,7 +30,8 @@ export class PumpModels {
       this.group.add(head(neck, end, pump));
     }
     for (const { outline, isExit } of this.#drawing.planes) {
-      if (outline.length > 0) this.group.add(fatLines(outline, { width: isExit ? 2.6 : 1.2, colour: isExit ? output : soft }));
+      if (outline.length > 0)
+        this.group.add(fatLines(outline, { width: isExit ? 2.6 : 1.2, colour: isExit ? output : soft }));
     }
   }
 }

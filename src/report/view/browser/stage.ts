@@ -147,7 +147,9 @@ function pointsOf(outline: Float32Array): readonly (readonly number[])[] {
 /** The exit first, for names that come later give way. */
 function labelsOf({ parts, pumps, planes }: OpenDrawing): readonly Label[] {
   const exits = parts.flatMap(({ faces }) =>
-    faces.filter(({ isExit }) => isExit).map((face) => ({ text: `exit: ${face.name}`, at: middleOf(face.positions), className: 'of-exit' })),
+    faces
+      .filter(({ isExit }) => isExit)
+      .map((face) => ({ text: `exit: ${face.name}`, at: middleOf(face.positions), className: 'of-exit' })),
   );
   return [
     ...exits,
@@ -161,7 +163,11 @@ function labelsOf({ parts, pumps, planes }: OpenDrawing): readonly Label[] {
       at: tail,
       className: 'of-pump',
     })),
-    ...parts.map(({ name, low, high }) => ({ text: name, at: low.map((value, i) => (value + high[i]) / 2), className: 'of-part' })),
+    ...parts.map(({ name, low, high }) => ({
+      text: name,
+      at: low.map((value, i) => (value + high[i]) / 2),
+      className: 'of-part',
+    })),
   ];
 }
 
