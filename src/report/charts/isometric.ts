@@ -14,22 +14,47 @@ import { lightStroke } from './light-stroke.js';
 import { picture, round } from './picture.js';
 import { spreadLabels } from './spread-labels.js';
 
-const WIDTH = 860;
-const HEIGHT = 520;
+export interface IsometricSize {
+  readonly width: number;
+  /** The design is drawn no higher. */
+  readonly height: number;
+  /** Room for names on either side. */
+  readonly side: number;
+  /** Characters of a name. */
+  readonly letters: number;
+  readonly paths: number;
+  /** Characters of markup that paths, and that edges, may take. */
+  readonly pathRoom: number;
+  readonly edgeRoom: number;
+}
+
+export const WIDE_ISOMETRIC: IsometricSize = {
+  width: 860,
+  height: 520,
+  side: 180,
+  letters: 24,
+  paths: 60,
+  pathRoom: 60_000,
+  edgeRoom: 30_000,
+};
+export const NARROW_ISOMETRIC: IsometricSize = {
+  width: 370,
+  height: 300,
+  side: 92,
+  letters: 13,
+  paths: 30,
+  pathRoom: 25_000,
+  edgeRoom: 20_000,
+};
+
 const MARGIN = 30;
-/** Room for names on either side. */
-const SIDE = 170;
-const LETTERS = 22;
 const MOST_LABELS = 14;
-/** Characters of markup that paths and edges may take. */
-const PATH_ROOM = 80_000;
-const EDGE_ROOM = 50_000;
-const MOST_PATHS = 70;
 const MOST_POINTS = 4000;
 const EXIT_COLOUR = 'var(--output)';
 
 /** @param id unique on the page */
-export function isometric(drawing: Drawing, id: string): Markup {
+export function isometric(drawing: Drawing, id: string, look: IsometricSize): Markup {
+  const { width, side, letters } = look;
   const solid = partBounds(drawing);
   const size = solid.high.map((value, i) => value - solid.low[i]);
   const outlook = firstOutlook(size);
@@ -43,28 +68,28 @@ export function isometric(drawing: Drawing, id: string): Markup {
     ]),
   ]) as Bounds;
   const [wide, tall] = [0, 1].map((i) => Math.max(frame.high[i] - frame.low[i], 1e-9));
-  const scale = Math.min((WIDTH - 2 * SIDE) / wide, (HEIGHT - 2 * MARGIN) / tall);
-  const height = Math.max(220, tall * scale + 2 * MARGIN);
+  const scale = Math.min((width - 2 * side) / wide, (look.height - 2 * MARGIN) / tall);
+  const height = Math.max(150, tall * scale + 2 * MARGIN);
   const spot = (at: readonly number[]): Spot => [
-    WIDTH / 2 + scale * (along(at, right) - (frame.low[0] + frame.high[0]) / 2),
+    width / 2 + scale * (along(at, right) - (frame.low[0] + frame.high[0]) / 2),
     height / 2 - scale * (along(at, up) - (frame.low[1] + frame.high[1]) / 2),
   ];
   const faces = drawing.parts.flatMap((part) => part.faces).toSorted((a, b) => depth(a, toward) - depth(b, toward));
   const { paths } = keptPaths(drawing.paths, widened(solid, 0.12), MOST_POINTS);
-  const shown = drawnPaths(paths.slice(0, MOST_PATHS), spot);
-  const labels = spreadLabels(labelsOf(drawing, arrows, spot), { width: WIDTH, height, side: SIDE });
-  const parts = drawing.parts.map(({ name, medium }) => `${shortName(name, LETTERS)} of ${shortName(medium, LETTERS)}`);
+  const shown = drawnPaths(paths.slice(0, look.paths), spot, look.pathRoom);
+  const labels = spreadLabels(labelsOf(drawing, arrows, spot, letters), { width, height, side });
+  const parts = drawing.parts.map(({ name, medium }) => `${shortName(name, letters)} of ${shortName(medium, letters)}`);
   return picture(
     {
       id,
       title: 'The design in space',
       description: `Parallel projection from the front, the right and above. Parts: ${parts.slice(0, MOST_LABELS).join('; ')}. The box around all parts measures ${size.map((one) => significant(one, 4)).join(' by ')} mm along x, y and z. ${drawing.pumps.length} ${drawing.pumps.length === 1 ? 'pump' : 'pumps'}${shown.length > 0 ? `; ${shown.length} paths in the colour of their light, the pump light thin` : ''}.`,
     },
-    WIDTH,
+    width,
     height + 30,
-    markup`<g>${faces.map((face) => tinted(face, spot))}</g><g class="iso-paths">${shown}</g><g class="iso-edges">${edgePaths(faces, spot)}</g>${drawing.planes.map(
+    markup`<g>${faces.map((face) => tinted(face, spot))}</g><g class="iso-paths">${shown}</g><g class="iso-edges">${edgePaths(faces, spot, look.edgeRoom)}</g>${drawing.planes.map(
       ({ edges, isExit }) => markup`<path class="${isExit ? 'iso-exit' : 'iso-plane'}" d="${segments(edges, spot)}"/>`,
-    )}<g class="iso-pumps">${arrows.map(({ tail, tip, pump }) => arrow(spot(tail), spot(tip), segments(pump.edges, spot)))}</g>${labels}${scaleBar(scale, height)}`,
+    )}<g class="iso-pumps">${arrows.map(({ tail, tip, pump }) => arrow(spot(tail), spot(tip), segments(pump.edges, spot)))}</g>${labels}${scaleBar(scale, height, width)}`,
     'isometric',
   );
 }
@@ -86,8 +111,12 @@ function tinted({ triangles, normals, finishKind, isExit }: DrawnFace, spot: (at
   return markup`<path d="${d}" fill="${isExit ? EXIT_COLOUR : colour}" fill-opacity="${round(0.8 * opacity)}"${flat ? null : markup` class="iso-curved"`}/>`;
 }
 
-function edgePaths(faces: readonly DrawnFace[], spot: (at: readonly number[]) => Spot): readonly Markup[] {
-  let room = EDGE_ROOM;
+function edgePaths(
+  faces: readonly DrawnFace[],
+  spot: (at: readonly number[]) => Spot,
+  most: number,
+): readonly Markup[] {
+  let room = most;
   return faces
     .toSorted((a, b) => Number(a.isExit) - Number(b.isExit))
     .map(({ edges, isExit }) => {
@@ -110,8 +139,12 @@ function segments(edges: readonly number[], spot: (at: readonly number[]) => Spo
   return d;
 }
 
-function drawnPaths(paths: readonly KeptPath[], spot: (at: readonly number[]) => Spot): readonly Markup[] {
-  let room = PATH_ROOM;
+function drawnPaths(
+  paths: readonly KeptPath[],
+  spot: (at: readonly number[]) => Spot,
+  most: number,
+): readonly Markup[] {
+  let room = most;
   return paths.flatMap((path) => {
     const drawn = onePath(path, spot);
     room -= drawn.text.length;
@@ -139,7 +172,9 @@ function onePath(
       end++;
     if (end > i) {
       const d = `M${places.slice(i, end + 1).join('L')}`;
-      stretches.push(markup`<path${pump ? markup` class="iso-pump-light"` : null} stroke="${stroke}" d="${d}"/>`);
+      stretches.push(
+        pump ? markup`<path class="iso-pump-light" d="${d}"/>` : markup`<path stroke="${stroke}" d="${d}"/>`,
+      );
     }
     i = end === i ? i + 1 : end === cutAfter ? end + 1 : end;
   }
@@ -163,6 +198,7 @@ function labelsOf(
   { parts, planes }: Drawing,
   arrows: readonly { readonly pump: Drawing['pumps'][number]; readonly tail: readonly number[] }[],
   spot: (at: readonly number[]) => Spot,
+  letters: number,
 ) {
   const middle = (numbers: readonly number[]) => {
     const { low, high } = boundsOf([numbers]) ?? { low: [0, 0, 0], high: [0, 0, 0] };
@@ -176,16 +212,16 @@ function labelsOf(
     ...parts.map(({ name, bounds }) => ({ text: name, at: middle([...bounds[0], ...bounds[1]]) })),
   ]
     .slice(0, MOST_LABELS)
-    .map(({ text, at }) => ({ text: shortName(text, LETTERS + 4), at }));
+    .map(({ text, at }) => ({ text: shortName(text, letters), at }));
 }
 
 /** Lengths are true along the picture. */
-function scaleBar(scale: number, height: number): Markup {
-  const most = 130 / scale;
+function scaleBar(scale: number, height: number, width: number): Markup {
+  const most = (0.15 * width) / scale;
   const power = 10 ** Math.floor(Math.log10(most));
   const length = power * (most >= 5 * power ? 5 : most >= 2 * power ? 2 : 1);
   const y = height + 12;
-  return markup`<path class="iso-scale" d="M${SIDE / 2} ${y - 5}v5h${round1(length * scale)}v-5"/><text class="caption" x="${SIDE / 2}" y="${y + 15}">${significant(length, 3)} mm</text>`;
+  return markup`<path class="iso-scale" d="M20 ${y - 5}v5h${round1(length * scale)}v-5"/><text class="caption" x="20" y="${y + 15}">${significant(length, 3)} mm</text>`;
 }
 
 const round1 = (value: number): number => Math.round(value * 10) / 10 + 0;

@@ -2,6 +2,8 @@ import { type Markup, markup } from '../markup.js';
 import type { Spot } from './hull.js';
 
 const PITCH = 22;
+/** Between a name and the drawing. */
+const GUTTER = 12;
 const AWAY = 8;
 
 export interface SideLabel {
@@ -36,7 +38,7 @@ export function spreadLabels(
       height,
     );
     return sorted.map(({ text, at }, j) => {
-      const x = i === 0 ? side - 30 : width - side + 30;
+      const x = i === 0 ? side - GUTTER : width - side + GUTTER;
       const y = places[j];
       return markup`<path class="iso-leader" d="M${x} ${Math.round(y)}L${Math.round(at[0])} ${Math.round(at[1])}"/><circle class="iso-anchor" cx="${Math.round(at[0])}" cy="${Math.round(at[1])}" r="2.5"/><text class="iso-name" x="${x + (i === 0 ? -5 : 5)}" y="${Math.round(y) + 4}" text-anchor="${i === 0 ? 'end' : 'start'}">${text}</text>`;
     });

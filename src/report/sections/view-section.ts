@@ -1,5 +1,5 @@
 import type { Drawing } from '../../record/drawing.js';
-import { isometric } from '../charts/isometric.js';
+import { isometric, NARROW_ISOMETRIC, WIDE_ISOMETRIC } from '../charts/isometric.js';
 import { GROUP_WORDS, GROUPS, type Group } from '../ledger-words.js';
 import { type Markup, markup } from '../markup.js';
 import { groupedCount, significant } from '../number-format.js';
@@ -12,7 +12,7 @@ export interface ViewOptions {
 }
 
 /** Paths drawn at first. */
-const AT_FIRST = 120;
+const AT_FIRST = 60;
 
 const LOOKS = [
   ['first', 'Start', '0'],
@@ -44,7 +44,7 @@ export function viewSection(
     'z',
   ].map(
     (name) => markup`<path class="axis-${name}"/><text class="letter-${name}" text-anchor="middle">${name}</text>`,
-  )}</svg><div class="view-scale" aria-hidden="true"></div></div><figure class="view-still">${isometric(drawing, 'view-still')}</figure><p class="note view-missing">This browser has no WebGL, so the design cannot be turned; the drawing shows it from one side.</p><img class="view-print" alt="The design in space as last seen on the screen">${looks()}<output class="readout view-readout live-only">Point at a face, or choose one below, for its name.</output>${legend(packed)}${keys()}</div><div class="view-controls live-only">${pathControls(packed)}${placeControls(packed)}${cutControls()}${partControls(packed)}</div></div></section>`;
+  )}</svg><div class="view-scale" aria-hidden="true"></div></div><figure class="view-still"><div class="wide-only">${isometric(drawing, 'view-still-wide', WIDE_ISOMETRIC)}</div><div class="narrow-only">${isometric(drawing, 'view-still-narrow', NARROW_ISOMETRIC)}</div></figure><p class="note view-missing">This browser has no WebGL, so the design cannot be turned; the drawing shows it from one side.</p><img class="view-print" alt="The design in space as last seen on the screen">${looks()}<output class="readout view-readout live-only">Point at a face, or choose one below, for its name.</output>${legend(packed)}${keys()}</div><div class="view-controls live-only">${pathControls(packed)}${placeControls(packed)}${cutControls()}${partControls(packed)}</div></div></section>`;
 }
 
 function lead({ pathsFrom, parts }: Drawing, { paths }: PackedDrawing): Markup {

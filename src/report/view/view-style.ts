@@ -17,7 +17,7 @@ export const VIEW_STYLE = `
 .view-axes{position:absolute;right:6px;bottom:6px;width:80px;height:80px;pointer-events:none;overflow:visible}
 .view-axes path{stroke:var(--soft);stroke-width:1.5;fill:none}
 .view-axes text{fill:var(--soft);font-size:12px}
-.view-scale{position:absolute;left:12px;bottom:10px;border:solid var(--soft);border-width:0 1.5px 1.5px;font-size:12px;line-height:1.5;text-align:center;color:var(--soft);white-space:nowrap;pointer-events:none}
+.view-scale{position:absolute;left:12px;bottom:10px;border:solid var(--soft);border-width:0 1.5px 1.5px;font-size:12px;line-height:1.5;text-align:center;color:var(--soft);white-space:nowrap;pointer-events:none;background:color-mix(in srgb,var(--panel) 82%,transparent)}
 .live .view-looks{display:flex;flex-wrap:wrap;gap:6px;margin-top:8px}
 .view-turns{display:flex;gap:4px;margin-left:auto}
 .view button{font:inherit;font-size:.86rem;color:inherit;background:var(--panel);border:1px solid var(--soft);border-radius:4px;padding:5px 11px;min-height:34px;cursor:pointer}
@@ -37,7 +37,7 @@ export const VIEW_STYLE = `
 .view fieldset:first-child{border-top:0;padding-top:0}
 .view legend{font-weight:600;font-size:.92rem;padding:0;float:left;width:100%}
 .view legend+*{clear:both}
-.view-fates,.view-parts{max-height:260px;overflow:auto;margin:4px 0;padding:2px}
+.view-fates,.view-parts{max-height:340px;overflow:auto;margin:4px 0;padding:2px}
 .view-parts{max-height:190px}
 .view-fates label,.view-parts label,.view-line{display:flex;gap:7px;align-items:baseline;font-size:.86rem;padding:3px 0;line-height:1.3;min-width:0}
 .view-group-line{font-weight:600;align-items:center}
@@ -61,18 +61,20 @@ export const VIEW_STYLE = `
 .iso-curved{stroke:var(--ink);stroke-width:.8}
 .iso-edges .iso-exit,.iso-exit{fill:none;stroke:var(--output);stroke-width:2.6}
 .iso-plane{fill:none;stroke:var(--soft)}
-.iso-paths path{fill:none;stroke-width:1.2}.iso-paths .iso-pump-light{stroke-width:.6}
+.iso-paths path{fill:none;stroke-width:1.2}.iso-paths .iso-pump-light{stroke:var(--pump);stroke-width:.6}
 .iso-paths circle{fill:var(--ink)}
 .iso-pumps path{fill:none;stroke:var(--pump);stroke-width:1.2}
 .iso-pumps .iso-shaft{stroke-width:4;stroke-linecap:butt}.iso-pumps .iso-head,.iso-pumps circle{fill:var(--pump);stroke:none}
 .iso-leader{fill:none;stroke:var(--soft);stroke-width:.8}
+.picture .iso-name,.isometric .caption{paint-order:stroke;stroke:var(--paper);stroke-width:4px;stroke-linejoin:round}
+.narrow-only .isometric{font-size:11.5px}
 .iso-anchor{fill:var(--soft)}
 .iso-scale{fill:none;stroke:var(--soft);stroke-width:1.4}
 .stream[aria-pressed]{cursor:pointer}
 .stream[aria-pressed=true] path{stroke:var(--focus);stroke-width:3.5}
 .to-view{display:block;font-size:.9rem}.to-view[hidden]{display:none}
 @media (max-width:900px){.view-desk{grid-template-columns:minmax(0,1fr)}.view-stage{height:min(60vh,440px)}}
-@media (max-width:640px){.isometric{font-size:22px}.isometric .caption{font-size:20px}.view button{min-height:40px}.view-turns{margin-left:0}.view-fates label,.view-parts label,.view-line{padding:6px 0}}
+@media (max-width:640px){.view button{min-height:40px}.view-turns{margin-left:0}.view-fates label,.view-parts label,.view-line{padding:6px 0}}
 @media print{
 .live .live-only,.view-missing{display:none}
 .live .view-print[src]{display:block;width:100%;border:1px solid var(--line)}

@@ -11,7 +11,10 @@ export interface Label {
 const NICE = [1, 2, 5];
 const BAR_PIXELS = 110;
 const AXIS_PIXELS = 26;
-const GAP = 3;
+const GAP = 4;
+/** Corners that belong to the scale and to the axes. */
+const SCALE: readonly [number, number] = [150, 36];
+const AXES = 84;
 
 /** Names over the picture, a scale, and the directions of the axes. What would cover an earlier name is left out. */
 export class Labels {
@@ -33,18 +36,19 @@ export class Labels {
   }
 
   place(eye: Eye, width: number, height: number, wanted: (label: Label) => boolean): void {
-    const taken: DOMRect[] = [];
+    const taken = [new DOMRect(0, height - SCALE[1], ...SCALE), new DOMRect(width - AXES, height - AXES, AXES, AXES)];
     for (const { label, element } of this.#names) {
       const spot = new Vector3(...label.at).project(eye.camera);
       const [x, y] = [((spot.x + 1) / 2) * width, ((1 - spot.y) / 2) * height];
       element.hidden = !wanted(label);
       if (element.hidden) continue;
       const [w, h] = [element.offsetWidth, element.offsetHeight];
-      const box = new DOMRect(x - w / 2 - GAP, y - h / 2 - GAP, w + 2 * GAP, h + 2 * GAP);
-      element.hidden = !fits(box, width, height) || taken.some((other) => overlap(box, other));
-      if (element.hidden) continue;
+      const seen = x >= 0 && y >= 0 && x <= width && y <= height;
+      const box = seen ? freeBox(x, y, w, h, width, height, taken) : null;
+      element.hidden = box === null;
+      if (box === null) continue;
       taken.push(box);
-      element.style.transform = `translate(${Math.round(x - w / 2)}px,${Math.round(y - h / 2)}px)`;
+      element.style.transform = `translate(${Math.round(box.x)}px,${Math.round(box.y)}px)`;
     }
     this.#showScale(eye);
     this.#showAxes(eye);
@@ -82,8 +86,24 @@ export function find(root: ParentNode, selector: string): HTMLElement {
   return element;
 }
 
-const fits = (box: DOMRect, width: number, height: number): boolean =>
-  box.left >= 0 && box.top >= 0 && box.right <= width && box.bottom <= height;
+/** A place for a name at its spot, or just above or below it, within the picture and off the others; null where there is none. */
+function freeBox(
+  x: number,
+  y: number,
+  w: number,
+  h: number,
+  width: number,
+  height: number,
+  taken: readonly DOMRect[],
+): DOMRect | null {
+  for (const down of [0, -1, 1, -2, 2]) {
+    const left = Math.min(width - w - GAP, Math.max(GAP, x - w / 2));
+    const top = Math.min(height - h - GAP, Math.max(GAP, y - h / 2 + down * (h + GAP)));
+    const box = new DOMRect(left, top, w, h);
+    if (!taken.some((other) => overlap(box, other))) return box;
+  }
+  return null;
+}
 
 const overlap = (a: DOMRect, b: DOMRect): boolean =>
-  a.left < b.right && b.left < a.right && a.top < b.bottom && b.top < a.bottom;
+  a.left < b.right + GAP && b.left < a.right + GAP && a.top < b.bottom && b.top < a.bottom;

@@ -10,7 +10,7 @@ const NEAR = '600px';
 
 function start(view: HTMLElement): Desk | null {
   const canvas = find(view, 'canvas') as HTMLCanvasElement;
-  const context = canvas.getContext('webgl2', { antialias: true, alpha: false, preserveDrawingBuffer: true });
+  const context = canvas.getContext('webgl2', { antialias: true, alpha: false });
   if (context === null) {
     view.classList.add('no-3d');
     return null;

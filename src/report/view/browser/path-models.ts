@@ -45,7 +45,8 @@ export class PathModels {
         // The middle of a long path is not kept: a straight line across the gap would be a lie.
         if (i === path.cutAfter) continue;
         const line = i < path.pumpSegments ? pump : emitted;
-        const light = lights[path.lights[i]];
+        // The colour of a laser line lies outside what screens can show; pump light has its colour on this page.
+        const light = line === pump ? colours.pump : lights[path.lights[i]];
         line.positions.push(...way.subarray(3 * i, 3 * i + 6));
         line.colours.push(light.r, light.g, light.b, light.r, light.g, light.b);
       }

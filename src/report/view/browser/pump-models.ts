@@ -39,7 +39,7 @@ export class PumpModels {
 function head(from: Vector3, to: Vector3, colour: Color): Mesh {
   const way = to.clone().sub(from);
   const length = way.length();
-  const cone = new Mesh(new ConeGeometry(length * 0.36, length, 20), new MeshBasicMaterial({ color: colour }));
+  const cone = new Mesh(new ConeGeometry(length * 0.24, length, 20), new MeshBasicMaterial({ color: colour }));
   cone.position.copy(from).addScaledVector(way, 0.5);
   cone.quaternion.setFromUnitVectors(UP, way.normalize());
   return cone;
