@@ -51,6 +51,7 @@ const MARGIN = 30;
 const MOST_LABELS = 14;
 const MOST_POINTS = 4000;
 const EXIT_COLOUR = 'var(--output)';
+const EXIT_OPACITY = 0.22;
 
 /** @param id unique on the page */
 export function isometric(drawing: Drawing, id: string, look: IsometricSize): Markup {
@@ -108,7 +109,7 @@ function tinted({ triangles, normals, finishKind, isExit }: DrawnFace, spot: (at
   const flat = normals.every((value, i) => Math.abs(value - normals[i % 3]) < 1e-6);
   const d = `M${outline.map(([x, y]) => `${round1(x)} ${round1(y)}`).join('L')}Z`;
   if (outline.length < 3) return markup``;
-  return markup`<path d="${d}" fill="${isExit ? EXIT_COLOUR : colour}" fill-opacity="${round(0.8 * opacity)}"${flat ? null : markup` class="iso-curved"`}/>`;
+  return markup`<path d="${d}" fill="${isExit ? EXIT_COLOUR : colour}" fill-opacity="${isExit ? EXIT_OPACITY : round(0.8 * opacity)}"${flat ? null : markup` class="iso-curved"`}/>`;
 }
 
 function edgePaths(
@@ -208,7 +209,10 @@ function labelsOf(
   return [
     ...exits.map(({ name, triangles }) => ({ text: `exit: ${name}`, at: middle(triangles) })),
     ...planes.map(({ name, isExit, edges }) => ({ text: isExit ? `exit: ${name}` : name, at: middle(edges) })),
-    ...arrows.map(({ pump, tail }) => ({ text: `${pump.name}, ${significant(pump.watts, 3)} W`, at: spot(tail) })),
+    ...arrows.map(({ pump, tail }) => ({
+      text: letters < 20 ? pump.name : `${pump.name}, ${significant(pump.watts, 3)} W`,
+      at: spot(tail),
+    })),
     ...parts.map(({ name, bounds }) => ({ text: name, at: middle([...bounds[0], ...bounds[1]]) })),
   ]
     .slice(0, MOST_LABELS)
@@ -220,7 +224,7 @@ function scaleBar(scale: number, height: number, width: number): Markup {
   const most = (0.15 * width) / scale;
   const power = 10 ** Math.floor(Math.log10(most));
   const length = power * (most >= 5 * power ? 5 : most >= 2 * power ? 2 : 1);
-  const y = height + 12;
+  const y = Math.round(height) + 12;
   return markup`<path class="iso-scale" d="M20 ${y - 5}v5h${round1(length * scale)}v-5"/><text class="caption" x="20" y="${y + 15}">${significant(length, 3)} mm</text>`;
 }
 

@@ -3,9 +3,9 @@
 export type Rgb = readonly [number, number, number];
 
 /** Lines on light paper stay below, on dark paper above; between them they are seen on both. Relative luminance. */
-export const ON_LIGHT: readonly [number, number] = [0, 0.3];
-export const ON_DARK: readonly [number, number] = [0.14, 1];
-export const ON_BOTH: readonly [number, number] = [0.14, 0.3];
+export const ON_LIGHT: readonly [number, number] = [0, 0.27];
+export const ON_DARK: readonly [number, number] = [0.16, 1];
+export const ON_BOTH: readonly [number, number] = [0.16, 0.27];
 
 /** sRGB bytes to sRGB bytes of a luminance within the bounds: darkened by a factor, lightened towards white. */
 export function shade([red, green, blue]: Rgb, [least, most]: readonly [number, number]): Rgb {

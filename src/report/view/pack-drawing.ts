@@ -15,6 +15,8 @@ const MOST_TRIANGLES = 16_000;
 const MOST_EDGES = 12_000;
 const MOST_POINTS = 36_000;
 const CELLS = 65_535;
+/** Cells joined at the first try to make a mesh coarser. */
+const COARSE = 64;
 const FATE_LETTERS = 120;
 
 /** A drawing for the 3D view of the page. Coordinates lie on a grid of 65 535 cells; meshes too fine for a page are made coarser. */
@@ -106,13 +108,14 @@ function weldAll(
   faces: Drawing['parts'][number]['faces'],
   cellOf: (value: number, axis: number) => number,
 ): readonly Welded[] {
-  let coarse = 1;
-  let welded = faces.map(({ triangles, normals }) => weld(triangles, normals, cellOf, coarse));
-  while (welded.reduce((sum, { corners }) => sum + corners.length / 3, 0) > MOST_TRIANGLES && coarse < CELLS / 4) {
-    coarse = coarse === 1 ? 64 : 2 * coarse;
-    welded = faces.map(({ triangles, normals }) => weld(triangles, normals, cellOf, coarse));
+  // Where triangles are too many to begin with, the fine grid need not be tried.
+  let coarse = faces.reduce((sum, { triangles }) => sum + triangles.length / 9, 0) > MOST_TRIANGLES ? COARSE : 1;
+  for (;;) {
+    const welded = faces.map(({ triangles, normals }) => weld(triangles, normals, cellOf, coarse));
+    const count = welded.reduce((sum, { corners }) => sum + corners.length / 3, 0);
+    if (count <= MOST_TRIANGLES || coarse > CELLS / 8) return welded;
+    coarse = Math.max(COARSE, coarse * (count > 4 * MOST_TRIANGLES ? 2 : Math.SQRT2));
   }
-  return welded;
 }
 
 function edgesOf(edges: readonly number[], cellOf: (value: number, axis: number) => number): number[] {

@@ -9,8 +9,11 @@ export interface Welded {
   readonly corners: readonly number[];
 }
 
+/** Cells along an axis. */
+const CELLS = 65_535;
+
 /**
- * @param cellsOf cell of a coordinate along an axis
+ * @param cellOf cell of a coordinate along an axis, 0 to 65 535
  * @param coarse cells joined along each axis: 1 keeps the shape, more makes it coarser with fewer triangles
  */
 export function weld(
@@ -19,30 +22,31 @@ export function weld(
   cellOf: (value: number, axis: number) => number,
   coarse: number,
 ): Welded {
-  const known = new Map<string, number>();
-  const welded: { vertices: number[]; normals: number[]; corners: number[] } = {
-    vertices: [],
-    normals: [],
-    corners: [],
-  };
-  const place = (value: number, axis: number) => Math.round(cellOf(value, axis) / coarse) * coarse;
+  const known = new Map<number | string, number>();
+  const vertices: number[] = [];
+  const directions: number[] = [];
+  const corners: number[] = [];
+  const at = new Float64Array(9);
+  const place = (value: number, axis: number) =>
+    Math.min(CELLS, Math.round(Math.round(cellOf(value, axis) / coarse) * coarse));
+  const spot = (corner: number) => (at[corner] * (CELLS + 1) + at[corner + 1]) * (CELLS + 1) + at[corner + 2];
   for (let i = 0; i + 9 <= triangles.length; i += 9) {
-    const corners = [0, 3, 6].map((c) => [0, 1, 2].map((axis) => place(triangles[i + c + axis], axis)));
-    const [a, b, c] = corners.map(String);
+    for (let k = 0; k < 9; k++) at[k] = place(triangles[i + k], k % 3);
+    const [a, b, c] = [spot(0), spot(3), spot(6)];
     if (a === b || b === c || c === a) continue;
-    corners.forEach((at, corner) => {
-      const n = [0, 1, 2].map((axis) => Math.round(127 * (normals[i + 3 * corner + axis] ?? 0)));
+    for (let corner = 0; corner < 9; corner += 3) {
+      const n = [0, 1, 2].map((axis) => Math.round(127 * (normals[i + corner + axis] ?? 0)));
       // A coarse face has no fine normals either: corners are joined by place alone.
-      const key = coarse === 1 ? `${at},${n}` : String(at);
+      const key = coarse === 1 ? `${spot(corner)},${n}` : spot(corner);
       let index = known.get(key);
       if (index === undefined) {
         index = known.size;
         known.set(key, index);
-        welded.vertices.push(...at);
-        welded.normals.push(...n);
+        vertices.push(at[corner], at[corner + 1], at[corner + 2]);
+        directions.push(...n);
       }
-      welded.corners.push(index);
-    });
+      corners.push(index);
+    }
   }
-  return welded;
+  return { vertices, normals: directions, corners };
 }
