@@ -93,8 +93,25 @@ describe('a drawing packed for the page', () => {
     const share = kept[2] / given[2];
     expect(share).toBeGreaterThan(0);
     expect(share).toBeLessThan(0.05);
+    expect(kept[2]).toBeLessThan(10);
     expect(kept[0]).toBeCloseTo(share * given[0], 2);
     expect(kept[1]).toBeCloseTo(share * given[1], 2);
+  });
+
+  it('keeps a fine grid though a path runs off to the horizon by way of a turn there', () => {
+    const drawing = boxDrawing([20, 8, 8], 8);
+    const paths = drawing.paths.map((path) => ({
+      ...path,
+      points: [...path.points, 3e5, 2e5, 1e5, 3.1e5, 2e5, 1e5],
+      wavelengthsNm: [...path.wavelengthsNm, 500, 500],
+    }));
+    const { step } = packDrawing({ ...drawing, paths });
+    expect(step).toBeLessThan(0.002);
+    const open = opened({ ...drawing, paths });
+    for (const { way, lights, points } of open.paths) {
+      expect(lights.length).toBe(points - 1);
+      expect(Math.max(...way.map(Math.abs))).toBeLessThan(60);
+    }
   });
 
   it('makes a mesh that is too fine coarser, and holds its size', () => {

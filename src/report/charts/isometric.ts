@@ -3,11 +3,11 @@ import type { Drawing, DrawnFace } from '../../record/drawing.js';
 import { type Markup, markup } from '../markup.js';
 import { shortName } from '../name-text.js';
 import { significant } from '../number-format.js';
-import { type Bounds, boundsOf, widened } from '../view/bounds.js';
+import { type Bounds, boundsOf } from '../view/bounds.js';
 import { finishTint } from '../view/finish-tints.js';
 import { type KeptPath, keptPaths } from '../view/kept-paths.js';
 import { along, boxCorners, firstOutlook, outlookAxes } from '../view/outlook.js';
-import { partBounds } from '../view/pack-drawing.js';
+import { partBounds, pathRooms } from '../view/pack-drawing.js';
 import { pumpArrow } from '../view/pump-arrow.js';
 import { hull, type Spot } from './hull.js';
 import { lightStroke } from './light-stroke.js';
@@ -48,6 +48,8 @@ export const NARROW_ISOMETRIC: IsometricSize = {
 };
 
 const MARGIN = 30;
+/** Light that leaves is drawn on for this share of the diagonal of the parts. */
+const AWAY = 0.15;
 const MOST_LABELS = 14;
 const MOST_POINTS = 4000;
 const EXIT_COLOUR = 'var(--output)';
@@ -76,7 +78,7 @@ export function isometric(drawing: Drawing, id: string, look: IsometricSize): Ma
     height / 2 - scale * (along(at, up) - (frame.low[1] + frame.high[1]) / 2),
   ];
   const faces = drawing.parts.flatMap((part) => part.faces).toSorted((a, b) => depth(a, toward) - depth(b, toward));
-  const { paths } = keptPaths(drawing.paths, widened(solid, 0.12), MOST_POINTS);
+  const { paths } = keptPaths(drawing.paths, pathRooms(drawing, AWAY), MOST_POINTS);
   const shown = drawnPaths(paths.slice(0, look.paths), spot, look.pathRoom);
   const labels = spreadLabels(labelsOf(drawing, arrows, spot, letters), { width, height, side });
   const parts = drawing.parts.map(({ name, medium }) => `${shortName(name, letters)} of ${shortName(medium, letters)}`);

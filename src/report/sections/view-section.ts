@@ -11,8 +11,10 @@ export interface ViewOptions {
   readonly heading: string;
 }
 
-/** Paths drawn at first. */
-const AT_FIRST = 60;
+/** Paths drawn at first, fewer where they have many turns: more would be a tangle. */
+const MOST_AT_FIRST = 60;
+const FEWEST_AT_FIRST = 12;
+const TURNS_AT_FIRST = 700;
 
 const LOOKS = [
   ['first', 'Start', '0'],
@@ -92,7 +94,16 @@ function legend({ parts, paths, pumps }: PackedDrawing): Markup {
 function pathControls({ fates, paths }: PackedDrawing): Markup | null {
   if (paths.length === 0) return null;
   const groups = GROUPS.filter((group) => fates.some((fate) => fate.group === group));
-  return markup`<fieldset><legend>Paths by how they ended</legend><p class="note">Tick one or several; with none ticked all are drawn.</p><div class="view-fates">${groups.map((group) => fateGroup(group, fates))}</div><p><button type="button" class="view-all-fates">All fates again</button></p><label class="view-line">At most<input type="range" class="view-most" min="1" max="${paths.length}" value="${Math.min(paths.length, AT_FIRST)}" aria-label="How many paths at most"></label><output class="view-count" aria-live="polite"></output></fieldset>`;
+  return markup`<fieldset><legend>Paths by how they ended</legend><p class="note">Tick one or several; with none ticked all are drawn.</p><div class="view-fates">${groups.map((group) => fateGroup(group, fates))}</div><p><button type="button" class="view-all-fates">All fates again</button></p><label class="view-line">At most<input type="range" class="view-most" min="1" max="${paths.length}" value="${atFirst(paths)}" aria-label="How many paths at most"></label><output class="view-count" aria-live="polite"></output></fieldset>`;
+}
+
+function atFirst(paths: PackedDrawing['paths']): number {
+  let turns = 0;
+  const full = paths.findIndex(([, points]) => {
+    turns += points;
+    return turns > TURNS_AT_FIRST;
+  });
+  return Math.min(paths.length, MOST_AT_FIRST, full < 0 ? MOST_AT_FIRST : Math.max(FEWEST_AT_FIRST, full));
 }
 
 function fateGroup(group: Group, fates: PackedDrawing['fates']): Markup {

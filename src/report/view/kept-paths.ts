@@ -15,11 +15,11 @@ export interface KeptPath {
 
 /**
  * Paths that fit a picture, the fates taking turns from the start, so that the first n are a choice of all of them; ways
- * into the distance end at `room`.
+ * into the distance end at the sides of `rooms`, each of which counts once light has been in it.
  */
 export function keptPaths(
   paths: readonly Path[],
-  room: Bounds,
+  rooms: readonly Bounds[],
   mostPoints: number,
 ): { readonly fates: readonly PackedFate[]; readonly paths: readonly KeptPath[] } {
   const groups = new Map<string, Path[]>();
@@ -36,12 +36,15 @@ export function keptPaths(
   let points = 0;
   for (let round = 0; lists.some((list) => round < list.length); round++) {
     lists.forEach((list, fate) => {
-      const path = list[round];
-      if (path === undefined || points + path.points.length / 3 > mostPoints) return;
+      const given = list[round];
+      if (given === undefined) return;
+      const { wavelengthsNm, pumpSegments, cutAfter } = given;
+      const whole: KeptPath = { fate, points: given.points, wavelengthsNm, pumpSegments, cutAfter };
+      const path = rooms.reduce(endAt, whole);
+      if (points + path.points.length / 3 > mostPoints) return;
       points += path.points.length / 3;
       counts[fate]++;
-      const { wavelengthsNm, pumpSegments, cutAfter } = path;
-      kept.push({ fate, points: endInRoom(path.points, room), wavelengthsNm, pumpSegments, cutAfter });
+      kept.push(path);
     });
   }
   const fates = lists.map(([{ end }], i) => ({
@@ -55,18 +58,30 @@ export function keptPaths(
   return { fates, paths: kept };
 }
 
-/** Shortens the last segment to where it leaves the room. */
-function endInRoom(points: readonly number[], { low, high }: Bounds): readonly number[] {
-  const n = points.length;
-  const from = points.slice(n - 6, n - 3);
-  const to = points.slice(n - 3);
-  const shares = to.map((value, i) => {
-    const way = value - from[i];
-    const wall = way > 0 ? high[i] : low[i];
-    return way === 0 || (value - wall) * way <= 0 ? 1 : (wall - from[i]) / way;
-  });
-  const share = Math.max(0, Math.min(1, ...shares));
-  return share === 1
-    ? points
-    : [...points.slice(0, n - 3), ...to.map((value, i) => from[i] + share * (value - from[i]))];
+/** Light out of a box around everything it can meet never comes back: the path ends at the box's side. */
+function endAt(path: KeptPath, { low, high }: Bounds): KeptPath {
+  const { points, wavelengthsNm, pumpSegments, cutAfter } = path;
+  let met = false;
+  for (let i = 0; i < points.length; i += 3) {
+    const at = points.slice(i, i + 3);
+    const inside = at.every((value, axis) => value >= low[axis] && value <= high[axis]);
+    if (met && !inside) {
+      const from = points.slice(i - 3, i);
+      const shares = at.map((value, axis) => {
+        const wall = value > high[axis] ? high[axis] : low[axis];
+        return value >= low[axis] && value <= high[axis] ? 1 : (wall - from[axis]) / (value - from[axis]);
+      });
+      const share = Math.min(1, ...shares);
+      const segments = i / 3;
+      return {
+        ...path,
+        points: [...points.slice(0, i), ...at.map((value, axis) => from[axis] + share * (value - from[axis]))],
+        wavelengthsNm: wavelengthsNm.slice(0, segments),
+        pumpSegments: Math.min(pumpSegments, segments),
+        cutAfter: cutAfter < segments - 1 ? cutAfter : -1,
+      };
+    }
+    met ||= inside;
+  }
+  return path;
 }

@@ -24,7 +24,7 @@ export function packDrawing(drawing: Drawing): PackedDrawing {
   const solid = partBounds(drawing);
   const arrows = drawing.pumps.map((pump) => pumpArrow(pump, solid));
   const room = roomOf(drawing, solid);
-  const { fates, paths } = keptPaths(drawing.paths, widened(room, ROUND_ABOUT), MOST_POINTS);
+  const { fates, paths } = keptPaths(drawing.paths, pathRooms(drawing, ROUND_ABOUT), MOST_POINTS);
   const all = boundsOf([room.low, room.high, ...paths.map(({ points }) => points)]) ?? room;
   const step = Math.max(...all.high.map((value, i) => value - all.low[i]), Number.MIN_VALUE) / CELLS;
   const cellOf = (value: number, axis: number) => clampCell((value - all.low[axis]) / step);
@@ -88,8 +88,17 @@ export function packDrawing(drawing: Drawing): PackedDrawing {
   };
 }
 
-/** Light that leaves is followed by this share of the diagonal of everything there is. */
-const ROUND_ABOUT = 0.08;
+/** Light that leaves is followed by this share of the diagonal of the parts. */
+const ROUND_ABOUT = 0.35;
+
+/** Where the paths of a picture end at the latest: the room of everything there is, and nearer once they have met the parts. */
+export function pathRooms(drawing: Drawing, share: number): readonly Bounds[] {
+  const solid = partBounds(drawing);
+  const reached = boundsOf([solid.low, solid.high, ...drawing.planes.map(({ edges }) => edges)]) ?? solid;
+  return [widened(roomOf(drawing, solid), ROOM_EDGE), widened(reached, share)];
+}
+
+const ROOM_EDGE = 0.05;
 
 /** The box around all parts; around everything where there is no part. */
 export function partBounds(drawing: Drawing): Bounds {
