@@ -23,6 +23,8 @@ export interface IsometricSize {
   /** Characters of a name. */
   readonly letters: number;
   readonly paths: number;
+  /** Points of all paths together: more would be a tangle. */
+  readonly points: number;
   /** Characters of markup that paths, and that edges, may take. */
   readonly pathRoom: number;
   readonly edgeRoom: number;
@@ -34,15 +36,17 @@ export const WIDE_ISOMETRIC: IsometricSize = {
   side: 180,
   letters: 24,
   paths: 60,
+  points: 500,
   pathRoom: 60_000,
   edgeRoom: 30_000,
 };
 export const NARROW_ISOMETRIC: IsometricSize = {
   width: 370,
   height: 300,
-  side: 92,
-  letters: 13,
+  side: 98,
+  letters: 12,
   paths: 30,
+  points: 220,
   pathRoom: 25_000,
   edgeRoom: 20_000,
 };
@@ -51,7 +55,6 @@ const MARGIN = 30;
 /** Light that leaves is drawn on for this share of the diagonal of the parts. */
 const AWAY = 0.15;
 const MOST_LABELS = 14;
-const MOST_POINTS = 4000;
 const EXIT_COLOUR = 'var(--output)';
 const EXIT_OPACITY = 0.22;
 
@@ -78,7 +81,7 @@ export function isometric(drawing: Drawing, id: string, look: IsometricSize): Ma
     height / 2 - scale * (along(at, up) - (frame.low[1] + frame.high[1]) / 2),
   ];
   const faces = drawing.parts.flatMap((part) => part.faces).toSorted((a, b) => depth(a, toward) - depth(b, toward));
-  const { paths } = keptPaths(drawing.paths, pathRooms(drawing, AWAY), MOST_POINTS);
+  const { paths } = keptPaths(drawing.paths, pathRooms(drawing, AWAY), look.points);
   const shown = drawnPaths(paths.slice(0, look.paths), spot, look.pathRoom);
   const labels = spreadLabels(labelsOf(drawing, arrows, spot, letters), { width, height, side });
   const parts = drawing.parts.map(({ name, medium }) => `${shortName(name, letters)} of ${shortName(medium, letters)}`);

@@ -14,7 +14,7 @@ export interface ViewOptions {
 /** Paths drawn at first, fewer where they have many turns: more would be a tangle. */
 const MOST_AT_FIRST = 60;
 const FEWEST_AT_FIRST = 12;
-const TURNS_AT_FIRST = 700;
+const TURNS_AT_FIRST = 450;
 
 const LOOKS = [
   ['first', 'Start', '0'],
