@@ -44,7 +44,7 @@ export const NARROW_ISOMETRIC: IsometricSize = {
   width: 370,
   height: 300,
   side: 98,
-  letters: 12,
+  letters: 13,
   paths: 30,
   points: 220,
   pathRoom: 25_000,

@@ -67,7 +67,7 @@ export const VIEW_STYLE = `
 .iso-pumps .iso-shaft{stroke-width:4;stroke-linecap:butt}.iso-pumps .iso-head,.iso-pumps circle{fill:var(--pump);stroke:none}
 .iso-leader{fill:none;stroke:var(--soft);stroke-width:.8}
 .picture .iso-name,.isometric .caption{paint-order:stroke;stroke:var(--paper);stroke-width:4px;stroke-linejoin:round}
-.narrow-only .isometric{font-size:11.5px}
+.narrow-only .isometric{font-size:11px}
 .iso-anchor{fill:var(--soft)}
 .iso-scale{fill:none;stroke:var(--soft);stroke-width:1.4}
 .stream[aria-pressed]{cursor:pointer}
