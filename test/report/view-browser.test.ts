@@ -1,5 +1,6 @@
 /** The 3D view in a real browser, over a drawing made by hand. */
-import { mkdtemp, rm, writeFile } from 'node:fs/promises';
+import { mkdtemp, readFile, rm, writeFile } from 'node:fs/promises';
+import { createRequire } from 'node:module';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { pathToFileURL } from 'node:url';
@@ -241,6 +242,15 @@ describe('the view', () => {
     })()`);
     expect(corner).toEqual([255, 255, 255, 255]);
     expect(complaints).toEqual([]);
+  });
+
+  it.each(['light', 'dark'] as const)('passes the accessibility checker, %s', async (colorScheme) => {
+    await page.emulateMedia({ colorScheme });
+    await goToView();
+    await page.evaluate(await readFile(createRequire(import.meta.url).resolve('axe-core/axe.min.js'), 'utf8'));
+    const faults = await page.evaluate(`axe.run('#view').then(({ violations }) =>
+      violations.map(({ id, nodes }) => id + ': ' + nodes.map(({ html }) => html.slice(0, 120)).join(' | ')))`);
+    expect(faults).toEqual([]);
   });
 
   it('fits a phone', async () => {
