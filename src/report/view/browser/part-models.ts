@@ -18,7 +18,7 @@ import type { PageColours } from './page-colours.js';
 const EDGE = 1.1;
 const EXIT_EDGE = 2.6;
 const LIT_EDGE = 3;
-const LIT_OPACITY = 0.55;
+const LIT_OPACITY = 0.38;
 const EXIT_OPACITY = 0.3;
 
 interface FaceModel {
