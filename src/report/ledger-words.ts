@@ -3,13 +3,16 @@ import { fateWords, groupOf } from '../terms/ledger-words.js';
 
 export { fateWords, GROUP_WORDS, GROUPS, type Group, groupOf } from '../terms/ledger-words.js';
 
+/** How light ended: a row of a ledger, or the end of a traced path. */
+export type Ending = Pick<LedgerRow, 'fate' | 'light' | 'where' | 'by'>;
+
 /** A fate with its place; where a dye keeps energy, also of which light. */
-export function placedWords(row: LedgerRow): string {
+export function placedWords(row: Ending): string {
   const words = groupOf(row) === 'heat' ? heatWords(row) : fateWords(row);
   return row.where === null ? words : `${words}, ${row.where}`;
 }
 
-function heatWords({ fate, light, by }: LedgerRow): string {
+function heatWords({ fate, light, by }: Ending): string {
   const of = light === 'pump' ? 'pump light' : 'light taken back';
   const dye = by ?? 'the dye';
   return fate === 'stokes-heat' ? `Stokes heat of ${of} in ${dye}` : `${of} not re-emitted by ${dye}`;

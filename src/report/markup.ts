@@ -46,10 +46,12 @@ const UNSEEN = /(?![\t\n])[\p{Cc}\p{Cf}\p{Cs}\p{Zl}\p{Zp}\uFFFE\uFFFF]/gu;
 
 /** Fit for element content and quoted attributes. What cannot be seen, or would reorder its neighbours, shows as its code point. */
 export function escapeText(text: string): string {
-  return text
-    .replace(/\r\n/g, '\n')
-    .replace(UNSEEN, codePoint)
-    .replace(/[&<>"']/g, (c) => ENTITIES[c] ?? c);
+  return visibleText(text).replace(/[&<>"']/g, (c) => ENTITIES[c] ?? c);
+}
+
+/** Plain text in which what cannot be seen shows as its code point. */
+export function visibleText(text: string): string {
+  return text.replace(/\r\n/g, '\n').replace(UNSEEN, codePoint);
 }
 
 function codePoint(character: string): string {

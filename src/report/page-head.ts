@@ -5,6 +5,7 @@ import { groupedCount } from './number-format.js';
 
 const PLACES = [
   ['where', 'Where it goes'],
+  ['view', 'In space'],
   ['even', 'How even'],
   ['light', 'Colour and direction'],
   ['chain', 'Wall to lumens'],
@@ -13,8 +14,8 @@ const PLACES = [
 ] as const;
 
 /** Title, what was traced, and the way to each section. */
-export function pageHead({ design, run, tool }: RunRecord): Markup {
-  return markup`<a class="skip" href="#answers">To the answers</a><header><h1>${nameText(design.title, 120)}</h1><p>${groupedCount(run.histories)} histories, seed <bdi>${shortName(run.seed, 40)}</bdi>, traced ${run.startedAt.slice(0, 10)} by ${tool.name} ${shortName(tool.version, 30)}</p><nav aria-label="Sections">${PLACES.map(
-    ([id, words]) => markup`<a href="#${id}">${words}</a>`,
-  )}</nav></header>`;
+export function pageHead({ design, run, tool }: RunRecord, hasView: boolean): Markup {
+  return markup`<a class="skip" href="#answers">To the answers</a><header><h1>${nameText(design.title, 120)}</h1><p>${groupedCount(run.histories)} histories, seed <bdi>${shortName(run.seed, 40)}</bdi>, traced ${run.startedAt.slice(0, 10)} by ${tool.name} ${shortName(tool.version, 30)}</p><nav aria-label="Sections">${PLACES.filter(
+    ([id]) => hasView || id !== 'view',
+  ).map(([id, words]) => markup`<a href="#${id}">${words}</a>`)}</nav></header>`;
 }

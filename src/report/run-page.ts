@@ -12,7 +12,9 @@ import { lightSection } from './sections/light-section.js';
 import { mapsSection } from './sections/maps-section.js';
 import { recordSection } from './sections/record-section.js';
 import { termsSection } from './sections/terms-section.js';
+import { viewSection } from './sections/view-section.js';
 import { shownMaps } from './shown-map.js';
+import { VIEW_BUNDLE } from './view/view-bundle.js';
 
 /** File name of the page in the folder of its run. */
 export const REPORT_HTML = 'report.html';
@@ -23,6 +25,11 @@ export const REPORT_HTML = 'report.html';
  */
 export function runPage(record: RunRecord, arrays: RunArrays): string {
   const maps = shownMaps(record, arrays);
-  const sections = markup`${answers(record, maps)}${checksSection(record)}${flowSection(record)}${mapsSection(record, maps)}${lightSection(record, arrays)}${chainSection(record)}${recordSection(record)}`;
-  return pageShell(record.design.title, markup`${pageHead(record)}<main>${sections}${termsSection(sections)}</main>`);
+  const view = viewSection(arrays.drawing);
+  const sections = markup`${answers(record, maps)}${checksSection(record)}${flowSection(record)}${view}${mapsSection(record, maps)}${lightSection(record, arrays)}${chainSection(record)}${recordSection(record)}`;
+  return pageShell(
+    record.design.title,
+    markup`${pageHead(record, view !== null)}<main>${sections}${termsSection(sections)}</main>`,
+    view === null ? [] : [VIEW_BUNDLE],
+  );
 }

@@ -13,14 +13,14 @@ export const GROUP_WORDS: Readonly<Record<Group, string>> = {
 };
 
 /** What is wanted, what was lost before and after the dye, and what the dye itself keeps. */
-export function groupOf({ fate, light }: LedgerRow): Group {
+export function groupOf({ fate, light }: Pick<LedgerRow, 'fate' | 'light'>): Group {
   if (fate === 'stokes-heat' || fate === 'lost-in-dye') return 'heat';
   if (light === 'pump') return 'pump-lost';
   return fate === 'left-by-exit' ? 'output' : 'light-lost';
 }
 
 /** A fate in plain words, without its place. */
-export function fateWords({ fate, light, by }: LedgerRow): string {
+export function fateWords({ fate, light, by }: Pick<LedgerRow, 'fate' | 'light' | 'by'>): string {
   switch (fate) {
     case 'missed':
       return 'missed every part';

@@ -14,9 +14,9 @@ const QUIET = [
 ];
 
 /** The chromium of the machine, found on the path. */
-export function openBrowser(): Promise<Browser> {
+export function openBrowser(more: readonly string[] = []): Promise<Browser> {
   const places = (process.env.PATH ?? '').split(delimiter).map((folder) => join(folder, 'chromium'));
   const executablePath = places.find((place) => existsSync(place));
   if (executablePath === undefined) throw new Error('these tests need chromium: apt-get install chromium');
-  return chromium.launch({ executablePath, args: QUIET });
+  return chromium.launch({ executablePath, args: [...QUIET, ...more] });
 }

@@ -4,6 +4,7 @@ import { GROUP_WORDS, type Group, groupOf, totalOf } from '../ledger-words.js';
 import { type Markup, markup } from '../markup.js';
 import { shortName } from '../name-text.js';
 import { formatWithError, significant } from '../number-format.js';
+import { viewName } from '../view/view-name.js';
 import { type Stream, streamsOf } from './flow-rows.js';
 import { type Picture, picture, round } from './picture.js';
 
@@ -22,6 +23,8 @@ export const NARROW_FLOW: FlowSize = { width: 370, trunk: 84, pitch: 36, letters
 
 const TOP = 34;
 const RADIUS = 9;
+/** Rows of small streams together that the view is told of. */
+const MOST_ROWS = 200;
 const HEADING = 30;
 /** Room for the head of the output's arrow. */
 const ARROW = 50;
@@ -127,7 +130,14 @@ function arrow({ stream, left, right, y }: Band, from: number, size: FlowSize, w
 
 function part(group: Group, stream: Stream, watts: number, contents: Markup): Markup {
   const words = `${spelt(stream, watts)}: ${shortName(stream.words, 120)}`;
-  return markup`<g class="stream flow-${group}" tabindex="0" role="img" aria-label="${words}" data-words="${words}"><title>${words}</title>${contents}</g>`;
+  return markup`<g class="stream flow-${group}" tabindex="0" role="img" aria-label="${words}" data-words="${words}" data-rows="${rowsText(stream)}"><title>${words}</title>${contents}</g>`;
+}
+
+/** Rows of a stream for the page's script: [fate, light, where]. */
+function rowsText({ rows }: Stream): string {
+  return JSON.stringify(
+    rows.slice(0, MOST_ROWS).map(({ fate, light, where }) => [fate, light, where === null ? null : viewName(where)]),
+  );
 }
 
 function label({ words, fraction }: Stream, x: number, middle: number, size: FlowSize, watts: number): Markup {

@@ -4,6 +4,8 @@ import { type Group, groupOf, placedWords, totalOf } from '../ledger-words.js';
 /** A stream of the flow picture: one row of the ledger, or several small ones together. */
 export interface Stream {
   readonly words: string;
+  /** Rows of the ledger that flow in it. */
+  readonly rows: readonly LedgerRow[];
   readonly fraction: number;
   /** null where several rows flow together, or none is known. */
   readonly standardError: number | null;
@@ -25,13 +27,20 @@ export function streamsOf(rows: readonly LedgerRow[], group: Group): readonly St
   const small = mine.slice(shown.length);
   const streams = shown.map((row) => ({
     words: placedWords(row),
+    rows: [row],
     fraction: row.fraction,
     standardError: row.standardError,
   }));
   if (small.length === 0) return streams;
   if (small.length === 1) {
     const [row] = small;
-    return [...streams, { words: placedWords(row), fraction: row.fraction, standardError: row.standardError }];
+    return [
+      ...streams,
+      { words: placedWords(row), rows: small, fraction: row.fraction, standardError: row.standardError },
+    ];
   }
-  return [...streams, { words: `${small.length} smaller ones`, fraction: totalOf(small), standardError: null }];
+  return [
+    ...streams,
+    { words: `${small.length} smaller ones`, rows: small, fraction: totalOf(small), standardError: null },
+  ];
 }

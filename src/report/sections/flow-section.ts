@@ -13,7 +13,7 @@ const LOSSES_LISTED = 5;
 /** Where the light goes: the picture, the costliest losses, both ledgers. */
 export function flowSection(record: RunRecord): Markup {
   const losses = largestLosses(record.ledger.watts).slice(0, LOSSES_LISTED);
-  return markup`<section id="where"><h2>Where the light goes</h2><p class="lead">To scale, from the pump watts above to every fate. A photon may go round many times; each is counted where it ends, and every re-emission leaves its Stokes heat on the way.</p><div class="where"><div><figure class="wide-only">${flowPicture(record, 'flow-wide', WIDE_FLOW)}</figure><figure class="narrow-only">${flowPicture(record, 'flow-narrow', NARROW_FLOW)}</figure><output class="readout needs-script" id="flow-readout">Point at a stream, or step through them with the tab key, for its number and ±.</output>${legend(record)}</div>${
+  return markup`<section id="where"><h2>Where the light goes</h2><p class="lead">To scale, from the pump watts above to every fate. A photon may go round many times; each is counted where it ends, and every re-emission leaves its Stokes heat on the way.</p><div class="where"><div><figure class="wide-only">${flowPicture(record, 'flow-wide', WIDE_FLOW)}</figure><figure class="narrow-only">${flowPicture(record, 'flow-narrow', NARROW_FLOW)}</figure><output class="readout needs-script" id="flow-readout">Point at a stream, or step through them with the tab key, for its number and ±.</output><a class="to-view" href="#view" hidden>See these paths and faces in the view</a>${legend(record)}</div>${
     losses.length === 0
       ? null
       : markup`<div><h3>What could be won back${termMark('win-back')}</h3><ol class="losses">${losses.map(
