@@ -1,8 +1,7 @@
 /** Description -> drawing: the design in space, before any tracing. */
 import type { Description, Vector3 } from '../design/description.js';
 import { DesignFaults } from '../design/design-faults.js';
-import { toDecimals } from '../numerics/decimals.js';
-import type { Coordinates, Drawing, DrawnPlane } from '../record/drawing.js';
+import type { Drawing, DrawnPlane } from '../record/drawing.js';
 import { designSize } from '../scene/compile-solids.js';
 import { placeParts } from '../scene/place-parts.js';
 import { frameAbout, normalise, snapDirection } from '../scene/vector.js';
@@ -10,8 +9,6 @@ import { carvePart, facetPieces, outsidePart } from './carve-part.js';
 import { drawPart } from './draw-part.js';
 import { drawPumps, outlineEdges } from './draw-pumps.js';
 
-/** Coordinates, mm, and components of unit vectors are kept to this many decimals. */
-export const DRAWING_DECIMALS = 4;
 /** Facets this share of the design's size off a plane lie in it. */
 const RELATIVE_TOLERANCE = 1e-9;
 
@@ -20,11 +17,6 @@ const RELATIVE_TOLERANCE = 1e-9;
  * @throws DesignFaults when parts cannot be placed. The faces that pumps and exit name must exist (checked before).
  */
 export function drawDescription(description: Description): Drawing {
-  return roundDrawing(drawExactly(description));
-}
-
-/** The same before rounding. */
-export function drawExactly(description: Description): Drawing {
   const { parts, faults } = placeParts(description.parts);
   if (faults.length > 0) throw new DesignFaults(faults);
   const tolerance = RELATIVE_TOLERANCE * designSize(parts);
@@ -61,28 +53,4 @@ function drawPlanes({ detectors, exit }: Description): DrawnPlane[] {
     const edges = outlineEdges(target.outline, { origin: target.at, ...frameAbout(normal) });
     return [{ name, isExit: name === exit.name, normal, edges }];
   });
-}
-
-function roundDrawing(drawing: Drawing): Drawing {
-  const short = (values: Coordinates): number[] => values.map((value) => toDecimals(value, DRAWING_DECIMALS));
-  return {
-    ...drawing,
-    parts: drawing.parts.map((part) => ({
-      ...part,
-      faces: part.faces.map((face) => ({
-        ...face,
-        triangles: short(face.triangles),
-        normals: short(face.normals),
-        edges: short(face.edges),
-      })),
-      bounds: [short(part.bounds[0]), short(part.bounds[1])],
-    })),
-    pumps: drawing.pumps.map((pump) => ({
-      ...pump,
-      at: short(pump.at),
-      direction: short(pump.direction),
-      edges: short(pump.edges),
-    })),
-    planes: drawing.planes.map((plane) => ({ ...plane, normal: short(plane.normal), edges: short(plane.edges) })),
-  };
 }

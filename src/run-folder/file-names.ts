@@ -5,6 +5,7 @@ import { uniqueSlugs } from './slug.js';
 export const RUN_JSON = 'run.json';
 export const SPECTRA_CSV = 'spectra.csv';
 export const LEDGER_CSV = 'ledger.csv';
+export const DRAWING_JSON = 'drawing.json';
 
 /** The record with the names of the files its folder holds filled in. */
 export function nameFiles(record: RunRecord): RunRecord {

@@ -1,18 +1,20 @@
-/** Reads the arrays of a run back from the tables beside its run.json. */
+/** Reads the arrays of a run back from the files beside its run.json. */
 import { join } from 'node:path';
 import type { AnglesArray, MapArray, RunArrays, SpectraArray } from '../record/run-arrays.js';
 import type { RunRecord } from '../record/run-record.js';
 import { columnOf, readNumberTable, unreadable } from './read-csv.js';
+import { readDrawing } from './read-drawing.js';
 
 type MapRecord = RunRecord['maps'][number];
 
-/** @param record as read from the folder's run.json. @throws RunFolderError when a table is missing, damaged or of another run */
+/** @param record as read from the folder's run.json. @throws RunFolderError when a table is missing, damaged or of another run, or the drawing is damaged */
 export async function readArrays(folder: string, record: RunRecord): Promise<RunArrays> {
   const maps: MapArray[] = [];
   for (const map of record.maps) maps.push(await readMap(folder, map));
   const angles: AnglesArray[] = [];
   for (const one of record.angles) angles.push(await readAngles(folder, one));
-  return { maps, spectra: await readSpectra(folder, record.spectra), angles, drawing: null };
+  const spectra = await readSpectra(folder, record.spectra);
+  return { maps, spectra, angles, drawing: await readDrawing(folder) };
 }
 
 async function readMap(folder: string, { id, shape, extentMm, axes, unit, files }: MapRecord): Promise<MapArray> {

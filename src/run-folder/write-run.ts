@@ -4,9 +4,18 @@ import { dirname, join, resolve } from 'node:path';
 import type { RunArrays } from '../record/run-arrays.js';
 import type { RunRecord } from '../record/run-record.js';
 import { type Disk, disk } from './disk.js';
+import { drawingJson } from './drawing-json.js';
 import { anglesCsv, ledgerCsv, mapCsv, spectraCsv } from './encode-csv.js';
 import { encodeNpy } from './encode-npy.js';
-import { anglesFileNames, LEDGER_CSV, mapFileNames, nameFiles, RUN_JSON, SPECTRA_CSV } from './file-names.js';
+import {
+  anglesFileNames,
+  DRAWING_JSON,
+  LEDGER_CSV,
+  mapFileNames,
+  nameFiles,
+  RUN_JSON,
+  SPECTRA_CSV,
+} from './file-names.js';
 import { fileSystemReason, isFileSystemError, RunFolderError } from './run-folder-error.js';
 import { runJson } from './run-json.js';
 
@@ -14,7 +23,7 @@ import { runJson } from './run-json.js';
 export type ExtraFile = readonly [name: string, make: (record: RunRecord, arrays: RunArrays) => string | Uint8Array];
 
 /**
- * Writes run.json, the ledgers, spectra, maps and angles into `folder`, which must not exist or be empty. Everything goes into a temporary
+ * Writes run.json, the ledgers, spectra, maps, angles and the drawing into `folder`, which must not exist or be empty. Everything goes into a temporary
  * folder beside it first, which then takes its name in one step; on a failure it is taken away again.
  * @param extras files of the caller's, made of the record as written
  * @returns names of the files written
@@ -67,6 +76,7 @@ function* runFiles(
   }
   const angleNames = anglesFileNames(arrays.angles.map(({ id }) => id));
   for (const [i, angles] of arrays.angles.entries()) yield [angleNames[i], anglesCsv(angles)];
+  if (arrays.drawing !== null) yield [DRAWING_JSON, drawingJson(arrays.drawing)];
   for (const [name, make] of extras) yield [name, make(record, arrays)];
 }
 

@@ -2,7 +2,7 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import type { PartDescription, ShapeDescription, Turn } from '../../src/design/description.js';
-import { drawDescription, drawExactly } from '../../src/drawing/draw-description.js';
+import { drawDescription } from '../../src/drawing/draw-description.js';
 import { FACETS_ROUND } from '../../src/drawing/facet-patch.js';
 import type { DrawnPart } from '../../src/record/drawing.js';
 import { patchArea } from '../../src/scene/face-patch.js';
@@ -13,7 +13,7 @@ import { areaVector, faceArea, trianglesOf, vectorAreaOf, volumeOf } from './mea
 
 const designOf = (...parts: PartDescription[]) =>
   describeDesign({ media: [medium('glass', 1.5)], parts, pumps: [beam([0, 0, -50], [0, 0, 1])], exit: 'a.top' });
-const drawn = (...parts: PartDescription[]): readonly DrawnPart[] => drawExactly(designOf(...parts)).parts;
+const drawn = (...parts: PartDescription[]): readonly DrawnPart[] => drawDescription(designOf(...parts)).parts;
 const turns: Turn[] = [
   { axis: 'x', angle: 0.4 },
   { axis: 'z', angle: -1.1 },
@@ -83,7 +83,7 @@ describe('a drawn solid', () => {
         // A corner's normal leans from its facet's by no more than half a facet round and half a belt.
         expect(Math.min(...slants.map(({ lean }) => lean))).toBeGreaterThan(Math.cos((1.6 * Math.PI) / FACETS_ROUND));
       }),
-      { numRuns: 60 },
+      { numRuns: 40 },
     );
   });
 
@@ -108,7 +108,7 @@ describe('a drawn solid', () => {
           expect(share).toBeGreaterThan(0.99);
         });
       }),
-      { numRuns: 60 },
+      { numRuns: 40 },
     );
   });
 
@@ -135,11 +135,5 @@ describe('a drawn solid', () => {
       expect(tube.bounds[0][i]).toBeCloseTo(c - half[i], 9);
       expect(tube.bounds[1][i]).toBeCloseTo(c + half[i], 9);
     });
-  });
-
-  it('is kept to 1e-4 mm, and rounding again changes nothing', () => {
-    const { parts } = drawDescription(designOf(part('a', { kind: 'sphere', radius: 1 / 3 }, 'glass', { turns })));
-    const values = parts[0].faces.flatMap(({ triangles, normals }) => [...triangles, ...normals]);
-    expect(values.filter((value) => !Object.is(value, Math.round(value * 1e4) / 1e4 + 0))).toEqual([]);
   });
 });
