@@ -1,14 +1,14 @@
-import { createHash } from 'node:crypto';
 import { availableParallelism } from 'node:os';
-import type { LocatedFault } from '../../design/fault.js';
 import type { SoundDesign } from '../../design/read-design.js';
 import type { RunArrays } from '../../record/run-arrays.js';
 import type { RunRecord } from '../../record/run-record.js';
 import { RunFolderError } from '../../run-folder/run-folder-error.js';
 import type { TraceResult } from '../../trace/trace-result.js';
 import { CommandFault } from '../command-fault.js';
+import { designFault } from '../design-fault.js';
+import { designMark } from '../design-mark.js';
 import { EXIT, type ExitCode } from '../exit-codes.js';
-import { countFaults, faultLines } from '../fault-lines.js';
+import { faultLines } from '../fault-lines.js';
 import { listenForInterrupt } from '../interrupt.js';
 import { showLedger } from '../ledger/show-ledger.js';
 import { checkOutputFolder, RESULTS } from '../output-folder.js';
@@ -68,18 +68,13 @@ export async function traceCommand(file: string, options: TraceCommandOptions): 
   }
 }
 
-/** The text and the dials as used: runs of one file with other dials are not alike. */
-function designMark({ design: { hash, dials } }: RunRecord): string {
-  return createHash('sha256').update(hash).update(JSON.stringify(dials)).digest('hex');
-}
-
 /** Writes the run and gives back its folder. */
 async function keep(record: RunRecord, arrays: RunArrays, out: string | undefined): Promise<string> {
   const { runFolderPath } = await import('../../run-folder/run-folder-path.js');
   const { writeRun } = await import('../../run-folder/write-run.js');
   const { REPORT_HTML, runPage } = await import('../../report/run-page.js');
   const folder =
-    out ?? (await runFolderPath(RESULTS, record.design.title, { hash: designMark(record), ...record.run }));
+    out ?? (await runFolderPath(RESULTS, record.design.title, { hash: designMark(record.design), ...record.run }));
   await writeRun(folder, record, arrays, undefined, [[REPORT_HTML, runPage]]);
   return folder;
 }
@@ -119,9 +114,4 @@ async function traceReading(
   } finally {
     line.clear();
   }
-}
-
-/** All faults of a design as the sentences that end the command. */
-function designFault(faults: readonly LocatedFault[]): CommandFault {
-  return new CommandFault(EXIT.fault, [...faults.flatMap(faultLines), countFaults(faults)].join('\n'));
 }

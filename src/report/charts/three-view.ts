@@ -4,7 +4,7 @@ import { type Markup, markup, trusted } from '../markup.js';
 import { shortName } from '../name-text.js';
 import { dimensionLine } from '../three-view/dimension-lines.js';
 import { exitMark, planeLines } from '../three-view/exit-mark.js';
-import { faceAnchor } from '../three-view/face-anchors.js';
+import { faceAnchors } from '../three-view/face-anchors.js';
 import { faceLabels, type Labelled, type SheetAnchor } from '../three-view/face-labels.js';
 import { linePath } from '../three-view/line-paths.js';
 import { type Occluder, occludersOf } from '../three-view/occluders.js';
@@ -38,7 +38,7 @@ export function threeView(drawing: Drawing, about: SheetAbout, id: string): Mark
 
 function drawView(drawing: Drawing, place: ViewPlace, lines: ViewLines, { views }: SheetLayout): Markup {
   // The titles of views side by side stand level.
-  const title = Math.min(...views.filter(({ bottom }) => bottom === place.bottom).map(({ top }) => top)) - 42;
+  const title = Math.min(...views.filter(({ bottom }) => bottom === place.bottom).map(({ top }) => top)) - 47;
   return markup`<g class="view"><text class="view-title" x="${round(place.left)}" y="${round(title)}">${place.view.title}</text>${drawing.parts
     .filter(({ dyed }) => dyed)
     .map((part) =>
@@ -88,8 +88,8 @@ function labelled(
   const faces = parts.flatMap((part) => part.faces).filter(({ triangles }) => triangles.length > 0);
   const ofFaces = faces.map((face, i): Labelled => {
     const anchors = views.flatMap(({ place, occluders }): SheetAnchor[] => {
-      const anchor = faceAnchor(face, place.view, occluders, slack, i);
-      return anchor === null ? [] : [{ ...anchor, place, point: place.place(anchor.point) }];
+      const anchors = faceAnchors(face, place.view, occluders, slack, i);
+      return anchors.map((anchor) => ({ ...anchor, place, point: place.place(anchor.point) }));
     });
     return { name: face.name, isExit: face.isExit, plain: face.finish === 'clear', anchors };
   });
@@ -97,7 +97,7 @@ function labelled(
     const anchors = views.map(({ place }): SheetAnchor => {
       const [a, u] = seen(place.view, edges);
       const facing = Math.abs(seen(place.view, normal)[2]);
-      return { place, point: place.place([a, u]), within: false, merit: facing > 0.9 ? 0.6 : 1.6 };
+      return { place, point: place.place([a, u]), within: false, merit: facing > 0.9 ? 0.6 : 1.6, lean: 1 };
     });
     return { name, isExit, plain: false, anchors: edges.length === 0 ? [] : anchors };
   });

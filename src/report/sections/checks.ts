@@ -5,7 +5,7 @@ import { shortName } from '../name-text.js';
 const LONGEST = 400;
 
 /** What the tool would warn a colleague about. */
-export function checksSection({ checks }: RunRecord): Markup | null {
+export function checksSection({ checks }: Pick<RunRecord, 'checks'>): Markup | null {
   if (checks.length === 0) return null;
   return markup`<section id="checks"><h2>Checks</h2><ul class="checks">${checks.map(
     ({ severity, path, problem, found, expected, suggestion }) =>

@@ -1,4 +1,4 @@
-/** Where a leader line may meet a face in a view. */
+/** Where leader lines may meet a face in a view. */
 import type { DrawnFace } from '../../record/drawing.js';
 import { isSeen, type Occluder } from './occluders.js';
 import { type FlatPoint, type Seen, seen, type View } from './view.js';
@@ -9,6 +9,8 @@ export interface Anchor {
   readonly within: boolean;
   /** The better seen, the greater; above 0. */
   readonly merit: number;
+  /** Which way up on the sheet, −1 to 1, the face looks: a leader to an edge that lies should come from there. */
+  readonly lean: number;
 }
 
 /** Places within the box of a face that are tried, the middle last: pumps that look at the face are marked there. */
@@ -21,31 +23,45 @@ const PLACES: readonly FlatPoint[] = [
   [0, 0],
 ];
 
-/** @param slack mm that count as nothing; @param turn where to begin trying, so that faces one over another differ. null for a face that is cut away */
-export function faceAnchor(
+/** Shares of the way along a face seen edge-on. */
+const ALONG = [0.15, 0.85, 0.3, 0.7, 0.22, 0.78];
+
+/**
+ * None for a face that is cut away.
+ * @param slack mm that count as nothing
+ * @param turn where to begin trying, so that faces one over another differ
+ */
+export function faceAnchors(
   face: DrawnFace,
   view: View,
   occluders: readonly Occluder[],
   slack: number,
   turn: number,
-): Anchor | null {
+): Anchor[] {
   const triangles = Array.from({ length: face.triangles.length / 9 }, (_, i) => {
     const corners = [0, 3, 6].map((k) => seen(view, face.triangles, 9 * i + k));
     const facing = [0, 3, 6].reduce((sum, k) => sum + seen(view, face.normals, 9 * i + k)[2] / 3, 0);
     return { corners, facing };
   });
-  if (triangles.length === 0) return null;
+  if (triangles.length === 0) return [];
   const toward = triangles.filter(({ facing }) => facing > 0.25);
   const onFace = toward.length > 0 ? within(toward, occluders, slack, turn) : null;
-  if (onFace !== null) return onFace;
+  if (onFace !== null) return [onFace];
   const all = triangles.flatMap(({ corners }) => corners);
   const [low, high] = boxOf(all);
-  const middle: FlatPoint = [(low[0] + high[0]) / 2, (low[1] + high[1]) / 2];
+  const between = (share: number, axis: 0 | 1) => low[axis] + share * (high[axis] - low[axis]);
   const flat = triangles.every(({ facing }) => Math.abs(facing) < 0.02);
-  if (!flat) return { point: middle, within: true, merit: 0.15 };
+  if (!flat) return [{ point: [between(0.5, 0), between(0.5, 1)], within: true, merit: 0.15, lean: 0 }];
+  const [normalAcross, normalUp] = seen(view, face.normals);
+  // Seen edge-on the face is a line from one corner of its box to another.
+  const falls = normalAcross * normalUp > 0;
   const near = Math.max(...all.map((corner) => corner[2]));
-  const shown = isSeen([...middle, near], occluders, slack);
-  return { point: middle, within: false, merit: shown ? 1.5 : 0.4 };
+  return [0, 1].map((k) => {
+    const share = ALONG[(turn * 2 + k) % ALONG.length];
+    const point: FlatPoint = [between(share, 0), between(falls ? 1 - share : share, 1)];
+    const shown = isSeen([...point, near], occluders, slack);
+    return { point, within: false, merit: shown ? 1.5 : 0.4, lean: normalUp };
+  });
 }
 
 function within(
@@ -69,7 +85,7 @@ function within(
     const under = triangles.find(({ corners }) => holds(corners, point));
     if (under === undefined) continue;
     const near = nearAt(under.corners, point);
-    if (isSeen([...point, near], occluders, slack)) return { point, within: true, merit: 1 + under.facing };
+    if (isSeen([...point, near], occluders, slack)) return { point, within: true, merit: 1 + under.facing, lean: 0 };
   }
   return null;
 }

@@ -20,6 +20,7 @@ export interface SheetAnchor {
   readonly point: FlatPoint;
   readonly within: boolean;
   readonly merit: number;
+  readonly lean: number;
 }
 
 export interface FaceLabels {
@@ -68,11 +69,12 @@ function worthOf({ place, point, merit }: SheetAnchor, { side, rows }: LabelColu
 
 /** Rows in the order of what they point at, apart enough, then exchanged where their lines cross. */
 function spread(rows: Row[], column: LabelColumn): void {
-  rows.sort((a, b) => a.anchor.point[1] - b.anchor.point[1]);
+  const wanted = ({ anchor }: Row) => anchor.point[1] - PITCH * anchor.lean;
+  rows.sort((a, b) => wanted(a) - wanted(b));
   const highest = column.top + PITCH;
   const lowest = column.top + column.rows * PITCH - 4;
   rows.forEach((row, i) => {
-    row.y = Math.max(highest, row.anchor.point[1], i === 0 ? 0 : rows[i - 1].y + PITCH);
+    row.y = Math.max(highest, wanted(row) + 4, i === 0 ? 0 : rows[i - 1].y + PITCH);
   });
   for (let i = rows.length - 1; i >= 0; i--) {
     rows[i].y = Math.min(rows[i].y, (i === rows.length - 1 ? lowest + PITCH : rows[i + 1].y) - PITCH);

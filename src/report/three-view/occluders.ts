@@ -14,19 +14,17 @@ export interface Occluder {
   readonly high: readonly [number, number];
 }
 
-/** Triangles that are not seen edge-on. @param size of the design, mm */
+/** Triangles that look at the viewer: of closed solids they hide all there is to hide. @param size of the design, mm */
 export function occludersOf({ parts }: Drawing, view: View, size: number): Occluder[] {
   const found: Occluder[] = [];
   for (const { faces } of parts) {
     for (const { name, triangles } of faces) {
       for (let at = 0; at < triangles.length; at += 9) {
-        const [a, p, q] = [0, 3, 6].map((k) => seen(view, triangles, at + k));
-        const twice = (p[0] - a[0]) * (q[1] - a[1]) - (p[1] - a[1]) * (q[0] - a[0]);
-        if (Math.abs(twice) < 1e-9 * size * size) continue;
-        const [b, c] = twice > 0 ? [p, q] : [q, p];
-        const area = Math.abs(twice);
-        const gx = ((b[2] - a[2]) * (c[1] - a[1]) - (c[2] - a[2]) * (b[1] - a[1])) / area;
-        const gy = ((c[2] - a[2]) * (b[0] - a[0]) - (b[2] - a[2]) * (c[0] - a[0])) / area;
+        const [a, b, c] = [0, 3, 6].map((k) => seen(view, triangles, at + k));
+        const twice = (b[0] - a[0]) * (c[1] - a[1]) - (b[1] - a[1]) * (c[0] - a[0]);
+        if (twice < 1e-9 * size * size) continue;
+        const gx = ((b[2] - a[2]) * (c[1] - a[1]) - (c[2] - a[2]) * (b[1] - a[1])) / twice;
+        const gy = ((c[2] - a[2]) * (b[0] - a[0]) - (b[2] - a[2]) * (c[0] - a[0])) / twice;
         found.push({
           face: name,
           corners: [a, b, c],
@@ -42,13 +40,19 @@ export function occludersOf({ parts }: Drawing, view: View, size: number): Occlu
   return found;
 }
 
-/** Shares of a line, from 0 to 1, that a triangle hides; null where it hides nothing. @param slack mm that count as nothing */
-export function hiddenShare(from: Seen, to: Seen, triangle: Occluder, slack: number): readonly [number, number] | null {
+/** Shares of a line, from 0 to 1, that a triangle hides; null where it hides nothing. @param slack mm that count as nothing toward the viewer, @param aside on the sheet */
+export function hiddenShare(
+  from: Seen,
+  to: Seen,
+  triangle: Occluder,
+  slack: number,
+  aside: number,
+): readonly [number, number] | null {
   if (
-    Math.max(from[0], to[0]) < triangle.low[0] + slack ||
-    Math.min(from[0], to[0]) > triangle.high[0] - slack ||
-    Math.max(from[1], to[1]) < triangle.low[1] + slack ||
-    Math.min(from[1], to[1]) > triangle.high[1] - slack
+    Math.max(from[0], to[0]) < triangle.low[0] + aside ||
+    Math.min(from[0], to[0]) > triangle.high[0] - aside ||
+    Math.max(from[1], to[1]) < triangle.low[1] + aside ||
+    Math.min(from[1], to[1]) > triangle.high[1] - aside
   ) {
     return null;
   }
@@ -64,7 +68,7 @@ export function hiddenShare(from: Seen, to: Seen, triangle: Occluder, slack: num
   for (let i = 0; i < 3; i++) {
     const [p, q] = [corners[i], corners[(i + 1) % 3]];
     const length = Math.hypot(q[0] - p[0], q[1] - p[1]);
-    const left = (at: Seen) => ((q[0] - p[0]) * (at[1] - p[1]) - (q[1] - p[1]) * (at[0] - p[0])) / length - slack;
+    const left = (at: Seen) => ((q[0] - p[0]) * (at[1] - p[1]) - (q[1] - p[1]) * (at[0] - p[0])) / length - aside;
     if (!keep(left(from), left(to))) return null;
   }
   const before = (at: Seen) => c + gx * at[0] + gy * at[1] - at[2] - slack;
@@ -83,7 +87,7 @@ export function isSeen(point: Seen, occluders: readonly Occluder[], slack: numbe
       !corners.every((p, i) => {
         const q = corners[(i + 1) % 3];
         const length = Math.hypot(q[0] - p[0], q[1] - p[1]);
-        return (q[0] - p[0]) * (point[1] - p[1]) - (q[1] - p[1]) * (point[0] - p[0]) > slack * length;
+        return (q[0] - p[0]) * (point[1] - p[1]) - (q[1] - p[1]) * (point[0] - p[0]) > -1e-9 * length;
       }),
   );
 }

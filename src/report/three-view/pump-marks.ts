@@ -15,7 +15,7 @@ const STEEP = 0.3;
 
 interface Mark {
   readonly numbers: string[];
-  readonly tip: FlatPoint;
+  tip: FlatPoint;
   /** On the sheet; null: along the line of sight. */
   readonly direction: FlatPoint | null;
   readonly toViewer: boolean;
@@ -31,6 +31,8 @@ export function pumpMarks(pumps: readonly DrawnPump[], far: ReadonlySet<DrawnPum
     }
     const mark = markOf(pump, far.has(pump), place);
     if (mark === null) return;
+    while (mark.direction === null && [...marks.values()].some((other) => isOn(other, mark)))
+      mark.tip = below(mark.tip);
     const key = [...mark.tip, ...(mark.direction ?? [mark.toViewer ? 9 : -9])]
       .map((c) => Math.round(c * 0.5))
       .join(' ');
@@ -41,6 +43,14 @@ export function pumpMarks(pumps: readonly DrawnPump[], far: ReadonlySet<DrawnPum
   const outline = markup`<path class="pump-line" d="${linePath(outlines, place.place)}"/>`;
   return markup`<g class="pumps">${outline}${[...marks.values()].map(drawMark)}</g>`;
 }
+
+/** Another pump's sign at the same spot, which looks the other way. */
+function isOn(other: Mark, mark: Omit<Mark, 'numbers'>): boolean {
+  const near = Math.hypot(other.tip[0] - mark.tip[0], other.tip[1] - mark.tip[1]) < 14;
+  return other.direction === null && other.toViewer !== mark.toViewer && near;
+}
+
+const below = ([x, y]: FlatPoint): FlatPoint => [x, y + 18];
 
 const flat = ([a, u]: Seen): FlatPoint => [a, u];
 

@@ -26,28 +26,24 @@ export function sheetNotes(
   undrawn: number,
   top: number,
 ): { drawn: Markup; bottom: number } {
-  const lines = [
-    ...block('Parts: bounding boxes along x × y × z, mm', drawing.parts.map(partLine)),
-    ...(undrawn > 0 ? wrap(`${undrawn} sizes found no room beside the views; they are in this list.`, 'more') : []),
-    ...block(
+  const blocks = [
+    block(
+      'Parts: bounding boxes along x × y × z, mm',
+      drawing.parts.map(partLine),
+      undrawn > 0 ? `${undrawn} sizes found no room beside the views; they are in this list.` : null,
+    ),
+    block(
       'Pumps: optical power and wavelength',
       drawing.pumps.map((pump, i) => pumpLine(pump, i, far)),
     ),
-    ...block('Finishes', finishLines(drawing)),
-    ...block('Exit', exitNames(drawing)),
-    ...block(
+    block('Finishes', finishLines(drawing)),
+    block('Exit', exitNames(drawing)),
+    block(
       'Faces by number',
       listed.map(({ name, number }) => `${number ?? 'not marked, too crowded'}  ${name}`),
     ),
   ];
-  const longest = Math.ceil(lines.length / COLUMNS);
-  const columns: Line[][] = [[]];
-  for (const line of lines) {
-    const full = columns[columns.length - 1].length >= longest;
-    const headingLast = line.kind === 'heading' && columns[columns.length - 1].length === longest - 1;
-    if ((full || headingLast) && columns.length < COLUMNS) columns.push([]);
-    columns[columns.length - 1].push(line);
-  }
+  const columns = fillColumns(blocks);
   const drawn = columns.map((column, c) =>
     column.map(({ text, kind }, i) => {
       const x = MARGIN + c * (WIDTH + GUTTER) + (kind === 'more' ? 14 : 0);
@@ -60,10 +56,27 @@ export function sheetNotes(
   };
 }
 
-function block(heading: string, entries: readonly string[]): Line[] {
-  return entries.length === 0
-    ? []
-    : [{ text: heading, kind: 'heading' }, ...entries.flatMap((entry) => wrap(entry, 'first'))];
+/** Blocks one after the other, whole where they can be. */
+function fillColumns(blocks: readonly (readonly Line[])[]): Line[][] {
+  const longest = Math.ceil(blocks.reduce((sum, one) => sum + one.length, 0) / COLUMNS) + 1;
+  const columns: Line[][] = [[]];
+  for (const one of blocks) {
+    const whole = one.length <= longest;
+    one.forEach((line, i) => {
+      const column = columns[columns.length - 1];
+      const full = whole && i === 0 ? column.length + one.length > longest : column.length >= longest;
+      const last = i === 0 && column.length + 2 > longest;
+      if ((full || last) && !(whole && i > 0) && column.length > 0 && columns.length < COLUMNS) columns.push([]);
+      columns[columns.length - 1].push(line);
+    });
+  }
+  return columns;
+}
+
+function block(heading: string, entries: readonly string[], remark: string | null = null): Line[] {
+  if (entries.length === 0) return [];
+  const said = remark === null ? [] : wrap(remark, 'more');
+  return [{ text: heading, kind: 'heading' }, ...entries.flatMap((entry) => wrap(entry, 'first')), ...said];
 }
 
 /** Broken at spaces; a word longer than the column is cut. */
@@ -92,7 +105,7 @@ function partLine({ name, medium, mediumKind, dyed, bounds: [low, high] }: Drawn
 
 function pumpLine(pump: DrawnPump, i: number, far: ReadonlySet<DrawnPump>): string {
   const point = (values: readonly number[]) => `(${values.map((c) => minus(Number(c.toFixed(3)))).join(', ')})`;
-  const where = far.has(pump) ? '; its arrow stands at the edge of the views' : '';
+  const where = far.has(pump) ? ' (beyond the views)' : '';
   return `P${i + 1} ${short(pump.name)}: ${significant(pump.watts, 4)} W, ${significant(pump.wavelengthNm, 6)} nm; at ${point(pump.at)} mm, looks along ${point(pump.direction)}${where}`;
 }
 

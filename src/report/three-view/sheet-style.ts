@@ -2,9 +2,9 @@
 export const SHEET_STYLE = `
 .three-view text{fill:#1b2226;font:11.5px system-ui,"Segoe UI",Roboto,"DejaVu Sans",sans-serif;unicode-bidi:isolate}
 .three-view .small{font-size:10px}
-.three-view .strong{font-size:14px;font-weight:650}
-.three-view .heading{font-weight:650}
-.three-view .view-title{font-weight:650;fill:#565f66}
+.three-view .strong{font-size:14px;font-weight:bold}
+.three-view .heading{font-weight:bold}
+.three-view .view-title{font-weight:bold;fill:#565f66}
 .three-view .soft{fill:#565f66}
 .three-view path,.three-view circle{fill:none}
 .three-view .sheet{fill:#fff}
@@ -19,10 +19,10 @@ export const SHEET_STYLE = `
 .three-view .pump-strong,.three-view .pump-ring{stroke:#2a66ad;stroke-width:1.8}
 .three-view .pump-ring{fill:#fff}
 .three-view .pump-fill{fill:#2a66ad}
-.three-view .pump-text{fill:#2a66ad;font-weight:650;paint-order:stroke;stroke:#fff;stroke-width:3px}
+.three-view .pump-text{fill:#2a66ad;font-weight:bold;paint-order:stroke;stroke:#fff;stroke-width:3px}
 .three-view .exit-line{stroke:#0b7a5c;stroke-width:2.6;stroke-linecap:round;stroke-linejoin:round}
 .three-view .exit-arrow{stroke:#0b7a5c;stroke-width:1.6;fill:#fff}
-.three-view .exit-label text{fill:#0b7a5c;font-weight:650}
+.three-view .exit-label text{fill:#0b7a5c;font-weight:bold}
 .three-view .plane-line{stroke:#565f66;stroke-width:1;stroke-dasharray:10 3 2 3}
 .three-view .exit-plane{stroke:#0b7a5c;stroke-width:2}
 .three-view .frame{stroke:#1b2226;stroke-width:1}

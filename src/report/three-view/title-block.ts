@@ -15,6 +15,7 @@ export interface SheetAbout {
 const CELLS = [MARGIN, 430, 800, 1020, SHEET_WIDTH - MARGIN] as const;
 const LINE = 15;
 const MOST_LINES = 8;
+const SIZES = { note: 11.5, strong: 14, 'small soft': 10 } as const;
 
 /** @param scale sheet units per mm */
 export function titleBlock(
@@ -27,8 +28,8 @@ export function titleBlock(
     CELLS[2] - CELLS[1] - 20,
   );
   const height = Math.max(5, dialLines.length + 1) * LINE + 14;
-  const text = (cell: number, line: number, words: string, name = 'note') =>
-    markup`<text class="${name}" x="${CELLS[cell] + 10}" y="${round(top + 6 + line * LINE)}">${fitText(words, CELLS[cell + 1] - CELLS[cell] - 20)}</text>`;
+  const text = (cell: number, line: number, words: string, name: keyof typeof SIZES = 'note') =>
+    markup`<text class="${name}" x="${CELLS[cell] + 10}" y="${round(top + 6 + line * LINE)}">${fitText(words, CELLS[cell + 1] - CELLS[cell] - 16, SIZES[name])}</text>`;
   const rules = CELLS.slice(1, -1)
     .map((x) => `M${x} ${round(top)}V${round(top + height)}`)
     .join('');
@@ -36,7 +37,7 @@ export function titleBlock(
   return {
     drawn: markup`<g class="title-block">${frame}${text(0, 1, 'Design', 'small soft')}${text(0, 2.1, title, 'strong')}${text(0, 3.3, 'File', 'small soft')}${text(0, 4.3, file)}${text(1, 1, 'Dials', 'small soft')}${
       dialLines.length === 0 ? text(1, 2.1, 'none') : dialLines.map((line, i) => text(1, 2.1 + i, line))
-    }${text(2, 1, 'Third-angle projection', 'note')}${text(2, 2, 'top view above the front,', 'small soft')}${text(2, 2.9, 'right view to its right; x and y', 'small soft')}${text(2, 3.8, 'to the right, z and y upward', 'small soft')}${text(2, 4.8, 'Lengths in mm', 'small soft')}${scaleBar(scale, top)}</g>`,
+    }${text(2, 1, 'Third-angle projection', 'note')}${text(2, 2, 'Top view above the front,', 'small soft')}${text(2, 2.9, 'right view to its right.', 'small soft')}${text(2, 3.8, 'The front looks along +y.', 'small soft')}${text(2, 4.8, 'Lengths in mm', 'small soft')}${scaleBar(scale, top)}</g>`,
     bottom: top + height,
   };
 }

@@ -33,8 +33,8 @@ export function viewLines(drawing: Drawing, view: View, occluders: readonly Occl
     if (Math.hypot(to[0] - from[0], to[1] - from[1]) < 1e-6 * size) continue;
     const shares = occluders
       .filter(({ face }) => face !== contourOf)
-      .flatMap((occluder) => hiddenShare(from, to, occluder, slack) ?? []);
-    for (const [start, end, isHidden] of cutUp(shares)) {
+      .flatMap((occluder) => hiddenShare(from, to, occluder, slack, 1e-5 * size) ?? []);
+    for (const [start, end, isHidden] of cutUp(shares, (3e-3 * size) / Math.hypot(to[0] - from[0], to[1] - from[1]))) {
       const at = (share: number): FlatPoint => [
         from[0] + share * (to[0] - from[0]),
         from[1] + share * (to[1] - from[1]),
@@ -90,15 +90,16 @@ function distinct(lines: readonly Line[], size: number): Line[] {
   return [...found.values()];
 }
 
-/** The line from 0 to 1 in pieces, hidden and not. */
-function cutUp(shares: readonly number[]): (readonly [number, number, boolean])[] {
+/** The line from 0 to 1 in pieces, hidden and not. @param gap between two triangles that hide it which is no gap */
+function cutUp(shares: readonly number[], gap: number): (readonly [number, number, boolean])[] {
   const pairs = Array.from({ length: shares.length / 2 }, (_, i) => [shares[2 * i], shares[2 * i + 1]] as const);
   pairs.sort(([a], [b]) => a - b);
   const pieces: (readonly [number, number, boolean])[] = [];
   let at = 0;
   for (const [start, end] of pairs) {
-    if (start > at) pieces.push([at, start, false]);
-    if (end > at) pieces.push([Math.max(at, start), end, true]);
+    const joins = start <= at || (pieces.length > 0 && start - at < gap);
+    if (!joins) pieces.push([at, start, false]);
+    if (end > at) pieces.push([joins ? at : start, end, true]);
     at = Math.max(at, end);
   }
   if (at < 1) pieces.push([at, 1, false]);
