@@ -128,7 +128,7 @@ pre{background:var(--panel);border:1px solid var(--line);padding:12px;max-height
 .figures th{white-space:nowrap}
 .drawing-sheet{border:1px solid var(--line)}
 .drawing-sheet .three-view{display:block;width:100%;min-width:980px;height:auto}
-.design-table{margin:14px 0;overflow-wrap:normal}
+.design-table{margin:14px 0;min-width:640px;overflow-wrap:normal}
 @media (max-width:1080px){#answers{grid-template-columns:1fr 1fr}.answer:nth-child(odd){border-left:0}.answer:nth-child(n+3){border-top:1px solid var(--line)}}
 @media (max-width:900px){.where{grid-template-columns:minmax(0,1fr)}}
 @media (max-width:640px){

@@ -1,5 +1,5 @@
 /** A dimensioned drawing of a design in three views, on one sheet. */
-import type { Drawing, DrawnPart } from '../../record/drawing.js';
+import type { Drawing } from '../../record/drawing.js';
 import { type Markup, markup, trusted } from '../markup.js';
 import { shortName } from '../name-text.js';
 import { dimensionLine } from '../three-view/dimension-lines.js';
@@ -7,13 +7,15 @@ import { exitMark, planeLines } from '../three-view/exit-mark.js';
 import { faceAnchors } from '../three-view/face-anchors.js';
 import { faceLabels, type Labelled, type SheetAnchor } from '../three-view/face-labels.js';
 import { linePath } from '../three-view/line-paths.js';
-import { type Occluder, occludersOf } from '../three-view/occluders.js';
+import type { OccluderGrid } from '../three-view/occluder-grid.js';
+import { occludersOf } from '../three-view/occluders.js';
 import { pumpMarks } from '../three-view/pump-marks.js';
 import { layOutSheet, MARGIN, SHEET_WIDTH, type SheetLayout, type ViewPlace } from '../three-view/sheet-layout.js';
 import { sheetNotes } from '../three-view/sheet-notes.js';
 import { SHEET_STYLE } from '../three-view/sheet-style.js';
+import { silhouette } from '../three-view/silhouette.js';
 import { type SheetAbout, titleBlock } from '../three-view/title-block.js';
-import { type FlatPoint, seen } from '../three-view/view.js';
+import { seen } from '../three-view/view.js';
 import { type ViewLines, viewLines } from '../three-view/view-lines.js';
 import { round } from './picture.js';
 
@@ -41,26 +43,9 @@ function drawView(drawing: Drawing, place: ViewPlace, lines: ViewLines, { views 
   const title = Math.min(...views.filter(({ bottom }) => bottom === place.bottom).map(({ top }) => top)) - 47;
   return markup`<g class="view"><text class="view-title" x="${round(place.left)}" y="${round(title)}">${place.view.title}</text>${drawing.parts
     .filter(({ dyed }) => dyed)
-    .map((part) =>
-      tint(part, place),
+    .map(
+      (part) => markup`<path class="tint" d="${silhouette(part, place)}"/>`,
     )}<path class="hidden" d="${linePath(lines.hidden, place.place)}"/>${planeLines(drawing, place)}<path class="visible" d="${linePath(lines.visible, place.place)}"/>${exitMark(drawing, lines, place)}</g>`;
-}
-
-/** Dyed parts are tinted: one path of all that faces the viewer. */
-function tint({ faces }: DrawnPart, { view, place }: ViewPlace): Markup {
-  let path = '';
-  for (const { triangles } of faces) {
-    for (let at = 0; at < triangles.length; at += 9) {
-      const [a, b, c] = [0, 3, 6].map((k): FlatPoint => {
-        const [across, up] = seen(view, triangles, at + k);
-        return place([across, up]);
-      });
-      // On the sheet y runs down, so corners of what faces the viewer run clockwise in numbers.
-      if ((b[0] - a[0]) * (c[1] - a[1]) - (b[1] - a[1]) * (c[0] - a[0]) > -0.01) continue;
-      path += `M${[a, b, c].map((p) => `${round(p[0])} ${round(p[1])}`).join('L')}Z`;
-    }
-  }
-  return markup`<path class="tint" d="${path}"/>`;
 }
 
 function dimensions({ views, widths, depths, heights, below, beside }: SheetLayout): Markup {
@@ -82,7 +67,7 @@ function dimensions({ views, widths, depths, heights, below, beside }: SheetLayo
 /** Faces and planes in the order of the file, with the places where leader lines may meet them. */
 function labelled(
   { parts, planes }: Drawing,
-  views: readonly { readonly place: ViewPlace; readonly occluders: readonly Occluder[] }[],
+  views: readonly { readonly place: ViewPlace; readonly occluders: OccluderGrid }[],
   slack: number,
 ): Labelled[] {
   const faces = parts.flatMap((part) => part.faces).filter(({ triangles }) => triangles.length > 0);

@@ -1,6 +1,7 @@
 /** Where leader lines may meet a face in a view. */
 import type { DrawnFace } from '../../record/drawing.js';
-import { isSeen, type Occluder } from './occluders.js';
+import type { OccluderGrid } from './occluder-grid.js';
+import { isSeen } from './occluders.js';
 import { type FlatPoint, type Seen, seen, type View } from './view.js';
 
 export interface Anchor {
@@ -34,7 +35,7 @@ const ALONG = [0.15, 0.85, 0.3, 0.7, 0.22, 0.78];
 export function faceAnchors(
   face: DrawnFace,
   view: View,
-  occluders: readonly Occluder[],
+  occluders: OccluderGrid,
   slack: number,
   turn: number,
 ): Anchor[] {
@@ -66,7 +67,7 @@ export function faceAnchors(
 
 function within(
   triangles: readonly { readonly corners: readonly Seen[]; readonly facing: number }[],
-  occluders: readonly Occluder[],
+  occluders: OccluderGrid,
   slack: number,
   turn: number,
 ): Anchor | null {

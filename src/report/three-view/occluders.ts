@@ -1,5 +1,6 @@
 /** What hides what in a view: triangles in front of a line or a point. */
 import type { Drawing } from '../../record/drawing.js';
+import { OccluderGrid } from './occluder-grid.js';
 import { type Seen, seen, type View } from './view.js';
 
 export interface Occluder {
@@ -15,7 +16,7 @@ export interface Occluder {
 }
 
 /** Triangles that look at the viewer: of closed solids they hide all there is to hide. @param size of the design, mm */
-export function occludersOf({ parts }: Drawing, view: View, size: number): Occluder[] {
+export function occludersOf({ parts }: Drawing, view: View, size: number): OccluderGrid {
   const found: Occluder[] = [];
   for (const { faces } of parts) {
     for (const { name, triangles } of faces) {
@@ -37,7 +38,7 @@ export function occludersOf({ parts }: Drawing, view: View, size: number): Occlu
       }
     }
   }
-  return found;
+  return new OccluderGrid(found);
 }
 
 /** Shares of a line, from 0 to 1, that a triangle hides; null where it hides nothing. @param slack mm that count as nothing toward the viewer, @param aside on the sheet */
@@ -76,8 +77,9 @@ export function hiddenShare(
 }
 
 /** Whether nothing stands between a point and the viewer. */
-export function isSeen(point: Seen, occluders: readonly Occluder[], slack: number): boolean {
-  return occluders.every(
+export function isSeen(point: Seen, occluders: OccluderGrid, slack: number): boolean {
+  const flat = [point[0], point[1]] as const;
+  return occluders.within(flat, flat).every(
     ({ low, high, corners, c, gx, gy }) =>
       point[0] < low[0] ||
       point[0] > high[0] ||

@@ -1,7 +1,8 @@
 /** The lines of a view: rims and contours, told apart into those seen and those hidden behind something. */
 import type { Drawing, DrawnFace } from '../../record/drawing.js';
 import { mergeLines } from './merge-lines.js';
-import { hiddenShare, type Occluder } from './occluders.js';
+import type { OccluderGrid } from './occluder-grid.js';
+import { hiddenShare } from './occluders.js';
 import { type FlatLine, type FlatPoint, type Seen, seen, type View } from './view.js';
 
 export interface ViewLines {
@@ -19,7 +20,7 @@ interface Line {
 }
 
 /** @param size of the design, mm */
-export function viewLines(drawing: Drawing, view: View, occluders: readonly Occluder[], size: number): ViewLines {
+export function viewLines(drawing: Drawing, view: View, occluders: OccluderGrid, size: number): ViewLines {
   const slack = 2e-4 * size;
   const faces = drawing.parts.flatMap((part) => part.faces);
   const lines = distinct(
@@ -32,6 +33,10 @@ export function viewLines(drawing: Drawing, view: View, occluders: readonly Occl
     const { from, to, contourOf } = line;
     if (Math.hypot(to[0] - from[0], to[1] - from[1]) < 1e-6 * size) continue;
     const shares = occluders
+      .within(
+        [Math.min(from[0], to[0]), Math.min(from[1], to[1])],
+        [Math.max(from[0], to[0]), Math.max(from[1], to[1])],
+      )
       .filter(({ face }) => face !== contourOf)
       .flatMap((occluder) => hiddenShare(from, to, occluder, slack, 1e-5 * size) ?? []);
     for (const [start, end, isHidden] of cutUp(shares, (3e-3 * size) / Math.hypot(to[0] - from[0], to[1] - from[1]))) {
