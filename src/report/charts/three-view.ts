@@ -29,7 +29,7 @@ export function threeView(drawing: Drawing, about: SheetAbout, id: string): Mark
     return { place, occluders, lines: viewLines(drawing, place.view, occluders, size) };
   });
   const labels = faceLabels(labelled(drawing, views, 2e-4 * size), layout);
-  const notes = sheetNotes(drawing, labels.listed, layout.bounds.far, layout.undrawn, layout.bottom + 8);
+  const notes = sheetNotes(drawing, labels, layout.bounds.far, layout.undrawn, layout.bottom + 8);
   const block = titleBlock(about, layout.scale, notes.bottom);
   const height = Math.ceil(block.bottom + MARGIN);
   const words = `Front, top and right views of ${drawing.parts.length} ${drawing.parts.length === 1 ? 'part' : 'parts'} in third-angle projection, with sizes in mm, the names of the faces, and ${drawing.pumps.length} ${drawing.pumps.length === 1 ? 'pump' : 'pumps'}; the lists below the views say the same in words.`;
@@ -41,11 +41,9 @@ export function threeView(drawing: Drawing, about: SheetAbout, id: string): Mark
 function drawView(drawing: Drawing, place: ViewPlace, lines: ViewLines, { views }: SheetLayout): Markup {
   // The titles of views side by side stand level.
   const title = Math.min(...views.filter(({ bottom }) => bottom === place.bottom).map(({ top }) => top)) - 47;
-  return markup`<g class="view"><text class="view-title" x="${round(place.left)}" y="${round(title)}">${place.view.title}</text>${drawing.parts
-    .filter(({ dyed }) => dyed)
-    .map(
-      (part) => markup`<path class="tint" d="${silhouette(part, place)}"/>`,
-    )}<path class="hidden" d="${linePath(lines.hidden, place.place)}"/>${planeLines(drawing, place)}<path class="visible" d="${linePath(lines.visible, place.place)}"/>${exitMark(drawing, lines, place)}</g>`;
+  // One path for all: where dyed parts stand one behind another the tint is no darker.
+  const tint = drawing.parts.flatMap((part) => (part.dyed ? silhouette(part, place) : [])).join('');
+  return markup`<g class="view"><text class="view-title" x="${round(place.left)}" y="${round(title)}">${place.view.title}</text><path class="tint" d="${tint}"/><path class="hidden" d="${linePath(lines.hidden, place.place)}"/>${planeLines(drawing, place)}<path class="visible" d="${linePath(lines.visible, place.place)}"/>${exitMark(drawing, lines, place)}</g>`;
 }
 
 function dimensions({ views, widths, depths, heights, below, beside }: SheetLayout): Markup {

@@ -27,7 +27,14 @@ export interface FaceLabels {
   readonly drawn: Markup;
   /** Faces that are only numbered in the views, or not marked at all (number null), in order. */
   readonly listed: readonly { readonly name: string; readonly number: number | null }[];
+  /** On a crowded sheet, those that no view shows: they are named in a list only. */
+  readonly hidden: readonly string[];
 }
+
+/** More faces than this are crowded. */
+const CROWD = 60;
+/** Anchors of what can be seen have at least this merit. */
+const SEEN = 1;
 
 interface Row {
   readonly item: Labelled;
@@ -39,7 +46,10 @@ export function faceLabels(items: readonly Labelled[], { columns }: SheetLayout)
   const filled = columns.map((): Row[] => []);
   const rank = (item: Labelled) => (item.isExit ? 0 : item.plain ? 2 : 1);
   const left: Labelled[] = [];
-  for (const item of items.toSorted((a, b) => rank(a) - rank(b))) {
+  const isHidden = ({ isExit, anchors }: Labelled) =>
+    items.length > CROWD && !isExit && anchors.every(({ merit }) => merit < SEEN);
+  const shown = items.filter((item) => !isHidden(item));
+  for (const item of shown.toSorted((a, b) => rank(a) - rank(b))) {
     const choices = columns
       .flatMap((column, c) =>
         filled[c].length < column.rows - 1
@@ -58,7 +68,11 @@ export function faceLabels(items: readonly Labelled[], { columns }: SheetLayout)
     filled.flat(),
   );
   const labels = columns.map((column, c) => filled[c].map((row) => label(row, column)));
-  return { drawn: markup`<g class="labels">${labels}${drawn}</g>`, listed };
+  return {
+    drawn: markup`<g class="labels">${labels}${drawn}</g>`,
+    listed,
+    hidden: items.filter(isHidden).map(({ name }) => name),
+  };
 }
 
 /** Seen well, near the column, and in a column that is not crowded. */

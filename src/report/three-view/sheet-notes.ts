@@ -21,7 +21,7 @@ interface Line {
 /** @param undrawn sizes that found no room beside the views */
 export function sheetNotes(
   drawing: Drawing,
-  listed: FaceLabels['listed'],
+  { listed, hidden }: Pick<FaceLabels, 'listed' | 'hidden'>,
   far: ReadonlySet<DrawnPump>,
   undrawn: number,
   top: number,
@@ -42,6 +42,7 @@ export function sheetNotes(
       'Faces by number',
       listed.map(({ name, number }) => `${number ?? 'not marked, too crowded'}  ${name}`),
     ),
+    block('Faces that no view shows', hidden.length === 0 ? [] : [hidden.map(short).join(', ')]),
   ];
   const columns = fillColumns(blocks);
   const drawn = columns.map((column, c) =>
