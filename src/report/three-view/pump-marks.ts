@@ -4,6 +4,7 @@ import { round } from '../charts/picture.js';
 import { type Markup, markup } from '../markup.js';
 import { head } from './face-labels.js';
 import { linePath } from './line-paths.js';
+import { mergeLines } from './merge-lines.js';
 import type { ViewPlace } from './sheet-layout.js';
 import { type FlatLine, type FlatPoint, type Seen, seen } from './view.js';
 
@@ -40,7 +41,7 @@ export function pumpMarks(pumps: readonly DrawnPump[], far: ReadonlySet<DrawnPum
     if (known === undefined) marks.set(key, { ...mark, numbers: [`P${i + 1}`] });
     else known.numbers.push(`P${i + 1}`);
   });
-  const outline = markup`<path class="pump-line" d="${linePath(outlines, place.place)}"/>`;
+  const outline = markup`<path class="pump-line" d="${linePath(mergeLines(outlines, [], 100).visible, place.place)}"/>`;
   return markup`<g class="pumps">${outline}${[...marks.values()].map(drawMark)}</g>`;
 }
 
