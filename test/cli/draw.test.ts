@@ -3,7 +3,6 @@ import { mkdtemp, readdir, readFile, rm, writeFile } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
 import { join, resolve } from 'node:path';
 import { afterEach, beforeEach, describe, expect, it } from 'vitest';
-import { shippedNames, shippedText } from '../geometries/shipped.js';
 import { runCli } from './run-cli.js';
 
 let cwd = '';
@@ -91,18 +90,6 @@ describe('draw', () => {
       expect(written).not.toContain('<img');
       expect(written).not.toContain('\u202e');
       expect(written).toContain('&lt;script&gt;globalThis');
-    }
-  });
-
-  it('draws every shipped design', async () => {
-    for (const name of shippedNames()) {
-      await writeFile(join(cwd, `${name}.yaml`), shippedText(name));
-      const { code, out } = await run('draw', `${name}.yaml`, '--out', `out/${name}`);
-      expect({ name, code }).toEqual({ name, code: 0 });
-      expect(out.split('\n').length).toBe(3);
-      const page = await text(`out/${name}/drawing.html`);
-      expect(page.length).toBeLessThan(300_000);
-      for (const words of ['Parts', 'Media', 'Pumps', 'Faces', 'Cautions']) expect(page).toContain(words);
     }
   });
 });

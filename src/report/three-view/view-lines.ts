@@ -95,18 +95,20 @@ function distinct(lines: readonly Line[], size: number): Line[] {
   return [...found.values()];
 }
 
-/** The line from 0 to 1 in pieces, hidden and not. @param gap between two triangles that hide it which is no gap */
+/** The line from 0 to 1 in pieces, hidden and not. @param gap beside what hides it that is no gap */
 function cutUp(shares: readonly number[], gap: number): (readonly [number, number, boolean])[] {
   const pairs = Array.from({ length: shares.length / 2 }, (_, i) => [shares[2 * i], shares[2 * i + 1]] as const);
   pairs.sort(([a], [b]) => a - b);
   const pieces: (readonly [number, number, boolean])[] = [];
   let at = 0;
   for (const [start, end] of pairs) {
-    const joins = start <= at || (pieces.length > 0 && start - at < gap);
+    const joins = start - at < gap;
     if (!joins) pieces.push([at, start, false]);
     if (end > at) pieces.push([joins ? at : start, end, true]);
     at = Math.max(at, end);
   }
-  if (at < 1) pieces.push([at, 1, false]);
+  const last = pieces.at(-1);
+  if (last?.[2] === true && 1 - at < gap) pieces[pieces.length - 1] = [last[0], 1, true];
+  else if (at < 1) pieces.push([at, 1, false]);
   return pieces;
 }
