@@ -113,7 +113,7 @@ function cross(a: Row, b: Row, x: number): boolean {
 function label({ item, anchor, y }: Row, { x, side }: LabelColumn): Markup {
   const outward = side === 'left' ? -1 : 1;
   const [ax, ay] = anchor.point;
-  const text = fitText(item.isExit ? `${item.name} (exit)` : item.name, COLUMN - 14);
+  const text = item.isExit ? `${fitText(item.name, COLUMN - 60)} (exit)` : fitText(item.name, COLUMN - 14);
   const line = `M${round(x)} ${round(y - 4)}L${round(x - 8 * outward)} ${round(y - 4)}L${round(ax)} ${round(ay)}`;
   const end = anchor.within
     ? markup`<circle class="arrow" cx="${round(ax)}" cy="${round(ay)}" r="2"/>`
