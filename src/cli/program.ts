@@ -1,6 +1,7 @@
 import { Argument, Command, Option } from 'commander';
 import { PICTURE_CHOICES } from '../report/pictures/picture-choice.js';
 import type { CheckOptions } from './commands/check.js';
+import type { DrawOptions } from './commands/draw.js';
 import type { ExplainOptions } from './commands/explain.js';
 import type { ProveOptions } from './commands/prove.js';
 import type { ReportOptions } from './commands/report.js';
@@ -59,6 +60,17 @@ export function buildProgram(done: (code: ExitCode) => void): Command {
     .action(async (files: string[], options: CheckOptions) => {
       const { checkCommand } = await import('./commands/check.js');
       done(await checkCommand(files, options));
+    });
+
+  program
+    .command('draw')
+    .description('draw a design before any tracing: a page and a dimensioned sheet of three views')
+    .argument('<design>', 'design file')
+    .option('--out <folder>', 'new or empty folder for the drawing (default: a new one below results)')
+    .addOption(dialOption())
+    .action(async (file: string, options: DrawOptions) => {
+      const { drawCommand } = await import('./commands/draw.js');
+      done(await drawCommand(file, options));
     });
 
   program

@@ -1,7 +1,10 @@
 import type { SoundDesign } from '../design/read-design.js';
+import { drawDescription } from '../drawing/draw-description.js';
 import { summariseRun } from '../outcome/summarise-run.js';
 import type { RunArrays } from '../record/run-arrays.js';
 import type { RunRecord } from '../record/run-record.js';
+import { keptDrawing } from '../run-folder/drawing-json.js';
+import { tracePaths } from '../trace/trace-paths.js';
 import type { TraceResult } from '../trace/trace-result.js';
 import { repeatCommand } from './repeat-command.js';
 import { toolVersion } from './tool-version.js';
@@ -19,7 +22,7 @@ export function recordRun(
 ): { record: RunRecord; arrays: RunArrays } {
   const { description, file, text, hash } = reading;
   const { histories } = result.tallies.moments;
-  return summariseRun(
+  const { record, arrays } = summariseRun(
     { ...result, warnings: [...reading.warnings.map(withoutPlace), ...result.warnings] },
     {
       version: toolVersion(),
@@ -31,6 +34,8 @@ export function recordRun(
       repeat: repeatCommand(file, histories, result.seed, turned, polarisation),
     },
   );
+  const { paths, histories: pathsFrom } = tracePaths(description, result.seed);
+  return { record, arrays: { ...arrays, drawing: keptDrawing({ ...drawDescription(description), paths, pathsFrom }) } };
 }
 
 /** The record keeps the design's text, so a fault's path says enough. */

@@ -111,6 +111,9 @@ dt{color:var(--soft)}dd{margin:0;min-width:0}
 code,pre{font-family:ui-monospace,"DejaVu Sans Mono",Consolas,monospace;font-size:.84rem}
 pre{background:var(--panel);border:1px solid var(--line);padding:12px;max-height:70vh;overflow:auto;white-space:pre-wrap;overflow-wrap:anywhere;unicode-bidi:plaintext}
 .figures th{white-space:nowrap}
+.drawing-sheet{border:1px solid var(--line)}
+.drawing-sheet .three-view{display:block;width:100%;min-width:980px;height:auto}
+.design-table{margin:14px 0;min-width:640px;overflow-wrap:normal}
 @media (max-width:1080px){#answers{grid-template-columns:1fr 1fr}.answer:nth-child(odd){border-left:0}.answer:nth-child(n+3){border-top:1px solid var(--line)}}
 @media (max-width:900px){.where{grid-template-columns:minmax(0,1fr)}}
 @media (max-width:640px){
@@ -135,6 +138,8 @@ h2,h3{break-after:avoid}
 section{margin:16px 0}
 #answers{grid-template-columns:1fr 1fr}
 pre{max-height:none;border:0;padding:0}
+.drawing-sheet{border:0}
+.drawing-sheet .three-view{min-width:0}
 *{-webkit-print-color-adjust:exact;print-color-adjust:exact}
 .maps,.cuts{grid-template-columns:1fr 1fr}
 }

@@ -6,6 +6,7 @@ export const RUN_JSON = 'run.json';
 export const SPECTRA_CSV = 'spectra.csv';
 export const CURVES_CSV = 'curves.csv';
 export const LEDGER_CSV = 'ledger.csv';
+export const DRAWING_JSON = 'drawing.json';
 
 /** The record with the names of the files its folder holds filled in. */
 export function nameFiles(record: RunRecord): RunRecord {

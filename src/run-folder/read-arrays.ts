@@ -1,12 +1,13 @@
-/** Reads the arrays of a run back from the tables beside its run.json. */
+/** Reads the arrays of a run back from the files beside its run.json. */
 import { join } from 'node:path';
 import type { AnglesArray, MapArray, RunArrays, SpectraArray } from '../record/run-arrays.js';
 import type { RunRecord } from '../record/run-record.js';
 import { columnOf, readNumberTable, unreadable } from './read-csv.js';
+import { readDrawing } from './read-drawing.js';
 
 type MapRecord = RunRecord['maps'][number];
 
-/** @param record as read from the folder's run.json. @throws RunFolderError when a table is missing, damaged or of another run */
+/** @param record as read from the folder's run.json. @throws RunFolderError when a table is missing, damaged or of another run, or the drawing is damaged */
 export async function readArrays(folder: string, record: RunRecord): Promise<RunArrays> {
   const maps: MapArray[] = [];
   for (const map of record.maps) maps.push(await readMap(folder, map));
@@ -17,7 +18,7 @@ export async function readArrays(folder: string, record: RunRecord): Promise<Run
     spectra: await readColumns(folder, record.spectra),
     curves: await readColumns(folder, record.curves),
     angles,
-    drawing: null,
+    drawing: await readDrawing(folder),
   };
 }
 

@@ -21,10 +21,18 @@ export async function runFolderPath(
   title: string,
   { hash, seed, histories }: RunIdentity,
 ): Promise<string> {
-  const design = slug(title, 'design');
   const run = `${slug(hash.slice(0, 8), 'design')}-seed-${slug(seed, 'other')}-${slug(String(histories), 'all')}`;
+  return freePath(join(outRoot, slug(title, 'design')), run);
+}
+
+/** Path of a folder for the drawing of a design: outRoot/<title>/<hash>-drawing, with -2, -3, … as above. */
+export async function drawingFolderPath(outRoot: string, title: string, hash: string): Promise<string> {
+  return freePath(join(outRoot, slug(title, 'design')), `${slug(hash.slice(0, 8), 'design')}-drawing`);
+}
+
+async function freePath(folder: string, name: string): Promise<string> {
   for (let copy = 1; ; copy++) {
-    const path = join(outRoot, design, copy === 1 ? run : `${run}-${copy}`);
+    const path = join(folder, copy === 1 ? name : `${name}-${copy}`);
     if (!(await exists(path))) return path;
   }
 }

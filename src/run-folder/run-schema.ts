@@ -48,7 +48,8 @@ const FIGURE_NAMES = everyName<FigureName>()([
   'pumpPower',
 ]);
 
-const ledgerRow = z.object({
+/** How a history ended, where and by what. */
+export const fateSlotSchema = z.object({
   fate: z.enum(
     everyName<Fate>()([
       'missed',
@@ -66,9 +67,9 @@ const ledgerRow = z.object({
   light,
   where: line,
   by: line,
-  fraction: z.number(),
-  standardError: error,
 });
+
+const ledgerRow = fateSlotSchema.extend({ fraction: z.number(), standardError: error });
 
 /** Looser than the ledger's own bound, for records that other programs wrote again with fewer digits. */
 const CLOSURE = 1e-9;

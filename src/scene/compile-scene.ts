@@ -12,6 +12,7 @@ import { compileMedia } from './compile-media.js';
 import { type BeamFrame, compilePumps } from './compile-pumps.js';
 import { planRecorders, planVoxels, type RecorderPlan, type VoxelPlan } from './compile-recorders.js';
 import { checkFaceReference, compileSolids, designSize, type SceneFace } from './compile-solids.js';
+import { givenFinish } from './given-finish.js';
 import { layOutRecorders } from './lay-out-recorders.js';
 import { layOutSlots } from './lay-out-slots.js';
 import { type PlacedPart, placeParts } from './place-parts.js';
@@ -178,11 +179,10 @@ function referenceFaults(description: Description, parts: readonly PlacedPart[])
   return found.filter((fault) => fault !== null);
 }
 
-/** Finish of each face, −1 where the design gives none; '*' stands for all faces of a part that are not named. */
+/** Finish of each face, −1 where the design gives none. */
 function finishOfFaces(faces: readonly SceneFace[], finishNames: readonly string[]): number[] {
-  return faces.map(({ part, reference }) => {
-    const { name, faces: given } = part.description;
-    const named = given.find(({ face }) => `${name}.${face}` === reference) ?? given.find(({ face }) => face === '*');
-    return named === undefined ? -1 : finishNames.indexOf(named.finish);
+  return faces.map(({ part: { description }, reference }) => {
+    const finish = givenFinish(description, reference.slice(description.name.length + 1));
+    return finish === null ? -1 : finishNames.indexOf(finish);
   });
 }

@@ -24,7 +24,7 @@ describe('command line', () => {
   it('--help documents commands and every exit status', async () => {
     const { code, out, err } = await run('--help');
     expect({ code, err }).toEqual({ code: 0, err: '' });
-    for (const word of ['new', 'check', 'trace', 'explain', 'prove', 'schema'])
+    for (const word of ['new', 'check', 'draw', 'trace', 'explain', 'prove', 'schema'])
       expect(out).toMatch(new RegExp(`^ +${word} `, 'm'));
     for (const status of ['0', '1', '2', '3', '4', '70', '130'])
       expect(out).toMatch(new RegExp(`^ +${status} +\\w`, 'm'));
@@ -41,6 +41,8 @@ describe('command line', () => {
     [['trace']],
     [['check']],
     [['trace', 'a.yaml', 'b.yaml']],
+    [['draw']],
+    [['draw', 'a.yaml', '--dial', 'depth']],
     [['trace', 'a.yaml', '--unknown']],
     [['trace', 'a.yaml', '--histories', '0']],
     [['trace', 'a.yaml', '--histories', '-3']],
@@ -84,7 +86,7 @@ describe('new', () => {
 });
 
 describe('designs that cannot be read', () => {
-  it.each(['check', 'trace'])(
+  it.each(['check', 'draw', 'trace'])(
     '%s: missing, empty, binary, folder: 2, a sentence that names the file, nothing written',
     async (command) => {
       await writeFile(join(cwd, 'empty.yaml'), '');

@@ -31,7 +31,13 @@ describe('readArrays', () => {
     expect(await read()).toEqual(sample.arrays);
   });
 
+  it('has no drawing where its file was taken away, as in runs of older versions', async () => {
+    await rm(join(folder, 'drawing.json'));
+    expect(await read()).toEqual({ ...sample.arrays, drawing: null });
+  });
+
   it.each([
+    ['a damaged drawing', () => change('drawing.json', (text) => text.slice(0, -9)), 'drawing.json'],
     ['a missing table', () => rm(join(folder, 'map-exit-lid-top.csv')), 'does not exist'],
     ['a lost line', () => change('map-exit-lid-top.csv', (text) => text.replace(/\n[^\n]+\n$/, '\n')), '5 cells'],
     ['words for numbers', () => change('spectra.csv', (text) => text.replace('500', 'five')), 'line 2'],

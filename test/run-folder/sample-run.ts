@@ -1,3 +1,4 @@
+import type { Drawing } from '../../src/record/drawing.js';
 import type { MapArray, RunArrays } from '../../src/record/run-arrays.js';
 import type { RunRecord } from '../../src/record/run-record.js';
 import { sampleRecord } from '../cli/sample-record.js';
@@ -27,7 +28,7 @@ export function sampleRun(): { record: RunRecord; arrays: RunArrays } {
     checks: [{ code: 'caution', severity: 'warning', path: ['parts', 'cell', 0], problem: 'thin wall', found: '1 µm' }],
   };
   const arrays: RunArrays = {
-    drawing: null,
+    drawing: sampleDrawing(),
     maps,
     spectra: {
       wavelengthsNm: Float64Array.of(500, 550),
@@ -77,5 +78,64 @@ function voxels(): MapArray {
     unit: 'W/cm³',
     values: Float64Array.of(1, 2, 3, 4),
     measure: Float64Array.of(2, 2, 2, 2),
+  };
+}
+
+/** One wedge of a face, a pump, a plane and a path, with names a design could hold to do harm. */
+export function sampleDrawing(): Drawing {
+  return {
+    parts: [
+      {
+        name: 'cell <b>',
+        medium: 'bath',
+        mediumKind: 'liquid',
+        dyed: true,
+        bounds: [
+          [0, 0, 0],
+          [10.0625, 8, 0.0001],
+        ],
+        faces: [
+          {
+            name: 'cell <b>.top',
+            finish: 'clear',
+            finishKind: 'clear',
+            isExit: true,
+            triangles: [0, 0, 0.0001, 10.0625, 0, 0.0001, 10.0625, 8, 0.0001],
+            normals: [0, 0, 1, 0, 0, 1, 0, 0, 1],
+            edges: [0, 0, 0.0001, 10.0625, 0, 0.0001],
+          },
+          {
+            name: 'cell <b>.dome',
+            finish: '../../etc',
+            finishKind: 'mirror',
+            isExit: false,
+            triangles: [0, 0, 0, 1, 0, 0, 1, 1, 0],
+            normals: [0.6, 0, 0.8, 0, 0.6, 0.8, 0, 0, 1],
+            edges: [],
+          },
+        ],
+      },
+    ],
+    pumps: [
+      {
+        name: 'bank',
+        watts: 1 / 3,
+        wavelengthNm: 445.123456,
+        at: [0, -40, 0],
+        direction: [0, 1, 0],
+        edges: [0, 0, 0, 1, 0, 0],
+      },
+    ],
+    planes: [{ name: 'aperture', isExit: false, normal: [0, 0, 1], edges: [] }],
+    paths: [
+      {
+        end: { fate: 'left-by-exit', light: 'emitted', where: 'cell <b>.top', by: null },
+        points: [0, -40, 0, 0, 0, 0, 1.5, 0, 8],
+        wavelengthsNm: [445.123456, 530.25],
+        pumpSegments: 1,
+        cutAfter: -1,
+      },
+    ],
+    pathsFrom: 1000,
   };
 }

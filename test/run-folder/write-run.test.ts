@@ -37,7 +37,7 @@ describe('writeRun', () => {
     const named = [...read.maps.flatMap(({ files }) => files), ...read.angles, ...read.spectra, ...read.curves].map(
       (of) => (typeof of === 'string' ? of : of.file),
     );
-    expect([...new Set([...named, 'run.json', 'ledger.csv'])].sort()).toEqual([...names].sort());
+    expect([...new Set([...named, 'run.json', 'ledger.csv', 'drawing.json'])].sort()).toEqual([...names].sort());
     expect(names).toContain('map-detector-etc.npy');
     expect(names).toContain('map-detector-etc-2.npy');
     const npy = await readFile(join(root, 'loom/run/map-exit-lid-top.npy'), 'latin1');

@@ -1,6 +1,4 @@
-import { createHash } from 'node:crypto';
 import { availableParallelism } from 'node:os';
-import type { LocatedFault } from '../../design/fault.js';
 import type { SoundDesign } from '../../design/read-design.js';
 import type { RunArrays } from '../../record/run-arrays.js';
 import type { RunRecord } from '../../record/run-record.js';
@@ -10,9 +8,11 @@ import { RunFolderError } from '../../run-folder/run-folder-error.js';
 import type { TraceResult } from '../../trace/trace-result.js';
 import { colourDepth } from '../colour-depth.js';
 import { CommandFault } from '../command-fault.js';
+import { designFault } from '../design-fault.js';
+import { designMark } from '../design-mark.js';
 import { drawnPictures } from '../drawn-pictures.js';
 import { EXIT, type ExitCode } from '../exit-codes.js';
-import { countFaults, faultLines } from '../fault-lines.js';
+import { faultLines } from '../fault-lines.js';
 import { listenForInterrupt } from '../interrupt.js';
 import { faceMap } from '../ledger/face-map.js';
 import { showLedger } from '../ledger/show-ledger.js';
@@ -90,11 +90,6 @@ function withPolarisation(reading: SoundDesign, polarisation: TraceCommandOption
   return { ...reading, description: { ...description, defaults: { ...description.defaults, polarisation } } };
 }
 
-/** The text, the dials and the mode as used: runs of one file with others are not alike. */
-function designMark({ design: { hash, dials }, run }: RunRecord): string {
-  return createHash('sha256').update(hash).update(JSON.stringify(dials)).update(run.polarisation).digest('hex');
-}
-
 /** Writes the run and gives back its folder. */
 async function keep(
   record: RunRecord,
@@ -106,7 +101,11 @@ async function keep(
   const { writeRun } = await import('../../run-folder/write-run.js');
   const { REPORT_HTML, runPage } = await import('../../report/run-page.js');
   const folder =
-    out ?? (await runFolderPath(RESULTS, record.design.title, { hash: designMark(record), ...record.run }));
+    out ??
+    (await runFolderPath(RESULTS, record.design.title, {
+      hash: designMark(record.design, record.run.polarisation),
+      ...record.run,
+    }));
   await writeRun(folder, record, arrays, undefined, [
     [REPORT_HTML, runPage],
     ...pictures.map(([name, content]) => [name, () => content] as const),
@@ -149,9 +148,4 @@ async function traceReading(
   } finally {
     line.clear();
   }
-}
-
-/** All faults of a design as the sentences that end the command. */
-function designFault(faults: readonly LocatedFault[]): CommandFault {
-  return new CommandFault(EXIT.fault, [...faults.flatMap(faultLines), countFaults(faults)].join('\n'));
 }

@@ -7,7 +7,7 @@ import { termMark } from '../term-mark.js';
 const LONGEST = 400;
 
 /** What the tool would warn a colleague about. */
-export function checksSection({ checks }: RunRecord): Markup | null {
+export function checksSection({ checks }: Pick<RunRecord, 'checks'>): Markup | null {
   if (checks.length === 0) return null;
   return markup`<section id="checks"><h2>Checks${termMark('check')}</h2><ul class="checks">${checks.map(
     ({ code, severity, path, problem, found, expected, suggestion }) =>
