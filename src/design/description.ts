@@ -56,6 +56,7 @@ export interface MediumDescription {
   /** Napierian absorption of the bare solvent or solid, 1/mm. */
   readonly absorption: Curve;
   readonly dyes: readonly DissolvedDye[];
+  readonly scatterers: readonly ScattererDescription[];
   /** Heat data, null where the library has none. */
   readonly thermal: ThermalProperties | null;
 }
@@ -72,6 +73,27 @@ export interface DissolvedDye {
   /** Fluorescence lifetime, ns, null when unknown. */
   readonly lifetimeNs: number | null;
 }
+
+/** What turns light aside within a medium. Several add up. */
+export type ScattererDescription = { readonly name: string; readonly path: DesignPath } & (
+  | {
+      readonly kind: 'henyey-greenstein';
+      /** Scattering coefficient, 1/mm. */
+      readonly coefficient: Curve;
+      /** Mean cosine of the scattering angle, −1..1, both excluded. */
+      readonly anisotropy: Curve;
+    }
+  | {
+      readonly kind: 'beads';
+      /** mm. */
+      readonly radius: number;
+      /** Complex index n − ik of the beads, k > 0 absorbs. */
+      readonly index: Curve;
+      readonly extinction: Curve;
+      /** Volume of all beads over volume of the medium. */
+      readonly volumeFraction: number;
+    }
+);
 
 /** Photons per nm, relative; or one line, which may be any wavelength exactly. */
 export type EmissionDescription =

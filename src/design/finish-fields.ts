@@ -7,8 +7,8 @@ import { listOf, tuple } from './form-lists.js';
 import { quantity } from './form-quantities.js';
 import { mapOf, record } from './form-record.js';
 import { freeText, oneWord } from './form-scalars.js';
-import { WAVELENGTH_RANGE } from './media-fields.js';
 import { mirrorForm } from './mirror-form.js';
+import { WAVELENGTH_RANGE } from './spectral-form.js';
 
 const share = quantity('fraction', { min: 0, max: 1 });
 const wavelength = quantity('wavelength', WAVELENGTH_RANGE);

@@ -17,6 +17,7 @@ import { photometryProof } from './photometry-proof.js';
 import { prismProof } from './prism-proof.js';
 import type { Proof } from './proof.js';
 import { reciprocityProof } from './reciprocity-proof.js';
+import { scatteringMediumProof } from './scattering-medium-proof.js';
 import { slabProof } from './slab-proof.js';
 import { trappedLightProof } from './trapped-light-proof.js';
 import { twoColourSlabProof } from './two-colour-slab-proof.js';
@@ -41,6 +42,7 @@ export const allProofs: readonly Proof[] = [
   slabProof,
   halfSpaceProof,
   twoColourSlabProof,
+  scatteringMediumProof,
   integratingSphereProof,
   lightBoxProof,
   mixingRodProof,

@@ -12,6 +12,7 @@ import type {
   PartDescription,
   PieceDescription,
   PumpDescription,
+  ScattererDescription,
   ShapeDescription,
   Turn,
   Vector3,
@@ -41,6 +42,7 @@ export const air: MediumDescription = {
   index: constant(1),
   absorption: constant(0),
   dyes: [],
+  scatterers: [],
   thermal: null,
 };
 
@@ -48,9 +50,13 @@ export const air: MediumDescription = {
 export function medium(
   name: string,
   index: number,
-  options: { absorption?: number | Curve; dyes?: readonly DissolvedDye[] } = {},
+  options: {
+    absorption?: number | Curve;
+    dyes?: readonly DissolvedDye[];
+    scatterers?: readonly ScattererDescription[];
+  } = {},
 ): MediumDescription {
-  const { absorption = 0, dyes = [] } = options;
+  const { absorption = 0, dyes = [], scatterers = [] } = options;
   return {
     name,
     path: ['media', name],
@@ -59,6 +65,7 @@ export function medium(
     index: constant(index),
     absorption: typeof absorption === 'number' ? constant(absorption) : absorption,
     dyes,
+    scatterers,
     thermal: null,
   };
 }
@@ -78,6 +85,22 @@ export function dye(
     emission: typeof emission === 'number' ? { kind: 'line', wavelengthNm: emission } : emission,
     lifetimeNs: null,
   };
+}
+
+/** Scatters by Henyey and Greenstein's law, `coefficient` 1/mm, mean cosine `anisotropy`. */
+export function haze(coefficient: number, anisotropy: number): ScattererDescription {
+  return {
+    name: 'haze',
+    path: ['scatterers', 'haze'],
+    kind: 'henyey-greenstein',
+    coefficient: constant(coefficient),
+    anisotropy: constant(anisotropy),
+  };
+}
+/** Spheres of a radius in mm, whose complex index is n − ik. */
+export function beads(radius: number, n: number, k: number, volumeFraction: number): ScattererDescription {
+  const path = ['scatterers', 'beads'];
+  return { name: 'beads', path, kind: 'beads', radius, index: constant(n), extinction: constant(k), volumeFraction };
 }
 
 const finish = <Kind extends object>(name: string, kind: Kind) => ({ name, path: ['finishes', name], ...kind });

@@ -22,6 +22,13 @@ export const enum SPREAD {
   gaussian = 2,
   topHat = 3,
 }
+/** What directions in a scattering medium are drawn from. */
+export const enum PHASE {
+  /** Steps of equal probability in a table of cosines. */
+  cells = 1024,
+  /** In place of a table: the law of Henyey and Greenstein. */
+  henyeyGreenstein = -1,
+}
 export const enum BEAM {
   patch = 0,
   gaussian = 1,
@@ -140,12 +147,21 @@ export interface Scene {
   // ---- media
   readonly media: number;
   readonly index: Float64Array; // [medium · wavelengths]
-  readonly attenuation: Float64Array; // 1/mm, sum of all absorbers
+  readonly attenuation: Float64Array; // 1/mm, sum of all absorbers and scatterers
   readonly maxAbsorbers: number;
   readonly absorberCount: Int32Array; // [medium]; absorber 0 is the bare solvent or solid, the others are dyes
   readonly absorberShare: Float64Array; // [(medium · maxAbsorbers + absorber) · wavelengths]: cumulative
   readonly dyeYield: Float64Array; // [medium · maxAbsorbers + absorber]
   readonly dyeSpectrum: Int32Array; // alias table of its emission
+
+  // ---- scatterers of media; where none scatters, maxScatterers is 0 and only scatterShare has entries
+  readonly maxScatterers: number;
+  readonly scatterShare: Float64Array; // [medium · wavelengths]: share of the attenuation that scatters
+  readonly scattererCount: Int32Array; // [medium]
+  readonly scattererShare: Float64Array; // [(medium · maxScatterers + scatterer) · wavelengths]: cumulative
+  readonly phaseTable: Int32Array; // as scattererShare: place in phaseCosine of the table of the knot below, or PHASE.henyeyGreenstein
+  readonly phaseValue: Float64Array; // as scattererShare: odds of the next table, or mean cosine
+  readonly phaseCosine: Float64Array; // tables of PHASE.cells + 1 rising cosines
 
   // ---- finishes
   readonly finishes: number;
