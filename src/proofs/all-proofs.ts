@@ -19,6 +19,7 @@ import type { Proof } from './proof.js';
 import { reciprocityProof } from './reciprocity-proof.js';
 import { scatteringMediumProof } from './scattering-medium-proof.js';
 import { slabProof } from './slab-proof.js';
+import { surfaceScatterProof } from './surface-scatter-proof.js';
 import { trappedLightProof } from './trapped-light-proof.js';
 import { twoColourSlabProof } from './two-colour-slab-proof.js';
 import { viewFactorProof } from './view-factor-proof.js';
@@ -32,6 +33,7 @@ export const allProofs: readonly Proof[] = [
   metalMirrorProof,
   prismProof,
   beamSpreadProof,
+  surfaceScatterProof,
   viewFactorProof,
   meanChordProof,
   parallelBeamProof,

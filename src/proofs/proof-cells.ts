@@ -13,6 +13,7 @@ import type {
   PieceDescription,
   PumpDescription,
   ScattererDescription,
+  ScatterTable,
   ShapeDescription,
   Turn,
   Vector3,
@@ -115,9 +116,17 @@ export function mirror(name: string, reflectance: number): FinishDescription {
 export function diffuser(name: string, reflects: number, transmits = 0): FinishDescription {
   return finish(name, { kind: 'diffuser' as const, reflects, transmits });
 }
-/** A sheet that passes everything, spread about the straight way by `fwhm`, rad. */
-export function scatterer(name: string, shape: 'gaussian' | 'top-hat', fwhm: number): FinishDescription {
-  return finish(name, { kind: 'scatter' as const, shape, fwhm, split: { reflects: 0, transmits: 1 } });
+/** A sheet that passes everything, spread about the straight way by `fwhm`, rad; a pair along u and v. */
+export function spreadingSheet(
+  name: string,
+  shape: 'gaussian' | 'top-hat',
+  fwhm: number | readonly [number, number],
+): FinishDescription {
+  const widths = typeof fwhm === 'number' ? ([fwhm, fwhm] as const) : fwhm;
+  return finish(name, { kind: 'scatter' as const, shape, fwhm: widths, split: { reflects: 0, transmits: 1 } });
+}
+export function scatterTable(name: string, table: ScatterTable): FinishDescription {
+  return finish(name, { kind: 'bsdf' as const, ...table });
 }
 export function metal(name: string, n: number, k: number): FinishDescription {
   return finish(name, { kind: 'metal' as const, metal: name, n: constant(n), k: constant(k) });

@@ -267,6 +267,8 @@ function opaque(finish: FinishDescription): boolean {
       return finish.transmits === 0;
     case 'scatter':
       return finish.split?.transmits === 0;
+    case 'bsdf':
+      return finish.transmitted.every((polar) => polar.every((row) => row.every((value) => value === 0)));
     case 'table':
       return finish.transmittance.every((row) => row.every((value) => value === 0));
     default:

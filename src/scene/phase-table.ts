@@ -14,29 +14,30 @@ export const phasePanels = ({ order }: MieSeries): number => Math.max(LEAST_PANE
  */
 export function phaseTable(series: MieSeries): Float64Array {
   const panels = phasePanels(series);
-  // Edges even in angle, from straight back to straight ahead.
-  const cosine = Float64Array.from({ length: panels + 1 }, (_, i) => -Math.cos((Math.PI * i) / panels));
+  // Panels even in angle, from straight back to straight ahead; Simpson's rule in each.
+  const edge = Float64Array.from({ length: panels + 1 }, (_, i) => density(series, i / panels));
   const cumulative = new Float64Array(panels + 1);
-  let low = density(series, 0);
   for (let i = 0; i < panels; i++) {
-    const high = density(series, (i + 1) / panels);
-    // Simpson's rule over the angle.
-    cumulative[i + 1] = cumulative[i] + low + 4 * density(series, (i + 0.5) / panels) + high;
-    low = high;
+    cumulative[i + 1] = cumulative[i] + edge[i] + 4 * density(series, (i + 0.5) / panels) + edge[i + 1];
   }
   const table = new Float64Array(PHASE.cells + 1);
-  const total = cumulative[panels];
   let panel = 0;
   for (let cell = 0; cell <= PHASE.cells; cell++) {
-    const wanted = (total * cell) / PHASE.cells;
+    const wanted = (cumulative[panels] * cell) / PHASE.cells;
     while (panel < panels - 1 && cumulative[panel + 1] < wanted) panel++;
     const width = cumulative[panel + 1] - cumulative[panel];
     const share = width > 0 ? Math.min(1, (wanted - cumulative[panel]) / width) : 0;
-    table[cell] = cosine[panel] + share * (cosine[panel + 1] - cosine[panel]);
+    table[cell] = -Math.cos((Math.PI * (panel + linearQuantile(edge[panel], edge[panel + 1], share))) / panels);
   }
   table[0] = -1;
   table[PHASE.cells] = 1;
   return table;
+}
+
+/** Where in 0..1 a density that runs straight from `low` to `high` has `share` of its area behind it. */
+function linearQuantile(low: number, high: number, share: number): number {
+  const root = Math.sqrt(low * low + share * (high * high - low * low));
+  return low + root > 0 ? (share * (low + high)) / (low + root) : share;
 }
 
 /** Probability per angle, not normalised, at a share of the way from straight back to straight ahead. */

@@ -19,8 +19,8 @@ const HISTORIES_PER_PILE = 2048;
 const finishes: readonly FinishDescription[] = [
   finish('half-mirror', { kind: 'mirror', reflectance: 0.7 }),
   finish('white', { kind: 'diffuser', reflects: 0.6, transmits: 0.3 }),
-  finish('frosted', { kind: 'scatter', shape: 'gaussian', fwhm: 0.3, split: null }),
-  finish('hat', { kind: 'scatter', shape: 'top-hat', fwhm: 0.8, split: { reflects: 0.4, transmits: 0.5 } }),
+  finish('frosted', { kind: 'scatter', shape: 'gaussian', fwhm: [0.3, 0.3], split: null }),
+  finish('hat', { kind: 'scatter', shape: 'top-hat', fwhm: [0.8, 0.8], split: { reflects: 0.4, transmits: 0.5 } }),
 ];
 const FINISHES = ['', 'half-mirror', 'white', 'frosted', 'hat', 'black', 'clear'];
 

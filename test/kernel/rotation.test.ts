@@ -20,7 +20,7 @@ const finishes = [
   finish('silver', { kind: 'mirror', reflectance: 0.94 }),
   finish('aluminium', { kind: 'metal', metal: 'aluminium', n: () => 0.6, k: () => 5.4 }),
   finish('white', { kind: 'diffuser', reflects: 0.8, transmits: 0.1 }),
-  finish('frosted', { kind: 'scatter', shape: 'gaussian', fwhm: 0.4, split: null }),
+  finish('frosted', { kind: 'scatter', shape: 'gaussian', fwhm: [0.4, 0.4], split: null }),
   finish('blue-pass', {
     kind: 'dichroic',
     edgeNm: 490,
