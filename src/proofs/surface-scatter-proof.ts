@@ -27,14 +27,12 @@ const STEEP: ScatterTable = {
   reflected: [Array.from({ length: 91 }, () => [0])],
   transmitted: [Array.from({ length: 91 }, (_, i) => [(1.5 / Math.PI) * Math.cos(radians(i))])],
 };
-/** f = (1 + cos φ)/(2π), φ from the side light heads for: forward of the normal goes 1/2 + 1/π of it. */
+/** f = (1 + cos φ)/π, φ from the side light heads for: forward of the normal goes 1/2 + 1/π of it. */
 const FORWARD: ScatterTable = {
   ...{ incidenceDeg: [0, 90], scatterDeg: [0, 90], azimuthDeg: Array.from({ length: 61 }, (_, i) => 3 * i) },
   reflected: Array.from({ length: 2 }, () => Array.from({ length: 2 }, () => new Array<number>(61).fill(0))),
   transmitted: Array.from({ length: 2 }, () =>
-    Array.from({ length: 2 }, () =>
-      Array.from({ length: 61 }, (_, i) => (1 + Math.cos(radians(3 * i))) / (2 * Math.PI)),
-    ),
+    Array.from({ length: 2 }, () => Array.from({ length: 61 }, (_, i) => (1 + Math.cos(radians(3 * i))) / Math.PI)),
   ),
 };
 
@@ -78,7 +76,7 @@ const SHEETS: readonly Sheet[] = [
     ] as const
   ).map(([along, stop]) => ({
     label: `top-hat scatter of 4° by 1°, within half its width along ${along}`,
-    against: 'middle half of an ellipse: (√3/2 + π/3)/π · … = 2/π (asin ½ + ½ √¾)',
+    against: 'middle half of an ellipse: 2/π (asin ½ + ½ √¾)',
     ...{ finish: oval('top-hat'), stop, at: above, tolerance: SMALL_ANGLE },
     expected: (2 / Math.PI) * (Math.asin(0.5) + 0.5 * Math.sqrt(0.75)),
   })),
@@ -100,7 +98,7 @@ const SHEETS: readonly Sheet[] = [
     expected: 1 - Math.cos(radians(30)) ** 3,
   },
   {
-    label: 'table of (1 + cos φ)/(2π) hit at 30°, on the half plane it heads for',
+    label: 'table of (1 + cos φ)/π hit at 30°, on the half plane it heads for',
     against: '1/2 + 1/π',
     along: [0.5, 0, Math.cos(radians(30))],
     finish: scatterTable('sheet', FORWARD),

@@ -1,8 +1,9 @@
 /** Scatterers of the media -> coefficients over the wavelength grid, and what their directions are drawn from. */
 import type { MediumDescription, ScattererDescription } from '../design/description.js';
-import { beadScattering, beadSize } from '../optics/bead-scattering.js';
+import { beadSize } from '../optics/bead-scattering.js';
 import { mieSeries } from '../optics/mie.js';
 import { phasePanels, phaseTable } from './phase-table.js';
+import { scatteringAt } from './scattering-at.js';
 import { PHASE } from './scene-layout.js';
 import type { WavelengthGrid } from './wavelength-grid.js';
 
@@ -75,17 +76,12 @@ function coefficients(
   medium: MediumDescription,
   { nm }: WavelengthGrid,
 ): Coefficients {
-  if (scatterer.kind === 'henyey-greenstein') {
-    return { scattering: nm.map(scatterer.coefficient), absorption: new Float64Array(nm.length) };
-  }
-  const { radius, index, extinction, volumeFraction } = scatterer;
-  const perMm3 = volumeFraction / ((4 / 3) * Math.PI * radius ** 3);
   const scattering = new Float64Array(nm.length);
   const absorption = new Float64Array(nm.length);
   nm.forEach((at, w) => {
-    const bead = beadScattering(radius, index(at), extinction(at), medium.index(at), at);
-    scattering[w] = perMm3 * bead.scattering;
-    absorption[w] = perMm3 * bead.absorption;
+    const found = scatteringAt(scatterer, medium, at);
+    scattering[w] = found.scattering;
+    absorption[w] = found.absorption;
   });
   return { scattering, absorption };
 }
