@@ -1,7 +1,7 @@
 /** Scatterers of the media -> coefficients over the wavelength grid, and what their directions are drawn from. */
 import type { MediumDescription, ScattererDescription } from '../design/description.js';
 import { beadSize } from '../optics/bead-scattering.js';
-import { mieSeries } from '../optics/mie.js';
+import { type MieSeries, mieSeries } from '../optics/mie.js';
 import { phasePanels, phaseTable } from './phase-table.js';
 import { scatteringAt } from './scattering-at.js';
 import { PHASE } from './scene-layout.js';
@@ -92,11 +92,12 @@ function coefficients(
  */
 function tabulate(
   out: CompiledScatterers,
-  { radius, index, extinction }: Extract<ScattererDescription, { kind: 'beads' }>,
+  scatterer: Extract<ScattererDescription, { kind: 'beads' }>,
   medium: MediumDescription,
   { nm }: WavelengthGrid,
   first: number,
 ): void {
+  const { radius, index, extinction } = scatterer;
   const seriesAt = (at: number) => {
     const around = medium.index(at);
     return mieSeries(beadSize(radius, around, at), index(at) / around, extinction(at) / around);
@@ -109,11 +110,24 @@ function tabulate(
   const base = out.cosines.length;
   const step = (high - low) / (knots - 1);
   for (let knot = 0; knot < knots; knot++) {
-    for (const cosine of phaseTable(seriesAt(low + knot * step))) out.cosines.push(cosine);
+    for (const cosine of knownTable(scatterer, seriesAt(low + knot * step))) out.cosines.push(cosine);
   }
   nm.forEach((at, w) => {
     const knot = Math.min(knots - 2, Math.floor((at - low) / step));
     out.table[first + w] = base + knot * stride;
     out.value[first + w] = (at - low) / step - knot;
   });
+}
+
+/** A scene is compiled several times in a run; large beads take a second each time. */
+const known = new WeakMap<ScattererDescription, Map<string, Float64Array>>();
+
+function knownTable(scatterer: ScattererDescription, series: MieSeries): Float64Array {
+  const tables = known.get(scatterer) ?? new Map<string, Float64Array>();
+  known.set(scatterer, tables);
+  // The first coefficients tell spheres of one size apart by their index.
+  const key = [series.size, ...series.a.subarray(0, 4), ...series.b.subarray(0, 4)].join(' ');
+  const table = tables.get(key) ?? phaseTable(series);
+  tables.set(key, table);
+  return table;
 }
