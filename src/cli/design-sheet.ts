@@ -66,10 +66,12 @@ function finishWords(finish: FinishDescription): string {
       return `dichroic, edge ${significant(finish.edgeNm, 6)} nm, passes ${finish.passes}, transmits ${percent(finish.transmits)}, reflects ${percent(finish.reflects)}`;
     case 'table':
       return 'shares from a table of wavelengths and angles';
+    case 'bsdf':
+      return 'scatters as a table of angles says';
     case 'diffuser':
       return `Lambertian, reflects ${percent(finish.reflects)}, transmits ${percent(finish.transmits)}`;
     case 'scatter':
-      return `scatters, ${finish.shape}, FWHM ${degrees(finish.fwhm)}${finish.split === null ? '' : `, reflects ${percent(finish.split.reflects)}, transmits ${percent(finish.split.transmits)}`}`;
+      return `scatters, ${finish.shape}, FWHM ${finish.fwhm.map(degrees).join(' × ')}${finish.split === null ? '' : `, reflects ${percent(finish.split.reflects)}, transmits ${percent(finish.split.transmits)}`}`;
   }
 }
 

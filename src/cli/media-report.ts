@@ -1,4 +1,5 @@
 import type { Description, MediumDescription } from '../design/description.js';
+import { absorptionAt, scatteringAt } from '../scene/scattering-at.js';
 import { significant } from './number-format.js';
 import { safeText } from './safe-text.js';
 import type { TerminalStyle } from './terminal-style.js';
@@ -17,6 +18,13 @@ export interface MediumReport {
     readonly dye: string;
     readonly millimolesPerLitre: number | null;
     readonly quantumYield: number;
+  }[];
+  readonly scatterers: readonly {
+    readonly scatterer: string;
+    /** Mean free path between two scatterings, mm; null where it does not scatter. */
+    readonly freePathMm: number | null;
+    /** Mean cosine of the scattering angle. */
+    readonly anisotropy: number;
   }[];
 }
 
@@ -39,6 +47,10 @@ export function reportMedia(description: Description): MediumReport[] {
         millimolesPerLitre: dye.concentration === null ? null : dye.concentration * 1e3,
         quantumYield: dye.quantumYield,
       })),
+      scatterers: medium.scatterers.map((scatterer) => {
+        const { scattering, anisotropy } = scatteringAt(scatterer, medium, atNm);
+        return { scatterer: scatterer.name, freePathMm: scattering > 0 ? 1 / scattering : null, anisotropy };
+      }),
     }));
 }
 
@@ -54,15 +66,16 @@ export function mediaLines(media: readonly MediumReport[], style: TerminalStyle)
       safeText(report.base),
       `index ${report.index.toFixed(4)} and ${depth} at ${significant(report.atNm, 5)} nm`,
       ...dyes,
+      ...report.scatterers.map(({ scatterer, freePathMm, anisotropy }) => {
+        const free = freePathMm === null ? 'does not scatter' : `mean free path ${significant(freePathMm, 3)} mm`;
+        return `${safeText(scatterer)}: ${free}, mean cosine ${anisotropy.toFixed(3)}`;
+      }),
     ];
     return `  ${style.bold(safeText(report.medium))} in ${report.parts.map((part) => safeText(part)).join(', ')}: ${facts.join('; ')}`;
   });
 }
 
 function depthAt(medium: MediumDescription, wavelengthNm: number): number | null {
-  const absorption = medium.dyes.reduce(
-    (sum, dye) => sum + dye.absorption(wavelengthNm),
-    medium.absorption(wavelengthNm),
-  );
+  const absorption = absorptionAt(medium, wavelengthNm);
   return absorption > 0 ? 1 / absorption : null;
 }

@@ -8,6 +8,7 @@ import type { FinishRecord } from './finish-fields.js';
 import type { Named } from './form-record.js';
 import type { Mirror } from './mirror-form.js';
 import type { Reading } from './reading.js';
+import { readScatterTable } from './scatter-table.js';
 
 type Finish<Kind extends FinishDescription['kind']> = Extract<FinishDescription, { kind: Kind }>;
 type Identity = Pick<FinishDescription, 'name' | 'path'>;
@@ -24,7 +25,7 @@ export function describeFinishes(design: DesignRecord, reading: Reading): Map<st
 
 function describeFinish({ name, path, value }: Named<FinishRecord>, reading: Reading): FinishDescription | null {
   const identity = { name, path };
-  const { mirror, dichroic, table, diffuser, scatter } = value;
+  const { mirror, dichroic, table, diffuser, scatter, bsdf } = value;
   if (mirror !== null) return describeMirror(mirror, identity);
   if (dichroic !== null) return describeDichroic(dichroic, identity, reading);
   if (table !== null) {
@@ -35,6 +36,10 @@ function describeFinish({ name, path, value }: Named<FinishRecord>, reading: Rea
     const { reflects, transmits } = diffuser;
     checkEnergy(reflects + transmits, 'reflects + transmits', [...path, 'diffuser'], reading);
     return { ...identity, kind: 'diffuser', reflects, transmits };
+  }
+  if (bsdf !== null) {
+    const measured = readScatterTable(bsdf, [...path, 'bsdf'], reading);
+    return measured && { ...identity, kind: 'bsdf', ...measured };
   }
   return scatter && describeScatter(scatter, identity, reading);
 }

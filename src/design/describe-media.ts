@@ -9,6 +9,7 @@ import {
   solventNames,
 } from '../materials/library.js';
 import { type Dye, describeOwnDye, dissolveDye } from './describe-dyes.js';
+import { describeScatterer } from './describe-scatterers.js';
 import type { MediumDescription } from './description.js';
 import type { DesignRecord } from './design-fields.js';
 import type { DesignPath } from './fault.js';
@@ -19,7 +20,7 @@ import { checkReference } from './names.js';
 import { checkAscending, pointCurve } from './point-curve.js';
 import type { Reading } from './reading.js';
 
-type Base = Omit<MediumDescription, 'name' | 'path' | 'dyes'>;
+type Base = Omit<MediumDescription, 'name' | 'path' | 'dyes' | 'scatterers'>;
 
 /** All media of the design, and the library materials that parts and surroundings name directly. */
 export function describeMedia(design: DesignRecord, reading: Reading): Map<string, MediumDescription> {
@@ -37,7 +38,8 @@ export function describeMedia(design: DesignRecord, reading: Reading): Map<strin
     const problem = 'no medium of the design and no material of the library has this name';
     if (!checkReference(medium, names, problem, reading)) continue;
     const base = libraryMaterial(medium.name);
-    if (base !== null) media.set(medium.name, { name: medium.name, path: medium.path, ...base, dyes: [] });
+    if (base !== null)
+      media.set(medium.name, { name: medium.name, path: medium.path, ...base, dyes: [], scatterers: [] });
   }
   return media;
 }
@@ -68,14 +70,16 @@ function describeMedium(
     if (!checkReference(value.material, libraryNames(), 'no material of the library has this name', reading))
       return null;
     const base = libraryMaterial(value.material.name);
-    return base && { name, path, ...base, dyes: [] };
+    return base && { name, path, ...base, dyes: [], scatterers: [] };
   }
   const { fields } = value;
   const base = describeBase(fields, path, reading);
   // The dyes are looked at even when the base is unknown, so that all faults come at once.
   const host = { base: base?.base ?? 'custom', pH: fields.pH };
   const dyes = fields.dyes.flatMap((dye) => dissolveDye(dye, ownDyes, host, reading) ?? []);
-  return base && { name, path, ...base, dyes };
+  const hostDensity = base?.thermal?.densityKgPerM3 ?? null;
+  const scatterers = fields.scatterers.flatMap((entry) => describeScatterer(entry, hostDensity, reading) ?? []);
+  return base && { name, path, ...base, dyes, scatterers };
 }
 
 function describeBase(fields: MediumRecord, path: DesignPath, reading: Reading): Base | null {

@@ -58,6 +58,7 @@ export interface MediumDescription {
   /** Napierian absorption of the bare solvent or solid, 1/mm. */
   readonly absorption: Curve;
   readonly dyes: readonly DissolvedDye[];
+  readonly scatterers: readonly ScattererDescription[];
   /** Heat data, null where the library has none. */
   readonly thermal: ThermalProperties | null;
 }
@@ -74,6 +75,27 @@ export interface DissolvedDye {
   /** Fluorescence lifetime, ns, null when unknown. */
   readonly lifetimeNs: number | null;
 }
+
+/** What turns light aside within a medium. Several add up. */
+export type ScattererDescription = { readonly name: string; readonly path: DesignPath } & (
+  | {
+      readonly kind: 'henyey-greenstein';
+      /** Scattering coefficient, 1/mm. */
+      readonly coefficient: Curve;
+      /** Mean cosine of the scattering angle, −1..1, both excluded. */
+      readonly anisotropy: Curve;
+    }
+  | {
+      readonly kind: 'beads';
+      /** mm. */
+      readonly radius: number;
+      /** Complex index n − ik of the beads, k > 0 absorbs. */
+      readonly index: Curve;
+      readonly extinction: Curve;
+      /** Volume of all beads over volume of the medium. */
+      readonly volumeFraction: number;
+    }
+);
 
 /** Photons per nm, relative; or one line, which may be any wavelength exactly. */
 export type EmissionDescription =
@@ -124,16 +146,33 @@ export type FinishDescription = { readonly name: string; readonly path: DesignPa
   /** Lambertian in both directions; the rest is absorbed. */
   | { readonly kind: 'diffuser'; readonly reflects: number; readonly transmits: number }
   /**
-   * Scatter about the specular or refracted direction; `fwhm` is the full width of the radiant intensity, rad.
+   * Scatter about the specular or refracted direction; `fwhm` is the full width of the radiant intensity along the face's u and v, rad.
    * With `split` null the Fresnel law says what is reflected; otherwise the stated shares, the rest absorbed.
    */
   | {
       readonly kind: 'scatter';
       readonly shape: 'gaussian' | 'top-hat';
-      readonly fwhm: number;
+      readonly fwhm: Vector2;
       readonly split: { readonly reflects: number; readonly transmits: number } | null;
     }
+  /** Scatter as measured: a function of both directions, the same at all wavelengths. */
+  | ({ readonly kind: 'bsdf' } & ScatterTable)
 );
+
+/**
+ * Bidirectional scattering distribution function, 1/sr: radiance out over irradiance in. Angles in degrees from the normal, rising;
+ * azimuth from the side light heads for (0) to where it came from (180), the same on both sides of the plane of incidence. Linear between
+ * rows; held beyond the first and the last incidence and below the first scatter angle, nothing beyond the last one.
+ */
+export interface ScatterTable {
+  readonly incidenceDeg: readonly number[];
+  readonly scatterDeg: readonly number[];
+  /** One entry where it does not matter. */
+  readonly azimuthDeg: readonly number[];
+  /** [incidence][scatter][azimuth]. */
+  readonly reflected: readonly (readonly (readonly number[])[])[];
+  readonly transmitted: readonly (readonly (readonly number[])[])[];
+}
 
 // ------------------------------------------------------------------------------------------------- parts
 

@@ -3,12 +3,12 @@
 import type { Form } from './form.js';
 import { optional, required, withDefault } from './form.js';
 import { either, mapped } from './form-either.js';
-import { listOf, tuple } from './form-lists.js';
+import { listOf, pair, tuple } from './form-lists.js';
 import { quantity } from './form-quantities.js';
 import { mapOf, record } from './form-record.js';
 import { freeText, oneWord } from './form-scalars.js';
-import { WAVELENGTH_RANGE } from './media-fields.js';
 import { mirrorForm } from './mirror-form.js';
+import { WAVELENGTH_RANGE } from './spectral-form.js';
 
 const share = quantity('fraction', { min: 0, max: 1 });
 const wavelength = quantity('wavelength', WAVELENGTH_RANGE);
@@ -48,15 +48,23 @@ const diffuser = record('reflects and transmits', {
   transmits: withDefault(share, 0, '0 %', 'Share let through, Lambertian.'),
 });
 
+const fullWidth = quantity('angle', { above: 0, max: Math.PI });
+
 const scatter = record('shape and fwhm', {
   shape: required(oneWord('gaussian', 'top-hat'), 'Shape of the radiant intensity about the undisturbed direction.'),
-  fwhm: required(quantity('angle', { above: 0, max: Math.PI }), 'Full width of it at half maximum.'),
+  fwhm: required(
+    either<readonly [number, number]>({
+      scalar: mapped(fullWidth, (width) => [width, width] as const),
+      list: pair(fullWidth, '[along u, along v]'),
+    }),
+    "Full width of it at half maximum; or two of them, along the face's u and v axes.",
+  ),
   reflects: optional(share, 'Share reflected. Without `reflects` and `transmits` the Fresnel law decides.'),
   transmits: optional(share, 'Share transmitted.'),
 });
 
 const finishRecord = record(
-  'one of mirror, dichroic, table, diffuser, scatter',
+  'one of mirror, dichroic, table, diffuser, scatter, bsdf',
   {
     mirror: optional(mirrorForm, 'Share reflected at every angle and wavelength, or a metal of the library.'),
     dichroic: optional(dichroic, 'Idealised dichroic, the same at all angles.'),
@@ -67,8 +75,13 @@ const finishRecord = record(
     ),
     diffuser: optional(diffuser, 'Lambertian diffuser; what is neither reflected nor transmitted is absorbed.'),
     scatter: optional(scatter, 'Scatter about the reflected and the refracted direction.'),
+    bsdf: optional(
+      freeText('a CSV file in the folder of the design', 300),
+      'Scatter as measured: a CSV file with the columns incidence_deg, scatter_deg, azimuth_deg (may be left out), and ' +
+        'reflected_per_sr, transmitted_per_sr or both.',
+    ),
   },
-  { exactlyOne: [['mirror', 'dichroic', 'table', 'diffuser', 'scatter']] },
+  { exactlyOne: [['mirror', 'dichroic', 'table', 'diffuser', 'scatter', 'bsdf']] },
 );
 
 export type FinishRecord = ReturnType<typeof finishRecord.read>;

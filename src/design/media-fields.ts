@@ -1,33 +1,13 @@
 /** Fields of media and of dyes given in the design itself. */
 import { optional, required, withDefault } from './form.js';
 import { either, mapped } from './form-either.js';
-import { listOf, tuple } from './form-lists.js';
 import { quantity, quantityOf } from './form-quantities.js';
 import { mapOf, record } from './form-record.js';
 import { oneWord, type Reference, reference } from './form-scalars.js';
-
-/** Light the tables of the library and of the CIE speak about, with room at both ends. */
-export const WAVELENGTH_RANGE = { min: 200, max: 2000 };
-const LONGEST_TABLE = 10_000;
-
-/** A value that is the same at all wavelengths (one row, wavelength null) or a table of [wavelength, value]. */
-export type SpectralRows = readonly (readonly [wavelengthNm: number | null, value: number])[];
+import { scatterersForm } from './scatterer-fields.js';
+import { rowsOf, type SpectralRows, spectral, WAVELENGTH_RANGE } from './spectral-form.js';
 
 const wavelength = quantity('wavelength', WAVELENGTH_RANGE);
-
-const rowsOf = (value: ReturnType<typeof quantity>, words: string) =>
-  listOf(
-    mapped(tuple<[number, number]>(`[wavelength, ${words}]`, wavelength, value), (row): SpectralRows[number] => row),
-    `a list of [wavelength, ${words}] pairs`,
-    2,
-    LONGEST_TABLE,
-  );
-
-const spectral = (value: ReturnType<typeof quantity>, words: string) =>
-  either<SpectralRows>({
-    scalar: mapped(value, (constant): SpectralRows => [[null, constant]]),
-    list: rowsOf(value, words),
-  });
 
 const strength = quantityOf(['concentration', 'massConcentration', 'number'], { min: 0 });
 
@@ -58,6 +38,12 @@ const mediumRecord = record(
     pH: optional(quantity('number', { min: 0, max: 14 }), 'pH of a solution in a solvent.'),
     absorption,
     dyes,
+    scatterers: withDefault(
+      scatterersForm,
+      [],
+      'none',
+      'What turns light aside within the medium, by names of your own; several add up.',
+    ),
   },
   { exactlyOne: [['solvent', 'solid', 'index']] },
 );

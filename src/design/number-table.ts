@@ -1,37 +1,21 @@
-/** Tables of numbers in CSV beside a design: a heading with the column names in any order, then plain numbers; '#' starts a comment. */
-import type { DesignPath, FaultCode } from './fault.js';
+/** Tables of numbers in CSV beside a design, found, read and complained about. */
+import type { DesignPath } from './fault.js';
+import { type NumberColumn, type NumberRow, readNumberRows } from './number-csv.js';
 import type { Complaint, Reading } from './reading.js';
 
-export interface TableColumn<Name extends string> {
-  /** As the heading says it, with its unit: `angle_deg`. */
-  readonly name: Name;
-  readonly least: number;
-  readonly most: number;
-  /** A column that may be left out reads as NaN. */
-  readonly optional?: true;
-}
-
-export interface TableRow<Name extends string> {
-  readonly values: Readonly<Record<Name, number>>;
-  readonly line: number;
-}
-
-export interface NumberTable<Name extends string> {
-  readonly rows: readonly TableRow<Name>[];
+export interface NumberTable<F extends string> {
+  readonly rows: readonly NumberRow<F>[];
   /** Complains about a row of the file. */
   readonly complain: (line: number, complaint: Omit<Complaint, 'path'>) => void;
 }
 
-const NUMBER = /^[+-]?(\d+\.?\d*|\.\d+)([eE][+-]?\d+)?$/;
-const MOST_FAULTS = 20;
-
 /** The rows, or null after reporting what is wrong with the file. @param path of the field that names it */
-export function readNumberTable<Name extends string>(
+export function readNumberTable<F extends string>(
   file: string,
-  columns: readonly TableColumn<Name>[],
+  columns: readonly NumberColumn<F>[],
   path: DesignPath,
   reading: Reading,
-): NumberTable<Name> | null {
+): NumberTable<F> | null {
   if (file === '') return null;
   const table = reading.readTable(file);
   if (!table.ok) {
@@ -40,66 +24,11 @@ export function readNumberTable<Name extends string>(
     reading.report({ code: 'file', path, problem, found: file, expected, ...hint });
     return null;
   }
-  let faults = 0;
-  const complain = (line: number, complaint: Omit<Complaint, 'path'>, column = 1) => {
-    if (faults++ < MOST_FAULTS) reading.report({ ...complaint, path }, { file: table.file, line, column });
-  };
-  const heading = columns.map(({ name, optional }) => (optional ? `[${name}]` : name)).join(',');
-  let order: (TableColumn<Name> | undefined)[] | null = null;
-  const rows: TableRow<Name>[] = [];
-  const lines = table.text.replace(/^\uFEFF/, '').split(/\r\n|\n|\r/);
-  for (const [i, content] of lines.entries()) {
-    if (content.trim() === '' || content.trimStart().startsWith('#')) continue;
-    if (faults >= MOST_FAULTS) break;
-    const cells = splitCells(content);
-    if (order === null) {
-      order = cells.map(({ text }) => columns.find(({ name }) => name === text));
-      const absent = columns.filter((column) => !column.optional && !order?.includes(column));
-      if (absent.length > 0) {
-        const problem = `the heading lacks ${absent.map(({ name }) => name).join(', ')}`;
-        complain(i + 1, { code: 'file', problem, found: cells.map(({ text }) => text).join(','), expected: heading });
-        return null;
-      }
-    } else rows.push({ values: readRow(cells, order, columns, i + 1, complain), line: i + 1 });
+  const { rows, faults } = readNumberRows(table.text, columns);
+  const complain = (line: number, complaint: Omit<Complaint, 'path'>, column = 1) =>
+    reading.report({ ...complaint, path }, { file: table.file, line, column });
+  for (const { line, column, code, ...fault } of faults) {
+    complain(line, { ...fault, code: code === 'finish' ? 'file' : code }, column);
   }
-  if (rows.length === 0 && faults === 0) {
-    complain(1, { code: 'file', problem: 'the table has no rows', expected: `columns ${heading} and rows of numbers` });
-  }
-  return faults > 0 ? null : { rows, complain };
-}
-
-interface Cell {
-  readonly text: string;
-  readonly column: number;
-}
-
-function splitCells(line: string): Cell[] {
-  let start = 0;
-  return line.split(',').map((raw) => {
-    const column = start + raw.length - raw.trimStart().length + 1;
-    start += raw.length + 1;
-    return { text: raw.trim().replace(/^"(.*)"$/, '$1'), column };
-  });
-}
-
-function readRow<Name extends string>(
-  cells: readonly Cell[],
-  order: readonly (TableColumn<Name> | undefined)[],
-  columns: readonly TableColumn<Name>[],
-  line: number,
-  complain: (line: number, complaint: Omit<Complaint, 'path'>, column?: number) => void,
-): Record<Name, number> {
-  const values = Object.fromEntries(columns.map(({ name }) => [name, Number.NaN])) as Record<Name, number>;
-  order.forEach((column, i) => {
-    if (column === undefined) return;
-    const { text, column: at } = cells[i] ?? { text: '', column: 1 };
-    const { name, least, most } = column;
-    const value = NUMBER.test(text) ? Number(text) : Number.NaN;
-    values[name] = value;
-    if (value >= least && value <= most) return;
-    const code: FaultCode = Number.isNaN(value) ? 'quantity' : 'range';
-    const problem = Number.isNaN(value) ? `${name} is not a number` : `${name} is out of range`;
-    complain(line, { code, problem, found: text || 'nothing', expected: `${least} to ${most}` }, at);
-  });
-  return values;
+  return faults.length > 0 ? null : { rows, complain };
 }

@@ -2,8 +2,8 @@
 import { linearCurve } from '../numerics/interpolate.js';
 import type { Curve } from '../units/curve.js';
 import type { DesignPath } from './fault.js';
-import type { SpectralRows } from './media-fields.js';
 import type { Reading } from './reading.js';
+import type { SpectralRows } from './spectral-form.js';
 
 /** Linear between the rows, held or zero beyond the ends; constant for a single value; NaN for rows that were faulty. */
 export function pointCurve(rows: SpectralRows, outside: 'hold' | 'zero'): Curve {

@@ -5,8 +5,8 @@ import { pair, triple } from './form-lists.js';
 import { count, quantity } from './form-quantities.js';
 import { mapOf, record } from './form-record.js';
 import { freeText, oneWord, reference } from './form-scalars.js';
-import { WAVELENGTH_RANGE } from './media-fields.js';
 import { anyLength, size } from './part-fields.js';
+import { WAVELENGTH_RANGE } from './spectral-form.js';
 
 const halfTurn = quantity('angle', { min: 0, below: Math.PI });
 const tilt = quantity('angle', { above: -Math.PI / 2, below: Math.PI / 2 });

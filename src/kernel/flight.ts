@@ -5,7 +5,7 @@
  */
 import { BLOCK } from '../numerics/random-stream.js';
 import { CROSSING, FLAG, INTERFACE, type RegionGraph } from '../scene/region-graph.js';
-import { DYE_SLOT, FACE_SLOT, OWNER_SLOT, type Scene, SLOT, SPLIT } from '../scene/scene-layout.js';
+import { DYE_SLOT, FACE_SLOT, OWNER_SLOT, PHASE, type Scene, SLOT, SPLIT } from '../scene/scene-layout.js';
 import { FIGURE_COUNT, FIGURE_PLACE } from '../tallies/run-tallies.js';
 import { NOW, RAY } from './photon.js';
 import { REFLECTED, WALL } from './wall.js';
@@ -76,6 +76,9 @@ export function createFlight(scene: Scene, graph: RegionGraph, desk: FlightDesk)
   const maxAbsorbers = scene.maxAbsorbers;
   const { index, attenuation, absorberCount, absorberShare, dyeYield, dyeSpectrum } = scene;
   const { energyQuanta, faceSlot, ownerSlot, dyeSlot, faceRecorderOut } = scene;
+  /** Where nothing scatters, nothing is asked. */
+  const turbid = scene.maxScatterers > 0;
+  const { maxScatterers, scatterShare, scattererCount, scattererShare, phaseTable, phaseValue, phaseCosine } = scene;
   const { finishSplit, finishA, finishB, spectrumKeep, spectrumOther } = scene;
   const { bound, neighbour, crossing, walls, wallsSince } = graph;
   const { ray, now, units, exponentials, vector, spectra, depositCell, depositQuanta } = desk;
@@ -363,6 +366,80 @@ export function createFlight(scene: Scene, graph: RegionGraph, desk: FlightDesk)
         }
       }
 
+      if (absorbed && turbid) {
+        const scatters = scatterShare[(Math.imul(medium, wavelengths) + wavelength) | 0];
+        if (scatters > 0) {
+          const pick = units[draw];
+          draw = (draw + 1) | 0;
+          if (pick < scatters) {
+            // Turned aside: still the same light.
+            let row = (Math.imul(Math.imul(medium, maxScatterers), wavelengths) + wavelength) | 0;
+            if (scattererCount[medium] > 1) {
+              const which = units[draw];
+              draw = (draw + 1) | 0;
+              while (which >= scattererShare[row]) row = (row + wavelengths) | 0;
+            }
+            const value = phaseValue[row];
+            const unit1 = units[draw];
+            draw = (draw + 1) | 0;
+            let table = phaseTable[row];
+            let cosine = 2 * unit1 - 1;
+            if (table === PHASE.henyeyGreenstein) {
+              // Henyey & Greenstein, Astrophys. J. 93 70 (1941), inverted; near 0 the closed form divides 0 by 0.
+              if (value > 1e-6 || value < -1e-6) {
+                const lean = (1 - value * value) / (1 + value * cosine);
+                cosine = (1 + value * value - lean * lean) / (2 * value);
+              }
+            } else {
+              if (units[draw] < value) table = (table + PHASE.cells + 1) | 0;
+              draw = (draw + 1) | 0;
+              const place = unit1 * PHASE.cells;
+              const cell = place | 0;
+              const low = phaseCosine[(table + cell) | 0];
+              cosine = low + (place - cell) * (phaseCosine[(table + cell + 1) | 0] - low);
+            }
+            let sideP = 0;
+            let sideQ = 0;
+            let side2 = 0;
+            do {
+              sideP = 2 * units[draw] - 1;
+              sideQ = 2 * units[(draw + 1) | 0] - 1;
+              draw = (draw + 2) | 0;
+              side2 = sideP * sideP + sideQ * sideQ;
+            } while (side2 >= 1);
+            // About the direction so far, in the frame of Duff et al., J. Comput. Graph. Tech. 6 1 (2017).
+            const across = Math.sqrt(Math.max(0, 1 - cosine * cosine) / side2);
+            const a = across * sideP;
+            const c = across * sideQ;
+            const sign = dz >= 0 ? 1 : -1;
+            const f = -1 / (sign + dz);
+            const g = dx * dy * f;
+            const nx = a * (1 + sign * dx * dx * f) + c * g + cosine * dx;
+            const ny = a * sign * g + c * (sign + dy * dy * f) + cosine * dy;
+            const nz = -a * sign * dx - c * dy + cosine * dz;
+            const norm = 1 / Math.sqrt(nx * nx + ny * ny + nz * nz);
+            dx = nx * norm;
+            dy = ny * norm;
+            dz = nz * norm;
+            ix = dx !== 0 ? 1 / dx : Number.POSITIVE_INFINITY;
+            iy = dy !== 0 ? 1 / dy : Number.POSITIVE_INFINITY;
+            iz = dz !== 0 ? 1 / dz : Number.POSITIVE_INFINITY;
+            wayX = dx >= 0 ? 1 : 0;
+            wayY = dy >= 0 ? 3 : 2;
+            wayZ = dz >= 0 ? 5 : 4;
+            tau = exponentials[exponential];
+            exponential = (exponential + 1) | 0;
+            closed = 0;
+            bentAxis = -1;
+            era = (era + 1) | 0;
+            if (draw > LIMIT.lastDraw || exponential === BLOCK.draws) {
+              end = STOP.block;
+              break;
+            }
+            continue;
+          }
+        }
+      }
       if (absorbed) {
         const quanta = energyQuanta[wavelength];
         const u = (x - voxelX) * perVoxelX;

@@ -6,7 +6,8 @@ import { travelNormal } from './next-boundary.js';
 import { NOW, RAY } from './photon.js';
 import { carryPolarisation, holdDirection, losePolarisation, splitPolarised } from './polarised-light.js';
 import { inAperture, recordCrossing } from './record-light.js';
-import { scatterAbout, scatterLambertian } from './scatter.js';
+import { scatterAbout, scatterLambertian, scatterOval } from './scatter.js';
+import { scatterByTable } from './scatter-by-table.js';
 import { SHARES, splitLight } from './split-light.js';
 
 const normal = new Float64Array(3);
@@ -102,6 +103,9 @@ export function meetInterface(
   if (spread === SPREAD.lambertian) {
     now[NOW.closed] = 0;
     scatterLambertian(ray, sign * gx, sign * gy, sign * gz, random);
+  } else if (spread === SPREAD.table) {
+    now[NOW.closed] = 0;
+    scatterByTable(scene, finish, reflects, ray, sign * gx, sign * gy, sign * gz, random);
   } else {
     if (reflects) {
       dx -= 2 * cosine * gx;
@@ -119,7 +123,14 @@ export function meetInterface(
     ray[RAY.dz] = dz;
     if (spread !== SPREAD.specular) {
       now[NOW.closed] = 0;
-      scatterAbout(ray, spread, scene.finishWidth[finish], sign * gx, sign * gy, sign * gz, random);
+      const width = scene.finishWidth[finish];
+      if (spread < SPREAD.gaussianOval) scatterAbout(ray, spread, width, sign * gx, sign * gy, sign * gz, random);
+      else {
+        const axis = 3 * interfaces[record + INTERFACE.faceActing];
+        const widthV = scene.finishWidthV[finish];
+        const hat = spread === SPREAD.topHatOval;
+        scatterOval(ray, hat, width, widthV, scene.faceAxis, axis, sign * gx, sign * gy, sign * gz, random);
+      }
     }
   }
   if (polarised) holdDirection(ray);

@@ -41,6 +41,73 @@ export function scatterAbout(
   ray[5] = dz;
 }
 
+/**
+ * As `scatterAbout` with two widths: Gaussian exp(−4 ln2 (θ_u²/U² + θ_v²/V²)), U and V the full widths; top hat: even inside the ellipse of
+ * half angles U and V. (θ_u, θ_v) is the polar angle about the direction in `ray`, cut up along v, which is `axes` [axis…] seen along that
+ * direction, and u across it.
+ */
+export function scatterOval(
+  ray: Float64Array,
+  topHat: boolean,
+  widthU: number,
+  widthV: number,
+  axes: Float64Array,
+  axis: number,
+  gx: number,
+  gy: number,
+  gz: number,
+  random: Int32Array,
+): void {
+  const dx = ray[3];
+  const dy = ray[4];
+  const dz = ray[5];
+  let [vx, vy, vz] = axes.subarray(axis, axis + 3);
+  const along = vx * dx + vy * dy + vz * dz;
+  vx -= along * dx;
+  vy -= along * dy;
+  vz -= along * dz;
+  const length = Math.sqrt(vx * vx + vy * vy + vz * vz);
+  if (length < 1e-9) {
+    // Along v itself there is no u: any frame will do.
+    tilt(ray, dx, dy, dz, 1, 0, 0);
+    [vx, vy, vz] = ray.subarray(3, 6);
+  } else {
+    vx /= length;
+    vy /= length;
+    vz /= length;
+  }
+  const ux = vy * dz - vz * dy;
+  const uy = vz * dx - vx * dz;
+  const uz = vx * dy - vy * dx;
+  for (let attempt = 0; attempt < ATTEMPTS; attempt++) {
+    // A pair in the disc, or of normal variates (Box and Muller, Ann. Math. Stat. 29 610 (1958)).
+    const unit = nextUnit(random);
+    const radius = topHat ? Math.sqrt(unit) : Math.sqrt(-Math.log(unit) / (4 * Math.LN2));
+    const turn = 2 * Math.PI * nextUnit(random);
+    const angleU = widthU * radius * Math.cos(turn);
+    const angleV = widthV * radius * Math.sin(turn);
+    const angle = Math.sqrt(angleU * angleU + angleV * angleV);
+    // Even per angle, thinned to even per solid angle.
+    if (angle >= Math.PI || nextUnit(random) * angle > Math.sin(angle)) continue;
+    const perAngle = angle > 0 ? Math.sin(angle) / angle : 1;
+    const a = angleU * perAngle;
+    const b = angleV * perAngle;
+    const c = Math.cos(angle);
+    const x = a * ux + b * vx + c * dx;
+    const y = a * uy + b * vy + c * dy;
+    const z = a * uz + b * vz + c * dz;
+    if (x * gx + y * gy + z * gz <= 0) continue;
+    const norm = 1 / Math.sqrt(x * x + y * y + z * z);
+    ray[3] = x * norm;
+    ray[4] = y * norm;
+    ray[5] = z * norm;
+    return;
+  }
+  ray[3] = dx;
+  ray[4] = dy;
+  ray[5] = dz;
+}
+
 /** Density exp(−4 ln2 θ²/FWHM²)·sin θ: Rayleigh draws thinned by sin θ/θ. */
 function gaussianPolar(fwhm: number, random: Int32Array): number {
   const sigma = fwhm / (2 * Math.sqrt(2 * Math.LN2));

@@ -26,7 +26,7 @@ export const enum SHARES {
 /**
  * Reflected and transmitted share at the interface whose record starts at `record`; what is missing to 1 is absorbed there. Takes the
  * index and the cosine of incidence from `shares` and fills in the rest. Beyond the critical angle nothing gets out: what a finish would
- * pass is reflected, unless it is a Lambertian diffuser, which makes light forget its angle.
+ * pass is reflected, unless it is a Lambertian diffuser or a table of scatter, which make light forget its angle.
  */
 export function splitLight(
   scene: Scene,
@@ -58,7 +58,8 @@ export function splitLight(
   } else tableShares(scene, finish, wavelength, cosine, shares);
   const ratio = index / beyond;
   if (ratio > 1 && ratio * ratio * (1 - cosine * cosine) >= 1) {
-    if (scene.finishTransmitSpread[finish] === SPREAD.lambertian) return;
+    const spread = scene.finishTransmitSpread[finish];
+    if (spread === SPREAD.lambertian || spread === SPREAD.table) return;
     const reflected = shares[SHARES.reflected] + shares[SHARES.transmitted];
     // Shares that miss 1 by a rounding absorb nothing.
     shares[SHARES.reflected] = reflected > 1 - 1e-12 ? 1 : reflected;

@@ -162,9 +162,13 @@ function createTracer(scene: Scene, graph: RegionGraph, witness: Witness | null 
   };
 }
 
-/** Ends endless light where its medium absorbs anything at all. @returns whether nothing does, so that only time can end it */
+/**
+ * Ends endless light where its medium absorbs anything at all. @returns whether only time can end it: nothing absorbs, or what scatters
+ * would only be met the sooner.
+ */
 function endless(scene: Scene, ray: Float64Array, now: Int32Array): boolean {
-  if (scene.attenuation[now[NOW.medium] * scene.wavelengths + now[NOW.wavelength]] === 0) return true;
+  const row = now[NOW.medium] * scene.wavelengths + now[NOW.wavelength];
+  if (scene.attenuation[row] === 0 || scene.scatterShare[row] > 0) return true;
   ray[RAY.depth] = 0;
   return false;
 }

@@ -18,7 +18,9 @@ import { polarisedLightProof } from './polarised-light-proof.js';
 import { prismProof } from './prism-proof.js';
 import type { Proof } from './proof.js';
 import { reciprocityProof } from './reciprocity-proof.js';
+import { scatteringMediumProof } from './scattering-medium-proof.js';
 import { slabProof } from './slab-proof.js';
+import { surfaceScatterProof } from './surface-scatter-proof.js';
 import { trappedLightProof } from './trapped-light-proof.js';
 import { twoColourSlabProof } from './two-colour-slab-proof.js';
 import { viewFactorProof } from './view-factor-proof.js';
@@ -33,6 +35,7 @@ export const allProofs: readonly Proof[] = [
   polarisedLightProof,
   prismProof,
   beamSpreadProof,
+  surfaceScatterProof,
   viewFactorProof,
   meanChordProof,
   parallelBeamProof,
@@ -43,6 +46,7 @@ export const allProofs: readonly Proof[] = [
   slabProof,
   halfSpaceProof,
   twoColourSlabProof,
+  scatteringMediumProof,
   integratingSphereProof,
   lightBoxProof,
   mixingRodProof,

@@ -3,7 +3,7 @@ import { fateShare } from './estimate.js';
 import { radians } from './fresnel-law.js';
 import { compare } from './judge-case.js';
 import type { Proof, ProofCase } from './proof.js';
-import { cell, detector, diffuser, part, pump, scatterer, thinBeam } from './proof-cells.js';
+import { cell, detector, diffuser, part, pump, spreadingSheet, thinBeam } from './proof-cells.js';
 import { slotsOf } from './slots-of.js';
 import { traceCell } from './trace-cell.js';
 
@@ -78,7 +78,7 @@ const SPREADS: readonly Spread[] = [
     label: 'Gaussian scatter of 2° FWHM within 1°',
     against: '1 − exp(−ln 2)',
     beam: thinBeam(),
-    sheet: scatterer('sheet', 'gaussian', radians(2)),
+    sheet: spreadingSheet('sheet', 'gaussian', radians(2)),
     stop: cone(1),
     expected: 0.5,
   },
@@ -86,7 +86,7 @@ const SPREADS: readonly Spread[] = [
     label: 'top-hat scatter of 4° within 1°',
     against: 'ratio of solid angles',
     beam: thinBeam(),
-    sheet: scatterer('sheet', 'top-hat', radians(4)),
+    sheet: spreadingSheet('sheet', 'top-hat', radians(4)),
     stop: cone(1),
     expected: (Math.sin(radians(0.5)) / Math.sin(radians(1))) ** 2,
   },

@@ -12,6 +12,8 @@ import type {
   PartDescription,
   PieceDescription,
   PumpDescription,
+  ScattererDescription,
+  ScatterTable,
   ShapeDescription,
   Turn,
   Vector3,
@@ -41,6 +43,7 @@ export const air: MediumDescription = {
   index: constant(1),
   absorption: constant(0),
   dyes: [],
+  scatterers: [],
   thermal: null,
 };
 
@@ -48,9 +51,13 @@ export const air: MediumDescription = {
 export function medium(
   name: string,
   index: number,
-  options: { absorption?: number | Curve; dyes?: readonly DissolvedDye[] } = {},
+  options: {
+    absorption?: number | Curve;
+    dyes?: readonly DissolvedDye[];
+    scatterers?: readonly ScattererDescription[];
+  } = {},
 ): MediumDescription {
-  const { absorption = 0, dyes = [] } = options;
+  const { absorption = 0, dyes = [], scatterers = [] } = options;
   return {
     name,
     path: ['media', name],
@@ -59,6 +66,7 @@ export function medium(
     index: constant(index),
     absorption: typeof absorption === 'number' ? constant(absorption) : absorption,
     dyes,
+    scatterers,
     thermal: null,
   };
 }
@@ -80,6 +88,22 @@ export function dye(
   };
 }
 
+/** Scatters by Henyey and Greenstein's law, `coefficient` 1/mm, mean cosine `anisotropy`. */
+export function haze(coefficient: number, anisotropy: number): ScattererDescription {
+  return {
+    name: 'haze',
+    path: ['scatterers', 'haze'],
+    kind: 'henyey-greenstein',
+    coefficient: constant(coefficient),
+    anisotropy: constant(anisotropy),
+  };
+}
+/** Spheres of a radius in mm, whose complex index is n − ik. */
+export function beads(radius: number, n: number, k: number, volumeFraction: number): ScattererDescription {
+  const path = ['scatterers', 'beads'];
+  return { name: 'beads', path, kind: 'beads', radius, index: constant(n), extinction: constant(k), volumeFraction };
+}
+
 const finish = <Kind extends object>(name: string, kind: Kind) => ({ name, path: ['finishes', name], ...kind });
 export const CLEAR: FinishDescription = finish('clear', { kind: 'clear' as const });
 export const BLACK: FinishDescription = finish('black', { kind: 'black' as const });
@@ -92,9 +116,17 @@ export function mirror(name: string, reflectance: number): FinishDescription {
 export function diffuser(name: string, reflects: number, transmits = 0): FinishDescription {
   return finish(name, { kind: 'diffuser' as const, reflects, transmits });
 }
-/** A sheet that passes everything, spread about the straight way by `fwhm`, rad. */
-export function scatterer(name: string, shape: 'gaussian' | 'top-hat', fwhm: number): FinishDescription {
-  return finish(name, { kind: 'scatter' as const, shape, fwhm, split: { reflects: 0, transmits: 1 } });
+/** A sheet that passes everything, spread about the straight way by `fwhm`, rad; a pair along u and v. */
+export function spreadingSheet(
+  name: string,
+  shape: 'gaussian' | 'top-hat',
+  fwhm: number | readonly [number, number],
+): FinishDescription {
+  const widths = typeof fwhm === 'number' ? ([fwhm, fwhm] as const) : fwhm;
+  return finish(name, { kind: 'scatter' as const, shape, fwhm: widths, split: { reflects: 0, transmits: 1 } });
+}
+export function scatterTable(name: string, table: ScatterTable): FinishDescription {
+  return finish(name, { kind: 'bsdf' as const, ...table });
 }
 export function metal(name: string, n: number, k: number): FinishDescription {
   return finish(name, { kind: 'metal' as const, metal: name, n: constant(n), k: constant(k) });

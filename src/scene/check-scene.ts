@@ -3,10 +3,11 @@ import type { Description, FinishDescription, Vector3 } from '../design/descript
 import { DesignFaults } from '../design/design-faults.js';
 import type { Fault } from '../design/fault.js';
 import { pumpFaults } from './check-pumps.js';
+import { scattererFaults } from './check-scatterers.js';
 import { strengthFaults, voxelFaults } from './check-strength.js';
 import { surroundingFaults } from './check-surroundings.js';
 import { type CompiledScene, compileScene } from './compile-scene.js';
-import type { SceneFace } from './compile-solids.js';
+import { designSize, type SceneFace } from './compile-solids.js';
 import { patchArea, patchCentre, patchNormal, patchPoint } from './face-patch.js';
 import { INTERFACE, RegionGraph } from './region-graph.js';
 import { add, scale } from './vector.js';
@@ -51,6 +52,7 @@ export function checkScene(description: Description): SceneCheck {
     ...partFaults(description, views),
     ...strengthFaults(description),
     ...voxelFaults(description, compiled.legend.voxels, compiled.legend.beams),
+    ...scattererFaults(description, designSize(compiled.legend.parts)),
     ...surroundingFaults(description),
     ...pumpFaults(description),
     ...coveredFaults(description, compiled, views),
@@ -267,6 +269,8 @@ function opaque(finish: FinishDescription): boolean {
       return finish.transmits === 0;
     case 'scatter':
       return finish.split?.transmits === 0;
+    case 'bsdf':
+      return finish.transmitted.every((polar) => polar.every((row) => row.every((value) => value === 0)));
     case 'table':
       return finish.transmittance.every((row) => row.every((value) => value === 0));
     default:

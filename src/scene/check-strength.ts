@@ -3,6 +3,7 @@ import type { Description } from '../design/description.js';
 import type { Fault } from '../design/fault.js';
 import type { BeamFrame } from './compile-pumps.js';
 import type { VoxelPlan } from './compile-recorders.js';
+import { absorptionAt } from './scattering-at.js';
 
 /** Dyes at this strength begin to quench themselves and pair up (common practice, no source), which is not modelled; mol/L. */
 const STRONG = 1e-3;
@@ -38,8 +39,8 @@ export function voxelFaults(description: Description, voxels: VoxelPlan, beams: 
   const used = new Set(description.parts.map(({ medium }) => medium));
   const dyed = [...description.media.values()].filter(({ name, dyes }) => used.has(name) && dyes.length > 0);
   return description.pumps.flatMap(({ name, path, wavelengthNm, beam }, i): Fault[] => {
-    const depths = dyed.map(({ absorption, dyes }) => {
-      const mu = dyes.reduce((sum, dye) => sum + dye.absorption(wavelengthNm), absorption(wavelengthNm));
+    const depths = dyed.map((medium) => {
+      const mu = absorptionAt(medium, wavelengthNm);
       return mu > 0 ? 1 / mu : Number.POSITIVE_INFINITY;
     });
     const depth = Math.min(...depths);

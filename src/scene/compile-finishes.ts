@@ -1,6 +1,8 @@
 /** Finishes -> how each splits and spreads light, over the wavelength grid. Finish 0 is clear: what a face without a finish is. */
 import type { Description, FinishDescription } from '../design/description.js';
+import { scatterShares } from '../numerics/hemisphere-cells.js';
 import { dichroicShares } from '../optics/dichroic.js';
+import { addScatterCells } from './scatter-cells.js';
 import { SPLIT, SPREAD } from './scene-layout.js';
 import type { WavelengthGrid } from './wavelength-grid.js';
 
@@ -12,6 +14,9 @@ export interface CompiledFinishes {
   readonly reflectSpread: number[];
   readonly transmitSpread: number[];
   readonly width: number[];
+  readonly widthV: number[];
+  readonly scatterHead: number[];
+  readonly scatterNumbers: number[];
   readonly a: Float64Array;
   readonly b: Float64Array;
   readonly table: number[];
@@ -33,6 +38,9 @@ export function compileFinishes(description: Description, grid: WavelengthGrid):
     reflectSpread: [],
     transmitSpread: [],
     width: [],
+    widthV: [],
+    scatterHead: [],
+    scatterNumbers: [],
     a: new Float64Array(finishes.length * cells),
     b: new Float64Array(finishes.length * cells),
     table: [],
@@ -59,6 +67,7 @@ function compileFinish(out: CompiledFinishes, finish: FinishDescription, f: numb
   let split: number = SPLIT.spectral;
   let spread: number = SPREAD.specular;
   let width = 0;
+  let widthV = 0;
   let table = -1;
   switch (finish.kind) {
     case 'clear':
@@ -90,25 +99,41 @@ function compileFinish(out: CompiledFinishes, finish: FinishDescription, f: numb
       fill(() => [finish.reflects, finish.transmits]);
       break;
     case 'scatter': {
-      spread = finish.shape === 'gaussian' ? SPREAD.gaussian : SPREAD.topHat;
-      width = finish.shape === 'gaussian' ? finish.fwhm : finish.fwhm / 2;
+      const gaussian = finish.shape === 'gaussian';
+      [width, widthV] = finish.fwhm.map((fwhm) => (gaussian ? fwhm : fwhm / 2));
+      if (width === widthV) spread = gaussian ? SPREAD.gaussian : SPREAD.topHat;
+      else spread = gaussian ? SPREAD.gaussianOval : SPREAD.topHatOval;
       const shares = finish.split;
       if (shares === null) split = SPLIT.fresnel;
       else fill(() => [shares.reflects, shares.transmits]);
       break;
     }
+    case 'bsdf': {
+      split = SPLIT.table;
+      spread = SPREAD.table;
+      table = out.tableReflectance.length / TABLE_ANGLES;
+      const { incidenceDeg, reflected, transmitted } = scatterShares(finish);
+      addTable(
+        out,
+        { wavelengthsNm: [0], anglesDeg: incidenceDeg, reflectance: [reflected], transmittance: [transmitted] },
+        grid,
+      );
+      break;
+    }
   }
+  addScatterCells(out, finish);
   out.split.push(split);
   out.reflectSpread.push(spread);
   out.transmitSpread.push(spread);
   out.width.push(width);
+  out.widthV.push(widthV);
   out.table.push(table);
 }
 
 /** Resamples a user's table, bilinear and held at its ends, to the grid and to whole degrees. */
 function addTable(
   out: CompiledFinishes,
-  finish: Extract<FinishDescription, { kind: 'table' }>,
+  finish: Omit<Extract<FinishDescription, { kind: 'table' }>, 'name' | 'path' | 'kind'>,
   grid: WavelengthGrid,
 ): void {
   const { wavelengthsNm, anglesDeg, reflectance, transmittance } = finish;

@@ -1,5 +1,6 @@
 /** Media -> tables over the wavelength grid. Absorber 0 of a medium is the bare solvent or solid; dyes follow. */
 import type { Description, MediumDescription } from '../design/description.js';
+import { type CompiledScatterers, compileScatterers } from './compile-scatterers.js';
 import type { SpectrumPool } from './spectrum-pool.js';
 import { cellPhotons, linePhotons, type WavelengthGrid } from './wavelength-grid.js';
 
@@ -13,6 +14,9 @@ export interface CompiledMedia {
   readonly absorberShare: Float64Array;
   readonly dyeYield: Float64Array;
   readonly dyeSpectrum: Int32Array;
+  readonly scatterers: CompiledScatterers;
+  /** [medium · wavelengths]: share of the attenuation that scatters. */
+  readonly scatterShare: Float64Array;
 }
 
 export function compileMedia(description: Description, grid: WavelengthGrid, pool: SpectrumPool): CompiledMedia {
@@ -29,6 +33,8 @@ export function compileMedia(description: Description, grid: WavelengthGrid, poo
   const absorberShare = new Float64Array(media.length * maxAbsorbers * cells);
   const dyeYield = new Float64Array(media.length * maxAbsorbers);
   const dyeSpectrum = new Int32Array(media.length * maxAbsorbers);
+  const scatterers = compileScatterers(media, grid);
+  const scatterShare = new Float64Array(media.length * cells);
   media.forEach((medium, m) => {
     medium.dyes.forEach(({ emission, quantumYield }, d) => {
       const slot = m * maxAbsorbers + d + 1;
@@ -45,10 +51,14 @@ export function compileMedia(description: Description, grid: WavelengthGrid, poo
       index[m * cells + w] = medium.index(nm);
       let sum = 0;
       absorbers.forEach((absorption, a) => {
-        sum += Math.max(0, absorption(nm));
+        // What beads absorb counts as absorbed by what they are in.
+        const beads = a === 0 ? scatterers.absorption[m * cells + w] : 0;
+        sum += Math.max(0, absorption(nm)) + beads;
         absorberShare[(m * maxAbsorbers + a) * cells + w] = sum;
       });
-      attenuation[m * cells + w] = sum;
+      const scattering = scatterers.scattering[m * cells + w];
+      attenuation[m * cells + w] = sum + scattering;
+      scatterShare[m * cells + w] = scattering > 0 ? scattering / (sum + scattering) : 0;
       for (let a = 0; a < absorbers.length; a++) {
         const at = (m * maxAbsorbers + a) * cells + w;
         // The last share must be exactly 1 so that no draw falls through.
@@ -58,5 +68,17 @@ export function compileMedia(description: Description, grid: WavelengthGrid, poo
   });
   const absorberCount = media.map(({ dyes }) => dyes.length + 1);
   const names = media.map(({ name }) => name);
-  return { names, media, index, attenuation, maxAbsorbers, absorberCount, absorberShare, dyeYield, dyeSpectrum };
+  return {
+    names,
+    media,
+    index,
+    attenuation,
+    maxAbsorbers,
+    absorberCount,
+    absorberShare,
+    dyeYield,
+    dyeSpectrum,
+    scatterers,
+    scatterShare,
+  };
 }

@@ -21,6 +21,36 @@ export const enum SPREAD {
   lambertian = 1,
   gaussian = 2,
   topHat = 3,
+  /** The same with two widths, along the face's u and v. */
+  gaussianOval = 4,
+  topHatOval = 5,
+  /** By a table of both directions. */
+  table = 6,
+}
+/** Integers per finish in `scatterHead`: numbers of entries, and places in `scatterNumbers`. */
+export const enum SCATTER {
+  incidences = 0,
+  /** Cells of the outward hemisphere: polar × azimuth. */
+  polarCells = 1,
+  azimuthCells = 2,
+  /** Angles of incidence, rad. */
+  incidence = 3,
+  /** Edges of the cells: sin² of the polar angle; azimuth, rad. */
+  polar = 4,
+  azimuth = 5,
+  /** Share reflected at each incidence; cumulative shares of its cells. */
+  reflected = 6,
+  reflectedCells = 7,
+  transmitted = 8,
+  transmittedCells = 9,
+  STRIDE = 10,
+}
+/** What directions in a scattering medium are drawn from. */
+export const enum PHASE {
+  /** Steps of equal probability in a table of cosines. */
+  cells = 1024,
+  /** In place of a table: the law of Henyey and Greenstein. */
+  henyeyGreenstein = -1,
 }
 export const enum BEAM {
   patch = 0,
@@ -136,6 +166,7 @@ export interface Scene {
   readonly faces: number;
   readonly faceOwner: Int32Array;
   readonly faceFinish: Int32Array; // −1: none given
+  readonly faceAxis: Float64Array; // [face · 3]: v of a flat face, axis of a round one: where two widths of scatter lie
   readonly faceExit: Int8Array; // 1: light that leaves here is output
   readonly faceRecorderOut: Int32Array; // light leaving through the face, −1 none
   readonly faceRecorderArriving: Int32Array; // pump light arriving from outside, −1 none
@@ -147,19 +178,31 @@ export interface Scene {
   // ---- media
   readonly media: number;
   readonly index: Float64Array; // [medium · wavelengths]
-  readonly attenuation: Float64Array; // 1/mm, sum of all absorbers
+  readonly attenuation: Float64Array; // 1/mm, sum of all absorbers and scatterers
   readonly maxAbsorbers: number;
   readonly absorberCount: Int32Array; // [medium]; absorber 0 is the bare solvent or solid, the others are dyes
   readonly absorberShare: Float64Array; // [(medium · maxAbsorbers + absorber) · wavelengths]: cumulative
   readonly dyeYield: Float64Array; // [medium · maxAbsorbers + absorber]
   readonly dyeSpectrum: Int32Array; // alias table of its emission
 
+  // ---- scatterers of media; where none scatters, maxScatterers is 0 and only scatterShare has entries
+  readonly maxScatterers: number;
+  readonly scatterShare: Float64Array; // [medium · wavelengths]: share of the attenuation that scatters
+  readonly scattererCount: Int32Array; // [medium]
+  readonly scattererShare: Float64Array; // [(medium · maxScatterers + scatterer) · wavelengths]: cumulative
+  readonly phaseTable: Int32Array; // as scattererShare: place in phaseCosine of the table of the knot below, or PHASE.henyeyGreenstein
+  readonly phaseValue: Float64Array; // as scattererShare: odds of the next table, or mean cosine
+  readonly phaseCosine: Float64Array; // tables of PHASE.cells + 1 rising cosines
+
   // ---- finishes
   readonly finishes: number;
   readonly finishSplit: Int32Array;
   readonly finishReflectSpread: Int32Array;
   readonly finishTransmitSpread: Int32Array;
-  readonly finishWidth: Float64Array; // Gaussian: FWHM; top hat: half angle; rad
+  readonly finishWidth: Float64Array; // Gaussian: FWHM; top hat: half angle; rad; along the face's u where they are two
+  readonly finishWidthV: Float64Array; // along v
+  readonly scatterHead: Int32Array; // [finish · SCATTER.STRIDE]
+  readonly scatterNumbers: Float64Array;
   readonly finishA: Float64Array; // [finish · wavelengths]: reflectance, or n of a metal
   readonly finishB: Float64Array; // transmittance, or k of a metal
   readonly finishTable: Int32Array; // first row of an angular table, −1

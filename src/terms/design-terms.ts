@@ -195,6 +195,14 @@ const FINISHES: Readonly<Record<Prefixed<'finish', FinishDescription['kind']>, T
     assumes: 'shares after Fresnel’s law unless given',
     source: WORD,
   },
+  'finish-bsdf': {
+    name: 'bsdf finish',
+    also: ['BSDF', 'scattering distribution'],
+    means: 'scatters as a table of incidence and scatter angles says',
+    formula: 'radiance out ÷ irradiance in, 1/sr',
+    assumes: 'linear between rows; the same at all wavelengths',
+    source: 'ASTM E2387 (from memory)',
+  },
 };
 
 const SHAPES: Readonly<Record<Prefixed<'shape', ShapeDescription['kind']>, TermText>> = {

@@ -158,6 +158,22 @@ const WHERE = {
     assumes: 'smooth, no interference; see polarisation',
     source: 'Born & Wolf, Principles of Optics, 7th ed., 1999 (from memory)',
   },
+  scatterer: {
+    name: 'scatterer',
+    also: ['scatterers', 'henyey-greenstein', 'Henyey–Greenstein'],
+    means: 'turns light inside a medium without taking it',
+    formula: 'p(μ) = (1 − g²)/(2 (1 + g² − 2 g μ)^{3/2}), or that of beads',
+    assumes: 'each one alone; scattered light is unpolarised',
+    source: 'Henyey & Greenstein, Astrophys. J. 93 70 (1941) (from memory)',
+  },
+  beads: {
+    name: 'beads',
+    also: ['Mie', 'Mie scattering', 'mean cosine'],
+    means: 'spheres in a medium that scatter light by size and index',
+    formula: 'Mie series: Q_ext, Q_sca, g from radius ÷ wavelength and n',
+    assumes: 'one size an entry, far apart, in the bare medium’s index',
+    source: 'Bohren & Huffman, 1983, appendix A (from memory)',
+  },
   'total-internal-reflection': {
     name: 'total internal reflection',
     also: ['TIR', 'critical angle'],

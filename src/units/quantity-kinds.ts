@@ -31,6 +31,7 @@ export const QUANTITY_KINDS = {
   irradiance: kind([0, 1, -3, 0, 0, 0, 0], 'W/mm²', 6, 'an irradiance', '100 W/cm²'),
   concentration: kind([-3, 0, 0, 1, 0, 0, 0], 'mol/L', 3, 'a concentration', '0.2 mmol/L'),
   massConcentration: kind([-3, 1, 0, 0, 0, 0, 0], 'g/L', 0, 'a mass concentration', '60 mg/L'),
+  numberDensity: kind([-3, 0, 0, 0, 0, 0, 0], '1/mm³', 9, 'a number per volume', '2e6 /mm³'),
   absorption: kind([-1, 0, 0, 0, 0, 0, 0], '1/mm', 3, 'an absorption per length', '0.2 /cm'),
   extinction: kind([2, 0, 0, -1, 0, 0, 0], 'L/(mol cm)', -1, 'a molar extinction', '50000 L/(mol cm)'),
   molarMass: kind([0, 1, 0, -1, 0, 0, 0], 'g/mol', -3, 'a molar mass', '332 g/mol'),

@@ -3,7 +3,17 @@ const flat = (value) => () => value;
 const place = (placement) => ({ at: [0, 0, 0], turns: [], against: null, ...placement });
 
 function medium(name, kind, index, dyes = []) {
-  return { name, path: [], kind, base: name, index: flat(index), absorption: flat(0), dyes, thermal: null };
+  return {
+    name,
+    path: [],
+    kind,
+    base: name,
+    index: flat(index),
+    absorption: flat(0),
+    dyes,
+    scatterers: [],
+    thermal: null,
+  };
 }
 
 function molarAbsorption(nm) {

@@ -22,6 +22,7 @@ function head(text: string): string {
 
 test('the shipped designs are these', () => {
   expect(shippedNames()).toEqual([
+    'beaded-converter',
     'box-with-bonded-dome',
     'box-with-white-back',
     'edge-lit-plate',

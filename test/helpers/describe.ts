@@ -7,6 +7,7 @@ import type {
   PartDescription,
   Placement,
   PumpDescription,
+  ScattererDescription,
   ShapeDescription,
   Turn,
   Vector3,
@@ -17,7 +18,12 @@ export const flat = (value: number) => () => value;
 export function medium(
   name: string,
   index: number,
-  more: { absorption?: number; dyes?: readonly DissolvedDye[]; kind?: MediumDescription['kind'] } = {},
+  more: {
+    absorption?: number;
+    dyes?: readonly DissolvedDye[];
+    scatterers?: readonly ScattererDescription[];
+    kind?: MediumDescription['kind'];
+  } = {},
 ): MediumDescription {
   return {
     name,
@@ -27,6 +33,7 @@ export function medium(
     index: flat(index),
     absorption: flat(more.absorption ?? 0),
     dyes: more.dyes ?? [],
+    scatterers: more.scatterers ?? [],
     thermal: null,
   };
 }
@@ -41,6 +48,18 @@ export function plainDye(absorption: number, quantumYield: number, emissionNm: n
     emission: { kind: 'line', wavelengthNm: emissionNm },
     lifetimeNs: null,
   };
+}
+
+/** Henyey and Greenstein's law, the same everywhere; 1/mm. */
+export function haze(coefficient: number, anisotropy: number): ScattererDescription {
+  const curves = { coefficient: flat(coefficient), anisotropy: flat(anisotropy) };
+  return { name: 'haze', path: ['scatterers', 'haze'], kind: 'henyey-greenstein', ...curves };
+}
+
+/** Spheres of a radius in mm and of complex index n − ik. */
+export function beads(radius: number, n: number, volumeFraction: number, k = 0): ScattererDescription {
+  const curves = { index: flat(n), extinction: flat(k) };
+  return { name: 'beads', path: ['scatterers', 'beads'], kind: 'beads', radius, volumeFraction, ...curves };
 }
 
 type Finish = FinishDescription extends infer F ? (F extends unknown ? Omit<F, 'name' | 'path'> : never) : never;

@@ -10,7 +10,7 @@ import { traceBatch } from '../../src/kernel/trace-batch.js';
 import { compileScene } from '../../src/scene/compile-scene.js';
 import { RegionGraph } from '../../src/scene/region-graph.js';
 import { FIGURE } from '../../src/tallies/run-tallies.js';
-import { beam, describeDesign, finish, medium, part, plainDye } from '../helpers/describe.js';
+import { beads, beam, describeDesign, finish, haze, medium, part, plainDye } from '../helpers/describe.js';
 import { ownerByHand, type PilePart, pileArbitrary } from '../helpers/random-pile.js';
 
 const WANTED = Number(process.env.STOKESWELL_PILE_HISTORIES ?? 1_000_000);
@@ -19,17 +19,53 @@ const HISTORIES_PER_PILE = 2048;
 const finishes: readonly FinishDescription[] = [
   finish('half-mirror', { kind: 'mirror', reflectance: 0.7 }),
   finish('white', { kind: 'diffuser', reflects: 0.6, transmits: 0.3 }),
-  finish('frosted', { kind: 'scatter', shape: 'gaussian', fwhm: 0.3, split: null }),
-  finish('hat', { kind: 'scatter', shape: 'top-hat', fwhm: 0.8, split: { reflects: 0.4, transmits: 0.5 } }),
+  finish('frosted', { kind: 'scatter', shape: 'gaussian', fwhm: [0.3, 0.3], split: null }),
+  finish('hat', { kind: 'scatter', shape: 'top-hat', fwhm: [0.8, 0.8], split: { reflects: 0.4, transmits: 0.5 } }),
+  finish('brushed', { kind: 'scatter', shape: 'gaussian', fwhm: [0.6, 0.1], split: null }),
+  finish('measured', {
+    kind: 'bsdf',
+    incidenceDeg: [0, 60],
+    scatterDeg: [0, 45, 90],
+    azimuthDeg: [0, 180],
+    reflected: [
+      [
+        [0.1, 0.1],
+        [0.05, 0.05],
+        [0.02, 0.02],
+      ],
+      [
+        [0.1, 0.1],
+        [0.2, 0.05],
+        [0.1, 0],
+      ],
+    ],
+    transmitted: [
+      [
+        [0.2, 0.2],
+        [0.1, 0.1],
+        [0, 0],
+      ],
+      [
+        [0.1, 0.1],
+        [0.1, 0.02],
+        [0.1, 0],
+      ],
+    ],
+  }),
 ];
-const FINISHES = ['', 'half-mirror', 'white', 'frosted', 'hat', 'black', 'clear'];
+const FINISHES = ['', 'half-mirror', 'white', 'frosted', 'hat', 'black', 'clear', 'brushed', 'measured'];
 
 function pileDesign(pile: readonly PilePart[], pick: readonly number[], clear: boolean): Description {
+  const turbid = pick[0] % 2 === 1;
   const media = clear
     ? [medium('m0', 1), medium('m1', 1), medium('m2', 1)]
     : [
-        medium('m0', 1.33, { dyes: [plainDye(0.4, 0.9, 520)] }),
-        medium('m1', 1.5, { absorption: 0.02, kind: 'solid' }),
+        medium('m0', 1.33, { dyes: [plainDye(0.4, 0.9, 520)], scatterers: turbid ? [haze(0.3, -0.2)] : [] }),
+        medium('m1', 1.5, {
+          absorption: 0.02,
+          kind: 'solid',
+          scatterers: turbid ? [haze(0.4, 0.8), beads(0.0006, 1.7, 3e-4)] : [],
+        }),
         medium('m2', 1, { absorption: 0.001, kind: 'gas' }),
       ];
   const exitFace = pile[0].shape.kind === 'sphere' ? 'surface' : pile[0].shape.kind === 'cap' ? 'dome' : 'top';

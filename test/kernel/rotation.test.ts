@@ -3,7 +3,7 @@ import { describe, expect, test } from 'vitest';
 import type { Description, PumpDescription, Vector2 } from '../../src/design/description.js';
 import { FIGURE, FIGURE_COUNT } from '../../src/tallies/run-tallies.js';
 import type { TraceResult } from '../../src/trace/trace-result.js';
-import { beam, describeDesign, finish, medium, part, plainDye } from '../helpers/describe.js';
+import { beads, beam, describeDesign, finish, haze, medium, part, plainDye } from '../helpers/describe.js';
 import { moveDesign } from '../helpers/move-design.js';
 import { traceHere } from '../helpers/trace.js';
 
@@ -13,14 +13,20 @@ const FEWEST = 100;
 
 const dye = { ...plainDye(0.35, 0.92, 520), absorption: (nm: number) => (nm < 500 ? 0.35 : 0.03) };
 const media = [
-  medium('bath', 1.36, { dyes: [dye], absorption: 0.002 }),
+  medium('bath', 1.36, { dyes: [dye], absorption: 0.002, scatterers: [haze(0.03, 0.6), beads(0.001, 1.59, 1e-5)] }),
   medium('glass', 1.52, { kind: 'solid', absorption: 0.004 }),
 ];
 const finishes = [
   finish('silver', { kind: 'mirror', reflectance: 0.94 }),
   finish('aluminium', { kind: 'metal', metal: 'aluminium', n: () => 0.6, k: () => 5.4 }),
   finish('white', { kind: 'diffuser', reflects: 0.8, transmits: 0.1 }),
-  finish('frosted', { kind: 'scatter', shape: 'gaussian', fwhm: 0.4, split: null }),
+  finish('frosted', { kind: 'scatter', shape: 'gaussian', fwhm: [0.4, 0.4], split: null }),
+  finish('brushed', {
+    kind: 'scatter',
+    shape: 'gaussian',
+    fwhm: [0.5, 0.1],
+    split: { reflects: 0.9, transmits: 0.05 },
+  }),
   finish('blue-pass', {
     kind: 'dichroic',
     edgeNm: 490,
@@ -65,7 +71,7 @@ function cell(): Description {
     parts: [
       part('cell', { kind: 'box', size: [20, 8, 9] }, 'bath', {
         minus: [{ name: 'bore', shape: { kind: 'cylinder', radius: 1, height: 30 }, at: [5, 1, 0] }],
-        faces: { front: 'blue-pass', left: 'silver', 'bore.side': 'frosted' },
+        faces: { front: 'blue-pass', left: 'silver', right: 'brushed', 'bore.side': 'frosted' },
       }),
       part('ball', { kind: 'sphere', radius: 2 }, 'glass', { at: [-4, 0.5, 1] }),
       part('dome', { kind: 'cap', radius: 5, height: 3 }, 'glass', { against: { face: 'cell.top', shift: [-3, 0] } }),
