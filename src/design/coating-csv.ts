@@ -1,5 +1,5 @@
-/** Reads a coating table in CSV: a heading with the column names in any order, then plain numbers; '#' starts a comment. */
-import type { FaultCode } from './fault.js';
+/** Columns of a coating table in CSV. */
+import { type NumberColumn, readNumberRows } from './number-csv.js';
 
 export interface CoatingPoint {
   readonly wavelengthNm: number;
@@ -8,95 +8,11 @@ export interface CoatingPoint {
   readonly transmittance: number;
 }
 
-export interface CsvFault {
-  readonly code: FaultCode;
-  readonly problem: string;
-  readonly found?: string;
-  readonly expected?: string;
-  readonly line: number;
-  readonly column: number;
-}
-
-interface Column {
-  readonly name: string;
-  readonly field: keyof CoatingPoint;
-  readonly least: number;
-  readonly most: number;
-}
-
-const COLUMNS: readonly Column[] = [
+const COLUMNS: readonly NumberColumn<keyof CoatingPoint>[] = [
   { name: 'wavelength_nm', field: 'wavelengthNm', least: 200, most: 2000 },
   { name: 'angle_deg', field: 'angleDeg', least: 0, most: 90 },
   { name: 'reflectance', field: 'reflectance', least: 0, most: 1 },
   { name: 'transmittance', field: 'transmittance', least: 0, most: 1 },
 ];
-const NUMBER = /^[+-]?(\d+\.?\d*|\.\d+)([eE][+-]?\d+)?$/;
-const MOST_FAULTS = 20;
 
-export function readCoatingRows(text: string): { points: (CoatingPoint & { line: number })[]; faults: CsvFault[] } {
-  const faults: CsvFault[] = [];
-  const points: (CoatingPoint & { line: number })[] = [];
-  let order: (Column | undefined)[] | null = null;
-  const lines = text.replace(/^\uFEFF/, '').split(/\r\n|\n|\r/);
-  for (const [i, content] of lines.entries()) {
-    if (content.trim() === '' || content.trimStart().startsWith('#')) continue;
-    if (faults.length >= MOST_FAULTS) break;
-    const cells = splitCells(content);
-    if (order === null) {
-      order = readHeading(cells, i + 1, faults);
-      if (order === null) return { points, faults };
-    } else {
-      points.push({ ...readRow(cells, order, i + 1, faults), line: i + 1 });
-    }
-  }
-  if (points.length === 0 && faults.length === 0) {
-    const expected = `columns ${COLUMNS.map(({ name }) => name).join(',')} and rows of numbers`;
-    faults.push({ code: 'finish', problem: 'the table has no rows', expected, line: 1, column: 1 });
-  }
-  return { points, faults };
-}
-
-interface Cell {
-  readonly text: string;
-  readonly column: number;
-}
-
-function splitCells(line: string): Cell[] {
-  let start = 0;
-  return line.split(',').map((raw) => {
-    const column = start + raw.length - raw.trimStart().length + 1;
-    start += raw.length + 1;
-    return { text: raw.trim().replace(/^"(.*)"$/, '$1'), column };
-  });
-}
-
-function readHeading(cells: readonly Cell[], line: number, faults: CsvFault[]): (Column | undefined)[] | null {
-  const order = cells.map(({ text }) => COLUMNS.find(({ name }) => name === text));
-  const absent = COLUMNS.filter((column) => !order.includes(column));
-  if (absent.length === 0) return order;
-  const found = cells.map(({ text }) => text).join(',');
-  const problem = `the heading lacks ${absent.map(({ name }) => name).join(', ')}`;
-  faults.push({ code: 'finish', problem, found, expected: COLUMNS.map(({ name }) => name).join(','), line, column: 1 });
-  return null;
-}
-
-function readRow(
-  cells: readonly Cell[],
-  order: (Column | undefined)[],
-  line: number,
-  faults: CsvFault[],
-): CoatingPoint {
-  const point = { wavelengthNm: Number.NaN, angleDeg: Number.NaN, reflectance: Number.NaN, transmittance: Number.NaN };
-  order.forEach((column, i) => {
-    if (column === undefined) return;
-    const { text, column: at } = cells[i] ?? { text: '', column: 1 };
-    const { name, least, most } = column;
-    const value = NUMBER.test(text) ? Number(text) : Number.NaN;
-    point[column.field] = value;
-    if (value >= least && value <= most) return;
-    const code = Number.isNaN(value) ? 'quantity' : 'range';
-    const problem = Number.isNaN(value) ? `${name} is not a number` : `${name} is out of range`;
-    faults.push({ code, problem, found: text || 'nothing', expected: `${least} to ${most}`, line, column: at });
-  });
-  return point;
-}
+export const readCoatingRows = (text: string) => readNumberRows(text, COLUMNS);

@@ -9,6 +9,7 @@ import { mapOf, record } from './form-record.js';
 import { freeText, oneWord } from './form-scalars.js';
 import { WAVELENGTH_RANGE } from './media-fields.js';
 import { mirrorForm } from './mirror-form.js';
+import { stackForm } from './stack-fields.js';
 
 const share = quantity('fraction', { min: 0, max: 1 });
 const wavelength = quantity('wavelength', WAVELENGTH_RANGE);
@@ -56,10 +57,14 @@ const scatter = record('shape and fwhm', {
 });
 
 const finishRecord = record(
-  'one of mirror, dichroic, table, diffuser, scatter',
+  'one of mirror, dichroic, stack, table, diffuser, scatter',
   {
     mirror: optional(mirrorForm, 'Share reflected at every angle and wavelength, or a metal of the library.'),
     dichroic: optional(dichroic, 'Idealised dichroic, the same at all angles.'),
+    stack: optional(
+      stackForm,
+      'Stack of thin films, worked out between the two media that touch the face. No substrate is part of it.',
+    ),
     table: optional(
       table,
       'Shares by wavelength and angle of incidence (in the medium the light comes from), on a full grid: a CSV file with ' +
@@ -68,7 +73,7 @@ const finishRecord = record(
     diffuser: optional(diffuser, 'Lambertian diffuser; what is neither reflected nor transmitted is absorbed.'),
     scatter: optional(scatter, 'Scatter about the reflected and the refracted direction.'),
   },
-  { exactlyOne: [['mirror', 'dichroic', 'table', 'diffuser', 'scatter']] },
+  { exactlyOne: [['mirror', 'dichroic', 'stack', 'table', 'diffuser', 'scatter']] },
 );
 
 export type FinishRecord = ReturnType<typeof finishRecord.read>;

@@ -23,7 +23,8 @@ const rowsOf = (value: ReturnType<typeof quantity>, words: string) =>
     LONGEST_TABLE,
   );
 
-const spectral = (value: ReturnType<typeof quantity>, words: string) =>
+/** One value for all wavelengths, or a list of [wavelength, value] pairs. */
+export const spectral = (value: ReturnType<typeof quantity>, words: string) =>
   either<SpectralRows>({
     scalar: mapped(value, (constant): SpectralRows => [[null, constant]]),
     list: rowsOf(value, words),
