@@ -59,37 +59,49 @@ export function stackAmplitudes(
   let pBi = outImaginary;
   let pCr = squareOut;
   let pCi = 0;
-  let logS = 0;
-  let logP = 0;
+  let log = 0;
+  let scaledS = 0;
+  let scaledP = 0;
   for (let j = count - 1; j >= 0; j--) {
     const turn = turns[j];
     const n2r = squareReal[j];
     const n2i = squareImaginary[j];
     const u2r = n2r - beta2;
-    // cos δ, sin δ/u, u·sin δ with δ = u·turn, each times exp(−|Im δ|).
-    let cr: number;
-    let ci = 0;
-    let qr: number;
-    let qi = 0;
-    let mr: number;
-    let mi = 0;
-    let decay = 0;
+    // c = cos δ, q = sin δ/u, m = u·sin δ with δ = u·turn, each times exp(−|Im δ|). Then
+    // s: B' = cB + iqC, C' = imB + cC; p: B' = cB + i(m/N²)C, C' = iN²qB + cC.
     if (n2i === 0) {
+      let c: number;
+      let q: number;
+      let m: number;
       if (u2r >= 0) {
         const u = Math.sqrt(u2r);
         const sine = Math.sin(u * turn);
-        cr = Math.cos(u * turn);
-        qr = u < SMALL ? turn : sine / u;
-        mr = u * sine;
+        c = Math.cos(u * turn);
+        q = u < SMALL ? turn : sine / u;
+        m = u * sine;
       } else {
         const kappa = Math.sqrt(-u2r);
-        decay = kappa * turn;
-        const echo = Math.exp(-2 * decay);
+        const echo = Math.exp(-2 * kappa * turn);
         const sinh = 0.5 * (1 - echo);
-        cr = 0.5 * (1 + echo);
-        qr = kappa < SMALL ? turn : sinh / kappa;
-        mr = -kappa * sinh;
+        c = 0.5 * (1 + echo);
+        q = kappa < SMALL ? turn : sinh / kappa;
+        m = -kappa * sinh;
+        log += kappa * turn;
       }
+      const e = m / n2r;
+      const f = q * n2r;
+      let b = c * sBr - q * sCi;
+      sCi = c * sCi + m * sBr;
+      sBr = b;
+      b = c * sBi + q * sCr;
+      sCr = c * sCr - m * sBi;
+      sBi = b;
+      b = c * pBr - e * pCi;
+      pCi = c * pCi + f * pBr;
+      pBr = b;
+      b = c * pBi + e * pCr;
+      pCr = c * pCr - f * pBi;
+      pBi = b;
     } else {
       const modulus = Math.sqrt(u2r * u2r + n2i * n2i);
       // u = v − iw with w > 0; the larger of the two from the sum, the other without cancellation.
@@ -102,63 +114,55 @@ export function stackAmplitudes(
         w = Math.sqrt(0.5 * (modulus - u2r));
         v = (-0.5 * n2i) / w;
       }
-      decay = w * turn;
-      const echo = Math.exp(-2 * decay);
+      const echo = Math.exp(-2 * w * turn);
       const cosh = 0.5 * (1 + echo);
       const sinh = 0.5 * (1 - echo);
       const cos = Math.cos(v * turn);
       const sin = Math.sin(v * turn);
-      cr = cos * cosh;
-      ci = sin * sinh;
+      log += w * turn;
+      const cr = cos * cosh;
+      const ci = sin * sinh;
       const sr = sin * cosh;
       const si = -cos * sinh;
-      qr = (sr * v - si * w) / modulus;
-      qi = (sr * w + si * v) / modulus;
-      mr = sr * v + si * w;
-      mi = si * v - sr * w;
-    }
-    // s: B' = cB + i(sin δ/u)C, C' = i(u sin δ)B + cC
-    {
-      const br = cr * sBr - ci * sBi - (qr * sCi + qi * sCr);
-      const bi = cr * sBi + ci * sBr + (qr * sCr - qi * sCi);
-      const dr = cr * sCr - ci * sCi - (mr * sBi + mi * sBr);
-      const di = cr * sCi + ci * sCr + (mr * sBr - mi * sBi);
-      sBr = br;
-      sBi = bi;
-      sCr = dr;
-      sCi = di;
-      logS += decay;
-    }
-    // p: B' = cB + i(u sin δ/N²)C, C' = i(N² sin δ/u)B + cC
-    {
+      const qr = (sr * v - si * w) / modulus;
+      const qi = (sr * w + si * v) / modulus;
+      const mr = sr * v + si * w;
+      const mi = si * v - sr * w;
       const size = n2r * n2r + n2i * n2i;
       const er = (mr * n2r + mi * n2i) / size;
       const ei = (mi * n2r - mr * n2i) / size;
       const fr = qr * n2r - qi * n2i;
       const fi = qr * n2i + qi * n2r;
-      const br = cr * pBr - ci * pBi - (er * pCi + ei * pCr);
-      const bi = cr * pBi + ci * pBr + (er * pCr - ei * pCi);
-      const dr = cr * pCr - ci * pCi - (fr * pBi + fi * pBr);
-      const di = cr * pCi + ci * pCr + (fr * pBr - fi * pBi);
+      let br = cr * sBr - ci * sBi - (qr * sCi + qi * sCr);
+      let bi = cr * sBi + ci * sBr + (qr * sCr - qi * sCi);
+      let dr = cr * sCr - ci * sCi - (mr * sBi + mi * sBr);
+      let di = cr * sCi + ci * sCr + (mr * sBr - mi * sBi);
+      sBr = br;
+      sBi = bi;
+      sCr = dr;
+      sCi = di;
+      br = cr * pBr - ci * pBi - (er * pCi + ei * pCr);
+      bi = cr * pBi + ci * pBr + (er * pCr - ei * pCi);
+      dr = cr * pCr - ci * pCi - (fr * pBi + fi * pBr);
+      di = cr * pCi + ci * pCr + (fr * pBr - fi * pBi);
       pBr = br;
       pBi = bi;
       pCr = dr;
       pCi = di;
-      logP += decay;
     }
-    if (Math.abs(sBr) + Math.abs(sBi) + Math.abs(sCr) + Math.abs(sCi) > LARGE) {
+    if (Math.abs(sCr) + Math.abs(sCi) > LARGE) {
       sBr /= LARGE;
       sBi /= LARGE;
       sCr /= LARGE;
       sCi /= LARGE;
-      logS += Math.log(LARGE);
+      scaledS += Math.log(LARGE);
     }
-    if (Math.abs(pBr) + Math.abs(pBi) + Math.abs(pCr) + Math.abs(pCi) > LARGE) {
+    if (Math.abs(pCr) + Math.abs(pCi) > LARGE) {
       pBr /= LARGE;
       pBi /= LARGE;
       pCr /= LARGE;
       pCi /= LARGE;
-      logP += Math.log(LARGE);
+      scaledP += Math.log(LARGE);
     }
   }
   // s: r = (u₀B − C)/(u₀B + C); p: r = (n₀²B − u₀C)/(n₀²B + u₀C).
@@ -172,7 +176,7 @@ export function stackAmplitudes(
     2 * normalIn,
     0,
     4 * normalIn * outReal,
-    logS,
+    log + scaledS,
     absorbing,
     travels,
   );
@@ -186,7 +190,7 @@ export function stackAmplitudes(
     2 * squareIn * outReal,
     2 * squareIn * outImaginary,
     4 * squareIn * normalIn * squareOut * outReal,
-    logP,
+    log + scaledP,
     absorbing,
     travels,
   );

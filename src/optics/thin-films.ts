@@ -27,11 +27,3 @@ export function thinFilms(layers: readonly FilmLayer[], wavelengthNm: number): T
     absorbing: layers.some(({ k }) => k !== 0),
   };
 }
-
-/** The same films met from the other side. */
-export const reversedFilms = (films: ThinFilms): ThinFilms => ({
-  ...films,
-  squareReal: films.squareReal.toReversed(),
-  squareImaginary: films.squareImaginary.toReversed(),
-  turns: films.turns.toReversed(),
-});

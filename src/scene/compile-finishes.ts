@@ -80,6 +80,10 @@ function compileFinish(out: CompiledFinishes, finish: FinishDescription, f: numb
         return [reflectance, transmittance];
       });
       break;
+    case 'stack':
+      // Its tables know the media on either side: compile-films.ts.
+      split = SPLIT.stack;
+      break;
     case 'table':
       split = SPLIT.table;
       table = out.tableReflectance.length / TABLE_ANGLES;
