@@ -1,5 +1,6 @@
 import { Argument, Command, Option } from 'commander';
 import type { CheckOptions } from './commands/check.js';
+import type { CoatingOptions } from './commands/coating.js';
 import type { ProveOptions } from './commands/prove.js';
 import type { TraceCommandOptions } from './commands/trace.js';
 import { EXIT_CODES_HELP, type ExitCode } from './exit-codes.js';
@@ -10,6 +11,7 @@ import {
   parsePrecision,
   parseSeed,
   parseThreads,
+  parseWavelengths,
 } from './option-values.js';
 import { print, tell } from './output-stream.js';
 import { toolVersion } from './tool-version.js';
@@ -90,6 +92,24 @@ export function buildProgram(done: (code: ExitCode) => void): Command {
     .action(async (folder: string) => {
       const { reportCommand } = await import('./commands/report.js');
       done(await reportCommand(folder));
+    });
+
+  program
+    .command('coating')
+    .description('what a finish of a design does over wavelength and angle: table, CSV and pictures')
+    .argument('<design>', 'design file')
+    .argument('<finish>', 'name of a finish of the design')
+    .option(
+      '--between <media...>',
+      'the medium outside the face, then that of its part (default: as on the first face with the finish)',
+    )
+    .option('--wavelengths <range>', 'first and last wavelength, e.g. "420 nm to 650 nm"', parseWavelengths, [400, 700])
+    .option('--out <folder>', 'new or empty folder for the files (default: a new one below results)')
+    .option('--no-files', 'write no files')
+    .addOption(dialOption())
+    .action(async (file: string, finish: string, options: CoatingOptions) => {
+      const { coatingCommand } = await import('./commands/coating.js');
+      done(await coatingCommand(file, finish, options));
     });
 
   program

@@ -115,15 +115,24 @@ function addTable(
   finish: Extract<FinishDescription, { kind: 'table' }>,
   grid: WavelengthGrid,
 ): void {
-  const { wavelengthsNm, anglesDeg, reflectance, transmittance } = finish;
   for (const nm of grid.nm) {
-    const row = bracket(wavelengthsNm, nm);
     for (let angle = 0; angle < TABLE_ANGLES; angle++) {
-      const column = bracket(anglesDeg, (angle * 90) / (TABLE_ANGLES - 1));
-      out.tableReflectance.push(bilinear(reflectance, row, column));
-      out.tableTransmittance.push(bilinear(transmittance, row, column));
+      const { reflectance, transmittance } = tableShares(finish, nm, (angle * 90) / (TABLE_ANGLES - 1));
+      out.tableReflectance.push(reflectance);
+      out.tableTransmittance.push(transmittance);
     }
   }
+}
+
+/** A user's table at any wavelength, nm, and angle, degrees: bilinear, held at its ends. */
+export function tableShares(
+  { wavelengthsNm, anglesDeg, reflectance, transmittance }: Extract<FinishDescription, { kind: 'table' }>,
+  nm: number,
+  degrees: number,
+): { reflectance: number; transmittance: number } {
+  const row = bracket(wavelengthsNm, nm);
+  const column = bracket(anglesDeg, degrees);
+  return { reflectance: bilinear(reflectance, row, column), transmittance: bilinear(transmittance, row, column) };
 }
 
 type Bracket = readonly [low: number, high: number, share: number];
