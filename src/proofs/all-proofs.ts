@@ -18,6 +18,7 @@ import { prismProof } from './prism-proof.js';
 import type { Proof } from './proof.js';
 import { reciprocityProof } from './reciprocity-proof.js';
 import { slabProof } from './slab-proof.js';
+import { thinFilmProof } from './thin-film-proof.js';
 import { trappedLightProof } from './trapped-light-proof.js';
 import { twoColourSlabProof } from './two-colour-slab-proof.js';
 import { viewFactorProof } from './view-factor-proof.js';
@@ -29,6 +30,7 @@ export const allProofs: readonly Proof[] = [
   fresnelProof,
   diffuseFresnelProof,
   metalMirrorProof,
+  thinFilmProof,
   prismProof,
   beamSpreadProof,
   viewFactorProof,

@@ -145,11 +145,14 @@ function coatingCsv(curves: readonly CoatingCurves[]): string {
   return csvText(header, csvRows(curves));
 }
 
+/** Every other wavelength and angle: what the pictures need would make a file no spreadsheet likes. */
 function* csvRows(curves: readonly CoatingCurves[]): Generator<(string | number)[]> {
   for (const each of curves) {
     const { from, to, wavelengthsNm, anglesDeg } = each;
     for (const [w, nm] of wavelengthsNm.entries()) {
+      if (w % 2 !== 0) continue;
       for (const [a, degrees] of anglesDeg.entries()) {
+        if (a % 2 !== 0) continue;
         const at = w * anglesDeg.length + a;
         const r = [each.reflectanceS[at], each.reflectanceP[at]];
         const t = [each.transmittanceS[at], each.transmittanceP[at]];

@@ -51,7 +51,7 @@ function plot(
       .y((w) => round(atY(100 * share(panel, w * anglesDeg.length + a))))(wavelengthsNm.map((_, w) => w));
     return markup`<path class="curve" d="${path ?? ''}" stroke="${colour}" stroke-dasharray="${dash}"/>`;
   });
-  const grid = [25, 50, 75].map(
+  const grid = [20, 40, 60, 80].map(
     (percent) =>
       markup`<line class="grid" x1="${x}" x2="${x + PANEL}" y1="${round(atY(percent))}" y2="${round(atY(percent))}"/>`,
   );
