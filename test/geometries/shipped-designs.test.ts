@@ -31,6 +31,7 @@ test('the shipped designs are these', () => {
     'two-bank-even-spread',
     'two-bank-poor-spread',
     'wedge-cell',
+    'wetted-dichroic-cell',
   ]);
 });
 
