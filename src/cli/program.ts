@@ -103,7 +103,11 @@ export function buildProgram(done: (code: ExitCode) => void): Command {
       '--between <media...>',
       'the medium outside the face, then that of its part (default: as on the first face with the finish)',
     )
-    .option('--wavelengths <range>', 'first and last wavelength, e.g. "420 nm to 650 nm"', parseWavelengths, [400, 700])
+    .addOption(
+      new Option('--wavelengths <range>', 'first and last wavelength, e.g. "420 nm to 650 nm"')
+        .argParser(parseWavelengths)
+        .default([400, 700], '400 nm to 700 nm'),
+    )
     .option('--out <folder>', 'new or empty folder for the files (default: a new one below results)')
     .option('--no-files', 'write no files')
     .addOption(dialOption())
