@@ -66,6 +66,8 @@ function finishWords(finish: FinishDescription): string {
       return `dichroic, edge ${significant(finish.edgeNm, 6)} nm, passes ${finish.passes}, transmits ${percent(finish.transmits)}, reflects ${percent(finish.reflects)}`;
     case 'table':
       return 'shares from a table of wavelengths and angles';
+    case 'stack':
+      return `thin films, ${finish.layers.length} layers`;
     case 'bsdf':
       return 'scatters as a table of angles says';
     case 'diffuser':

@@ -36,6 +36,15 @@ export function parseDuration(text: string): number {
   return seconds;
 }
 
+/** `420 nm to 650 nm`, `420-650nm`: first and last wavelength, nm. */
+export function parseWavelengths(text: string): readonly [number, number] {
+  const match = /^\s*(\d+(?:\.\d*)?)\s*(?:nm)?\s*(?:-|–|to)\s*(\d+(?:\.\d*)?)\s*nm\s*$/.exec(text);
+  if (!match) refuse('Write two wavelengths, for example "420 nm to 650 nm".');
+  const [low, high] = [Number(match[1]), Number(match[2])];
+  if (!(low >= 200 && high <= 2000 && low < high)) refuse('They must rise and lie between 200 and 2000 nm.');
+  return [low, high];
+}
+
 /** A whole number of threads, 1 to 1024. */
 export function parseThreads(text: string): number {
   const value = wholeNumber(text);

@@ -1,6 +1,7 @@
 import { Argument, Command, Option } from 'commander';
 import { PICTURE_CHOICES } from '../report/pictures/picture-choice.js';
 import type { CheckOptions } from './commands/check.js';
+import type { CoatingOptions } from './commands/coating.js';
 import type { DrawOptions } from './commands/draw.js';
 import type { ExplainOptions } from './commands/explain.js';
 import type { ProveOptions } from './commands/prove.js';
@@ -14,6 +15,7 @@ import {
   parsePrecision,
   parseSeed,
   parseThreads,
+  parseWavelengths,
 } from './option-values.js';
 import { print, tell } from './output-stream.js';
 import { toolVersion } from './tool-version.js';
@@ -115,6 +117,28 @@ export function buildProgram(done: (code: ExitCode) => void): Command {
     .action(async (folder: string, options: ReportOptions) => {
       const { reportCommand } = await import('./commands/report.js');
       done(await reportCommand(folder, options));
+    });
+
+  program
+    .command('coating')
+    .description('what a finish of a design does over wavelength and angle: table, CSV and pictures')
+    .argument('<design>', 'design file')
+    .argument('<finish>', 'name of a finish of the design')
+    .option(
+      '--between <media...>',
+      'the medium outside the face, then that of its part (default: as on the first face with the finish)',
+    )
+    .addOption(
+      new Option('--wavelengths <range>', 'first and last wavelength, e.g. "420 nm to 650 nm"')
+        .argParser(parseWavelengths)
+        .default([400, 700], '400 nm to 700 nm'),
+    )
+    .option('--out <folder>', 'new or empty folder for the files (default: a new one below results)')
+    .option('--no-files', 'write no files')
+    .addOption(dialOption())
+    .action(async (file: string, finish: string, options: CoatingOptions) => {
+      const { coatingCommand } = await import('./commands/coating.js');
+      done(await coatingCommand(file, finish, options));
     });
 
   program

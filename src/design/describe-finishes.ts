@@ -1,6 +1,8 @@
 /** Finishes as written -> what they do to light, energy checked. */
 import { readMetal } from '../materials/library.js';
 import { coatingGrid, ENERGY_SLACK } from './coating-grid.js';
+import { describeLayerMaterial } from './describe-layer-materials.js';
+import { describeStack, type OwnLayerMaterials } from './describe-stacks.js';
 import type { FinishDescription } from './description.js';
 import type { DesignRecord } from './design-fields.js';
 import type { DesignPath } from './fault.js';
@@ -16,18 +18,24 @@ type Identity = Pick<FinishDescription, 'name' | 'path'>;
 export function describeFinishes(design: DesignRecord, reading: Reading): Map<string, FinishDescription> {
   const finishes = new Map<string, FinishDescription>();
   for (const kind of ['clear', 'black'] as const) finishes.set(kind, { name: kind, path: ['finishes', kind], kind });
+  const own = new Map(design['layer-materials'].map((entry) => [entry.name, describeLayerMaterial(entry, reading)]));
   for (const entry of design.finishes) {
-    const finish = describeFinish(entry, reading);
+    const finish = describeFinish(entry, own, reading);
     if (finish !== null) finishes.set(entry.name, finish);
   }
   return finishes;
 }
 
-function describeFinish({ name, path, value }: Named<FinishRecord>, reading: Reading): FinishDescription | null {
+function describeFinish(
+  { name, path, value }: Named<FinishRecord>,
+  materials: OwnLayerMaterials,
+  reading: Reading,
+): FinishDescription | null {
   const identity = { name, path };
-  const { mirror, dichroic, table, diffuser, scatter, bsdf } = value;
+  const { mirror, dichroic, stack, table, diffuser, scatter, bsdf } = value;
   if (mirror !== null) return describeMirror(mirror, identity);
   if (dichroic !== null) return describeDichroic(dichroic, identity, reading);
+  if (stack !== null) return describeStack(stack, identity, materials, reading);
   if (table !== null) {
     const grid = coatingGrid(table, [...path, 'table'], reading);
     return grid && { ...identity, kind: 'table', ...grid };

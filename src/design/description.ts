@@ -143,6 +143,11 @@ export type FinishDescription = { readonly name: string; readonly path: DesignPa
       readonly reflectance: readonly (readonly number[])[];
       readonly transmittance: readonly (readonly number[])[];
     }
+  /**
+   * Thin films by characteristic matrices, between the two media that really touch the face. Layers from the outside of the face
+   * inward: the first touches what lies beyond the face, the last the part that the face belongs to.
+   */
+  | { readonly kind: 'stack'; readonly layers: readonly LayerDescription[]; readonly extrapolates: boolean }
   /** Lambertian in both directions; the rest is absorbed. */
   | { readonly kind: 'diffuser'; readonly reflects: number; readonly transmits: number }
   /**
@@ -172,6 +177,17 @@ export interface ScatterTable {
   /** [incidence][scatter][azimuth]. */
   readonly reflected: readonly (readonly (readonly number[])[])[];
   readonly transmitted: readonly (readonly (readonly number[])[])[];
+}
+
+export interface LayerDescription {
+  readonly material: string;
+  /** Complex index n − ik, held beyond `rangeNm`. */
+  readonly n: Curve;
+  readonly k: Curve;
+  /** Wavelengths the material has data for, nm; null for a constant. */
+  readonly rangeNm: readonly [number, number] | null;
+  readonly thicknessNm: number;
+  readonly path: DesignPath;
 }
 
 // ------------------------------------------------------------------------------------------------- parts

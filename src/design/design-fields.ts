@@ -11,6 +11,7 @@ import { dyesForm, mediaForm } from './media-fields.js';
 import { partsForm } from './part-fields.js';
 import { detectorsForm, pixels, pumpsForm } from './pump-fields.js';
 import { dialForm } from './read-dials.js';
+import { layerMaterialsForm } from './stack-fields.js';
 
 const exitName = reference('part.face or the name of a detector', ['lid.top']);
 
@@ -53,6 +54,12 @@ export const designForm = record('the fields of a design', {
   ),
   dyes: withDefault(dyesForm, [], 'none', 'Dyes of your own, beside those of the library.'),
   media: withDefault(mediaForm, [], 'none', 'What parts are filled with.'),
+  'layer-materials': withDefault(
+    layerMaterialsForm,
+    [],
+    'none',
+    'Materials of your own for the layers of stacks, beside those of the library.',
+  ),
   finishes: withDefault(finishesForm, [], 'none', 'What faces do to light, beside the built-in clear and black.'),
   parts: required(partsForm, 'Closed solids; where parts overlap, the later one wins.'),
   pumps: required(pumpsForm, 'Light sources.'),

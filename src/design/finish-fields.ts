@@ -9,6 +9,7 @@ import { mapOf, record } from './form-record.js';
 import { freeText, oneWord } from './form-scalars.js';
 import { mirrorForm } from './mirror-form.js';
 import { WAVELENGTH_RANGE } from './spectral-form.js';
+import { stackForm } from './stack-fields.js';
 
 const share = quantity('fraction', { min: 0, max: 1 });
 const wavelength = quantity('wavelength', WAVELENGTH_RANGE);
@@ -64,10 +65,14 @@ const scatter = record('shape and fwhm', {
 });
 
 const finishRecord = record(
-  'one of mirror, dichroic, table, diffuser, scatter, bsdf',
+  'one of mirror, dichroic, stack, table, diffuser, scatter, bsdf',
   {
     mirror: optional(mirrorForm, 'Share reflected at every angle and wavelength, or a metal of the library.'),
     dichroic: optional(dichroic, 'Idealised dichroic, the same at all angles.'),
+    stack: optional(
+      stackForm,
+      'Stack of thin films, worked out between the two media that touch the face. No substrate is part of it.',
+    ),
     table: optional(
       table,
       'Shares by wavelength and angle of incidence (in the medium the light comes from), on a full grid: a CSV file with ' +
@@ -81,7 +86,7 @@ const finishRecord = record(
         'reflected_per_sr, transmitted_per_sr or both.',
     ),
   },
-  { exactlyOne: [['mirror', 'dichroic', 'table', 'diffuser', 'scatter', 'bsdf']] },
+  { exactlyOne: [['mirror', 'dichroic', 'stack', 'table', 'diffuser', 'scatter', 'bsdf']] },
 );
 
 export type FinishRecord = ReturnType<typeof finishRecord.read>;

@@ -46,11 +46,14 @@ export interface DyeData {
   readonly pHRange: readonly [number, number] | null;
 }
 
-export interface MetalData {
+/** What the library knows of a metal or of another material of thin films. */
+export interface LayerMaterialData {
   readonly name: string;
   /** Complex index n − ik, k > 0 absorbs. */
   readonly n: Curve;
   readonly k: Curve;
+  /** Wavelengths there are data for, nm. */
+  readonly rangeNm: readonly [number, number];
   readonly source: string;
   readonly status: string;
 }

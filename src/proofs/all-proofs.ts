@@ -21,6 +21,7 @@ import { reciprocityProof } from './reciprocity-proof.js';
 import { scatteringMediumProof } from './scattering-medium-proof.js';
 import { slabProof } from './slab-proof.js';
 import { surfaceScatterProof } from './surface-scatter-proof.js';
+import { thinFilmProof } from './thin-film-proof.js';
 import { trappedLightProof } from './trapped-light-proof.js';
 import { twoColourSlabProof } from './two-colour-slab-proof.js';
 import { viewFactorProof } from './view-factor-proof.js';
@@ -33,6 +34,7 @@ export const allProofs: readonly Proof[] = [
   diffuseFresnelProof,
   metalMirrorProof,
   polarisedLightProof,
+  thinFilmProof,
   prismProof,
   beamSpreadProof,
   surfaceScatterProof,

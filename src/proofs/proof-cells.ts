@@ -132,6 +132,22 @@ export function metal(name: string, n: number, k: number): FinishDescription {
   return finish(name, { kind: 'metal' as const, metal: name, n: constant(n), k: constant(k) });
 }
 
+/** Thin films of constant index, [n, k, thickness in nm], outermost first. */
+export function stack(
+  name: string,
+  films: readonly (readonly [n: number, k: number, thicknessNm: number])[],
+): FinishDescription {
+  const layers = films.map(([n, k, thicknessNm], i) => ({
+    material: 'film',
+    n: constant(n),
+    k: constant(k),
+    rangeNm: null,
+    thicknessNm,
+    path: ['finishes', name, i],
+  }));
+  return finish(name, { kind: 'stack' as const, layers, extrapolates: false });
+}
+
 /** A convex piece in its part's frame. */
 export function piece(
   shape: ShapeDescription,

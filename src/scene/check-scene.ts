@@ -1,7 +1,10 @@
 /** What is wrong or odd about a design's geometry and finishes, and a report of every face. Nothing is traced. */
-import type { Description, FinishDescription, Vector3 } from '../design/description.js';
+import type { Description, FinishDescription, LayerDescription, Vector3 } from '../design/description.js';
 import { DesignFaults } from '../design/design-faults.js';
 import type { Fault } from '../design/fault.js';
+import { AMPLITUDES, amplitudesAt } from '../optics/thin-film-stack.js';
+import { thinFilms } from '../optics/thin-films.js';
+import { filmFaults } from './check-films.js';
 import { pumpFaults } from './check-pumps.js';
 import { scattererFaults } from './check-scatterers.js';
 import { strengthFaults, voxelFaults } from './check-strength.js';
@@ -54,6 +57,7 @@ export function checkScene(description: Description): SceneCheck {
     ...voxelFaults(description, compiled.legend.voxels, compiled.legend.beams),
     ...scattererFaults(description, designSize(compiled.legend.parts)),
     ...surroundingFaults(description),
+    ...filmFaults(description, compiled.legend),
     ...pumpFaults(description),
     ...coveredFaults(description, compiled, views),
   ];
@@ -271,11 +275,24 @@ function opaque(finish: FinishDescription): boolean {
       return finish.split?.transmits === 0;
     case 'bsdf':
       return finish.transmitted.every((polar) => polar.every((row) => row.every((value) => value === 0)));
+    case 'stack':
+      return opaqueStack(finish.layers);
     case 'table':
       return finish.transmittance.every((row) => row.every((value) => value === 0));
     default:
       return false;
   }
+}
+
+/** A metal too thick to see through; what touches the stack hardly matters. */
+function opaqueStack(layers: readonly LayerDescription[]): boolean {
+  const out = new Float64Array(AMPLITUDES.COUNT);
+  for (let nm = 400; nm <= 700; nm += 20) {
+    const at = layers.map(({ n, k, thicknessNm }) => ({ n: n(nm), k: k(nm), thicknessNm }));
+    amplitudesAt(thinFilms(at, nm), 1.4, 1.4, 1, out);
+    if (out[AMPLITUDES.transmittanceS] > 1e-9) return false;
+  }
+  return true;
 }
 
 function partFaults(

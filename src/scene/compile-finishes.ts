@@ -89,6 +89,10 @@ function compileFinish(out: CompiledFinishes, finish: FinishDescription, f: numb
         return [reflectance, transmittance];
       });
       break;
+    case 'stack':
+      // Its tables know the media on either side: compile-films.ts.
+      split = SPLIT.stack;
+      break;
     case 'table':
       split = SPLIT.table;
       table = out.tableReflectance.length / TABLE_ANGLES;
@@ -130,21 +134,28 @@ function compileFinish(out: CompiledFinishes, finish: FinishDescription, f: numb
   out.table.push(table);
 }
 
+type ShareGrid = Omit<Extract<FinishDescription, { kind: 'table' }>, 'name' | 'path' | 'kind'>;
+
 /** Resamples a user's table, bilinear and held at its ends, to the grid and to whole degrees. */
-function addTable(
-  out: CompiledFinishes,
-  finish: Omit<Extract<FinishDescription, { kind: 'table' }>, 'name' | 'path' | 'kind'>,
-  grid: WavelengthGrid,
-): void {
-  const { wavelengthsNm, anglesDeg, reflectance, transmittance } = finish;
+function addTable(out: CompiledFinishes, finish: ShareGrid, grid: WavelengthGrid): void {
   for (const nm of grid.nm) {
-    const row = bracket(wavelengthsNm, nm);
     for (let angle = 0; angle < TABLE_ANGLES; angle++) {
-      const column = bracket(anglesDeg, (angle * 90) / (TABLE_ANGLES - 1));
-      out.tableReflectance.push(bilinear(reflectance, row, column));
-      out.tableTransmittance.push(bilinear(transmittance, row, column));
+      const { reflectance, transmittance } = tableShares(finish, nm, (angle * 90) / (TABLE_ANGLES - 1));
+      out.tableReflectance.push(reflectance);
+      out.tableTransmittance.push(transmittance);
     }
   }
+}
+
+/** A user's table at any wavelength, nm, and angle, degrees: bilinear, held at its ends. */
+export function tableShares(
+  { wavelengthsNm, anglesDeg, reflectance, transmittance }: ShareGrid,
+  nm: number,
+  degrees: number,
+): { reflectance: number; transmittance: number } {
+  const row = bracket(wavelengthsNm, nm);
+  const column = bracket(anglesDeg, degrees);
+  return { reflectance: bilinear(reflectance, row, column), transmittance: bilinear(transmittance, row, column) };
 }
 
 type Bracket = readonly [low: number, high: number, share: number];

@@ -7,6 +7,7 @@ import { colourMatching } from '../materials/observer.js';
 import type { FateSlot } from '../tallies/run-tallies.js';
 import { EV_NM } from '../units/constants.js';
 import { compileEmitters } from './compile-emitters.js';
+import { type CompiledFilms, compileFilms } from './compile-films.js';
 import { compileFinishes, TABLE_ANGLES } from './compile-finishes.js';
 import { compileMedia } from './compile-media.js';
 import { type BeamFrame, compilePumps } from './compile-pumps.js';
@@ -34,6 +35,8 @@ export interface SceneLegend {
   readonly voxels: VoxelPlan;
   readonly grid: WavelengthGrid;
   readonly beams: readonly BeamFrame[];
+  /** Stacks of thin films whose curves are finer than their tables. */
+  readonly coarseFilms: CompiledFilms['coarse'];
   /** eV per energy quantum. */
   readonly quantumEv: number;
 }
@@ -64,6 +67,7 @@ export function compileScene(description: Description): CompiledScene {
   const records = layOutRecorders(solids, recorders, voxels, grid);
   const spectra = pool.finish();
   const faceFinish = finishOfFaces(solids.faces, finishes.names);
+  const films = compileFilms(description, parts, solids.faces, faceFinish, finishes.names, media, grid);
   const largest = 1 / grid.nm[0];
   const energyQuanta = grid.nm.map((nm) => Math.round(QUANTA / nm / largest));
   const observer = Array.from(grid.nm, (nm) => colourMatching(nm));
@@ -121,6 +125,12 @@ export function compileScene(description: Description): CompiledScene {
     tableAngles: TABLE_ANGLES,
     tableReflectance: sharedDoubles(finishes.tableReflectance),
     tableTransmittance: sharedDoubles(finishes.tableTransmittance),
+    filmOf: sharedInts(films.filmOf),
+    filmBlock: sharedInts(films.filmBlock),
+    filmBeyond: sharedInts(films.filmBeyond),
+    filmStart: sharedInts(films.filmStart),
+    filmCells: sharedInts(films.filmCells),
+    filmNodes: films.filmNodes,
     pumpCount: description.pumps.length,
     pumps: sharedDoubles(pumps.pumps),
     pumpBeam: sharedInts(pumps.beam),
@@ -164,6 +174,7 @@ export function compileScene(description: Description): CompiledScene {
       voxels,
       grid,
       beams: pumps.frames,
+      coarseFilms: films.coarse,
       quantumEv: (largest * EV_NM) / QUANTA,
     },
   };

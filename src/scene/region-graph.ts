@@ -9,7 +9,7 @@
 
 import { QUADRIC_STRIDE, quadricValue } from './quadric.js';
 import type { Scene } from './scene-layout.js';
-import { SURROUNDINGS } from './scene-layout.js';
+import { SPLIT, SURROUNDINGS } from './scene-layout.js';
 
 /** Crossings that are no interface. */
 export const enum CROSSING {
@@ -33,7 +33,9 @@ export const enum INTERFACE {
   faceActing = 6,
   /** Recorder: of a free plane, or of pump light arriving at the face entered. */
   recorder = 7,
-  STRIDE = 8,
+  /** Table of a stack of thin films between the two media, in this direction; −1 for other finishes. */
+  film = 8,
+  STRIDE = 9,
 }
 export const enum FLAG {
   /** The interface is a free plane. */
@@ -319,7 +321,7 @@ export class RegionGraph {
     const { scene } = this;
     const isPlane = surface < scene.planeOffset.length;
     if (isPlane && scene.planeDetector[surface] >= 0) {
-      return this.#internInterface(-1, this.medium[to], this.owner[to], -1, -1, -1, scene.planeDetector[surface]);
+      return this.#internInterface(-1, this.medium[to], this.owner[to], -1, -1, -1, scene.planeDetector[surface], -1);
     }
     const ownerFrom = this.owner[from];
     const ownerTo = this.owner[to];
@@ -330,7 +332,13 @@ export class RegionGraph {
     const inFinish = faceIn < 0 ? -1 : scene.faceFinish[faceIn];
     const acting = outFinish >= 0 ? faceOut : inFinish >= 0 ? faceIn : faceOut >= 0 ? faceOut : faceIn;
     const finish = Math.max(outFinish >= 0 ? outFinish : inFinish, 0);
-    return this.#internInterface(finish, this.medium[to], ownerTo, faceOut, faceIn, acting, -1);
+    const outward = acting === faceOut ? 1 : 0;
+    const film =
+      scene.filmOf[((2 * finish + outward) * scene.media + this.medium[from]) * scene.media + this.medium[to]];
+    if (film < 0 && scene.finishSplit[finish] === SPLIT.stack) {
+      throw new Error(`no table of finish ${finish} between media ${this.medium[from]} and ${this.medium[to]}`);
+    }
+    return this.#internInterface(finish, this.medium[to], ownerTo, faceOut, faceIn, acting, -1, film);
   }
 
   /** Face of `owner` that lies on `surface` between two neighbouring regions, −1 if its boundary is not there. */
@@ -357,9 +365,10 @@ export class RegionGraph {
     faceIn: number,
     faceActing: number,
     detector: number,
+    film: number,
   ): number {
     const { scene } = this;
-    const key = `${finish},${mediumBeyond},${ownerBeyond},${faceOut},${faceIn},${detector}`;
+    const key = `${finish},${mediumBeyond},${ownerBeyond},${faceOut},${faceIn},${detector},${film}`;
     const known = this.#knownInterfaces.get(key);
     if (known !== undefined) return known;
     const at = this.#knownInterfaces.size * INTERFACE.STRIDE;
@@ -374,7 +383,7 @@ export class RegionGraph {
     const flags =
       (detector >= 0 ? FLAG.freePlane : 0) | (arrival >= 0 ? FLAG.recordsArrival : 0) | (spreads ? FLAG.spreads : 0);
     const recorder = detector >= 0 ? detector : arrival;
-    this.interfaces.set([flags, finish, mediumBeyond, ownerBeyond, faceOut, faceIn, faceActing, recorder], at);
+    this.interfaces.set([flags, finish, mediumBeyond, ownerBeyond, faceOut, faceIn, faceActing, recorder, film], at);
     return at;
   }
 }

@@ -3,7 +3,7 @@
  * Numbers of slots and kinds are const enums: the build writes them into the kernel as literals, where imported objects would be looked up.
  * Lengths in mm; spectral tables are indexed [thing · wavelengths + wavelength index].
  */
-export const SCENE_VERSION = 1;
+export const SCENE_VERSION = 2;
 
 /** Index of the surroundings among owners; part i of the design is owner i + 1. */
 export const SURROUNDINGS = 0;
@@ -14,6 +14,12 @@ export const enum SPLIT {
   spectral = 1,
   metal = 2,
   table = 3,
+  stack = 4,
+}
+/** Blocks of a stack's table (film-table.ts): of angles, and wavelengths to a group. */
+export const enum FILM {
+  blocks = 16,
+  group = 8,
 }
 /** Where reflected or transmitted light goes. */
 export const enum SPREAD {
@@ -209,6 +215,14 @@ export interface Scene {
   readonly tableAngles: number; // angles per table, evenly from 0 to 90°
   readonly tableReflectance: Float64Array; // [(row + wavelength) · tableAngles + angle]
   readonly tableTransmittance: Float64Array;
+
+  // ---- stacks of thin films; a film is one of them, between two media, in one direction
+  readonly filmOf: Int32Array; // [((finish · 2 + (0 inward | 1 outward)) · media + medium here) · media + medium beyond], −1
+  readonly filmBlock: Int32Array; // [film]: first block; blocks are [group · FILM.blocks + block]
+  readonly filmBeyond: Int32Array; // [film]: first block beyond the critical angle, −1 where all is reflected there
+  readonly filmStart: Int32Array; // [block], into filmNodes
+  readonly filmCells: Int32Array; // [block]: intervals of angle
+  readonly filmNodes: Float32Array; // [(wavelength in its group · (cells + 1) + node) · 2]: share transmitted, share absorbed
 
   // ---- pumps
   readonly pumpCount: number;

@@ -5,6 +5,17 @@ export function sharedDoubles(source: ArrayLike<number>): Float64Array {
   return array;
 }
 
+/** Several arrays one after another. */
+export function sharedFloats(sources: readonly Float32Array[], length: number): Float32Array {
+  const array = new Float32Array(new SharedArrayBuffer(4 * length));
+  let at = 0;
+  for (const source of sources) {
+    array.set(source, at);
+    at += source.length;
+  }
+  return array;
+}
+
 export function sharedInts(source: ArrayLike<number>): Int32Array {
   const array = new Int32Array(new SharedArrayBuffer(4 * source.length));
   array.set(source);

@@ -1,8 +1,11 @@
 /** The curves a trace goes by, over the scene's wavelengths: of the dyes, the finishes and the bare media in use. */
-import type { DissolvedDye, MediumDescription } from '../design/description.js';
+import type { Description, DissolvedDye, MediumDescription } from '../design/description.js';
 import { metalReflectance } from '../optics/metal-reflectance.js';
 import type { CompiledScene } from './compile-scene.js';
+import { finishResponse } from './finish-response.js';
+import { givenFinish } from './given-finish.js';
 import { SPLIT } from './scene-layout.js';
+import { stackNeighbours } from './stack-neighbours.js';
 import { cellPhotons, linePhotons, type WavelengthGrid } from './wavelength-grid.js';
 
 export type CurveKind =
@@ -28,7 +31,7 @@ export interface UsedCurve {
 
 /** Media that absorb nothing and finishes that are the same at all wavelengths have no curve. */
 export function usedCurves(
-  { media }: { readonly media: ReadonlyMap<string, MediumDescription> },
+  { media, finishes, surroundings }: Pick<Description, 'media' | 'finishes' | 'surroundings'>,
   compiled: CompiledScene,
 ): UsedCurve[] {
   const { grid, mediaNames } = compiled.legend;
@@ -37,6 +40,7 @@ export function usedCurves(
     ...used.flatMap((medium) => medium.dyes.flatMap((dye) => dyeCurves(dye, medium.name, grid))),
     ...used.flatMap((medium) => mediumCurve(medium, grid)),
     ...finishCurves(compiled),
+    ...stackCurves({ media, finishes, surroundings }, compiled),
   ];
 }
 
@@ -97,6 +101,7 @@ function finishCurves({ scene, legend }: CompiledScene): UsedCurve[] {
     if (split === SPLIT.table)
       return bothShares(name, tableAtNormal(scene.tableReflectance), tableAtNormal(scene.tableTransmittance));
     const [reflectance, transmittance] = [rowOf(scene.finishA, f), rowOf(scene.finishB, f)];
+    if (split === SPLIT.stack) return [];
     const spectral = split === SPLIT.spectral && transmittance.some((value) => value !== transmittance[0]);
     return spectral ? bothShares(name, reflectance, transmittance) : [];
 
@@ -111,6 +116,50 @@ function finishCurves({ scene, legend }: CompiledScene): UsedCurve[] {
     return [...new Set(owners.map((owner) => scene.ownerMedium[owner]))];
   }
 }
+
+/** Stacks between the media that meet at their faces, from outside. */
+function stackCurves(
+  { media, finishes, surroundings }: Pick<Description, 'media' | 'finishes' | 'surroundings'>,
+  { legend }: CompiledScene,
+): UsedCurve[] {
+  return legend.finishNames.flatMap((name): UsedCurve[] => {
+    const finish = finishes.get(name);
+    if (finish?.kind !== 'stack') return [];
+    const faces = legend.faces.filter(
+      ({ part, reference }) => givenFinish(part.description, faceName(reference)) === name,
+    );
+    return stackNeighbours(faces, legend.parts, surroundings).flatMap(({ outside, inside }) => {
+      const [from, to] = [media.get(outside), media.get(inside)];
+      if (from === undefined || to === undefined) return [];
+      const at = legend.grid.nm.map((_, i) => i);
+      const response = Array.from(at, (i) => {
+        const nm = legend.grid.nm[i];
+        const [indexHere, indexBeyond] = [from.index(nm), to.index(nm)];
+        return finishResponse(finish, { indexHere, indexBeyond, cosine: 1, wavelengthNm: nm, inward: true }).s;
+      });
+      const where = `${outside} and ${inside}`;
+      return [
+        curve(
+          'finish-transmittance',
+          name,
+          where,
+          '1',
+          Float64Array.from(response, (one) => one.transmittance),
+        ),
+        curve(
+          'finish-reflectance',
+          name,
+          where,
+          '1',
+          Float64Array.from(response, (one) => one.reflectance),
+        ),
+      ];
+    });
+  });
+}
+
+/** Of 'part.face' or 'part.piece.face' what follows the part. */
+const faceName = (reference: string): string => reference.slice(reference.indexOf('.') + 1);
 
 function bothShares(name: string, reflectance: Float64Array, transmittance: Float64Array): UsedCurve[] {
   return [

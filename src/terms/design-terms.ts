@@ -171,6 +171,14 @@ const FINISHES: Readonly<Record<Prefixed<'finish', FinishDescription['kind']>, T
     assumes: 'the same at all angles and in all media: real ones are not',
     source: WORD,
   },
+  'finish-stack': {
+    name: 'stack of thin films',
+    also: ['stack', 'thin films', 'dielectric mirror', 'antireflection coat'],
+    means: 'layers between the two media that really touch the face',
+    formula: 'characteristic matrices of all layers, s and p, R + T + A = 1',
+    assumes: 'smooth, coherent, no substrate or back side beyond the list',
+    source: 'Born & Wolf, Principles of Optics, §1.6 (from memory)',
+  },
   'finish-table': {
     name: 'table finish',
     also: ['table', 'coating table'],

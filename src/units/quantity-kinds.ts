@@ -24,6 +24,7 @@ export const QUANTITY_KINDS = {
   fraction: kind(PLAIN, '', 0, 'a share', '95 %'),
   length: kind([1, 0, 0, 0, 0, 0, 0], 'mm', -3, 'a length', '8 mm'),
   wavelength: kind([1, 0, 0, 0, 0, 0, 0], 'nm', -9, 'a wavelength', '450 nm'),
+  thickness: kind([1, 0, 0, 0, 0, 0, 0], 'nm', -9, 'a thickness', '80 nm'),
   area: kind([2, 0, 0, 0, 0, 0, 0], 'mm²', -6, 'an area', '4 mm²'),
   volume: kind([3, 0, 0, 0, 0, 0, 0], 'mm³', -9, 'a volume', '2 mL'),
   angle: kind([0, 0, 0, 0, 0, 1, 0], 'rad', 0, 'an angle', '5 deg'),

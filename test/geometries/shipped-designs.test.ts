@@ -32,6 +32,7 @@ test('the shipped designs are these', () => {
     'two-bank-even-spread',
     'two-bank-poor-spread',
     'wedge-cell',
+    'wetted-dichroic-cell',
   ]);
 });
 

@@ -1,4 +1,5 @@
 import { describe, expect, it } from 'vitest';
+import { type Film, filmShares } from '../../src/proofs/film-law.js';
 import { fresnelReflectance, metalReflectance, radians } from '../../src/proofs/fresnel-law.js';
 import { rodIrradiance, rodShare } from '../../src/proofs/method-of-images.js';
 import { gaussNodes, integrate } from '../../src/proofs/quadrature.js';
@@ -29,6 +30,21 @@ describe('closed formulas of the proofs against printed numbers', () => {
       integrate((angle) => fresnelReflectance(1, n, angle) * Math.sin(2 * angle), 0, Math.PI / 2);
     expect(diffuse(1.33)).toBeCloseTo(0.065931, 5);
     expect(diffuse(1.5)).toBeCloseTo(0.091778, 5);
+  });
+
+  // Table of independently computed multilayer values.
+  it('thin films by echoes: 15 quarter waves in liquid, silver-like metal, frustrated total reflection', () => {
+    const quarter = (n: number): Film => [n, 0, 520 / (4 * n)];
+    const fifteen = Array.from({ length: 15 }, (_, i) => quarter(i % 2 ? 1.46 : 2.35));
+    const at = (degrees: number) => filmShares(fifteen, 1.3614, 1.52, radians(degrees), 520).reflectance;
+    expect(at(30)).toBeCloseTo((0.998883 + 0.983165) / 2, 6);
+    expect(at(45)).toBeCloseTo((0.997678 + 0.074491) / 2, 6);
+    expect(at(60)).toBeCloseTo((0.891896 + 0.000806) / 2, 6);
+    const silver = filmShares([[0.05, 3.3, 50]], 1.3614, 1.5168, radians(30), 520);
+    expect(silver.reflectance).toBeCloseTo((0.951325 + 0.931581) / 2, 6);
+    expect(silver.transmittance).toBeCloseTo((0.028958 + 0.042564) / 2, 6);
+    const gap = filmShares([[1, 0, 100]], 1.3614, 1.3614, radians(50), 520);
+    expect(gap.reflectance).toBeCloseTo((0.265891 + 0.141452) / 2, 6);
   });
 
   // Rakić 1995, as tabulated with R at normal incidence in air and in n = 1.36.
