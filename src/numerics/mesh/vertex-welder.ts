@@ -29,6 +29,11 @@ export class VertexWelder {
     return this.#next.length;
   }
 
+  /** Coordinates so far, with room behind; grows, so read it anew after `add`. */
+  get points(): Float64Array {
+    return this.#points.values;
+  }
+
   /** Number of the point at a corner. */
   add(x: number, y: number, z: number): number {
     // −0 is 0.
