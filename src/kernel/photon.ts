@@ -23,7 +23,12 @@ export const enum RAY {
   perDx = 12,
   perDy = 13,
   perDz = 14,
-  COUNT = 16,
+  /** Facet of a mesh that lies ahead, counted from 1, 0 none; and where light will be when it gets there. */
+  facet = 16,
+  facetX = 17,
+  facetY = 18,
+  facetZ = 19,
+  COUNT = 24,
 }
 
 /** Places of what is counted. */

@@ -20,7 +20,7 @@ export interface SceneCheck {
 export interface FaceReport {
   readonly part: string;
   readonly face: string;
-  readonly shape: 'flat' | 'cylinder' | 'cone' | 'sphere';
+  readonly shape: 'flat' | 'cylinder' | 'cone' | 'sphere' | 'facets';
   readonly centre: Vector3;
   readonly normal: Vector3;
   readonly areaMm2: number;
@@ -119,6 +119,7 @@ class FaceLook {
     const region = this.#regionAt(point, out, -STEP);
     let way = 2 * graph.families;
     if (surface.kind === 'curve') way += surface.index;
+    else if (surface.kind === 'mesh') way += graph.quadrics + graph.scene.meshGroup[surface.index] + surface.group;
     else {
       const [x, y, z] = graph.scene.familyNormal.subarray(3 * surface.family, 3 * surface.family + 3);
       way = 2 * surface.family + (x * out[0] + y * out[1] + z * out[2] > 0 ? 1 : 0);
@@ -143,7 +144,9 @@ function report(
     part,
     face: face.reference.slice(part.length + 1),
     shape:
-      patch.kind === 'zone'
+      patch.kind === 'facets' && !patch.flat
+        ? 'facets'
+        : patch.kind === 'zone'
         ? 'sphere'
         : patch.kind === 'side'
           ? patch.bottomRadius === patch.topRadius

@@ -12,6 +12,7 @@ import { planRecorders, planVoxels, type RecorderPlan, type VoxelPlan } from './
 import { checkFaceReference, compileSolids, designSize, type SceneFace } from './compile-solids.js';
 import { layOutRecorders } from './lay-out-recorders.js';
 import { layOutSlots } from './lay-out-slots.js';
+import { layOutMeshes } from './mesh/lay-out-meshes.js';
 import { type PlacedPart, placeParts } from './place-parts.js';
 import { SCENE_VERSION, type Scene } from './scene-layout.js';
 import { sharedBytes, sharedDoubles, sharedInts } from './shared-arrays.js';
@@ -73,6 +74,7 @@ export function compileScene(description: Description): CompiledScene {
     planeOffset: sharedDoubles(solids.offsets),
     quadrics: solids.curves,
     quadric: sharedDoubles(solids.quadrics),
+    ...layOutMeshes(solids.meshes),
     primitiveStart: sharedInts(solids.primitiveStart),
     constraintSurface: sharedInts(solids.constraintSurface),
     constraintSide: sharedBytes(solids.constraintSide),
