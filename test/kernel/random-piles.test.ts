@@ -32,7 +32,9 @@ function pileDesign(pile: readonly PilePart[], pick: readonly number[], clear: b
         medium('m1', 1.5, { absorption: 0.02, kind: 'solid' }),
         medium('m2', 1, { absorption: 0.001, kind: 'gas' }),
       ];
-  const exitFace = pile[0].shape.kind === 'sphere' ? 'surface' : pile[0].shape.kind === 'cap' ? 'dome' : 'top';
+  const first = pile[0].shape;
+  const round = first.kind === 'mesh' && first.mesh.groups.length === 1;
+  const exitFace = first.kind === 'sphere' || round ? 'surface' : first.kind === 'cap' ? 'dome' : 'top';
   return describeDesign({
     media,
     finishes,
