@@ -103,6 +103,8 @@ export function depthInside(shape: ShapeDescription, [x, y, z]: Vector3): number
       let depth = Number.POSITIVE_INFINITY;
       for (let i = 0; i < planes.length; i += 4) {
         const below = planes[i + 3] - planes[i] * x - planes[i + 1] * y - planes[i + 2] * z;
+        // Well outside: how far does not matter.
+        if (below < -0.1) return below;
         if (below < depth) depth = below;
       }
       return depth;

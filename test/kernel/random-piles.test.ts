@@ -115,5 +115,13 @@ describe('random piles of touching and overlapping parts', () => {
 });
 
 function describeDesignWithBeam(pile: readonly PilePart[], start: Vector3, unit: Vector3): Description {
-  return { ...pileDesign(pile, [0, 1, 2, 0, 1], true), pumps: [beam(start, unit)] };
+  const design = pileDesign(pile, [0, 1, 2, 0, 1], true);
+  // Light that crosses the exit ends there: out of the way it ends no path.
+  const aside = part('aside', { kind: 'box', size: [1, 1, 1] }, 'm0', { at: [90, 90, 90] });
+  return {
+    ...design,
+    parts: [...design.parts, aside],
+    exit: { ...design.exit, name: 'aside.top' },
+    pumps: [beam(start, unit)],
+  };
 }
