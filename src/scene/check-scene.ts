@@ -2,6 +2,7 @@
 import type { Description, FinishDescription, Vector3 } from '../design/description.js';
 import { DesignFaults } from '../design/design-faults.js';
 import type { Fault } from '../design/fault.js';
+import { coincidentFaults } from './check-meshes.js';
 import { pumpFaults } from './check-pumps.js';
 import { strengthFaults, voxelFaults } from './check-strength.js';
 import { surroundingFaults } from './check-surroundings.js';
@@ -54,6 +55,7 @@ export function checkScene(description: Description): SceneCheck {
     ...surroundingFaults(description),
     ...pumpFaults(description),
     ...coveredFaults(description, compiled, views),
+    ...coincidentFaults(views),
   ];
   return { faults, faces: views.map(({ face, exposed, touches }) => report(compiled, face, exposed, touches)) };
 }

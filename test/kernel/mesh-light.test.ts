@@ -127,6 +127,65 @@ describe('light in meshes', () => {
     expect(error / expected).toBeLessThan(0.01);
   });
 
+  test('a ball of facets keeps light as the ball does, and misses it by a quarter with every halving of its edges', () => {
+    // Beer's law over a fixed grid of parallel chords: no chance in it, so the order of convergence is plain to see.
+    const [radius, cells] = [2, 60];
+    const mean = (chord: (x: number, y: number) => number) => {
+      let sum = 0;
+      for (let i = 0; i < cells * cells; i++) {
+        const at = (k: number) => radius * ((2 * k + 1) / cells - 1);
+        sum += Math.exp(-chord(at(i % cells), at(Math.floor(i / cells))));
+      }
+      return sum / cells ** 2;
+    };
+    const ball = mean((x, y) => 2 * Math.sqrt(Math.max(0, radius ** 2 - x * x - y * y)));
+    const misses = [1, 2, 3, 4].map((level) => {
+      const { scene } = compileScene(
+        describeDesign({
+          media: [medium('glass', 1)],
+          parts: [part('body', meshShape(icosphereFacets(radius, level)), 'glass', { turns: [{ axis: 'x', angle: 0.3 }] })],
+          pumps: [beam([0, 0, 9], [0, 0, -1])],
+          exit: 'body.surface',
+        }),
+      );
+      const graph = new RegionGraph(scene);
+      return mean((x, y) => pathInside(scene, graph, [x, y, 9], [0, 0, -1])) - ball;
+    });
+    for (let i = 1; i < misses.length; i++) {
+      expect(misses[i - 1] / misses[i]).toBeGreaterThan(3.5);
+      expect(misses[i - 1] / misses[i]).toBeLessThan(4.6);
+    }
+  });
+
+  test('of light that starts inside and is aimed exactly at corners and edges, none is lost, whatever the finish', () => {
+    for (const [level, name] of [[0, 'clear'], [1, 'bright'], [2, 'white']] as const) {
+      const shape = meshShape(icosphereFacets(2, level));
+      if (shape.kind !== 'mesh') return;
+      const { facetPoint, facetCorner } = shape.mesh.tree;
+      const design = (start: Vector3, direction: Vector3) =>
+        describeDesign({
+          media: [medium('bath', 1.4, { absorption: 0.02 })],
+          finishes: [
+            finish('bright', { kind: 'mirror', reflectance: 0.999 }),
+            finish('white', { kind: 'diffuser', reflects: 0.6, transmits: 0.4 }),
+          ],
+          parts: [part('body', shape, 'bath', { faces: { surface: name } })],
+          pumps: [beam(start, direction)],
+          exit: 'body.surface',
+        });
+      for (let e = 0; e < facetCorner.length; e += [5, 23, 97][level]) {
+        const f = e % 3 === 2 ? e - 2 : e + 1;
+        const share = e % 2 === 0 ? 0 : 0.5;
+        const to = [0, 1, 2].map((k) => facetPoint[3 * facetCorner[e] + k] * (1 - share) + facetPoint[3 * facetCorner[f] + k] * share);
+        const norm = Math.hypot(...to);
+        const { counts, defects } = trace(design([0, 0, 0], to.map((c) => c / norm) as unknown as Vector3), 1, `edge ${e}`);
+        expect(defects).toBe(0);
+        expect([...counts.values()].reduce((sum, list) => sum + total(list), 0)).toBe(1024);
+        expect([...counts].filter(([fate]) => fate.startsWith('trapped')).reduce((sum, [, list]) => sum + total(list), 0)).toBe(0);
+      }
+    }
+  });
+
   test('nothing is lost in bumpy, hollow and touching meshes, with mirrors all round or none (seed closed)', () => {
     const hollow = joinFacets(boxFacets([6, 6, 6]), turned(icosphereFacets(2, 2)));
     for (const body of [bumpyFacets(3, 3, 0.6, 5), hollow]) {
