@@ -73,7 +73,10 @@ const mesh = record('file and unit', {
     'group',
     'Names of faces: `group` takes the solids of STL, the groups or objects of OBJ; `material` the materials of OBJ; `crease` parts the surface at edges, patch-1 being the largest; `none` calls all of it surface.',
   ),
-  crease: optional(angle, 'With `faces-by: crease`: patches end where neighbours differ by this angle. Default: 30 deg.'),
+  crease: optional(
+    angle,
+    'With `faces-by: crease`: patches end where neighbours differ by this angle. Default: 30 deg.',
+  ),
   weld: withDefault(
     quantity('length', { min: 0, max: 1 }),
     0,

@@ -12,7 +12,7 @@ export interface CompanionRules {
 }
 
 export type CompanionFile =
-  | { readonly ok: true; readonly bytes: Uint8Array; /** As shown in faults. */ readonly file: string }
+  | { readonly ok: true; readonly bytes: Uint8Array /** As shown in faults. */; readonly file: string }
   | CompanionFault;
 
 export interface CompanionFault {

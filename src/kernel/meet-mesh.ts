@@ -21,8 +21,7 @@ export function findFacet(scene: Scene, graph: RegionGraph, ray: Float64Array, n
   const depth = ray[RAY.depth] * (1 + 1e-9);
   if (mu * ahead > depth) ahead = depth / mu;
   const open = ahead === Number.POSITIVE_INFINITY;
-  const standing =
-    ray[RAY.x] === ray[RAY.facetX] && ray[RAY.y] === ray[RAY.facetY] && ray[RAY.z] === ray[RAY.facetZ];
+  const standing = ray[RAY.x] === ray[RAY.facetX] && ray[RAY.y] === ray[RAY.facetY] && ray[RAY.z] === ray[RAY.facetZ];
   const last = standing ? ray[RAY.facet] - 1 : -1;
   for (let mesh = 0; mesh < scene.meshes; mesh++) {
     const inside = graph.side[sides + mesh] < 0;

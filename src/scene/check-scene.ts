@@ -149,12 +149,12 @@ function report(
       patch.kind === 'facets' && !patch.flat
         ? 'facets'
         : patch.kind === 'zone'
-        ? 'sphere'
-        : patch.kind === 'side'
-          ? patch.bottomRadius === patch.topRadius
-            ? 'cylinder'
-            : 'cone'
-          : 'flat',
+          ? 'sphere'
+          : patch.kind === 'side'
+            ? patch.bottomRadius === patch.topRadius
+              ? 'cylinder'
+              : 'cone'
+            : 'flat',
     centre: patchCentre(patch),
     normal: face.hollow ? scale(normal, -1) : normal,
     areaMm2: patchArea(patch),

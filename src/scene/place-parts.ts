@@ -79,7 +79,8 @@ export function findFace(parts: readonly PlacedPart[], reference: string): Place
 /** Looking out of the material: a hole's wall looks into the hole. */
 export function faceNormal({ face, hollow }: PlacedFace): Vector3 | null {
   const { patch, surface } = face;
-  const normal = surface.kind === 'plane' ? surface.normal : patch.kind === 'facets' && patch.flat ? patch.normal : null;
+  const normal =
+    surface.kind === 'plane' ? surface.normal : patch.kind === 'facets' && patch.flat ? patch.normal : null;
   return normal !== null && hollow ? scale(normal, -1) : normal;
 }
 

@@ -166,7 +166,8 @@ export class RegionGraph {
     }
     if (scene.meshes > 0) {
       this.#point.set([x, y, z, dx, dy, dz]);
-      for (let m = 0; m < scene.meshes; m++) wanted[this.families + this.quadrics + m] = meshSide(scene, m, this.#point);
+      for (let m = 0; m < scene.meshes; m++)
+        wanted[this.families + this.quadrics + m] = meshSide(scene, m, this.#point);
     }
     return this.#intern();
   }

@@ -37,12 +37,12 @@ export const shapeArbitrary: fc.Arbitrary<ShapeDescription> = fc.oneof(
     }),
   ),
   // Convex, so that the textbook definition is at hand: below the plane of every facet.
-  fc.tuple(size, size, size).map(
-    ([a, b, c]): ShapeDescription => ({ kind: 'mesh', mesh: mustClose(boxFacets([a, b, c])) }),
-  ),
-  fc.tuple(size, fc.integer({ min: 0, max: 1 })).map(
-    ([r, level]): ShapeDescription => ({ kind: 'mesh', mesh: mustClose(icosphereFacets(r / 2, level)) }),
-  ),
+  fc
+    .tuple(size, size, size)
+    .map(([a, b, c]): ShapeDescription => ({ kind: 'mesh', mesh: mustClose(boxFacets([a, b, c])) })),
+  fc
+    .tuple(size, fc.integer({ min: 0, max: 1 }))
+    .map(([r, level]): ShapeDescription => ({ kind: 'mesh', mesh: mustClose(icosphereFacets(r / 2, level)) })),
 );
 const turnArbitrary: fc.Arbitrary<Turn> = fc.record({
   axis: fc.constantFrom('x', 'y', 'z'),
@@ -110,6 +110,12 @@ export function depthInside(shape: ShapeDescription, [x, y, z]: Vector3): number
       return depth;
     }
   }
+}
+
+/** A face that every shape of a pile has one of. */
+export function someFace(shape: ShapeDescription): string {
+  if (shape.kind === 'mesh') return shape.mesh.groups[shape.mesh.groups.length - 1];
+  return shape.kind === 'sphere' ? 'surface' : shape.kind === 'cap' ? 'dome' : 'top';
 }
 
 const planesOf = new WeakMap<ClosedMesh, Float64Array>();

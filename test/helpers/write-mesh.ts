@@ -13,7 +13,9 @@ export function binaryStl(mesh: MeshFacets, heading = 'made for a test'): Uint8A
   view.setUint32(80, count, true);
   for (let facet = 0; facet < count; facet++) {
     for (let k = 0; k < 3; k++) {
-      corner(mesh, facet, k).forEach((value, c) => view.setFloat32(84 + 50 * facet + 12 + 12 * k + 4 * c, value, true));
+      for (const [c, value] of corner(mesh, facet, k).entries()) {
+        view.setFloat32(84 + 50 * facet + 12 + 12 * k + 4 * c, value, true);
+      }
     }
   }
   return bytes;
@@ -33,7 +35,9 @@ export function textStl(mesh: MeshFacets): string {
 }
 
 export function objText(mesh: MeshFacets, negative = false): string {
-  const vertices = Array.from({ length: mesh.points.length / 3 }, (_, i) => [...mesh.points.subarray(3 * i, 3 * i + 3)]);
+  const vertices = Array.from({ length: mesh.points.length / 3 }, (_, i) => [
+    ...mesh.points.subarray(3 * i, 3 * i + 3),
+  ]);
   const lines = ['# made for a test', ...vertices.map((v) => `v ${v.join(' ')}`), 'vn 0 0 1', 'vt 0 0'];
   const index = (i: number) => (negative ? i - vertices.length : i + 1);
   let last = -1;

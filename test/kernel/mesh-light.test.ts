@@ -39,7 +39,10 @@ function variance(list: readonly number[]): number {
   return (list.reduce((sum, x) => sum + (x - mean) ** 2, 0) * list.length) / (list.length - 1);
 }
 
-const meshShape = (facets: Parameters<typeof mustClose>[0]): ShapeDescription => ({ kind: 'mesh', mesh: mustClose(facets) });
+const meshShape = (facets: Parameters<typeof mustClose>[0]): ShapeDescription => ({
+  kind: 'mesh',
+  mesh: mustClose(facets),
+});
 const FACES = { left: 'half', right: 'half', front: 'pass', back: 'pass', bottom: 'white' };
 
 function greenCell(body: ShapeDescription): Description {
@@ -48,10 +51,22 @@ function greenCell(body: ShapeDescription): Description {
     finishes: [
       finish('half', { kind: 'mirror', reflectance: 0.9 }),
       finish('white', { kind: 'diffuser', reflects: 0.9, transmits: 0 }),
-      finish('pass', { kind: 'dichroic', edgeNm: 490, widthNm: 5, passes: 'below', transmits: 0.95, reflects: 0.97, absorbs: 0 }),
+      finish('pass', {
+        kind: 'dichroic',
+        edgeNm: 490,
+        widthNm: 5,
+        passes: 'below',
+        transmits: 0.95,
+        reflects: 0.97,
+        absorbs: 0,
+      }),
     ],
     parts: [part('cell', body, 'bath', { faces: FACES })],
-    pumps: [beam([0, -30, 0], [0, 1, 0], { beam: { kind: 'patch', outline: { kind: 'rectangle', size: [8, 4] }, divergence: [0.05, 0.1] } })],
+    pumps: [
+      beam([0, -30, 0], [0, 1, 0], {
+        beam: { kind: 'patch', outline: { kind: 'rectangle', size: [8, 4] }, divergence: [0.05, 0.1] },
+      }),
+    ],
     exit: 'cell.top',
   });
 }
@@ -143,7 +158,9 @@ describe('light in meshes', () => {
       const { scene } = compileScene(
         describeDesign({
           media: [medium('glass', 1)],
-          parts: [part('body', meshShape(icosphereFacets(radius, level)), 'glass', { turns: [{ axis: 'x', angle: 0.3 }] })],
+          parts: [
+            part('body', meshShape(icosphereFacets(radius, level)), 'glass', { turns: [{ axis: 'x', angle: 0.3 }] }),
+          ],
           pumps: [beam([0, 0, 9], [0, 0, -1])],
           exit: 'body.surface',
         }),
@@ -158,7 +175,11 @@ describe('light in meshes', () => {
   });
 
   test('of light that starts inside and is aimed exactly at corners and edges, none is lost, whatever the finish', () => {
-    for (const [level, name] of [[0, 'clear'], [1, 'bright'], [2, 'white']] as const) {
+    for (const [level, name] of [
+      [0, 'clear'],
+      [1, 'bright'],
+      [2, 'white'],
+    ] as const) {
       const shape = meshShape(icosphereFacets(2, level));
       if (shape.kind !== 'mesh') return;
       const { facetPoint, facetCorner } = shape.mesh.tree;
@@ -176,12 +197,20 @@ describe('light in meshes', () => {
       for (let e = 0; e < facetCorner.length; e += [5, 23, 97][level]) {
         const f = e % 3 === 2 ? e - 2 : e + 1;
         const share = e % 2 === 0 ? 0 : 0.5;
-        const to = [0, 1, 2].map((k) => facetPoint[3 * facetCorner[e] + k] * (1 - share) + facetPoint[3 * facetCorner[f] + k] * share);
+        const to = [0, 1, 2].map(
+          (k) => facetPoint[3 * facetCorner[e] + k] * (1 - share) + facetPoint[3 * facetCorner[f] + k] * share,
+        );
         const norm = Math.hypot(...to);
-        const { counts, defects } = trace(design([0, 0, 0], to.map((c) => c / norm) as unknown as Vector3), 1, `edge ${e}`);
+        const { counts, defects } = trace(
+          design([0, 0, 0], to.map((c) => c / norm) as unknown as Vector3),
+          1,
+          `edge ${e}`,
+        );
         expect(defects).toBe(0);
         expect([...counts.values()].reduce((sum, list) => sum + total(list), 0)).toBe(1024);
-        expect([...counts].filter(([fate]) => fate.startsWith('trapped')).reduce((sum, [, list]) => sum + total(list), 0)).toBe(0);
+        expect(
+          [...counts].filter(([fate]) => fate.startsWith('trapped')).reduce((sum, [, list]) => sum + total(list), 0),
+        ).toBe(0);
       }
     }
   });
@@ -210,8 +239,13 @@ describe('light in meshes', () => {
               part('third', shape, 'stone', { at: [0, 0, 2], turns: [{ axis: 'x', angle: 0.4 }] }),
             ],
             pumps: [
-              beam([0, 0, 9], [0, 0, -1], { beam: { kind: 'lambertian', outline: { kind: 'rectangle', size: [12, 12] } } }),
-              beam([0.1, 0.2, 0.3], [0.3, -0.5, 0.7], { name: 'inside', beam: { kind: 'lambertian', outline: { kind: 'disc', radius: 3 } } }),
+              beam([0, 0, 9], [0, 0, -1], {
+                beam: { kind: 'lambertian', outline: { kind: 'rectangle', size: [12, 12] } },
+              }),
+              beam([0.1, 0.2, 0.3], [0.3, -0.5, 0.7], {
+                name: 'inside',
+                beam: { kind: 'lambertian', outline: { kind: 'disc', radius: 3 } },
+              }),
             ],
             exit: `first.${shape.kind === 'mesh' ? shape.mesh.groups[0] : ''}`,
           }),
@@ -226,7 +260,12 @@ describe('light in meshes', () => {
 });
 
 /** Path of one straight ray through index-matched parts, by the kernel's own steps. */
-function pathInside(scene: ReturnType<typeof compileScene>['scene'], graph: RegionGraph, start: Vector3, d: Vector3): number {
+function pathInside(
+  scene: ReturnType<typeof compileScene>['scene'],
+  graph: RegionGraph,
+  start: Vector3,
+  d: Vector3,
+): number {
   const ray = new Float64Array(RAY.COUNT);
   const now = new Int32Array(NOW.COUNT);
   ray.set([...start, ...d]);

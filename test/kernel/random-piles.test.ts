@@ -11,7 +11,7 @@ import { compileScene } from '../../src/scene/compile-scene.js';
 import { RegionGraph } from '../../src/scene/region-graph.js';
 import { FIGURE } from '../../src/tallies/run-tallies.js';
 import { beam, describeDesign, finish, medium, part, plainDye } from '../helpers/describe.js';
-import { ownerByHand, type PilePart, pileArbitrary } from '../helpers/random-pile.js';
+import { ownerByHand, type PilePart, pileArbitrary, someFace } from '../helpers/random-pile.js';
 
 const WANTED = Number(process.env.STOKESWELL_PILE_HISTORIES ?? 1_000_000);
 const HISTORIES_PER_PILE = 2048;
@@ -32,9 +32,6 @@ function pileDesign(pile: readonly PilePart[], pick: readonly number[], clear: b
         medium('m1', 1.5, { absorption: 0.02, kind: 'solid' }),
         medium('m2', 1, { absorption: 0.001, kind: 'gas' }),
       ];
-  const first = pile[0].shape;
-  const round = first.kind === 'mesh' && first.mesh.groups.length === 1;
-  const exitFace = first.kind === 'sphere' || round ? 'surface' : first.kind === 'cap' ? 'dome' : 'top';
   return describeDesign({
     media,
     finishes,
@@ -56,7 +53,7 @@ function pileDesign(pile: readonly PilePart[], pick: readonly number[], clear: b
         beam: { kind: 'lambertian', outline: { kind: 'disc', radius: 3 } },
       }),
     ],
-    exit: `p0.${exitFace}`,
+    exit: `p0.${someFace(pile[0].shape)}`,
   });
 }
 

@@ -91,7 +91,9 @@ export class ByteText {
   }
 
   text(): string {
-    return this.end > this.start ? decode(this.bytes, this.start, Math.min(this.end, this.start + 60)) : 'the end of the line';
+    return this.end > this.start
+      ? decode(this.bytes, this.start, Math.min(this.end, this.start + 60))
+      : 'the end of the line';
   }
 
   /** The word as a number, NaN when it is none. */

@@ -37,7 +37,13 @@ export function describeMesh(fields: MeshFields, path: DesignPath, reading: Read
   const parsed = parseMesh(source.bytes, fields);
   if (parsed === null) {
     const problem = 'this kind of mesh is not read';
-    reading.report({ code: 'file', path: file, problem, found: fields.file, expected: 'a name that ends in .stl or .obj' });
+    reading.report({
+      code: 'file',
+      path: file,
+      problem,
+      found: fields.file,
+      expected: 'a name that ends in .stl or .obj',
+    });
     return null;
   }
   for (const { line, column, ...fault } of parsed.faults) {
@@ -146,7 +152,8 @@ function wordsFor({ kind }: MeshProblem, weld: string | null) {
     case 'inside-out':
       return {
         problem: 'the mesh is inside out: shells of it look into the solid',
-        expected: 'corners counter-clockwise as seen from outside; inner shells, the walls of cavities, look into the cavity',
+        expected:
+          'corners counter-clockwise as seen from outside; inner shells, the walls of cavities, look into the cavity',
         suggestion: '`turn-inside-out: yes`',
       };
   }

@@ -30,9 +30,7 @@ export function partPolygon(points: Float64Array, polygon: Int32Array): Triple[]
     const [a, b, c] = [rest[i % n], rest[(i + 1) % n], rest[(i + 2) % n]];
     const isEar =
       turn(a, b, c) > 0 &&
-      rest.every(
-        (p) => p === a || p === b || p === c || turn(a, b, p) < 0 || turn(b, c, p) < 0 || turn(c, a, p) < 0,
-      );
+      rest.every((p) => p === a || p === b || p === c || turn(a, b, p) < 0 || turn(b, c, p) < 0 || turn(c, a, p) < 0);
     // A polygon without ears is crossed or flat: it is cut anyhow, and the test for self-cuts will tell.
     if (isEar || tries > n) {
       triangles.push([a, b, c]);

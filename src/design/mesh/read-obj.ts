@@ -2,7 +2,7 @@
 import { GrowingIntegers } from '../../numerics/mesh/growing-array.js';
 import { ByteText } from './byte-text.js';
 import { MeshBuilder } from './mesh-builder.js';
-import { MOST_MESH_FAULTS, type MeshFileFault } from './mesh-file-fault.js';
+import { type MeshFileFault, MOST_MESH_FAULTS } from './mesh-file-fault.js';
 import { partPolygon } from './part-polygon.js';
 import { readPoint } from './read-stl.js';
 

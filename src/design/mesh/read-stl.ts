@@ -1,7 +1,7 @@
 /** STL, the two forms of the stereolithography interface: 80 bytes of heading, a count and 50 bytes a facet; or words. */
 import { ByteText } from './byte-text.js';
 import { LARGEST_COORDINATE_MM, MeshBuilder } from './mesh-builder.js';
-import { MOST_MESH_FAULTS, type MeshFileFault } from './mesh-file-fault.js';
+import { type MeshFileFault, MOST_MESH_FAULTS } from './mesh-file-fault.js';
 
 const HEADING = 84;
 const RECORD = 50;
@@ -25,7 +25,10 @@ export function readStl(bytes: Uint8Array, unit: number, weld: number): { mesh: 
         : 'the file is longer than its heading says';
   const found = `${bytes.length} bytes, room for ${whole} facets`;
   const expected = `${HEADING + RECORD * announced} bytes for the ${announced} facets of the heading (byte 80), or a text that begins with "solid"`;
-  return { mesh, faults: [{ code: 'file', problem, found, expected, suggestion: 'export the mesh again', line: 1, column: 1 }] };
+  return {
+    mesh,
+    faults: [{ code: 'file', problem, found, expected, suggestion: 'export the mesh again', line: 1, column: 1 }],
+  };
 }
 
 function isText(bytes: Uint8Array): boolean {
@@ -106,7 +109,14 @@ function readText(bytes: Uint8Array, unit: number, weld: number) {
   if (faults.length === 0 && within !== 'nothing') {
     const problem = `the file is cut off: it ends within a ${within}`;
     const suggestion = 'export the mesh again';
-    faults.push({ code: 'file', problem, expected: '"endsolid" at the end', suggestion, line: text.line, column: text.column });
+    faults.push({
+      code: 'file',
+      problem,
+      expected: '"endsolid" at the end',
+      suggestion,
+      line: text.line,
+      column: text.column,
+    });
   }
   return { mesh, faults };
 }
@@ -124,7 +134,14 @@ export function readPoint(text: ByteText, mesh: MeshBuilder, faults: MeshFileFau
     const value = given ? text.number() : Number.NaN;
     if (Number.isNaN(value)) {
       const problem = 'a coordinate is not a number';
-      faults.push({ code: 'quantity', problem, found: text.text(), expected: 'three numbers', line, column: text.column });
+      faults.push({
+        code: 'quantity',
+        problem,
+        found: text.text(),
+        expected: 'three numbers',
+        line,
+        column: text.column,
+      });
       return -1;
     }
     if (k === 0) x = value;

@@ -147,8 +147,7 @@ function spread<T>(list: readonly T[]): T[] {
 }
 
 function middle({ facetPoint, facetCorner }: FacetTree, facet: number): Point {
-  const at = (c: number) =>
-    [0, 1, 2].reduce((sum, k) => sum + facetPoint[3 * facetCorner[3 * facet + k] + c], 0) / 3;
+  const at = (c: number) => [0, 1, 2].reduce((sum, k) => sum + facetPoint[3 * facetCorner[3 * facet + k] + c], 0) / 3;
   return [at(0), at(1), at(2)];
 }
 

@@ -22,7 +22,10 @@ export function facetVolume(points: Float64Array, corners: Int32Array, facet: nu
   facetVector(points, corners, facet, vector);
   const a = 3 * corners[3 * facet];
   return (
-    ((points[a] - from[0]) * vector[0] + (points[a + 1] - from[1]) * vector[1] + (points[a + 2] - from[2]) * vector[2]) / 3
+    ((points[a] - from[0]) * vector[0] +
+      (points[a + 1] - from[1]) * vector[1] +
+      (points[a + 2] - from[2]) * vector[2]) /
+    3
   );
 }
 

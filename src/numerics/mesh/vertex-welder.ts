@@ -97,7 +97,10 @@ export class VertexWelder {
     this.#bits[1] = y;
     this.#bits[2] = z;
     const words = this.#words;
-    return mix(words[0] ^ Math.imul(words[1], 31), words[2] ^ Math.imul(words[3], 31), words[4] ^ Math.imul(words[5], 31)) & mask;
+    return (
+      mix(words[0] ^ Math.imul(words[1], 31), words[2] ^ Math.imul(words[3], 31), words[4] ^ Math.imul(words[5], 31)) &
+      mask
+    );
   }
 
   #rehash(): void {

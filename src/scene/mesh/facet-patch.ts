@@ -55,7 +55,10 @@ export function facetPatch(
   const normal = directed ? normalise(total) : (frame?.normal ?? [0, 0, 1]);
   const axes = frame ?? boxAxes(normal);
   const patch = { kind: 'facets', mesh, group, facets, areas, centre, normal, u: axes.u, v: axes.v } as const;
-  return { ...patch, flat: directed && length(total) >= area * (1 - FLAT_NORMALS) && isThin({ ...patch, flat: true }, area) };
+  return {
+    ...patch,
+    flat: directed && length(total) >= area * (1 - FLAT_NORMALS) && isThin({ ...patch, flat: true }, area),
+  };
 }
 
 function isThin(patch: FacetPatch, area: number): boolean {
@@ -157,7 +160,8 @@ export function facetsAim(patch: FacetPatch): { point: Vector3; normal: Vector3;
   const look = closed ? scale(patch.v, -1) : patch.normal;
   const rest = closed ? { u: patch.u, v: patch.normal } : { u: patch.u, v: patch.v };
   const meetings = facetsMeetings(patch, patch.centre, look).sort((a, b) => b.distance - a.distance);
-  if (meetings.length > 0) return { point: add(patch.centre, scale(look, meetings[0].distance)), normal: look, ...rest };
+  if (meetings.length > 0)
+    return { point: add(patch.centre, scale(look, meetings[0].distance)), normal: look, ...rest };
   const { point } = facetsPoint(patch, 0.5, 0.5);
   return { point, normal: look, ...rest };
 }

@@ -98,7 +98,11 @@ function bareness(face: SceneFace, patch: FacetPatch, graph: RegionGraph): (spot
     ownerAt(spot, normal, -STEP * out) === face.owner && ownerAt(spot, normal, STEP * out) !== face.owner;
   for (let i = 0; i < PROBES; i++) {
     // R2 sequence (Roberts 2018).
-    const { point, normal } = facetsPoint(patch, (0.5 + i * 0.7548776662466927) % 1, (0.5 + i * 0.5698402909980532) % 1);
+    const { point, normal } = facetsPoint(
+      patch,
+      (0.5 + i * 0.7548776662466927) % 1,
+      (0.5 + i * 0.5698402909980532) % 1,
+    );
     if (!isBare(point, normal)) return isBare;
   }
   return () => true;

@@ -42,8 +42,7 @@ export function layOutMeshes(meshes: readonly PlacedMesh[]): MeshArrays {
     facetPoint.set(points, 3 * point[m]);
     for (let i = 0; i < tree.facetCorner.length; i++) facetCorner[3 * facet[m] + i] = tree.facetCorner[i] + point[m];
     for (let i = 0; i < source.group.length; i++) facetGroup[facet[m] + i] = source.group[i] + group[m];
-    const boxes =
-      points === tree.facetPoint ? tree.nodeBox : refitBoxes(points, tree.facetCorner, tree.nodeChild);
+    const boxes = points === tree.facetPoint ? tree.nodeBox : refitBoxes(points, tree.facetCorner, tree.nodeChild);
     nodeBox.set(boxes, 12 * node[m]);
     for (let i = 0; i < tree.nodeChild.length; i++) {
       const child = tree.nodeChild[i];

@@ -16,7 +16,10 @@ const obj = (text: string, names: 'group' | 'material' = 'group') => readObj(byt
 function plain({ points, corners, group, groups }: MeshFacets): string[] {
   return [...group.keys()].map((facet) => {
     const at = [0, 1, 2].map((k) => [...points.subarray(3 * corners[3 * facet + k], 3 * corners[3 * facet + k] + 3)]);
-    return `${groups[group[facet]]} ${at.flat().map((value) => Math.fround(value)).join(' ')}`;
+    return `${groups[group[facet]]} ${at
+      .flat()
+      .map((value) => Math.fround(value))
+      .join(' ')}`;
   });
 }
 
@@ -34,7 +37,10 @@ describe('round trips', () => {
       // Some binary files begin like texts.
       [stl(binaryStl(single, 'solid body')), nameless],
       [stl(bytes(textStl(single))), single],
-      [stl(bytes(textStl(single).toUpperCase().replaceAll('\n', '\r\n'))), { ...single, groups: single.groups.map((g) => g.toUpperCase()) }],
+      [
+        stl(bytes(textStl(single).toUpperCase().replaceAll('\n', '\r\n'))),
+        { ...single, groups: single.groups.map((g) => g.toUpperCase()) },
+      ],
       [obj(objText(single)), single],
       [obj(objText(single, true)), single],
     ] as const) {
@@ -54,13 +60,21 @@ describe('round trips', () => {
   test('numbers are those of the library to the last bit', () => {
     const read = (text: string) => parseNumber(bytes(text), 0, text.length);
     fc.assert(
-      fc.property(fc.oneof(fc.double({ noNaN: true, noDefaultInfinity: true }), fc.integer(), fc.float({ noNaN: true, noDefaultInfinity: true })), (value) => {
-        expect(read(String(value))).toBe(value + 0 === 0 ? read(String(value)) : value);
-        expect(read(value.toExponential(8))).toBe(Number(value.toExponential(8)));
-        expect(read(value.toFixed(6))).toBe(Number(value.toFixed(6)));
-      }),
+      fc.property(
+        fc.oneof(
+          fc.double({ noNaN: true, noDefaultInfinity: true }),
+          fc.integer(),
+          fc.float({ noNaN: true, noDefaultInfinity: true }),
+        ),
+        (value) => {
+          expect(read(String(value))).toBe(value + 0 === 0 ? read(String(value)) : value);
+          expect(read(value.toExponential(8))).toBe(Number(value.toExponential(8)));
+          expect(read(value.toFixed(6))).toBe(Number(value.toFixed(6)));
+        },
+      ),
     );
-    for (const text of ['', '.', '-', '1e', 'e5', 'nan', 'inf', '1.2.3', '0x10', '1_0', '1,5']) expect(read(text)).toBeNaN();
+    for (const text of ['', '.', '-', '1e', 'e5', 'nan', 'inf', '1.2.3', '0x10', '1_0', '1,5'])
+      expect(read(text)).toBeNaN();
     expect(read('+.5e-1')).toBe(0.05);
   });
 });
@@ -70,7 +84,9 @@ describe('OBJ', () => {
   const QUADS = ['4 3 2 1', '5 6 7 8', '1 2 6 5', '2 3 7 6', '3 4 8 7', '4 1 5 8'];
 
   test('polygons, objects, groups, materials and continued lines', () => {
-    const text = `${CUBE}o cube\n${QUADS.slice(0, 2).map((q) => `f ${q}\n`).join('')}g the side walls\nusemtl Glass.01\nf 1 2 \\\n 6 5\nf 2 3 7 6\nusemtl others\nf 3 4 8 7\nf 4 1 5 8`;
+    const text = `${CUBE}o cube\n${QUADS.slice(0, 2)
+      .map((q) => `f ${q}\n`)
+      .join('')}g the side walls\nusemtl Glass.01\nf 1 2 \\\n 6 5\nf 2 3 7 6\nusemtl others\nf 3 4 8 7\nf 4 1 5 8`;
     const read = obj(text);
     expect(read.faults).toEqual([]);
     const facets = read.mesh.finish();
@@ -81,7 +97,14 @@ describe('OBJ', () => {
 
   test('a polygon that is not convex keeps its area', () => {
     // An L of area 3, as both ends of a prism of height 2.
-    const outline = [[0, 0], [2, 0], [2, 1], [1, 1], [1, 2], [0, 2]];
+    const outline = [
+      [0, 0],
+      [2, 0],
+      [2, 1],
+      [1, 1],
+      [1, 2],
+      [0, 2],
+    ];
     const vertices = [0, 2].flatMap((z) => outline.map(([x, y]) => `v ${x} ${y} ${z}\n`)).join('');
     const sides = outline.map((_, i) => `f ${i + 1} ${((i + 1) % 6) + 1} ${((i + 1) % 6) + 7} ${i + 7}\n`).join('');
     const { mesh } = obj(`${vertices}f 6 5 4 3 2 1\nf 7 8 9 10 11 12\n${sides}`);
@@ -143,7 +166,10 @@ describe('STL', () => {
     for (const value of [Number.NaN, Number.POSITIVE_INFINITY, 1e38]) {
       const data = binaryStl(box);
       new DataView(data.buffer).setFloat32(84 + 50 * 3 + 12, value, true);
-      expect(stl(data).faults[0]).toMatchObject({ code: 'range', problem: 'corner 1 of facet 4, at byte 246, is not a place' });
+      expect(stl(data).faults[0]).toMatchObject({
+        code: 'range',
+        problem: 'corner 1 of facet 4, at byte 246, is not a place',
+      });
     }
     expect(stl(bytes(textStl(box).replace('vertex', 'vertex 1e308'))).faults[0].problem).toBe('this is not a place');
     expect(stl(bytes(textStl(box).replace('vertex', 'vertex nan'))).faults[0]).toMatchObject({ line: 4, column: 14 });
@@ -151,18 +177,31 @@ describe('STL', () => {
 
   test('any bytes at all give a mesh or a fault, never an error', () => {
     fc.assert(
-      fc.property(fc.oneof(fc.uint8Array({ maxLength: 400 }), fc.string({ maxLength: 200 }).map((s) => bytes(`solid ${s}`))), (data) => {
-        for (const { mesh, faults } of [stl(data), readObj(data, 1, 0, 'group')]) {
-          if (faults.length === 0) expect(mesh.finish().corners.length).toBe(3 * mesh.facets);
-        }
-      }),
+      fc.property(
+        fc.oneof(
+          fc.uint8Array({ maxLength: 400 }),
+          fc.string({ maxLength: 200 }).map((s) => bytes(`solid ${s}`)),
+        ),
+        (data) => {
+          for (const { mesh, faults } of [stl(data), readObj(data, 1, 0, 'group')]) {
+            if (faults.length === 0) expect(mesh.finish().corners.length).toBe(3 * mesh.facets);
+          }
+        },
+      ),
       { numRuns: 300 },
     );
   });
 
   test('names of groups become names of faces', () => {
     expect(['', ' ', '--', 'Oberseite links', '7up', 'a.b', 'others', 'été'].map(groupName)).toEqual([
-      'surface', 'surface', 'surface', 'Oberseite-links', 'group-7up', 'a-b', 'group-others', 'été',
+      'surface',
+      'surface',
+      'surface',
+      'Oberseite-links',
+      'group-7up',
+      'a-b',
+      'group-others',
+      'été',
     ]);
   });
 });

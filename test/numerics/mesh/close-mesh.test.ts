@@ -1,6 +1,14 @@
 import { describe, expect, test } from 'vitest';
 import { closeMesh, type MeshFacets } from '../../../src/numerics/mesh/close-mesh.js';
-import { boxFacets, bumpyFacets, facetsOf, icosphereFacets, joinFacets, mustClose, turned } from '../../helpers/mesh-bodies.js';
+import {
+  boxFacets,
+  bumpyFacets,
+  facetsOf,
+  icosphereFacets,
+  joinFacets,
+  mustClose,
+  turned,
+} from '../../helpers/mesh-bodies.js';
 
 const PLAIN = { turnInsideOut: false, crease: null };
 const kinds = (facets: MeshFacets, options = PLAIN) => {
@@ -47,16 +55,32 @@ describe('closeMesh', () => {
     [corners[1], corners[2]] = [corners[2], corners[1]];
     expect(kinds({ ...box, corners })).toEqual([['twisted', 3]]);
     // Two tetrahedra that share one edge.
-    const points = [[0, 0, 0], [0, 0, 1], [1, 0, 0], [1, 1, 0], [-1, 0, 0], [-1, -1, 0]] as const;
+    const points = [
+      [0, 0, 0],
+      [0, 0, 1],
+      [1, 0, 0],
+      [1, 1, 0],
+      [-1, 0, 0],
+      [-1, -1, 0],
+    ] as const;
     const tetrahedron = (a: number, b: number, c: number, d: number) =>
-      [[a, c, b], [a, b, d], [b, c, d], [a, d, c]] as const;
+      [
+        [a, c, b],
+        [a, b, d],
+        [b, c, d],
+        [a, d, c],
+      ] as const;
     expect(kinds(facetsOf(points, [...tetrahedron(0, 1, 2, 3), ...tetrahedron(0, 1, 4, 5)]))).toEqual([['crowded', 1]]);
     expect(kinds(facetsOf([[0, 0, 0]], [[0, 0, 0]]))).toEqual([['empty', 0]]);
   });
 
   test('facets with two equal corners are dropped and counted', () => {
     const box = boxFacets([1, 1, 1]);
-    const more = { ...box, corners: Int32Array.from([...box.corners, 0, 0, 1]), group: Int32Array.from([...box.group, 0]) };
+    const more = {
+      ...box,
+      corners: Int32Array.from([...box.corners, 0, 0, 1]),
+      group: Int32Array.from([...box.group, 0]),
+    };
     const closing = closeMesh(more, PLAIN);
     expect(closing.ok && closing.notes).toEqual({ dropped: 1, turned: 0 });
   });

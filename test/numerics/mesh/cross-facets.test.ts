@@ -51,7 +51,10 @@ describe('crossFacets', () => {
         const all = allCrossings(tree, [...o, ...d]);
         // Rays within rounding of an edge are for the test below.
         fc.pre(all.every(({ inset, t }) => Math.abs(inset) > 1e-8 && Math.abs(t) > 1e-8));
-        for (const [sense, leaving] of [[SENSE.leaving, true], [SENSE.entering, false]] as const) {
+        for (const [sense, leaving] of [
+          [SENSE.leaving, true],
+          [SENSE.entering, false],
+        ] as const) {
           const expected = all.find((one) => one.t >= 0 && one.leaving === leaving)?.t ?? Infinity;
           const { t, wrong } = nearest(tree, [...o, ...d], sense);
           if (expected === Infinity) expect(t).toBe(Infinity);
@@ -108,7 +111,9 @@ describe('crossFacets', () => {
       const out = middle.map((x) => x / Math.hypot(...middle));
       expect(facetAt(tree, 0, Float64Array.from([...middle, ...out]), SENSE.leaving, 1e-9)).toBe(facet);
       expect(facetAt(tree, 0, Float64Array.from([...middle, ...out]), SENSE.entering, 1e-9)).toBe(-1);
-      expect(facetAt(tree, 0, Float64Array.from([...middle.map((x) => 0.9 * x), ...out]), SENSE.leaving, 1e-9)).toBe(-1);
+      expect(facetAt(tree, 0, Float64Array.from([...middle.map((x) => 0.9 * x), ...out]), SENSE.leaving, 1e-9)).toBe(
+        -1,
+      );
     }
   });
 
