@@ -15,7 +15,7 @@ export interface FacetPatch {
   readonly flat: boolean;
   /** Middle of area: off the face where it is curved. */
   readonly centre: Vector3;
-  /** Mean outward normal; +z of the mesh where it is 0, as for a whole closed surface. */
+  /** Mean outward normal. Where that is 0: +z of the mesh for a whole closed surface, else the axis along which most of the face is seen. */
   readonly normal: Vector3;
   readonly u: Vector3;
   readonly v: Vector3;
@@ -36,6 +36,7 @@ export function facetPatch(
   const vector = new Float64Array(3);
   const areas = new Float64Array(facets.length);
   const sum = [0, 0, 0];
+  const seen = [0, 0, 0];
   const middle = [0, 0, 0];
   let area = 0;
   facets.forEach((facet, i) => {
@@ -45,20 +46,28 @@ export function facetPatch(
     areas[i] = area;
     for (let c = 0; c < 3; c++) {
       sum[c] += vector[c];
+      seen[c] += Math.abs(vector[c]);
       for (let k = 0; k < 3; k++) middle[c] += (own * mesh.points[3 * corners[3 * facet + k] + c]) / 3;
     }
   });
   const total: Vector3 = [sum[0], sum[1], sum[2]];
   const centre: Vector3 =
     area > 0 ? [middle[0] / area, middle[1] / area, middle[2] / area] : facetCorner(mesh, facets[0], 0);
+  const closed = facets.length === mesh.source.group.length;
   const directed = length(total) > 1e-6 * area && area > 0;
-  const normal = directed ? normalise(total) : (frame?.normal ?? [0, 0, 1]);
+  const normal = directed ? normalise(total) : (frame?.normal ?? (closed ? [0, 0, 1] : widestView(seen)));
   const axes = frame ?? boxAxes(normal);
   const patch = { kind: 'facets', mesh, group, facets, areas, centre, normal, u: axes.u, v: axes.v } as const;
   return {
     ...patch,
     flat: directed && length(total) >= area * (1 - FLAT_NORMALS) && isThin({ ...patch, flat: true }, area),
   };
+}
+
+/** As a draughtsman looks: from the front, the right or the top. */
+function widestView([x, y, z]: readonly number[]): Vector3 {
+  if (y >= x && y >= z) return [0, -1, 0];
+  return x >= z ? [1, 0, 0] : [0, 0, 1];
 }
 
 function isThin(patch: FacetPatch, area: number): boolean {
