@@ -2,6 +2,7 @@
 import type { ShapeDescription, Vector2 } from './description.js';
 import type { DesignPath } from './fault.js';
 import { checkName } from './form-record.js';
+import { describeMesh } from './mesh/describe-mesh.js';
 import { reportRepeatedNames } from './names.js';
 import type { ShapeFields } from './part-fields.js';
 import type { Reading } from './reading.js';
@@ -10,12 +11,13 @@ type Given<Key extends keyof ShapeFields> = NonNullable<ShapeFields[Key]>;
 
 /** The shape among the fields, or null when there is none or it makes no sense; then the fault is told. */
 export function describeShape(fields: ShapeFields, path: DesignPath, reading: Reading): ShapeDescription | null {
-  const { box, prism, cylinder, cone, sphere, cap } = fields;
+  const { box, prism, cylinder, cone, sphere, cap, mesh } = fields;
   if (box !== null) return { kind: 'box', size: box };
   if (prism !== null) return describePrism(prism, [...path, 'prism'], reading);
   if (cylinder !== null) return { kind: 'cylinder', radius: radiusOf(cylinder), height: cylinder.height };
   if (cone !== null) return describeCone(cone, [...path, 'cone'], reading);
   if (sphere !== null) return { kind: 'sphere', radius: radiusOf(sphere) };
+  if (mesh !== null) return describeMesh(mesh, [...path, 'mesh'], reading);
   return cap && describeCap(cap, [...path, 'cap'], reading);
 }
 

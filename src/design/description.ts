@@ -3,6 +3,7 @@
  * (mm, nm for wavelengths, W, rad, mol/L, 1/mm). It is what the scene compiler takes; it knows no text,
  * no unit string and no line number, only the path of each thing in the file so that later faults can point at it.
  */
+import type { ClosedMesh } from '../numerics/mesh/close-mesh.js';
 import type { Curve } from '../units/curve.js';
 import type { DesignPath } from './fault.js';
 
@@ -224,7 +225,7 @@ export interface PieceDescription {
  * the coordinates of its outline and is centred in z.
  * Faces — box: left(−x) right(+x) front(−y) back(+y) bottom(−z) top(+z); prism: side-1 … side-n (edge i runs from
  * corner i to corner i+1) or the names in `sides`, bottom, top; cylinder, cone: side, bottom, top;
- * sphere: surface; cap: dome, bottom.
+ * sphere: surface; cap: dome, bottom; mesh: its groups. A mesh need not be convex and keeps the coordinates of its file.
  */
 export type ShapeDescription =
   | { readonly kind: 'box'; readonly size: Vector3 }
@@ -238,7 +239,8 @@ export type ShapeDescription =
   | { readonly kind: 'cone'; readonly bottomRadius: number; readonly topRadius: number; readonly height: number }
   | { readonly kind: 'sphere'; readonly radius: number }
   /** The part of a sphere of `radius` above a plane: `height` from the flat bottom to the crown, at most 2·radius. */
-  | { readonly kind: 'cap'; readonly radius: number; readonly height: number };
+  | { readonly kind: 'cap'; readonly radius: number; readonly height: number }
+  | { readonly kind: 'mesh'; readonly mesh: ClosedMesh };
 
 /** Right-handed turn about an axis of the design through the shape's own origin, rad; applied in list order. */
 export interface Turn {

@@ -64,6 +64,28 @@ const cap = record(
   { exactlyOne: [['radius', 'diameter']] },
 );
 
+const mesh = record('file and unit', {
+  file: required(freeText('the name of a file', 500), 'STL (text or binary) or OBJ in the folder of the design.'),
+  unit: required(oneWord('mm', 'um', 'cm', 'm', 'in'), 'What a 1 in the file stands for; the file does not say.'),
+  'faces-by': withDefault(
+    oneWord('group', 'material', 'crease', 'none'),
+    'group',
+    'group',
+    'Names of faces: `group` takes the solids of STL, the groups or objects of OBJ; `material` the materials of OBJ; `crease` parts the surface at edges, patch-1 being the largest; `none` calls all of it surface.',
+  ),
+  crease: optional(
+    angle,
+    'With `faces-by: crease`: patches end where neighbours differ by this angle. Default: 30 deg.',
+  ),
+  weld: withDefault(
+    quantity('length', { min: 0, max: 1 }),
+    0,
+    '0 mm, only equal corners',
+    'Corners nearer to each other than this are one.',
+  ),
+  'turn-inside-out': withDefault(oneWord('yes', 'no'), 'no', 'no', 'Turns facets over that look into the solid.'),
+});
+
 const turnRecord = record('axis and by', {
   axis: required(oneWord('x', 'y', 'z'), 'Axis of the design to turn about.'),
   by: required(angle, 'Angle, right-handed.'),
@@ -88,9 +110,10 @@ const shapeFields = {
   cone: optional(cone, 'Cone or frustum along z. Faces: side, bottom, top.'),
   sphere: optional(sphere, 'Sphere. Face: surface.'),
   cap: optional(cap, 'Part of a sphere above a plane. Faces: dome, bottom.'),
+  mesh: optional(mesh, 'Closed triangle mesh from a file, in the coordinates of the file. Faces: its groups.'),
 };
 
-const SHAPES = ['box', 'prism', 'cylinder', 'cone', 'sphere', 'cap'] as const;
+const SHAPES = ['box', 'prism', 'cylinder', 'cone', 'sphere', 'cap', 'mesh'] as const;
 
 const at = withDefault(
   triple(anyLength, 'a place [x, y, z]'),

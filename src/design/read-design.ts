@@ -6,6 +6,7 @@ import { designForm } from './design-fields.js';
 import { locatePath, type Position, parseDesignSource } from './design-source.js';
 import type { DesignPath, Fault, LocatedFault } from './fault.js';
 import { decodeText, readDesignFile } from './read-design-file.js';
+import { meshReader } from './read-design-mesh.js';
 import { tableReader } from './read-design-table.js';
 import { readDials } from './read-dials.js';
 import { Reading } from './reading.js';
@@ -48,7 +49,7 @@ export function readDesignText(text: string, file: string, options: ReadDesignOp
   const decoded = decodeText(bytes);
   if (!decoded.ok) return { ok: false, faults: [{ ...decoded.fault, file, line: 1, column: 1 }] };
   const source = parseDesignSource(text, file);
-  const reading = new Reading(source, tableReader(file));
+  const reading = new Reading(source, tableReader(file), meshReader(file));
   for (const { offset, ...fault } of source.syntaxFaults) reading.report({ code: 'yaml', path: [], ...fault }, offset);
   if (source.syntaxFaults.length === 0 && source.root === null) {
     const suggestion = '`stokeswell new` writes a design to start from';

@@ -6,6 +6,7 @@ import { parseQuantity } from '../units/quantity-parse.js';
 import { nearestUnit } from '../units/quantity-unit-expression.js';
 import { type DesignSource, locatePath, startOf } from './design-source.js';
 import type { DesignPath, Fault, LocatedFault } from './fault.js';
+import type { MeshFileReader } from './read-design-mesh.js';
 import type { TableFileReader } from './table-file.js';
 
 /** A value of the file with its place. A null node is one whose fault has been told already. */
@@ -35,6 +36,7 @@ export class Reading {
   constructor(
     readonly source: DesignSource,
     readonly readTable: TableFileReader,
+    readonly readMesh: MeshFileReader,
   ) {}
 
   /** Notes a fault: where the value at its path stands unless another spot is given. */

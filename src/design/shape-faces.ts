@@ -14,6 +14,8 @@ export function shapeFaces(shape: ShapeDescription): readonly string[] {
       return ['surface'];
     case 'cap':
       return ['dome', 'bottom'];
+    case 'mesh':
+      return shape.mesh.groups;
   }
 }
 

@@ -78,6 +78,7 @@ function drill(face: SkinFace, hole: FacetedSolid, tolerance: number, contact = 
 
 /** The walls of a hole as far as they lie within the body; where they lie in its skin there is nothing to see. */
 function within({ name, facets }: FacetedFace, body: FacetedSolid, tolerance: number): SkinFace {
+  if (body.planes.length === 0) return { name, facets: facets.map(settleFacet), seams: [] };
   const kept = facets.flatMap((facet) => {
     const { inside } = partFacet(facet, body, { same: 'out', opposed: 'out' }, tolerance);
     return inside === null ? [] : [settleFacet(inside)];

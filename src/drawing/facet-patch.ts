@@ -3,6 +3,7 @@ import type { Vector3 } from '../design/description.js';
 import type { FacePatch } from '../scene/convex-solid.js';
 import { add, normalise, scale, subtract } from '../scene/vector.js';
 import type { Facet, SideMark } from './facet.js';
+import { meshFacets } from './mesh-facets.js';
 
 /** Facets round a full turn. A multiple of 4, so that extremes along a face's own axes are kept. */
 export const FACETS_ROUND = 48;
@@ -29,6 +30,8 @@ export function facetPatch(patch: FacePatch): Facet[] {
         'rim',
       );
     }
+    case 'facets':
+      return meshFacets(patch);
     case 'zone':
       return zoneFacets(patch);
   }

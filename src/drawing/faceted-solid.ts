@@ -13,6 +13,7 @@ export interface FacetedFace {
 
 export interface FacetedSolid {
   readonly faces: readonly FacetedFace[];
+  /** None: it cuts nothing. */
   readonly planes: readonly HalfSpace[];
   readonly low: Vector3;
   readonly high: Vector3;
@@ -29,10 +30,13 @@ export function facetSolid({ prefix, solid }: NamedSolid): FacetedSolid {
     );
   return {
     faces,
-    planes: facets.map((facet) => {
-      const normal = facetNormal(facet);
-      return { normal, offset: dot(normal, facet.corners[0]) };
-    }),
+    // A mesh need not be convex and cuts nothing: what it hides is drawn all the same.
+    planes: solid.faces.some(({ patch }) => patch.kind === 'facets')
+      ? []
+      : facets.map((facet) => {
+          const normal = facetNormal(facet);
+          return { normal, offset: dot(normal, facet.corners[0]) };
+        }),
     low: extreme(Math.min, Number.POSITIVE_INFINITY),
     high: extreme(Math.max, Number.NEGATIVE_INFINITY),
   };

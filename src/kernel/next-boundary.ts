@@ -3,6 +3,7 @@
 import { QUADRIC_STRIDE } from '../scene/quadric.js';
 import type { RegionGraph } from '../scene/region-graph.js';
 import type { Scene } from '../scene/scene-layout.js';
+import { facetNormal, findFacet } from './meet-mesh.js';
 import { NOW, RAY } from './photon.js';
 
 /** Next boundary of the photon's region among surfaces of every kind. */
@@ -53,10 +54,11 @@ export function findBoundary(scene: Scene, graph: RegionGraph, ray: Float64Array
     }
   }
   const quadrics = scene.quadrics;
+  const sides = graph.sides;
   const q = scene.quadric;
   for (let k = 0; k < quadrics; k++) {
     const at = k * QUADRIC_STRIDE;
-    const side = graph.side[region * quadrics + k];
+    const side = graph.side[region * sides + k];
     // side·q(p + t d) = a t² + 2 b t + c, not negative at t = 0; wanted is the first t at which it turns negative.
     const gx = q[at] * x + q[at + 3] * y + q[at + 4] * z + q[at + 6];
     const gy = q[at + 3] * x + q[at + 1] * y + q[at + 5] * z + q[at + 7];
@@ -83,6 +85,7 @@ export function findBoundary(scene: Scene, graph: RegionGraph, ray: Float64Array
   }
   ray[RAY.ahead] = nearest > 0 ? nearest : 0;
   now[NOW.way] = way;
+  if (scene.meshes > 0) findFacet(scene, graph, ray, now);
 }
 
 /** Unit normal of the surface at a point, turned along the direction of travel, into `out` [0..2]. */
@@ -90,7 +93,12 @@ export function travelNormal(scene: Scene, way: number, ray: Float64Array, out: 
   let nx: number;
   let ny: number;
   let nz: number;
-  if (way < 2 * scene.families) {
+  if (way >= 2 * scene.families + scene.quadrics) {
+    facetNormal(scene, ray, out);
+    nx = out[0];
+    ny = out[1];
+    nz = out[2];
+  } else if (way < 2 * scene.families) {
     const f = 3 * (way >> 1);
     nx = scene.familyNormal[f];
     ny = scene.familyNormal[f + 1];

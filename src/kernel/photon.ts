@@ -36,7 +36,12 @@ export const enum RAY {
   heldX = 21,
   heldY = 22,
   heldZ = 23,
-  COUNT = 24,
+  /** Facet of a mesh that lies ahead, counted from 1, 0 none; and where light will be when it gets there. */
+  facet = 24,
+  facetX = 25,
+  facetY = 26,
+  facetZ = 27,
+  COUNT = 28,
 }
 
 /** Places of what is counted. */

@@ -96,6 +96,7 @@ function createTracer(scene: Scene, graph: RegionGraph, witness: Witness | null 
       vector[figures + FIGURE_PLACE.launchedEnergy] += scene.energyQuanta[launched];
       grown.spectra[scene.spectrumLaunched + launched]++;
       turnTo(ray);
+      ray[RAY.facet] = 0;
       now[NOW.era]++;
       now[NOW.bentAxis] = -1;
 

@@ -10,6 +10,7 @@ import { halfSpaceProof } from './half-space-proof.js';
 import { integratingSphereProof } from './integrating-sphere-proof.js';
 import { lightBoxProof } from './light-box-proof.js';
 import { meanChordProof } from './mean-chord-proof.js';
+import { meshProof } from './mesh-proof.js';
 import { metalMirrorProof } from './metal-mirror-proof.js';
 import { mixingRodProof } from './mixing-rod-proof.js';
 import { parallelBeamProof } from './parallel-beam-proof.js';
@@ -41,6 +42,7 @@ export const allProofs: readonly Proof[] = [
   viewFactorProof,
   meanChordProof,
   parallelBeamProof,
+  meshProof,
   escapeConeProof,
   trappedLightProof,
   glassSphereProof,

@@ -3,6 +3,7 @@ import type { Vector3 } from '../design/description.js';
 import type { BeamFrame } from './compile-pumps.js';
 import type { SceneFace } from './compile-solids.js';
 import type { FacePatch } from './convex-solid.js';
+import { facetsMeetings } from './mesh/facet-patch.js';
 import { add, cross, dot, normalise, scale, subtract } from './vector.js';
 
 /** Nearer than this the beam starts on the face and leaves it behind, mm. */
@@ -65,6 +66,8 @@ function meetings(patch: FacePatch, origin: Vector3, direction: Vector3): Meetin
         return dot(p, patch.axis) < patch.from ? [] : [{ distance, normal: normalise(p) }];
       });
     }
+    case 'facets':
+      return facetsMeetings(patch, origin, direction);
   }
 }
 

@@ -5,6 +5,7 @@ import type { Fault } from '../design/fault.js';
 import { AMPLITUDES, amplitudesAt } from '../optics/thin-film-stack.js';
 import { thinFilms } from '../optics/thin-films.js';
 import { filmFaults } from './check-films.js';
+import { coincidentFaults } from './check-meshes.js';
 import { pumpFaults } from './check-pumps.js';
 import { scattererFaults } from './check-scatterers.js';
 import { strengthFaults, voxelFaults } from './check-strength.js';
@@ -24,7 +25,7 @@ export interface SceneCheck {
 export interface FaceReport {
   readonly part: string;
   readonly face: string;
-  readonly shape: 'flat' | 'cylinder' | 'cone' | 'sphere';
+  readonly shape: 'flat' | 'cylinder' | 'cone' | 'sphere' | 'facets';
   readonly centre: Vector3;
   readonly normal: Vector3;
   readonly areaMm2: number;
@@ -60,6 +61,7 @@ export function checkScene(description: Description): SceneCheck {
     ...filmFaults(description, compiled.legend),
     ...pumpFaults(description),
     ...coveredFaults(description, compiled, views),
+    ...coincidentFaults(views),
   ];
   return { faults, faces: views.map(({ face, exposed, touches }) => report(compiled, face, exposed, touches)) };
 }
@@ -125,6 +127,7 @@ class FaceLook {
     const region = this.#regionAt(point, out, -STEP);
     let way = 2 * graph.families;
     if (surface.kind === 'curve') way += surface.index;
+    else if (surface.kind === 'mesh') way += graph.quadrics + graph.scene.meshGroup[surface.index] + surface.group;
     else {
       const [x, y, z] = graph.scene.familyNormal.subarray(3 * surface.family, 3 * surface.family + 3);
       way = 2 * surface.family + (x * out[0] + y * out[1] + z * out[2] > 0 ? 1 : 0);
@@ -149,13 +152,15 @@ function report(
     part,
     face: face.reference.slice(part.length + 1),
     shape:
-      patch.kind === 'zone'
-        ? 'sphere'
-        : patch.kind === 'side'
-          ? patch.bottomRadius === patch.topRadius
-            ? 'cylinder'
-            : 'cone'
-          : 'flat',
+      patch.kind === 'facets' && !patch.flat
+        ? 'facets'
+        : patch.kind === 'zone'
+          ? 'sphere'
+          : patch.kind === 'side'
+            ? patch.bottomRadius === patch.topRadius
+              ? 'cylinder'
+              : 'cone'
+            : 'flat',
     centre: patchCentre(patch),
     normal: face.hollow ? scale(normal, -1) : normal,
     areaMm2: patchArea(patch),

@@ -16,6 +16,7 @@ import { checkFaceReference, compileSolids, designSize, type SceneFace } from '.
 import { givenFinish } from './given-finish.js';
 import { layOutRecorders } from './lay-out-recorders.js';
 import { layOutSlots } from './lay-out-slots.js';
+import { layOutMeshes } from './mesh/lay-out-meshes.js';
 import { type PlacedPart, placeParts } from './place-parts.js';
 import { SCENE_VERSION, type Scene } from './scene-layout.js';
 import { sharedBytes, sharedDoubles, sharedInts } from './shared-arrays.js';
@@ -82,6 +83,7 @@ export function compileScene(description: Description): CompiledScene {
     planeOffset: sharedDoubles(solids.offsets),
     quadrics: solids.curves,
     quadric: sharedDoubles(solids.quadrics),
+    ...layOutMeshes(solids.meshes),
     primitiveStart: sharedInts(solids.primitiveStart),
     constraintSurface: sharedInts(solids.constraintSurface),
     constraintSide: sharedBytes(solids.constraintSide),

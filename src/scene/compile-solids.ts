@@ -3,6 +3,7 @@ import type { Description, Vector3 } from '../design/description.js';
 import type { Fault } from '../design/fault.js';
 import type { FacePatch } from './convex-solid.js';
 import { patchRange } from './face-patch.js';
+import type { PlacedMesh } from './mesh/placed-mesh.js';
 import { findFace, type NamedSolid, type PlacedPart, partFaces } from './place-parts.js';
 import { type CurveHandle, type PlaneHandle, type SurfaceSide, SurfaceTable } from './surface-table.js';
 import { dot, normalise, snapDirection } from './vector.js';
@@ -17,7 +18,14 @@ export interface SceneFace {
   readonly patch: FacePatch;
   /** The patch's normal looks into the material: the wall of a hole. */
   readonly hollow: boolean;
-  readonly surface: PlaneHandle | CurveHandle;
+  readonly surface: PlaneHandle | CurveHandle | MeshHandle;
+}
+
+/** Number of a mesh of the scene, and of a group of it. */
+export interface MeshHandle {
+  readonly kind: 'mesh';
+  readonly index: number;
+  readonly group: number;
 }
 
 export interface CompiledSolids {
@@ -27,6 +35,7 @@ export interface CompiledSolids {
   readonly offsets: readonly number[];
   readonly quadrics: readonly number[];
   readonly curves: number;
+  readonly meshes: readonly PlacedMesh[];
   readonly primitiveStart: number[];
   readonly constraintSurface: number[];
   readonly constraintSide: number[];
@@ -50,7 +59,8 @@ export function compileSolids(description: Description, parts: readonly PlacedPa
   const size = designSize(parts);
   const table = new SurfaceTable(size * RELATIVE_TOLERANCE);
   const faces: SceneFace[] = [];
-  const primitives: { sides: SurfaceSide[]; faces: number[] }[] = [];
+  const primitives: ({ sides: SurfaceSide[]; faces: number[] } | { mesh: number; face: number })[] = [];
+  const meshes: PlacedMesh[] = [];
   const pieceStart = [0];
   const pieceMember: number[] = [];
   // Owner 0, the surroundings, has no pieces.
@@ -59,14 +69,25 @@ export function compileSolids(description: Description, parts: readonly PlacedPa
   const addPrimitive = (part: PlacedPart, owner: number, named: NamedSolid, hollow: boolean): number => {
     const sides: SurfaceSide[] = [];
     const own: number[] = [];
+    const firstFace = faces.length;
     for (const face of named.solid.faces) {
+      if (face.surface.kind === 'mesh') {
+        const { mesh, group } = face.surface;
+        if (group === 0) meshes.push(mesh);
+        const reference = `${part.description.name}.${named.prefix}${face.name}`;
+        const surface = { kind: 'mesh', index: meshes.length - 1, group } as const;
+        faces.push({ index: faces.length, reference, part, owner, patch: face.patch, hollow, surface });
+        continue;
+      }
       const side = table.add(face.surface);
       const reference = `${part.description.name}.${named.prefix}${face.name}`;
       faces.push({ index: faces.length, reference, part, owner, patch: face.patch, hollow, surface: side.handle });
       sides.push(side);
       own.push(faces.length - 1);
     }
-    primitives.push({ sides, faces: own });
+    // A mesh is one surface, whatever the number of its faces.
+    if (sides.length === 0) primitives.push({ mesh: meshes.length - 1, face: firstFace });
+    else primitives.push({ sides, faces: own });
     return primitives.length - 1;
   };
 
@@ -94,12 +115,18 @@ export function compileSolids(description: Description, parts: readonly PlacedPa
   const constraintSurface: number[] = [];
   const constraintSide: number[] = [];
   const constraintFace: number[] = [];
-  for (const { sides, faces: own } of primitives) {
-    sides.forEach(({ handle, side }, k) => {
-      constraintSurface.push(idOf(handle));
-      constraintSide.push(side);
-      constraintFace.push(own[k]);
-    });
+  for (const primitive of primitives) {
+    if ('mesh' in primitive) {
+      constraintSurface.push(offsets.length + curves + primitive.mesh);
+      constraintSide.push(-1);
+      constraintFace.push(primitive.face);
+    } else {
+      primitive.sides.forEach(({ handle, side }, k) => {
+        constraintSurface.push(idOf(handle));
+        constraintSide.push(side);
+        constraintFace.push(primitive.faces[k]);
+      });
+    }
     primitiveStart.push(constraintSurface.length);
   }
   const detectorPlanes = new Map<string, { plane: number; sign: 1 | -1 }>();
@@ -112,6 +139,7 @@ export function compileSolids(description: Description, parts: readonly PlacedPa
     offsets,
     quadrics,
     curves,
+    meshes,
     primitiveStart,
     constraintSurface,
     constraintSide,

@@ -1,7 +1,9 @@
 /**
- * A convex solid as the intersection of half-spaces and insides of quadrics, one boundary per face, in design coordinates.
+ * A convex solid as the intersection of half-spaces and insides of quadrics, one boundary per face, in design coordinates; or a mesh.
  */
 import type { Vector3 } from '../design/description.js';
+import type { FacetPatch } from './mesh/facet-patch.js';
+import type { PlacedMesh } from './mesh/placed-mesh.js';
 
 export type BoundarySurface =
   /** Inside: normal · p ≤ offset; the normal is a unit vector that looks out. */
@@ -9,7 +11,9 @@ export type BoundarySurface =
   | { readonly kind: 'sphere'; readonly centre: Vector3; readonly radius: number }
   | { readonly kind: 'cylinder'; readonly point: Vector3; readonly axis: Vector3; readonly radius: number }
   /** Both nappes: radius = |slope · height above the apex|; end planes keep the solid in one of them. */
-  | { readonly kind: 'cone'; readonly apex: Vector3; readonly axis: Vector3; readonly slope: number };
+  | { readonly kind: 'cone'; readonly apex: Vector3; readonly axis: Vector3; readonly slope: number }
+  /** The one surface of a mesh, named by its group; the mesh is the same object for all of them. */
+  | { readonly kind: 'mesh'; readonly mesh: PlacedMesh; readonly group: number };
 
 /** The bounded patch a face is, for areas, sample points and maps. Normals look out of the solid. */
 export type FacePatch =
@@ -48,7 +52,8 @@ export type FacePatch =
       readonly from: number;
       readonly u: Vector3;
       readonly v: Vector3;
-    };
+    }
+  | FacetPatch;
 
 export interface SolidFace {
   readonly name: string;

@@ -1,6 +1,7 @@
 /** Areas, centres, bounds and sample points of face patches. */
 import type { Vector3 } from '../design/description.js';
 import type { FacePatch } from './convex-solid.js';
+import { facetsAim, facetsArea, facetsPoint, facetsRange } from './mesh/facet-patch.js';
 import { add, cross, dot, length, normalise, scale, subtract } from './vector.js';
 
 /** Area of the whole patch, mm². */
@@ -14,6 +15,8 @@ export function patchArea(patch: FacePatch): number {
       return Math.PI * (patch.bottomRadius + patch.topRadius) * slantHeight(patch);
     case 'zone':
       return 2 * Math.PI * patch.radius * (patch.radius - patch.from);
+    case 'facets':
+      return facetsArea(patch);
   }
 }
 
@@ -35,6 +38,7 @@ export function patchCentre(patch: FacePatch): Vector3 {
     case 'polygon':
       return polygonCentre(patch.corners);
     case 'disc':
+    case 'facets':
       return patch.centre;
     case 'side':
       return add(patch.base, scale(patch.axis, patch.height / 2));
@@ -57,7 +61,7 @@ function polygonCentre(corners: readonly Vector3[]): Vector3 {
 
 /** Outward normal at the centre; for sides and whole spheres their axis, which is what their angular maps refer to. */
 export function patchNormal(patch: FacePatch): Vector3 {
-  return patch.kind === 'polygon' || patch.kind === 'disc' ? patch.normal : patch.axis;
+  return patch.kind === 'polygon' || patch.kind === 'disc' || patch.kind === 'facets' ? patch.normal : patch.axis;
 }
 
 export interface PatchPoint {
@@ -82,6 +86,8 @@ export function patchPoint(patch: FacePatch, s: number, t: number): PatchPoint {
       const point = ring(add(patch.centre, scale(patch.axis, along)), patch.u, patch.v, r, t);
       return { point, normal: normalise(subtract(point, patch.centre)) };
     }
+    case 'facets':
+      return facetsPoint(patch, s, t);
   }
 }
 
@@ -140,6 +146,8 @@ export function patchRange(patch: FacePatch, direction: Vector3): readonly [numb
       const high = lean * patch.radius >= patch.from ? middle + patch.radius : rim[1];
       return [Math.min(low, rim[0]), Math.max(high, rim[1])];
     }
+    case 'facets':
+      return facetsRange(patch, direction);
   }
 }
 
@@ -154,6 +162,7 @@ function discRange(centre: Vector3, radius: number, normal: Vector3, direction: 
  * or cone and on a whole sphere that is the front (towards −v, which is −y before any turn), half way up.
  */
 export function patchAim(patch: FacePatch): { point: Vector3; normal: Vector3; u: Vector3; v: Vector3 } {
+  if (patch.kind === 'facets') return facetsAim(patch);
   const front = scale(patch.v, -1);
   if (patch.kind === 'side') {
     const point = add(patchCentre(patch), scale(front, (patch.bottomRadius + patch.topRadius) / 2));

@@ -4,6 +4,7 @@ import { bareShare } from './bare-face.js';
 import type { RecorderPlan } from './compile-recorders.js';
 import type { CompiledScene } from './compile-scene.js';
 import type { FacePatch } from './convex-solid.js';
+import { facetsMeasure } from './mesh/facets-measure.js';
 import { RegionGraph } from './region-graph.js';
 import { add, dot, scale, subtract } from './vector.js';
 
@@ -11,6 +12,7 @@ const SAMPLES = 8;
 
 /** Area, mm², of each cell of a recorder's map: of a face, what of it bounds its part. */
 export function mapMeasure(plan: RecorderPlan, graph: RegionGraph): Float64Array {
+  if (plan.face?.patch.kind === 'facets') return facetsMeasure(plan, plan.face, plan.face.patch, graph);
   const [cellsU, cellsV] = plan.cells;
   const [[uLow, uHigh], [vLow, vHigh]] = plan.extent;
   const stepU = (uHigh - uLow) / cellsU;
@@ -97,6 +99,8 @@ function areaDensity(plan: RecorderPlan): (u: number, v: number) => number {
     }
     case 'zone':
       return inZone(patch);
+    case 'facets':
+      throw new Error('faces of meshes are measured facet by facet');
   }
 }
 

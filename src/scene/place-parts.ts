@@ -78,8 +78,10 @@ export function findFace(parts: readonly PlacedPart[], reference: string): Place
 
 /** Looking out of the material: a hole's wall looks into the hole. */
 export function faceNormal({ face, hollow }: PlacedFace): Vector3 | null {
-  if (face.surface.kind !== 'plane') return null;
-  return hollow ? scale(face.surface.normal, -1) : face.surface.normal;
+  const { patch, surface } = face;
+  const normal =
+    surface.kind === 'plane' ? surface.normal : patch.kind === 'facets' && patch.flat ? patch.normal : null;
+  return normal !== null && hollow ? scale(normal, -1) : normal;
 }
 
 function leanOn(part: PlacedPart, against: Against, earlier: readonly PlacedPart[], faults: Fault[]): Vector3 {

@@ -7,7 +7,7 @@ import type { BoundarySurface } from './convex-solid.js';
 import { dot } from './vector.js';
 
 export const QUADRIC_STRIDE = 10;
-type Curved = Exclude<BoundarySurface, { kind: 'plane' }>;
+type Curved = Exclude<BoundarySurface, { kind: 'plane' | 'mesh' }>;
 
 export function quadricCoefficients(surface: Curved): number[] {
   switch (surface.kind) {

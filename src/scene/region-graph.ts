@@ -2,11 +2,12 @@
  * Regions and what happens between them, worked out as light first comes there.
  *
  * A region is a choice of side for every surface of the scene: which slab of each family of parallel planes, inside or outside each
- * quadric. Where light is, is known by its region alone, never by asking a rounded coordinate, so no ray can slip between two
+ * quadric and each mesh. Where light is, is known by its region alone, never by asking a rounded coordinate, so no ray can slip between two
  * faces or be lost on an edge: it always has a next surface that bounds its region, and crossing it leads to exactly one
  * neighbour. Most surfaces continue beyond the part that they bound; crossing them there changes nothing (`CROSSING.pass`).
  */
 
+import { meshSide } from './mesh/mesh-side.js';
 import { QUADRIC_STRIDE, quadricValue } from './quadric.js';
 import type { Scene } from './scene-layout.js';
 import { SPLIT, SURROUNDINGS } from './scene-layout.js';
@@ -53,7 +54,7 @@ const WALL_DOUBLES = 4;
 const TIE = 1e-9;
 
 export class RegionGraph {
-  /** Ways out of a region: low and high plane of every family, then every quadric. */
+  /** Ways out of a region: low and high plane of every family, every quadric, then every named group of facets. */
   readonly ways: number;
   /**
    * Light is flown from one boundary to the next; otherwise all surfaces are axis planes, polarisation is not carried, and light is flown
@@ -62,11 +63,13 @@ export class RegionGraph {
   readonly stepwise: boolean;
   readonly families: number;
   readonly quadrics: number;
+  /** Quadrics and meshes. */
+  readonly sides: number;
   readonly capacity: number;
 
   /** [region · 2·families + 2·family + (0 low | 1 high)]: offset of the plane that bounds the region, ±Infinity without. */
   readonly bound: Float64Array;
-  /** [region · quadrics + quadric]: −1 inside, +1 outside. */
+  /** [region · sides + quadric, or + quadrics + mesh]: −1 inside, +1 outside. */
   readonly side: Int8Array;
   /** [region · ways + way]: region beyond, meaningful once `crossing` is known. */
   readonly neighbour: Int32Array;
@@ -91,7 +94,7 @@ export class RegionGraph {
   readonly #table: Int32Array;
   /** Slab of every family, then side of every quadric, of the region being looked up. */
   readonly #wanted: Int32Array;
-  readonly #point = new Float64Array(3);
+  readonly #point = new Float64Array(6);
   readonly #knownInterfaces = new Map<string, number>();
 
   /** @param stepwise also where all surfaces are axis planes: slower, but the flight stops at every boundary. */
@@ -101,12 +104,13 @@ export class RegionGraph {
   ) {
     this.families = scene.families;
     this.quadrics = scene.quadrics;
-    this.ways = 2 * this.families + this.quadrics;
+    this.sides = this.quadrics + scene.meshes;
+    this.ways = 2 * this.families + this.quadrics + scene.groups;
     this.stepwise = stepwise || scene.polarised !== 0 || this.ways !== 6;
-    const bytes = this.ways * 8 + this.families * 20 + this.quadrics + 8;
+    const bytes = this.ways * 8 + this.families * 20 + this.sides + 8;
     this.capacity = Math.max(64, Math.min(1 << 16, Math.floor(2 ** 28 / bytes)));
     this.bound = new Float64Array(this.capacity * 2 * this.families);
-    this.side = new Int8Array(this.capacity * this.quadrics);
+    this.side = new Int8Array(this.capacity * this.sides);
     this.neighbour = new Int32Array(this.capacity * this.ways);
     this.crossing = new Int32Array(this.capacity * this.ways);
     this.owner = new Int32Array(this.capacity);
@@ -116,7 +120,7 @@ export class RegionGraph {
     this.wallsSince = new Int32Array(boxes);
     this.#slab = new Int32Array(this.capacity * this.families);
     this.#table = new Int32Array(2 ** Math.ceil(Math.log2(2 * this.capacity)));
-    this.#wanted = new Int32Array(this.families + this.quadrics);
+    this.#wanted = new Int32Array(this.families + this.sides);
   }
 
   get regions(): number {
@@ -143,9 +147,7 @@ export class RegionGraph {
 
   #want(region: number): void {
     for (let f = 0; f < this.families; f++) this.#wanted[f] = this.#slab[region * this.families + f];
-    for (let q = 0; q < this.quadrics; q++) {
-      this.#wanted[this.families + q] = this.side[region * this.quadrics + q];
-    }
+    for (let q = 0; q < this.sides; q++) this.#wanted[this.families + q] = this.side[region * this.sides + q];
   }
 
   /** Region of a starting point; on a surface, the side the direction leads to. */
@@ -174,18 +176,26 @@ export class RegionGraph {
       const reach = TIE * quadricScale(scene.quadric, c, x, y, z);
       wanted[this.families + q] = (Math.abs(value) > reach ? value : ahead) > 0 ? 1 : -1;
     }
+    if (scene.meshes > 0) {
+      this.#point.set([x, y, z, dx, dy, dz]);
+      for (let m = 0; m < scene.meshes; m++)
+        wanted[this.families + this.quadrics + m] = meshSide(scene, m, this.#point);
+    }
     return this.#intern();
   }
 
-  /** Whether a point lies well inside a region, so that `locate` would return it. */
+  /** Whether a point lies well inside a region, so that `locate` would return it, whatever the direction (of meshes: along 0.6, 0.64, 0.48). */
   contains(region: number, x: number, y: number, z: number): boolean {
     this.#point[0] = x;
     this.#point[1] = y;
     this.#point[2] = z;
+    this.#point[3] = 0.6;
+    this.#point[4] = 0.64;
+    this.#point[5] = 0.48;
     return this.holds(region, this.#point);
   }
 
-  /** As `contains`, of the first three numbers of an array. */
+  /** As `contains`, of the point and direction in the first six numbers of an array. */
   holds(region: number, point: Float64Array): boolean {
     const x = point[0];
     const y = point[1];
@@ -198,8 +208,11 @@ export class RegionGraph {
     }
     for (let q = 0; q < this.quadrics; q++) {
       const c = q * QUADRIC_STRIDE;
-      const value = quadricValue(scene.quadric, c, x, y, z) * this.side[region * this.quadrics + q];
+      const value = quadricValue(scene.quadric, c, x, y, z) * this.side[region * this.sides + q];
       if (value < TIE * quadricScale(scene.quadric, c, x, y, z)) return false;
+    }
+    for (let m = 0; m < scene.meshes; m++) {
+      if (meshSide(scene, m, point) !== this.side[region * this.sides + this.quadrics + m]) return false;
     }
     return true;
   }
@@ -211,19 +224,25 @@ export class RegionGraph {
     this.#want(region);
     const wanted = this.#wanted;
     let surface: number;
+    let group = 0;
     if (way < 2 * this.families) {
       const family = way >> 1;
       const up = way & 1;
       surface = this.scene.familyStart[family] + wanted[family] - (up ? 0 : 1);
       wanted[family] += up ? 1 : -1;
     } else {
-      const q = way - 2 * this.families;
+      let q = way - 2 * this.families;
+      if (q >= this.quadrics) {
+        const mesh = this.scene.groupMesh[q - this.quadrics];
+        group = q - this.quadrics - this.scene.meshGroup[mesh];
+        q = this.quadrics + mesh;
+      }
       surface = this.scene.planeOffset.length + q;
       wanted[this.families + q] *= -1;
     }
     const beyond = this.#intern();
     this.neighbour[at] = beyond;
-    this.crossing[at] = this.#interface(region, beyond, surface);
+    this.crossing[at] = this.#interface(region, beyond, surface, group);
     return this.crossing[at];
   }
 
@@ -266,7 +285,7 @@ export class RegionGraph {
       this.bound[b] = slab > 0 ? this.scene.planeOffset[start + slab - 1] : Number.NEGATIVE_INFINITY;
       this.bound[b + 1] = slab < count ? this.scene.planeOffset[start + slab] : Number.POSITIVE_INFINITY;
     }
-    for (let q = 0; q < this.quadrics; q++) this.side[region * this.quadrics + q] = wanted[this.families + q];
+    for (let q = 0; q < this.sides; q++) this.side[region * this.sides + q] = wanted[this.families + q];
     this.crossing.fill(CROSSING.unknown, region * this.ways, (region + 1) * this.ways);
     this.owner[region] = this.#ownerOf(region);
     this.medium[region] = this.scene.ownerMedium[this.owner[region]];
@@ -277,8 +296,8 @@ export class RegionGraph {
     for (let f = 0; f < this.families; f++) {
       if (this.#slab[region * this.families + f] !== this.#wanted[f]) return false;
     }
-    for (let q = 0; q < this.quadrics; q++) {
-      if (this.side[region * this.quadrics + q] !== this.#wanted[this.families + q]) return false;
+    for (let q = 0; q < this.sides; q++) {
+      if (this.side[region * this.sides + q] !== this.#wanted[this.families + q]) return false;
     }
     return true;
   }
@@ -311,13 +330,14 @@ export class RegionGraph {
 
   #sideOf(surface: number, region: number): number {
     const { planeOffset, familyStart } = this.scene;
-    if (surface >= planeOffset.length) return this.side[region * this.quadrics + surface - planeOffset.length];
+    if (surface >= planeOffset.length) return this.side[region * this.sides + surface - planeOffset.length];
     let family = 0;
     while (familyStart[family + 1] <= surface) family++;
     return this.#slab[region * this.families + family] > surface - familyStart[family] ? 1 : -1;
   }
 
-  #interface(from: number, to: number, surface: number): number {
+  /** @param group of a mesh's surface: which of its named groups */
+  #interface(from: number, to: number, surface: number, group: number): number {
     const { scene } = this;
     const isPlane = surface < scene.planeOffset.length;
     if (isPlane && scene.planeDetector[surface] >= 0) {
@@ -326,8 +346,8 @@ export class RegionGraph {
     const ownerFrom = this.owner[from];
     const ownerTo = this.owner[to];
     if (ownerFrom === ownerTo) return CROSSING.pass;
-    const faceOut = this.#faceOf(ownerFrom, from, to, surface);
-    const faceIn = this.#faceOf(ownerTo, from, to, surface);
+    const faceOut = this.#faceOf(ownerFrom, from, to, surface, group);
+    const faceIn = this.#faceOf(ownerTo, from, to, surface, group);
     const outFinish = faceOut < 0 ? -1 : scene.faceFinish[faceOut];
     const inFinish = faceIn < 0 ? -1 : scene.faceFinish[faceIn];
     const acting = outFinish >= 0 ? faceOut : inFinish >= 0 ? faceIn : faceOut >= 0 ? faceOut : faceIn;
@@ -342,7 +362,7 @@ export class RegionGraph {
   }
 
   /** Face of `owner` that lies on `surface` between two neighbouring regions, −1 if its boundary is not there. */
-  #faceOf(owner: number, from: number, to: number, surface: number): number {
+  #faceOf(owner: number, from: number, to: number, surface: number, group: number): number {
     const { ownerPieceStart, pieceStart, pieceMember, primitiveStart, constraintSurface, constraintFace } = this.scene;
     for (let piece = ownerPieceStart[owner]; piece < ownerPieceStart[owner + 1]; piece++) {
       if (this.#inPiece(piece, from) === this.#inPiece(piece, to)) continue;
@@ -350,7 +370,7 @@ export class RegionGraph {
         const primitive = pieceMember[m];
         if (this.#inPrimitive(primitive, from) === this.#inPrimitive(primitive, to)) continue;
         for (let c = primitiveStart[primitive]; c < primitiveStart[primitive + 1]; c++) {
-          if (constraintSurface[c] === surface) return constraintFace[c];
+          if (constraintSurface[c] === surface) return constraintFace[c] + group;
         }
       }
     }

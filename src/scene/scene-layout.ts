@@ -157,11 +157,25 @@ export interface Scene {
   readonly quadrics: number;
   readonly quadric: Float64Array; // [quadric · 10]: xx yy zz xy xz yz x y z 1 of q(p), inside q < 0 (see quadric.ts)
 
-  // ---- solids. A surface id is a plane index, or planes + quadric index.
+  // ---- meshes. Those of a mesh lie together in each array; all together they are a FacetTree (numerics/mesh/facet-tree.ts).
+  readonly meshes: number;
+  readonly groups: number; // named groups of facets of all meshes; each is one face
+  readonly meshRoot: Int32Array; // [mesh + 1]: its first node
+  readonly meshFacet: Int32Array; // [mesh + 1]: its first facet
+  readonly meshGroup: Int32Array; // [mesh + 1]: its first group
+  readonly meshReach: Float64Array; // within this of a facet, rounding decides on which side a point lies, mm
+  readonly groupMesh: Int32Array; // [group]
+  readonly facetPoint: Float64Array; // [point · 3]
+  readonly facetCorner: Int32Array; // [facet · 3]
+  readonly facetGroup: Int32Array; // [facet]
+  readonly nodeBox: Float32Array; // [node · 12]
+  readonly nodeChild: Int32Array; // [node · 2]
+
+  // ---- solids. A surface id is a plane index, or planes + quadric index, or planes + quadrics + mesh index.
   readonly primitiveStart: Int32Array; // [primitive + 1], into the three arrays below
   readonly constraintSurface: Int32Array;
   readonly constraintSide: Int8Array; // −1: inside is below the offset (q < 0), +1: above
-  readonly constraintFace: Int32Array;
+  readonly constraintFace: Int32Array; // of a mesh the face of its first group; the others follow
   readonly pieceStart: Int32Array; // [piece + 1], into pieceMember; first member is the body, the others are taken away
   readonly pieceMember: Int32Array;
   readonly ownerPieceStart: Int32Array; // [owner + 1], into pieces; the surroundings have none

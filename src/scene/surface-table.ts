@@ -10,7 +10,7 @@ import { cross, dot, length } from './vector.js';
 /** Sine of the angle below which two planes count as parallel: 1e-9 mm over 10 mm. */
 const PARALLEL = 1e-10;
 
-type Curved = Exclude<BoundarySurface, { kind: 'plane' }>;
+type Curved = Exclude<BoundarySurface, { kind: 'plane' | 'mesh' }>;
 
 /** A surface and the side of it that is inside: −1 below the offset or inside the quadric, +1 above. */
 export interface SurfaceSide {
@@ -39,7 +39,8 @@ export class SurfaceTable {
   /** @param tolerance mm below which two parallel planes or two curves are one surface. */
   constructor(readonly tolerance: number) {}
 
-  add(surface: BoundarySurface): SurfaceSide {
+  /** Meshes have no place here: each is a surface of its own. */
+  add(surface: Exclude<BoundarySurface, { kind: 'mesh' }>): SurfaceSide {
     return surface.kind === 'plane' ? this.#addPlane(surface.normal, surface.offset) : this.#addCurve(surface);
   }
 

@@ -258,6 +258,14 @@ const SHAPES: Readonly<Record<Prefixed<'shape', ShapeDescription['kind']>, TermT
     assumes: 'smooth',
     source: WORD,
   },
+  'shape-mesh': {
+    name: 'mesh',
+    also: ['STL', 'OBJ', 'triangle mesh'],
+    means: 'a closed body of triangles from an STL or OBJ file',
+    formula: 'faces by its groups, materials or creases',
+    assumes: 'flat facets: no smooth normals; every edge has two triangles',
+    source: 'Woop, Benthin & Wald, JCGT 2 65 (2013) for rays (from memory)',
+  },
 };
 
 const BEAMS: Readonly<Record<Prefixed<'pump', BeamDescription['kind']>, TermText>> = {

@@ -221,6 +221,14 @@ const CHECKS = {
     assumes: 'at the wavelengths of the design',
     source: OWN,
   },
+  'coincident-mesh': {
+    name: 'mesh flush with another part',
+    also: ['coincident faces', 'a face of a mesh lies exactly on'],
+    means: 'rounding decides which face comes first: light sees a gap',
+    formula: 'none',
+    assumes: 'let the mesh overlap what it touches; nothing is lost',
+    source: OWN,
+  },
   turbid: {
     name: 'very turbid medium',
     also: ['turbid'],
@@ -230,7 +238,7 @@ const CHECKS = {
     source: OWN,
   },
   'one-way-scatter': {
-    name: 'scatter that is not the same both ways',
+    name: 'scatter that is not reciprocal',
     also: ['not reciprocal', 'reciprocity'],
     means: 'a BSDF that differs when light goes the other way',
     formula: 'f(in, out) = f(out, in) for real surfaces',
@@ -273,8 +281,9 @@ const TOLD: Readonly<Record<CheckName, RegExp>> = {
   'dense-beads': /beads this close/,
   'absorbing-beads': /these beads absorb/,
   'matched-beads': /have the index of the medium/,
+  'coincident-mesh': /a face of a mesh lies exactly/,
   turbid: /light turns very many times/,
-  'one-way-scatter': /both ways/,
+  'one-way-scatter': /is not reciprocal/,
   unused:
     /^(?:nothing uses this dial|no layer is made of this material|no part is filled with this medium|no medium holds this dye|no face has this finish)/,
   'map-left-out': /is left out: none of its cells/,

@@ -36,6 +36,9 @@ const closed = (solid: DrawnPart) => expect(Math.hypot(...vectorAreaOf(solid))).
 /** A regular polygon of as many corners in a circle of radius 1. */
 const POLYGON = (FACETS_ROUND / 2) * Math.sin((2 * Math.PI) / FACETS_ROUND);
 
+// Meshes are drawn as they are and cut nothing.
+const solid = shapeArbitrary.filter(({ kind }) => kind !== 'mesh');
+
 describe('a body with a hole', () => {
   const box: ShapeDescription = { kind: 'box', size: [10, 10, 6] };
 
@@ -96,7 +99,7 @@ describe('a body with a hole', () => {
   it('random holes: closed, and the volume that points of a net (Halton 1960) find by what the shapes are', () => {
     const place = fc.integer({ min: -8, max: 8 }).map((c) => c / 4);
     fc.assert(
-      fc.property(shapeArbitrary, shapeArbitrary, fc.tuple(place, place, place), (body, shape, at) => {
+      fc.property(solid, solid, fc.tuple(place, place, place), (body, shape, at) => {
         const [solid] = drawn(part('a', body, 'glass', { minus: [{ name: 'hole', shape, at }] }));
         const [whole] = drawn(part('a', body, 'glass'));
         expect(Math.hypot(...vectorAreaOf(solid))).toBeLessThan(1e-6);

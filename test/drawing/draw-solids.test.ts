@@ -38,6 +38,8 @@ function volume(shape: ShapeDescription): number {
       return (4 / 3) * Math.PI * shape.radius ** 3;
     case 'cap':
       return (Math.PI * shape.height ** 2 * (3 * shape.radius - shape.height)) / 3;
+    case 'mesh':
+      return Number.NaN;
     case 'prism': {
       const twice = shape.outline.reduce((sum, [x, y], i) => {
         const [nextX, nextY] = shape.outline[(i + 1) % shape.outline.length];
@@ -55,10 +57,13 @@ const ROUND = Math.sin((2 * Math.PI) / FACETS_ROUND) / ((2 * Math.PI) / FACETS_R
 const shortest = (kind: ShapeDescription['kind']): number =>
   kind === 'box' || kind === 'prism' ? 1 : kind === 'cylinder' || kind === 'cone' ? ROUND : ROUND - 0.012;
 
+// Meshes are drawn as they are and cut nothing.
+const solid = shapeArbitrary.filter(({ kind }) => kind !== 'mesh');
+
 describe('a drawn solid', () => {
   it('is closed, holds its volume and looks out, whatever its shape and turn', () => {
     fc.assert(
-      fc.property(shapeArbitrary, at, turnsArbitrary, (shape, place, turned) => {
+      fc.property(solid, at, turnsArbitrary, (shape, place, turned) => {
         const [solid] = drawn(part('a', shape, 'glass', { at: place, turns: turned }));
         const area = solid.faces.reduce((sum, face) => sum + faceArea(face), 0);
         expect(Math.hypot(...vectorAreaOf(solid))).toBeLessThan(1e-9 * area);
@@ -89,7 +94,7 @@ describe('a drawn solid', () => {
 
   it('has faces of the areas of their patches: exactly where flat, within the shortfall of 48 facets where round', () => {
     fc.assert(
-      fc.property(shapeArbitrary, turnsArbitrary, (shape, turned) => {
+      fc.property(solid, turnsArbitrary, (shape, turned) => {
         const one = part('a', shape, 'glass', { turns: turned });
         const [solid] = drawn(one);
         const placed = partFaces(placeParts([one]).parts[0]);

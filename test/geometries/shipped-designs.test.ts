@@ -26,6 +26,7 @@ test('the shipped designs are these', () => {
     'box-with-bonded-dome',
     'box-with-white-back',
     'edge-lit-plate',
+    'pebble-block',
     'rod-fed-cell',
     'side-pumped-cylinder',
     'two-bank-box-cell',

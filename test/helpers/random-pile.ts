@@ -1,6 +1,8 @@
 /** Random piles of parts, touching, overlapping, hollow and turned, with an independent test of where a point lies. */
 import fc from 'fast-check';
 import type { ShapeDescription, Turn, Vector3 } from '../../src/design/description.js';
+import type { ClosedMesh } from '../../src/numerics/mesh/close-mesh.js';
+import { boxFacets, icosphereFacets, mustClose } from './mesh-bodies.js';
 
 export interface PilePart {
   readonly shape: ShapeDescription;
@@ -34,6 +36,13 @@ export const shapeArbitrary: fc.Arbitrary<ShapeDescription> = fc.oneof(
       sides: null,
     }),
   ),
+  // Convex, so that the textbook definition is at hand: below the plane of every facet.
+  fc
+    .tuple(size, size, size)
+    .map(([a, b, c]): ShapeDescription => ({ kind: 'mesh', mesh: mustClose(boxFacets([a, b, c])) })),
+  fc
+    .tuple(size, fc.integer({ min: 0, max: 1 }))
+    .map(([r, level]): ShapeDescription => ({ kind: 'mesh', mesh: mustClose(icosphereFacets(r / 2, level)) })),
 );
 const turnArbitrary: fc.Arbitrary<Turn> = fc.record({
   axis: fc.constantFrom('x', 'y', 'z'),
@@ -89,7 +98,45 @@ export function depthInside(shape: ShapeDescription, [x, y, z]: Vector3): number
       });
       return Math.min(...edges, shape.height / 2 - Math.abs(z));
     }
+    case 'mesh': {
+      const planes = facetPlanes(shape.mesh);
+      let depth = Number.POSITIVE_INFINITY;
+      for (let i = 0; i < planes.length; i += 4) {
+        const below = planes[i + 3] - planes[i] * x - planes[i + 1] * y - planes[i + 2] * z;
+        // Well outside: how far does not matter.
+        if (below < -0.1) return below;
+        if (below < depth) depth = below;
+      }
+      return depth;
+    }
   }
+}
+
+/** A face that every shape of a pile has one of. */
+export function someFace(shape: ShapeDescription): string {
+  if (shape.kind === 'mesh') return shape.mesh.groups[shape.mesh.groups.length - 1];
+  return shape.kind === 'sphere' ? 'surface' : shape.kind === 'cap' ? 'dome' : 'top';
+}
+
+const planesOf = new WeakMap<ClosedMesh, Float64Array>();
+
+/** [facet · 4]: unit outward normal and offset. */
+function facetPlanes(mesh: ClosedMesh): Float64Array {
+  const known = planesOf.get(mesh);
+  if (known !== undefined) return known;
+  const { facetPoint, facetCorner } = mesh.tree;
+  const planes = new Float64Array((facetCorner.length / 3) * 4);
+  for (let i = 0; i < facetCorner.length; i += 3) {
+    const [a, b, c] = [0, 1, 2].map((k) => [
+      ...facetPoint.subarray(3 * facetCorner[i + k], 3 * facetCorner[i + k] + 3),
+    ]);
+    const [e, f] = [b.map((v, k) => v - a[k]), c.map((v, k) => v - a[k])];
+    const n = [e[1] * f[2] - e[2] * f[1], e[2] * f[0] - e[0] * f[2], e[0] * f[1] - e[1] * f[0]];
+    const unit = n.map((v) => v / Math.hypot(...n));
+    planes.set([...unit, unit.reduce((sum, v, k) => sum + v * a[k], 0)], (i / 3) * 4);
+  }
+  planesOf.set(mesh, planes);
+  return planes;
 }
 
 /** Number of the last part that holds the point (1-based), 0 for none; null too close to a surface to say. */

@@ -4,7 +4,7 @@ import type { Description } from '../../src/design/description.js';
 import { compileScene } from '../../src/scene/compile-scene.js';
 import { RegionGraph } from '../../src/scene/region-graph.js';
 import { beam, describeDesign, medium, part } from '../helpers/describe.js';
-import { ownerByHand, type PilePart, pileArbitrary } from '../helpers/random-pile.js';
+import { ownerByHand, type PilePart, pileArbitrary, someFace } from '../helpers/random-pile.js';
 
 function pileDesign(pile: readonly PilePart[]): Description {
   return describeDesign({
@@ -13,7 +13,7 @@ function pileDesign(pile: readonly PilePart[]): Description {
       part(`p${i}`, shape, 'glass', { at, turns, minus: hole === null ? [] : [{ name: 'hole', ...hole }] }),
     ),
     pumps: [beam([50, 0, 0], [-1, 0, 0])],
-    exit: `p0.${pile[0].shape.kind === 'sphere' ? 'surface' : pile[0].shape.kind === 'cap' ? 'dome' : 'top'}`,
+    exit: `p0.${someFace(pile[0].shape)}`,
   });
 }
 

@@ -1,5 +1,6 @@
 import type { ShapeDescription } from '../../design/description.js';
 import type { BoundarySurface, ConvexSolid, FacePatch } from '../convex-solid.js';
+import { meshSolid, moveMeshSolid } from '../mesh/mesh-solid.js';
 import { dot, type Matrix, moveDirection, movePoint } from '../vector.js';
 import { boxSolid, prismSolid } from './flat-shapes.js';
 import { capSolid, coneSolid, cylinderSolid, sphereSolid } from './round-shapes.js';
@@ -19,11 +20,14 @@ export function makeSolid(shape: ShapeDescription): ConvexSolid {
       return sphereSolid(shape);
     case 'cap':
       return capSolid(shape);
+    case 'mesh':
+      return meshSolid(shape.mesh);
   }
 }
 
 /** The same solid after a rigid motion. */
 export function moveSolid(solid: ConvexSolid, matrix: Matrix): ConvexSolid {
+  if (solid.faces[0].surface.kind === 'mesh') return moveMeshSolid(solid, matrix);
   return {
     faces: solid.faces.map(({ name, surface, patch }) => ({
       name,
@@ -47,6 +51,8 @@ function moveSurface(surface: BoundarySurface, patch: FacePatch, matrix: Matrix)
       return { ...surface, point: movePoint(matrix, surface.point), axis: moveDirection(matrix, surface.axis) };
     case 'cone':
       return { ...surface, apex: movePoint(matrix, surface.apex), axis: moveDirection(matrix, surface.axis) };
+    case 'mesh':
+      throw new Error('a mesh moves as a whole');
   }
 }
 
@@ -68,5 +74,7 @@ function movePatch(patch: FacePatch, matrix: Matrix): FacePatch {
       return { ...patch, ...frame, base: movePoint(matrix, patch.base), axis: moveDirection(matrix, patch.axis) };
     case 'zone':
       return { ...patch, ...frame, centre: movePoint(matrix, patch.centre), axis: moveDirection(matrix, patch.axis) };
+    case 'facets':
+      throw new Error('a mesh moves as a whole');
   }
 }
