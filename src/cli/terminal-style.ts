@@ -54,6 +54,7 @@ const ASCII_FOR: Readonly<Record<string, string>> = {
   '−': '-',
   '√': 'root ',
   '≤': '<=',
+  '§': 'section ',
   Σ: 'sum',
   Δ: 'd',
   Ω: 'Omega',

@@ -58,6 +58,6 @@ function angles(record: RunRecord, arrays: RunArrays): readonly Markup[] {
 function histograms(record: RunRecord): readonly Markup[] {
   return shownHistograms(record).map(
     ({ histogram, words, facts }, i) =>
-      markup`<figure><figcaption><h3>${words.title}</h3><p class="facts">${facts}</p></figcaption>${histogramBars(`histogram-${i}`, histogram, words)}</figure>`,
+      markup`<figure><figcaption><h3>${words.title}${termMark(`histogram-${histogram.id}`)}</h3><p class="facts">${facts}</p></figcaption>${histogramBars(`histogram-${i}`, histogram, words)}</figure>`,
   );
 }
