@@ -130,7 +130,7 @@ function arrow({ stream, left, right, y }: Band, from: number, size: FlowSize, w
 
 function part(group: Group, stream: Stream, watts: number, contents: Markup): Markup {
   const words = `${spelt(stream, watts)}: ${shortName(stream.words, 120)}`;
-  return markup`<g class="stream flow-${group}" tabindex="0" role="img" aria-label="${words}" data-words="${words}" data-rows="${rowsText(stream)}"><title>${words}</title>${contents}</g>`;
+  return markup`<g class="stream flow-${group}" tabindex="0" role="img" data-words="${words}" data-rows="${rowsText(stream)}"><title>${words}</title>${contents}</g>`;
 }
 
 /** Rows of a stream for the page's script: [fate, light, where]. */
