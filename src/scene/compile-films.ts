@@ -1,9 +1,11 @@
 /** Stacks of thin films -> tables, one for each stack, pair of media that can meet at it, and direction of light. */
+import { carriesPolarisation } from '../design/carries-polarisation.js';
 import type { Description, FinishDescription } from '../design/description.js';
 import { thinFilms } from '../optics/thin-films.js';
 import type { CompiledMedia } from './compile-media.js';
 import type { SceneFace } from './compile-solids.js';
-import { type FilmBlocks, type FilmTable, tabulateFilms, UNPOLARISED } from './film-table.js';
+import { type FilmChannels, POLARISED, UNPOLARISED } from './film-channels.js';
+import { type FilmBlocks, type FilmTable, tabulateFilms } from './film-table.js';
 import type { PlacedPart } from './place-parts.js';
 import { sharedFloats } from './shared-arrays.js';
 import { type MediaPair, stackNeighbours } from './stack-neighbours.js';
@@ -39,7 +41,12 @@ export function compileFilms(
 ): CompiledFilms {
   const before = known.get(description);
   if (before !== undefined) return before;
-  const films = new FilmPool(finishNames.length, media, grid);
+  const films = new FilmPool(
+    finishNames.length,
+    media,
+    grid,
+    carriesPolarisation(description) ? POLARISED : UNPOLARISED,
+  );
   finishNames.forEach((name, f) => {
     const finish = description.finishes.get(name);
     if (finish?.kind !== 'stack') return;
@@ -68,6 +75,7 @@ class FilmPool {
     finishes: number,
     readonly media: CompiledMedia,
     readonly grid: WavelengthGrid,
+    readonly channels: FilmChannels,
   ) {
     this.#filmOf = new Array(finishes * 2 * media.names.length ** 2).fill(-1);
     const rows = media.names.map((_, m) => this.#index(m).join());
@@ -96,10 +104,10 @@ class FilmPool {
 
   /** Number of the film for light from medium `from` to `to`. */
   #film(stack: Stack, f: number, from: number, to: number, inward: boolean): number {
-    const lossless = stack.layers.every(({ k }) => this.grid.nm.every((nm) => k(nm) === 0));
-    // Where nothing absorbs, both ways let the same through (reciprocity), and the table runs along the same cosine.
+    // Where nothing absorbs, both ways let the same through (reciprocity), and the table runs along the same cosine. Phases differ.
+    const alike = !this.channels.phases && stack.layers.every(({ k }) => this.grid.nm.every((nm) => k(nm) === 0));
     const [out, own] = inward ? [from, to] : [to, from];
-    const key = `${f} ${out} ${own}${lossless ? '' : inward ? ' in' : ' out'}`;
+    const key = `${f} ${out} ${own}${alike ? '' : inward ? ' in' : ' out'}`;
     const made = this.#made.get(key);
     if (made !== undefined) return made;
     const layers = inward ? stack.layers : stack.layers.toReversed();
@@ -109,7 +117,7 @@ class FilmPool {
         nm,
       ),
     );
-    const table = tabulateFilms({ films, indexIn: this.#index(from), indexOut: this.#index(to) }, UNPOLARISED);
+    const table = tabulateFilms({ films, indexIn: this.#index(from), indexOut: this.#index(to) }, this.channels);
     this.#made.set(key, this.#filmBlock.length);
     return this.#store(stack.name, table);
   }

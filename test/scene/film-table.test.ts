@@ -1,7 +1,8 @@
 /** What the kernel reads from the tables of a stack against the stack worked out directly, at random wavelengths and angles. */
 import { expect, test } from 'vitest';
 import type { LayerDescription } from '../../src/design/description.js';
-import { SHARES, splitLight } from '../../src/kernel/split-light.js';
+import { SHARES } from '../../src/kernel/shares.js';
+import { splitLight } from '../../src/kernel/split-light.js';
 import { stackResponse } from '../../src/optics/thin-film-stack.js';
 import { compileScene } from '../../src/scene/compile-scene.js';
 import { RegionGraph } from '../../src/scene/region-graph.js';
