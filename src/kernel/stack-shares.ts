@@ -1,11 +1,12 @@
 /** How a stack of thin films divides light, read from its table (scene/film-table.ts). */
 import { FILM, POLARISED_FILM, type Scene } from '../scene/scene-layout.js';
 import { SHARES } from './shares.js';
+import { workOutStack } from './work-out-stack.js';
 
 /**
  * Finds the four nodes about the angle, and their weights for a cubic through them. Total reflection is the stack's own.
  * @param channels numbers at each node
- * @returns place of the first of the nodes, −1 where all is reflected and no table says more
+ * @returns place of the first of the nodes; −1 where all is reflected and no table says more, −2 where the table is too coarse
  */
 function findNodes(scene: Scene, film: number, wavelength: number, channels: number, shares: Float64Array): number {
   const cosine = shares[SHARES.cosine] < 1 ? shares[SHARES.cosine] : 1;
@@ -25,6 +26,7 @@ function findNodes(scene: Scene, film: number, wavelength: number, channels: num
   const group = Math.floor(wavelength / FILM.group);
   const entry = first + group * FILM.blocks + block;
   const cells = scene.filmCells[entry];
+  if (cells === 0) return -2;
   const place = (scaled - block) * cells;
   const node = Math.min(Math.max(0, Math.floor(place) - 1), cells - 3);
   const t = place - node;
@@ -63,6 +65,10 @@ export function stackShares(scene: Scene, film: number, wavelength: number, shar
 /** Of s and p light with their cross products, and the mean of both. */
 export function polarisedStackShares(scene: Scene, film: number, wavelength: number, shares: Float64Array): void {
   const at = findNodes(scene, film, wavelength, POLARISED_FILM.COUNT, shares);
+  if (at < 0) {
+    workOutStack(scene, film, wavelength, shares);
+    return;
+  }
   shareOut(scene.filmNodes, at + POLARISED_FILM.transmittedS, shares, SHARES.reflectedS, SHARES.transmittedS);
   shareOut(scene.filmNodes, at + POLARISED_FILM.transmittedP, shares, SHARES.reflectedP, SHARES.transmittedP);
   blend(scene.filmNodes, at + POLARISED_FILM.reflectedReal, shares, SHARES.reflectedReal);

@@ -7,6 +7,10 @@ export interface FilmChannels {
   readonly count: number;
   /** Whether phases are kept, which a stack without absorption has beyond the critical angle too, and not the same both ways. */
   readonly phases: boolean;
+  /** Most intervals of a block whose half is tried against it. */
+  readonly most: number;
+  /** Whether the kernel can work out the stack itself in blocks that would need more. */
+  readonly direct: boolean;
   /**
    * Writes `count` numbers at `at`, each smooth in angle.
    * @param ratio index beyond over that before; @param travels whether light travels beyond
@@ -18,6 +22,8 @@ export interface FilmChannels {
 export const UNPOLARISED: FilmChannels = {
   count: FILM.channels,
   phases: false,
+  most: 256,
+  direct: false,
   pick(amplitudes, _ratio, _travels, nodes, at) {
     const passed = 0.5 * (amplitudes[AMPLITUDES.transmittanceS] + amplitudes[AMPLITUDES.transmittanceP]);
     const back = 0.5 * (amplitudes[AMPLITUDES.reflectanceS] + amplitudes[AMPLITUDES.reflectanceP]);
@@ -32,6 +38,8 @@ const products = new Float64Array(PRODUCTS.COUNT);
 export const POLARISED: FilmChannels = {
   count: POLARISED_FILM.COUNT,
   phases: true,
+  most: 64,
+  direct: true,
   pick(amplitudes, ratio, travels, nodes, at) {
     const passedS = amplitudes[AMPLITUDES.transmittanceS];
     const passedP = amplitudes[AMPLITUDES.transmittanceP];

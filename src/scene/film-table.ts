@@ -19,7 +19,7 @@ export interface FilmPassage {
 
 /** Blocks of angles in groups of wavelengths: [group · FILM.blocks + block]. */
 export interface FilmBlocks {
-  /** Intervals of each block. */
+  /** Intervals of each block; 0: none would do, the stack is worked out where it is met. */
   readonly cells: readonly number[];
   /** Of each block [(wavelength in the group · (cells + 1) + node) · channels + channel]. */
   readonly nodes: readonly Float32Array[];
@@ -36,7 +36,7 @@ export interface FilmTable {
 /** Error at which nodes need not be halved once more; those used are twice as many. */
 const TARGET = 1e-3;
 const FEWEST = 4;
-const MOST = 256;
+const NONE = new Float32Array(0);
 
 export function tabulateFilms(passage: FilmPassage, channels: FilmChannels): FilmTable {
   const absorbing = passage.films.some((films) => films.absorbing);
@@ -88,7 +88,9 @@ function fillBlock(
       }
       error = Math.max(error, oddError(finer, to, cells, count));
     }
-    if (error <= TARGET || cells >= MOST) return { cells: 2 * cells, nodes: finer, error };
+    // Beyond the critical angle the phases of a stack without absorption turn round within any angle, however small.
+    if (error > TARGET && cells >= channels.most && channels.direct) return { cells: 0, nodes: NONE, error: 0 };
+    if (error <= TARGET || cells >= channels.most) return { cells: 2 * cells, nodes: finer, error };
     cells *= 2;
     nodes = finer;
   }

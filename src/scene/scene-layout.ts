@@ -249,8 +249,10 @@ export interface Scene {
   readonly filmBlock: Int32Array; // [film]: first block; blocks are [group · FILM.blocks + block]
   readonly filmBeyond: Int32Array; // [film]: first block beyond the critical angle, −1 where all is reflected there
   readonly filmStart: Int32Array; // [block], into filmNodes
-  readonly filmCells: Int32Array; // [block]: intervals of angle
+  readonly filmCells: Int32Array; // [block]: intervals of angle; 0: the stack is worked out there and then
   readonly filmNodes: Float32Array; // [(wavelength in its group · (cells + 1) + node) · channels + channel]: FILM.channels, or POLARISED_FILM where `polarised` is 1
+  readonly filmLayerStart: Int32Array; // [film + 1], into filmLayers; where polarisation is averaged, there are none
+  readonly filmLayers: Float64Array; // of a film [(wavelength · layers + layer) · 3]: real and imaginary part of the squared index, 2π·thickness/wavelength
 
   // ---- pumps
   readonly pumpCount: number;
