@@ -25,9 +25,10 @@ export function filmInterfaces(
   outside: number,
   inside: number,
   polarisation: 'carried' | 'averaged' = 'averaged',
+  emissionNm = 700,
 ) {
   const described = describeDesign({
-    media: [medium('outer', outside), medium('inner', inside, { dyes: [plainDye(0.1, 0.9, 700)] })],
+    media: [medium('outer', outside), medium('inner', inside, { dyes: [plainDye(0.1, 0.9, emissionNm)] })],
     surroundings: 'outer',
     finishes: [finish('films', { kind: 'stack', layers, extrapolates: false })],
     parts: [part('block', { kind: 'box', size: [4, 4, 4] }, 'inner', { faces: { top: 'films' } })],

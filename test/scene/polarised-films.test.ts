@@ -33,7 +33,7 @@ const silver = [filmLayer(0.05, 50, 3.3)];
 describe('stacks read by polarised light', () => {
   test.each([
     ['21 layers between air and liquid', unevenLayers(21), 1, 1.3614],
-    ['40 layers between liquid and glass', unevenLayers(40), 1.3614, 1.52],
+    ['28 layers between liquid and glass', unevenLayers(28), 1.3614, 1.52],
     ['21 absorbing layers between air and liquid', unevenLayers(21, 0.002), 1, 1.3614],
     ['12 layers between media almost alike', unevenLayers(12), 1.3614, 1.361],
     ['12 layers between media alike', unevenLayers(12), 1.3614, 1.3614],
@@ -41,13 +41,15 @@ describe('stacks read by polarised light', () => {
     ['metal under glass-like layers', [filmLayer(1.46, 90), filmLayer(2.4, 60), filmLayer(0.8, 200, 6)], 1, 1.3614],
     ['no thickness at all', [filmLayer(2, 0)], 1, 1.52],
   ])('%s: shares and products within 1e-3 everywhere, seed 12', (_, layers, outside, inside) => {
-    const meeting = filmInterfaces(layers, outside, inside, 'carried');
+    const meeting = filmInterfaces(layers, outside, inside, 'carried', 500);
     expect(meeting.scene.polarised).toBe(1);
     const random = parkMiller(12);
     const lossless = layers.every(({ k }) => k(500) === 0);
     let worst = 0;
     let excess = 0;
-    for (let i = 0; i < 4000; i++) {
+    let least = 1;
+    let [fewest, most] = [1, 1];
+    for (let i = 0; i < 3000; i++) {
       const wavelength = Math.floor(random() * meeting.scene.wavelengths);
       const cosine = cosineAt(i, random(), outside, inside);
       if (!(cosine > 0)) continue;
@@ -77,9 +79,9 @@ describe('stacks read by polarised light', () => {
         [SHARES.reflectedP, SHARES.transmittedP],
       ] as const) {
         const sum = shares[reflected] + shares[transmitted];
-        expect(sum).toBeLessThanOrEqual(1 + 1e-15);
-        if (lossless) expect(sum).toBeGreaterThan(1 - 2 ** -33);
-        expect(Math.min(shares[reflected], shares[transmitted])).toBeGreaterThanOrEqual(0);
+        most = Math.max(most, sum);
+        fewest = Math.min(fewest, sum);
+        least = Math.min(least, shares[reflected], shares[transmitted]);
       }
       for (const [at, real] of [
         [SHARES.reflectedS, SHARES.reflectedReal],
@@ -89,12 +91,15 @@ describe('stacks read by polarised light', () => {
       }
     }
     expect(worst).toBeLessThan(1e-3);
+    expect(least).toBeGreaterThanOrEqual(0);
+    expect(most).toBeLessThanOrEqual(1 + 1e-15);
+    if (lossless) expect(fewest).toBeGreaterThan(1 - 2 ** -33);
     expect(excess).toBeLessThan(1e-3);
   });
 
   test('nothing at all is a bare interface, both ways and beyond the critical angle, seed 13', () => {
     const bare = new Float64Array(4);
-    const meeting = filmInterfaces([filmLayer(2, 0)], 1, 1.52, 'carried');
+    const meeting = filmInterfaces([filmLayer(2, 0)], 1, 1.52, 'carried', 500);
     const random = parkMiller(13);
     for (let i = 0; i < 1000; i++) {
       const cosine = cosineAt(i, random(), 1, 1.52);
@@ -111,7 +116,7 @@ describe('stacks read by polarised light', () => {
 
   test('a thick metal is that metal, seed 14', () => {
     const metal = new Float64Array(4);
-    const meeting = filmInterfaces([filmLayer(0.8, 1e6, 6)], 1.3614, 1.52, 'carried');
+    const meeting = filmInterfaces([filmLayer(0.8, 1e6, 6)], 1.3614, 1.52, 'carried', 500);
     const random = parkMiller(14);
     for (let i = 0; i < 500; i++) {
       const cosine = random();
@@ -126,7 +131,7 @@ describe('stacks read by polarised light', () => {
 
   test('agrees with the field equations followed step by step, seed 15', () => {
     const layers = [filmLayer(2.4, 70), filmLayer(1.46, 120, 0.01), filmLayer(2.1, 55)];
-    const meeting = filmInterfaces(layers, 1, 1.3614, 'carried');
+    const meeting = filmInterfaces(layers, 1, 1.3614, 'carried', 500);
     const random = parkMiller(15);
     for (let i = 0; i < 60; i++) {
       const wavelength = Math.floor(random() * meeting.scene.wavelengths);
