@@ -31,10 +31,14 @@ const POLARISER = Array.from({ length: 15 }, (_, i) => quarter(i % 2 ? LOW : HIG
 const AROUND = 1.52;
 const BREWSTER = Math.atan(1.5);
 const BREWSTER_S = ((1.5 ** 2 - 1) / (1.5 ** 2 + 1)) ** 2;
-const RETARDER: Film[] = [
-  [2.3, 0, 38],
-  [1.46, 0, 95],
-];
+const RETARDERS: Readonly<Record<'reflected' | 'transmitted', readonly Film[]>> = {
+  reflected: [
+    [2.3, 0, 38],
+    [1.46, 0, 95],
+  ],
+  // T of 64 % and 100 %, s and p out of step by some 125°.
+  transmitted: Array.from({ length: 15 }, (_, i) => quarter(i % 2 ? 1.46 : 2.35, 350)),
+};
 
 export const polarisingFilmsProof: Proof = {
   name: 'Thin films in polarised light',
@@ -53,6 +57,7 @@ export const polarisingFilmsProof: Proof = {
       cases.push(await retarded(context, 'reflected', 1, turn));
       cases.push(await retarded(context, 'reflected', 2, turn));
       cases.push(await retarded(context, 'transmitted', 1, turn));
+      cases.push(await retarded(context, 'transmitted', 2, turn));
     }
     return cases;
   },
@@ -125,7 +130,7 @@ async function malus(context: ProofContext, degrees: number): Promise<ProofCase>
   );
 }
 
-/** Light at 45° off coated faces beyond the critical angle, or through a coat at 60°, into a face at Brewster's angle. */
+/** Light at 45° off coated faces beyond the critical angle, or through coats at 60°, into a face at Brewster's angle. */
 async function retarded(
   context: ProofContext,
   how: 'reflected' | 'transmitted',
@@ -141,7 +146,8 @@ async function retarded(
   const p: Vector3 = [-last[2], 0, last[0]];
   // The second face looks down, 2 mm above the first, where the light comes.
   const [far, high] = [2 * Math.tan(angle), 2];
-  const from: Vector3 = how === 'reflected' && times === 2 ? [far, 0, high] : [0, 0, 0];
+  const next: Vector3 = how === 'reflected' ? [far, 0, high] : [10 * sine, 0, -10 * cosine];
+  const from: Vector3 = times === 2 ? next : [0, 0, 0];
   const tilt: Tilt = { along: last, from, distance: 20, across: p, turn: radians(turn), angle: BREWSTER };
   const beyond = how === 'reflected' ? 1 : AROUND;
   const parts: PartDescription[] = [
@@ -149,10 +155,11 @@ async function retarded(
     tiltedPlate('analyser', 'dense', tilt),
   ];
   if (times === 2) {
-    const at: Vector3 = [far, 0, high + 0.5];
-    parts.push(part('second', 'beyond', { kind: 'box', size: [2, 2, 1] }, { at, faces: { bottom: 'coat' } }));
+    const side = how === 'reflected' ? 'bottom' : 'top';
+    const at: Vector3 = [next[0], 0, next[2] + (side === 'bottom' ? 0.5 : -0.5)];
+    parts.push(part('second', 'beyond', { kind: 'box', size: [2, 2, 1] }, { at, faces: { [side]: 'coat' } }));
   }
-  const films = how === 'reflected' ? RETARDER : FIFTEEN;
+  const films = RETARDERS[how];
   const tallies = await traceCell(
     context,
     cell(`${how} ${times}, analyser at ${turn} deg`, {
@@ -167,10 +174,10 @@ async function retarded(
   const s = filmResponse(films, AROUND, beyond, angle, PUMP_NM, 's');
   const along = filmResponse(films, AROUND, beyond, angle, PUMP_NM, 'p');
   const turned = (response: FilmResponse, sign: number): Complex => {
-    if (how === 'transmitted') return response.t;
+    const { r, t } = response;
     // Beyond a reflection p = direction × s lies against the field along the films.
-    const r: Complex = [sign * response.r[0], sign * response.r[1]];
-    return times === 1 ? r : [r[0] * r[0] - r[1] * r[1], 2 * r[0] * r[1]];
+    const [x, y]: Complex = how === 'transmitted' ? t : [sign * r[0], sign * r[1]];
+    return times === 1 ? [x, y] : [x * x - y * y, 2 * x * y];
   };
   const fields = [turned(s, 1), turned(along, -1)];
   const normal = plateNormal(tilt);
@@ -188,7 +195,7 @@ async function retarded(
   return compare(
     how === 'reflected'
       ? `behind ${times === 1 ? 'a coat' : 'two coats'} beyond the critical angle, analyser at ${turn}°`
-      : `through 15 layers at 60°, analyser at ${turn}°`,
+      : `through ${times === 1 ? 'a coat' : 'two coats'} at 60°, analyser at ${turn}°`,
     JONES,
     fateShare(tallies, slotsOf({ fate: 'absorbed-by-solvent', where: 'analyser' })),
     power(1, 0) + power(0, 1) - BREWSTER_S * power(a, b),
