@@ -4,16 +4,24 @@ import type { TerminalStyle } from './terminal-style.js';
 
 const ANGLES = [0, 15, 30, 45, 60, 75];
 const BANDS = 6;
+/** s and p that differ by less are the same. */
+const ALIKE = 1e-9;
 
-/** Means over bands of wavelength at some angles: what is reflected / transmitted / absorbed, %. */
+/**
+ * Means over bands of wavelength at some angles, %: what is reflected / transmitted / absorbed of unpolarised light, then, where the finish
+ * tells them apart, what is transmitted of s / p light.
+ */
 export function coatingTable(curves: CoatingCurves, style: TerminalStyle): string[] {
   const { from, to, wavelengthsNm, anglesDeg, criticalDeg } = curves;
   const bands = bandsOf(wavelengthsNm);
   const beyond = criticalDeg === null ? '' : `; nothing passes beyond ${criticalDeg.toFixed(1)}°`;
-  const rows = ANGLES.map((degrees) => {
-    const a = anglesDeg.indexOf(degrees);
-    return [`${degrees}°`, ...bands.map(({ first, end }) => bandText(curves, first, end, a))];
-  });
+  const rowsOf = (text: typeof bandText) =>
+    ANGLES.map((degrees) => {
+      const a = anglesDeg.indexOf(degrees);
+      return [`${degrees}°`, ...bands.map(({ first, end }) => text(curves, first, end, a))];
+    });
+  const rows = rowsOf(bandText);
+  const apart = curves.transmittanceS.some((s, at) => Math.abs(s - curves.transmittanceP[at]) > ALIKE);
   const head = ['angle', ...bands.map(({ words }) => words)];
   const widths = head.map((cell, i) => Math.max(...[head, ...rows].map((row) => [...(row[i] ?? cell)].length)));
   const line = (cells: readonly string[]) => cells.map((cell, i) => cell.padStart(widths[i])).join('  ');
@@ -21,7 +29,24 @@ export function coatingTable(curves: CoatingCurves, style: TerminalStyle): strin
     style.bold(`${safeText(from)} → ${safeText(to)}: % reflected / transmitted / absorbed${beyond}`),
     style.dim(`  ${line(head)}`),
     ...rows.map((row) => `  ${line(row)}`),
+    ...(apart
+      ? [style.dim('  % transmitted of s / p light'), ...rowsOf(apartText).map((row) => `  ${line(row)}`)]
+      : []),
   ];
+}
+
+function apartText(
+  { anglesDeg, transmittanceS, transmittanceP }: CoatingCurves,
+  first: number,
+  end: number,
+  a: number,
+) {
+  let [s, p] = [0, 0];
+  for (let w = first; w < end; w++) {
+    s += transmittanceS[w * anglesDeg.length + a];
+    p += transmittanceP[w * anglesDeg.length + a];
+  }
+  return [s, p].map((sum) => ((100 * sum) / (end - first)).toFixed(1)).join(' / ');
 }
 
 function bandText(curves: CoatingCurves, first: number, end: number, angle: number): string {

@@ -8,7 +8,8 @@ import { carryPolarisation, holdDirection, losePolarisation, splitPolarised } fr
 import { inAperture, recordCrossing } from './record-light.js';
 import { scatterAbout, scatterLambertian, scatterOval } from './scatter.js';
 import { scatterByTable } from './scatter-by-table.js';
-import { SHARES, splitLight } from './split-light.js';
+import { SHARES } from './shares.js';
+import { splitLight } from './split-light.js';
 
 const normal = new Float64Array(3);
 

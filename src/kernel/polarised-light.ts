@@ -8,7 +8,7 @@ import { REFLECTION, reflectMetal, reflectTransparent } from '../optics/polarise
 import { INTERFACE } from '../scene/region-graph.js';
 import { PUMP, type Scene, SPLIT } from '../scene/scene-layout.js';
 import { RAY } from './photon.js';
-import { SHARES } from './split-light.js';
+import { SHARES } from './shares.js';
 
 /** Squared sine of incidence below which every plane is a plane of incidence. */
 const NORMAL = 1e-18;
@@ -109,7 +109,10 @@ function turnAxis(ray: Float64Array, gx: number, gy: number, gz: number): void {
   ray[RAY.axisZ] = sz;
 }
 
-/** Shares of s and p, and their cross products. A finish that is told no more than its shares treats both alike. */
+/**
+ * Shares of s and p, and their cross products; those of a stack are there already. A finish that is told no more than its shares treats
+ * both alike.
+ */
 function amplitudes(
   scene: Scene,
   interfaces: Int32Array,
@@ -128,7 +131,7 @@ function amplitudes(
   } else if (split === SPLIT.metal) {
     reflectMetal(index, scene.finishA[row], scene.finishB[row], cosine, shares, SHARES.reflectedS);
     alike(shares, SHARES.transmittedS, 0, 1);
-  } else {
+  } else if (split !== SPLIT.stack) {
     // Reflection turns the handedness, as every mirror's does at normal incidence.
     alike(shares, SHARES.reflectedS, shares[SHARES.reflected], -1);
     alike(shares, SHARES.transmittedS, shares[SHARES.transmitted], 1);
@@ -168,7 +171,13 @@ export function carryPolarisation(shares: Float64Array, reflects: boolean, ray: 
   }
   const real = shares[at + REFLECTION.real] / power;
   const imaginary = shares[at + REFLECTION.imaginary] / power;
-  ray[RAY.stokesQ] = (s - p) / power;
-  ray[RAY.stokesU] = u * real - v * imaginary;
-  ray[RAY.stokesV] = u * imaginary + v * real;
+  const newQ = (s - p) / power;
+  const newU = u * real - v * imaginary;
+  const newV = u * imaginary + v * real;
+  // Products read from a table may be a little too large for their shares: light is polarised whole at most.
+  const size2 = newQ * newQ + newU * newU + newV * newV;
+  const scale = size2 > 1 ? 1 / Math.sqrt(size2) : 1;
+  ray[RAY.stokesQ] = scale * newQ;
+  ray[RAY.stokesU] = scale * newU;
+  ray[RAY.stokesV] = scale * newV;
 }

@@ -2,26 +2,9 @@
 import { fresnelReflectance } from '../optics/fresnel.js';
 import { metalReflectance } from '../optics/metal-reflectance.js';
 import { INTERFACE } from '../scene/region-graph.js';
-import { FILM, type Scene, SPLIT, SPREAD } from '../scene/scene-layout.js';
-
-/** Slots of the array `splitLight` reads and fills. */
-export const enum SHARES {
-  reflected = 0,
-  transmitted = 1,
-  index = 2,
-  cosine = 3,
-  indexBeyond = 4,
-  // Polarised light only: shares of s and p, and the product of one amplitude with the other's conjugate.
-  reflectedS = 5,
-  reflectedP = 6,
-  reflectedReal = 7,
-  reflectedImaginary = 8,
-  transmittedS = 9,
-  transmittedP = 10,
-  transmittedReal = 11,
-  transmittedImaginary = 12,
-  COUNT = 13,
-}
+import { type Scene, SPLIT, SPREAD } from '../scene/scene-layout.js';
+import { SHARES } from './shares.js';
+import { polarisedStackShares, stackShares } from './stack-shares.js';
 
 /**
  * Reflected and transmitted share at the interface whose record starts at `record`; what is missing to 1 is absorbed there. Takes the
@@ -49,7 +32,9 @@ export function splitLight(
     return;
   }
   if (split === SPLIT.stack) {
-    stackShares(scene, interfaces[record + INTERFACE.film], wavelength, shares);
+    const film = interfaces[record + INTERFACE.film];
+    if (scene.polarised === 0) stackShares(scene, film, wavelength, shares);
+    else polarisedStackShares(scene, film, wavelength, shares);
     return;
   }
   const row = finish * wavelengths + wavelength;
@@ -80,49 +65,4 @@ function tableShares(scene: Scene, finish: number, wavelength: number, cosine: n
   const at = (scene.finishTable[finish] + wavelength) * scene.tableAngles + angle;
   shares[SHARES.reflected] = scene.tableReflectance[at] * (1 - share) + scene.tableReflectance[at + 1] * share;
   shares[SHARES.transmitted] = scene.tableTransmittance[at] * (1 - share) + scene.tableTransmittance[at + 1] * share;
-}
-
-/** Cubic between the nodes of a stack's table (scene/film-table.ts). Total reflection is the stack's own. */
-function stackShares(scene: Scene, film: number, wavelength: number, shares: Float64Array): void {
-  const { filmCells, filmNodes } = scene;
-  const cosine = shares[SHARES.cosine] < 1 ? shares[SHARES.cosine] : 1;
-  const ratio = shares[SHARES.index] / shares[SHARES.indexBeyond];
-  const sine2 = ratio * ratio * (1 - cosine * cosine);
-  const total = ratio > 1 && sine2 >= 1;
-  let first = scene.filmBlock[film];
-  let along = cosine;
-  if (total) {
-    first = scene.filmBeyond[film];
-    if (first < 0) {
-      shares[SHARES.reflected] = 1;
-      shares[SHARES.transmitted] = 0;
-      return;
-    }
-    // cos θ = cos θc · sin φ
-    const sine = cosine / Math.sqrt(1 - 1 / (ratio * ratio));
-    along = Math.asin(sine < 1 ? sine : 1) / (Math.PI / 2);
-  } else if (ratio > 1) along = Math.sqrt(1 - sine2);
-  const scaled = along * FILM.blocks;
-  const block = scaled < FILM.blocks - 1 ? Math.floor(scaled) : FILM.blocks - 1;
-  const group = Math.floor(wavelength / FILM.group);
-  const entry = first + group * FILM.blocks + block;
-  const cells = filmCells[entry];
-  const place = (scaled - block) * cells;
-  const node = Math.min(Math.max(0, Math.floor(place) - 1), cells - 3);
-  const at = scene.filmStart[entry] + 2 * ((wavelength - group * FILM.group) * (cells + 1) + node);
-  const t = place - node;
-  const a = t - 1;
-  const b = t - 2;
-  const c = t - 3;
-  const w0 = (-a * b * c) / 6;
-  const w1 = 0.5 * t * b * c;
-  const w2 = -0.5 * t * a * c;
-  const w3 = (t * a * b) / 6;
-  const passed = w0 * filmNodes[at] + w1 * filmNodes[at + 2] + w2 * filmNodes[at + 4] + w3 * filmNodes[at + 6];
-  const taken = w0 * filmNodes[at + 1] + w1 * filmNodes[at + 3] + w2 * filmNodes[at + 5] + w3 * filmNodes[at + 7];
-  const absorbed = taken < 0 ? 0 : taken > 1 ? 1 : taken;
-  const most = 1 - absorbed;
-  const transmitted = total || passed < 0 ? 0 : passed > most ? most : passed;
-  shares[SHARES.transmitted] = transmitted;
-  shares[SHARES.reflected] = most - transmitted;
 }

@@ -14,7 +14,7 @@ import { launchPump } from './launch-pump.js';
 import { meetInterface } from './meet-interface.js';
 import { findBoundary } from './next-boundary.js';
 import { NOW, RAY, turnTo } from './photon.js';
-import { SHARES } from './split-light.js';
+import { SHARES } from './shares.js';
 import { workOutWall } from './wall.js';
 import type { Witness } from './witness.js';
 

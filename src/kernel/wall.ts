@@ -5,7 +5,8 @@
 import { INTERFACE, type RegionGraph } from '../scene/region-graph.js';
 import type { Scene } from '../scene/scene-layout.js';
 import { NOW, RAY } from './photon.js';
-import { SHARES, splitLight } from './split-light.js';
+import { SHARES } from './shares.js';
+import { splitLight } from './split-light.js';
 
 /** Doubles per wall in `graph.walls`, which is indexed [(region · 6 + way) · WALL.STRIDE]. */
 export const enum WALL {

@@ -16,6 +16,7 @@ import { mixingRodProof } from './mixing-rod-proof.js';
 import { parallelBeamProof } from './parallel-beam-proof.js';
 import { photometryProof } from './photometry-proof.js';
 import { polarisedLightProof } from './polarised-light-proof.js';
+import { polarisingFilmsProof } from './polarising-films-proof.js';
 import { prismProof } from './prism-proof.js';
 import type { Proof } from './proof.js';
 import { reciprocityProof } from './reciprocity-proof.js';
@@ -36,6 +37,7 @@ export const allProofs: readonly Proof[] = [
   metalMirrorProof,
   polarisedLightProof,
   thinFilmProof,
+  polarisingFilmsProof,
   prismProof,
   beamSpreadProof,
   surfaceScatterProof,

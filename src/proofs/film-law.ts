@@ -2,7 +2,7 @@
 
 /** n − ik and thickness, in the order light meets them. */
 export type Film = readonly [n: number, k: number, thicknessNm: number];
-type Complex = readonly [number, number];
+export type Complex = readonly [number, number];
 
 const add = ([a, b]: Complex, [x, y]: Complex): Complex => [a + x, b + y];
 const subtract = ([a, b]: Complex, [x, y]: Complex): Complex => [a - x, b - y];
@@ -15,6 +15,14 @@ function decaying([a, b]: Complex): Complex {
   return [Math.sqrt(Math.max(0, (size + a) / 2)), -Math.sqrt(Math.max(0, (size - a) / 2))];
 }
 
+/** Shares of one polarisation, and amplitudes of the electric field along the films. */
+export interface FilmResponse {
+  readonly reflectance: number;
+  readonly transmittance: number;
+  readonly r: Complex;
+  readonly t: Complex;
+}
+
 /** Unpolarised reflectance and transmittance of films between transparent media. @param angle in the first medium, rad */
 export function filmShares(
   films: readonly Film[],
@@ -23,22 +31,23 @@ export function filmShares(
   angle: number,
   wavelengthNm: number,
 ): { reflectance: number; transmittance: number } {
-  const s = polarised(films, n0, n1, angle, wavelengthNm, 's');
-  const p = polarised(films, n0, n1, angle, wavelengthNm, 'p');
+  const s = filmResponse(films, n0, n1, angle, wavelengthNm, 's');
+  const p = filmResponse(films, n0, n1, angle, wavelengthNm, 'p');
   return {
     reflectance: (s.reflectance + p.reflectance) / 2,
     transmittance: (s.transmittance + p.transmittance) / 2,
   };
 }
 
-function polarised(
+/** One polarisation of `filmShares`. */
+export function filmResponse(
   films: readonly Film[],
   n0: number,
   n1: number,
   angle: number,
   wavelengthNm: number,
   polarisation: 's' | 'p',
-) {
+): FilmResponse {
   const beta2 = (n0 * Math.sin(angle)) ** 2;
   const layers: Film[] = [[n0, 0, 0], ...films, [n1, 0, 0]];
   const squares = layers.map(([n, k]): Complex => [n * n - k * k, -2 * n * k]);
@@ -61,5 +70,5 @@ function polarised(
     r = over(add(bare, echo), all);
   }
   const last = admittance[admittance.length - 1][0];
-  return { reflectance: size2(r), transmittance: (size2(t) * last) / admittance[0][0] };
+  return { reflectance: size2(r), transmittance: (size2(t) * last) / admittance[0][0], r, t };
 }

@@ -1,10 +1,11 @@
-import type { PumpDescription, Turn, Vector3 } from '../design/description.js';
+import type { PumpDescription, Vector3 } from '../design/description.js';
 import type { RunTallies } from '../tallies/run-tallies.js';
 import { fateShare } from './estimate.js';
 import { radians } from './fresnel-law.js';
 import { compare } from './judge-case.js';
 import type { Proof, ProofCase, ProofContext } from './proof.js';
 import { cell, medium, part, piece, pump, thinBeam } from './proof-cells.js';
+import { tiltedPlate } from './tilted-plate.js';
 import { traceCell } from './trace-cell.js';
 
 const GLASS = 1.5;
@@ -72,7 +73,7 @@ async function malus(context: ProofContext, degrees: number): Promise<ProofCase>
       media: [medium('glass', GLASS, SWALLOWS)],
       parts: [
         part('first', 'glass', { kind: 'box', size: [2, 2, 1] }, { at: [0, 0, -0.5] }),
-        analyser(next, [0, 0, 0], 20, [Math.cos(BREWSTER), 0, -Math.sin(BREWSTER)], radians(degrees)),
+        analyser(next, [0, 0, 0], [Math.cos(BREWSTER), 0, -Math.sin(BREWSTER)], degrees),
       ],
       pumps: [{ ...pump([-2 * along[0], 0, -2 * along[2]], along, thinBeam()), polarised: null }],
       exit: 'first.bottom',
@@ -113,7 +114,7 @@ async function behindRhomb(context: ProofContext, degrees: number): Promise<Proo
             sides: null,
           }),
         ]),
-        analyser(along, [length + lean / 2, height / 2, 0], 20, [c, s, 0], radians(degrees)),
+        analyser(along, [length + lean / 2, height / 2, 0], [c, s, 0], degrees),
       ],
       pumps: [polarised(pump([lean / 2 - 3 * s, height / 2 + 3 * c, 0], along, thinBeam()), 45)],
       exit: 'analyser.bottom',
@@ -136,23 +137,5 @@ const polarised = (of: PumpDescription, degrees: number): PumpDescription => ({ 
 const reflectedBy = (tallies: RunTallies, where: string) =>
   fateShare(tallies, (slot) => slot.where === where && slot.fate === 'reflected-at-entry');
 
-/**
- * A plate some way along a beam, at Brewster's angle to it; its plane of incidence holds `across` when `turn` is 0.
- * @param across unit vector at a right angle to the beam
- */
-function analyser(along: Vector3, from: Vector3, distance: number, across: Vector3, turn: number) {
-  const side: Vector3 = [
-    along[1] * across[2] - along[2] * across[1],
-    along[2] * across[0] - along[0] * across[2],
-    along[0] * across[1] - along[1] * across[0],
-  ];
-  const normal = along.map(
-    (d, i) => -Math.cos(BREWSTER) * d + Math.sin(BREWSTER) * (Math.cos(turn) * across[i] + Math.sin(turn) * side[i]),
-  );
-  const turns: Turn[] = [
-    { axis: 'y', angle: Math.acos(normal[2]) },
-    { axis: 'z', angle: Math.atan2(normal[1], normal[0]) },
-  ];
-  const at = from.map((x, i) => x + distance * along[i] - 0.5 * normal[i]) as unknown as Vector3;
-  return part('analyser', 'glass', { kind: 'box', size: [8, 8, 1] }, { at, turns });
-}
+const analyser = (along: Vector3, from: Vector3, across: Vector3, degrees: number) =>
+  tiltedPlate('analyser', 'glass', { along, from, distance: 20, across, turn: radians(degrees), angle: BREWSTER });

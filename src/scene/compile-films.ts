@@ -1,11 +1,13 @@
 /** Stacks of thin films -> tables, one for each stack, pair of media that can meet at it, and direction of light. */
+import { carriesPolarisation } from '../design/carries-polarisation.js';
 import type { Description, FinishDescription } from '../design/description.js';
-import { thinFilms } from '../optics/thin-films.js';
+import { type ThinFilms, thinFilms } from '../optics/thin-films.js';
 import type { CompiledMedia } from './compile-media.js';
 import type { SceneFace } from './compile-solids.js';
-import { type FilmBlocks, type FilmTable, tabulateFilms, UNPOLARISED } from './film-table.js';
+import { type FilmChannels, POLARISED, UNPOLARISED } from './film-channels.js';
+import { type FilmBlocks, type FilmTable, tabulateFilms } from './film-table.js';
 import type { PlacedPart } from './place-parts.js';
-import { sharedFloats } from './shared-arrays.js';
+import { sharedDoubles, sharedFloats } from './shared-arrays.js';
 import { type MediaPair, stackNeighbours } from './stack-neighbours.js';
 import type { WavelengthGrid } from './wavelength-grid.js';
 
@@ -18,6 +20,8 @@ export interface CompiledFilms {
   readonly filmStart: readonly number[];
   readonly filmCells: readonly number[];
   readonly filmNodes: Float32Array;
+  readonly filmLayerStart: readonly number[];
+  readonly filmLayers: Float64Array;
   /** Stacks whose curves are finer than the tables, with the largest error. */
   readonly coarse: readonly { readonly finish: string; readonly error: number }[];
 }
@@ -39,7 +43,12 @@ export function compileFilms(
 ): CompiledFilms {
   const before = known.get(description);
   if (before !== undefined) return before;
-  const films = new FilmPool(finishNames.length, media, grid);
+  const films = new FilmPool(
+    finishNames.length,
+    media,
+    grid,
+    carriesPolarisation(description) ? POLARISED : UNPOLARISED,
+  );
   finishNames.forEach((name, f) => {
     const finish = description.finishes.get(name);
     if (finish?.kind !== 'stack') return;
@@ -58,6 +67,8 @@ class FilmPool {
   readonly #filmStart: number[] = [];
   readonly #filmCells: number[] = [];
   readonly #nodes: Float32Array[] = [];
+  readonly #layerStart: number[] = [0];
+  readonly #layers: number[] = [];
   readonly #coarse = new Map<string, number>();
   readonly #made = new Map<string, number>();
   /** First medium with the same index at every wavelength. */
@@ -68,6 +79,7 @@ class FilmPool {
     finishes: number,
     readonly media: CompiledMedia,
     readonly grid: WavelengthGrid,
+    readonly channels: FilmChannels,
   ) {
     this.#filmOf = new Array(finishes * 2 * media.names.length ** 2).fill(-1);
     const rows = media.names.map((_, m) => this.#index(m).join());
@@ -96,10 +108,10 @@ class FilmPool {
 
   /** Number of the film for light from medium `from` to `to`. */
   #film(stack: Stack, f: number, from: number, to: number, inward: boolean): number {
-    const lossless = stack.layers.every(({ k }) => this.grid.nm.every((nm) => k(nm) === 0));
-    // Where nothing absorbs, both ways let the same through (reciprocity), and the table runs along the same cosine.
+    // Where nothing absorbs, both ways let the same through (reciprocity), and the table runs along the same cosine. Phases differ.
+    const alike = !this.channels.phases && stack.layers.every(({ k }) => this.grid.nm.every((nm) => k(nm) === 0));
     const [out, own] = inward ? [from, to] : [to, from];
-    const key = `${f} ${out} ${own}${lossless ? '' : inward ? ' in' : ' out'}`;
+    const key = `${f} ${out} ${own}${alike ? '' : inward ? ' in' : ' out'}`;
     const made = this.#made.get(key);
     if (made !== undefined) return made;
     const layers = inward ? stack.layers : stack.layers.toReversed();
@@ -109,8 +121,9 @@ class FilmPool {
         nm,
       ),
     );
-    const table = tabulateFilms({ films, indexIn: this.#index(from), indexOut: this.#index(to) }, UNPOLARISED);
+    const table = tabulateFilms({ films, indexIn: this.#index(from), indexOut: this.#index(to) }, this.channels);
     this.#made.set(key, this.#filmBlock.length);
+    if (this.channels.direct) this.#keepLayers(films);
     return this.#store(stack.name, table);
   }
 
@@ -118,6 +131,14 @@ class FilmPool {
     this.#filmBlock.push(this.#blocks(name, travelling));
     this.#filmBeyond.push(beyond === null ? -1 : this.#blocks(name, beyond));
     return this.#filmBlock.length - 1;
+  }
+
+  /** What the kernel needs to work the stack out itself, as laid out in scene-layout.ts. */
+  #keepLayers(films: readonly ThinFilms[]): void {
+    for (const { squareReal, squareImaginary, turns, count } of films) {
+      for (let j = 0; j < count; j++) this.#layers.push(squareReal[j], squareImaginary[j], turns[j]);
+    }
+    this.#layerStart.push(this.#layers.length);
   }
 
   #blocks(name: string, { cells, nodes, error }: FilmBlocks): number {
@@ -145,6 +166,8 @@ class FilmPool {
       filmStart: this.#filmStart,
       filmCells: this.#filmCells,
       filmNodes: sharedFloats(this.#nodes, this.#length),
+      filmLayerStart: this.#layerStart,
+      filmLayers: sharedDoubles(this.#layers),
       coarse: [...this.#coarse].map(([finish, error]) => ({ finish, error })),
     };
   }

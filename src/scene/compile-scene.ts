@@ -133,6 +133,8 @@ export function compileScene(description: Description): CompiledScene {
     filmStart: sharedInts(films.filmStart),
     filmCells: sharedInts(films.filmCells),
     filmNodes: films.filmNodes,
+    filmLayerStart: sharedInts(films.filmLayerStart),
+    filmLayers: films.filmLayers,
     pumpCount: description.pumps.length,
     pumps: sharedDoubles(pumps.pumps),
     pumpBeam: sharedInts(pumps.beam),

@@ -1,31 +1,14 @@
 /**
  * What a stack does to light of every wavelength and angle, tabulated once between two media. The angle runs along the cosine in the
  * rarer of the two media, in which R and T have no kink: in the angle itself, and in the cosine of the denser medium, T falls to
- * nothing with an infinite slope. Beyond the critical angle, where only absorbing stacks need a table, cos θ = cos θc·sin φ runs with φ
+ * nothing with an infinite slope. Beyond the critical angle, where a stack that absorbs nothing needs a table for its phases only, cos θ = cos θc·sin φ runs with φ
  * for the same reason. A cubic through four nodes leads from one to the next; nodes lie as close as it needs, in each block of angles and
  * each group of wavelengths, for the resonances of a stack are narrow where they are and nowhere else.
  */
 import { AMPLITUDES, stackAmplitudes } from '../optics/thin-film-stack.js';
 import type { ThinFilms } from '../optics/thin-films.js';
+import type { FilmChannels } from './film-channels.js';
 import { FILM } from './scene-layout.js';
-
-/** What is kept of the amplitudes at each node. */
-export interface FilmChannels {
-  readonly count: number;
-  /** Writes `count` numbers at `at`, each smooth in angle. */
-  readonly pick: (amplitudes: Float64Array, nodes: Float32Array, at: number) => void;
-}
-
-/** Mean of s and p: share transmitted, share absorbed. What is neither is reflected, so that shares close without rounding. */
-export const UNPOLARISED: FilmChannels = {
-  count: 2,
-  pick(amplitudes, nodes, at) {
-    const passed = 0.5 * (amplitudes[AMPLITUDES.transmittanceS] + amplitudes[AMPLITUDES.transmittanceP]);
-    const back = 0.5 * (amplitudes[AMPLITUDES.reflectanceS] + amplitudes[AMPLITUDES.reflectanceP]);
-    nodes[at] = passed;
-    nodes[at + 1] = Math.max(0, 1 - passed - back);
-  },
-};
 
 /** One direction of light through a stack: everything [wavelength]. */
 export interface FilmPassage {
@@ -36,7 +19,7 @@ export interface FilmPassage {
 
 /** Blocks of angles in groups of wavelengths: [group · FILM.blocks + block]. */
 export interface FilmBlocks {
-  /** Intervals of each block. */
+  /** Intervals of each block; 0: none would do, the stack is worked out where it is met. */
   readonly cells: readonly number[];
   /** Of each block [(wavelength in the group · (cells + 1) + node) · channels + channel]. */
   readonly nodes: readonly Float32Array[];
@@ -46,21 +29,21 @@ export interface FilmBlocks {
 
 export interface FilmTable {
   readonly travelling: FilmBlocks;
-  /** Beyond the critical angle, φ from 0 (grazing) to 90° (critical); null where nothing absorbs or no such angle is. */
+  /** Beyond the critical angle, φ from 0 (grazing) to 90° (critical); null where no such angle is, or nothing absorbs and no phases are kept. */
   readonly beyond: FilmBlocks | null;
 }
 
 /** Error at which nodes need not be halved once more; those used are twice as many. */
 const TARGET = 1e-3;
 const FEWEST = 4;
-const MOST = 256;
+const NONE = new Float32Array(0);
 
 export function tabulateFilms(passage: FilmPassage, channels: FilmChannels): FilmTable {
   const absorbing = passage.films.some((films) => films.absorbing);
   const denser = passage.indexIn.some((index, w) => index > passage.indexOut[w]);
   return {
     travelling: fillBlocks(passage, channels, false),
-    beyond: absorbing && denser ? fillBlocks(passage, channels, true) : null,
+    beyond: denser && (absorbing || channels.phases) ? fillBlocks(passage, channels, true) : null,
   };
 }
 
@@ -105,7 +88,9 @@ function fillBlock(
       }
       error = Math.max(error, oddError(finer, to, cells, count));
     }
-    if (error <= TARGET || cells >= MOST) return { cells: 2 * cells, nodes: finer, error };
+    // Beyond the critical angle the phases of a stack without absorption turn round within any angle, however small.
+    if (error > TARGET && cells >= channels.most && channels.direct) return { cells: 0, nodes: NONE, error: 0 };
+    if (error <= TARGET || cells >= channels.most) return { cells: 2 * cells, nodes: finer, error };
     cells *= 2;
     nodes = finer;
   }
@@ -147,7 +132,7 @@ function sample(
       amplitudes,
     );
   } else return;
-  channels.pick(amplitudes, nodes, at);
+  channels.pick(amplitudes, n2 / n1, !beyond, nodes, at);
 }
 
 /** How far the nodes between miss the cubic through those with even numbers. */

@@ -20,6 +20,20 @@ export const enum SPLIT {
 export const enum FILM {
   blocks = 16,
   group = 8,
+  /** Numbers at each node where light is unpolarised: share transmitted, share absorbed. */
+  channels = 2,
+}
+/** Numbers at each node where polarisation is carried: shares, and products of the amplitude of s and the conjugate of that of p. */
+export const enum POLARISED_FILM {
+  transmittedS = 0,
+  transmittedP = 1,
+  absorbedS = 2,
+  absorbedP = 3,
+  reflectedReal = 4,
+  reflectedImaginary = 5,
+  transmittedReal = 6,
+  transmittedImaginary = 7,
+  COUNT = 8,
 }
 /** Where reflected or transmitted light goes. */
 export const enum SPREAD {
@@ -235,8 +249,10 @@ export interface Scene {
   readonly filmBlock: Int32Array; // [film]: first block; blocks are [group · FILM.blocks + block]
   readonly filmBeyond: Int32Array; // [film]: first block beyond the critical angle, −1 where all is reflected there
   readonly filmStart: Int32Array; // [block], into filmNodes
-  readonly filmCells: Int32Array; // [block]: intervals of angle
-  readonly filmNodes: Float32Array; // [(wavelength in its group · (cells + 1) + node) · 2]: share transmitted, share absorbed
+  readonly filmCells: Int32Array; // [block]: intervals of angle; 0: the stack is worked out there and then
+  readonly filmNodes: Float32Array; // [(wavelength in its group · (cells + 1) + node) · channels + channel]: FILM.channels, or POLARISED_FILM where `polarised` is 1
+  readonly filmLayerStart: Int32Array; // [film + 1], into filmLayers; where polarisation is averaged, there are none
+  readonly filmLayers: Float64Array; // of a film [(wavelength · layers + layer) · 3]: real and imaginary part of the squared index, 2π·thickness/wavelength
 
   // ---- pumps
   readonly pumpCount: number;

@@ -62,7 +62,7 @@ describe('coating', () => {
   test('a table, the pictures and a CSV whose numbers are the handbook ones', async () => {
     const out = join(cwd, 'out');
     await coatingCommand(file, 'coat', options({ between: ['air', 'borosilicate-crown'], out, files: true }));
-    expect((await readdir(out)).sort()).toEqual(['coating.csv', 'curves.svg', 'map.svg']);
+    expect((await readdir(out)).sort()).toEqual(['coating.csv', 'curves.svg', 'map.svg', 'polarised.svg']);
     const rows = (await readFile(join(out, 'coating.csv'), 'utf8')).trim().split('\n');
     expect(rows[0]).toBe(
       'from,to,wavelength_nm,angle_deg,reflectance_s,reflectance_p,reflectance,transmittance_s,transmittance_p,transmittance,absorptance_s,absorptance_p,absorptance',
@@ -71,7 +71,7 @@ describe('coating', () => {
     // ((n₀nₛ − n₁²)/(n₀nₛ + n₁²))² with n₁ = 1.3785 (Dodge 1984) and nₛ = 1.5185 (data sheet of the crown) at 550 nm: Born & Wolf §1.6.4.
     const expected = ((1.5185 - 1.3785 ** 2) / (1.5185 + 1.3785 ** 2)) ** 2;
     expect(Number(row?.split(',')[6])).toBeCloseTo(expected, 4);
-    for (const name of ['curves.svg', 'map.svg']) {
+    for (const name of ['curves.svg', 'map.svg', 'polarised.svg']) {
       const text = await readFile(join(out, name), 'utf8');
       expect(text).toMatch(/^<\?xml/);
       // Stands alone: no style from a page, nothing fetched.
@@ -82,9 +82,29 @@ describe('coating', () => {
     );
   });
 
+  test('s and p apart: at normal incidence alike, at 60° as a bare film of 1.378 has them', async () => {
+    await coatingCommand(file, 'coat', options({ between: ['air', 'borosilicate-crown'] }));
+    const block = printed.split('% transmitted of s / p light')[1].split('\n');
+    const [s, p] =
+      block
+        .find((row) => /^ +0° /.test(row))
+        ?.match(/(\d+\.\d) \/ (\d+\.\d)/)
+        ?.slice(1) ?? [];
+    expect(s).toBe(p);
+    const [steepS, steepP] =
+      block
+        .find((row) => /^ +60° /.test(row))
+        ?.match(/(\d+\.\d) \/ (\d+\.\d)/)
+        ?.slice(1) ?? [];
+    // Near the Brewster angles of film (54°) and glass (57°) p passes almost whole; s loses some 10 % and more (Born & Wolf §1.5.3).
+    expect(Number(steepP)).toBeGreaterThan(99);
+    expect(Number(steepS)).toBeLessThan(95);
+  });
+
   test('finishes that are no stack have curves too', async () => {
     await coatingCommand(file, 'ideal', options({ between: ['air', 'bath'] }));
     expect(printed).toMatch(/0° {2}5\.0 \/ 95\.0 \/ 0\.0/);
+    expect(printed).not.toContain('s / p light');
   });
 
   test.each<[string, Partial<CoatingOptions>, RegExp]>([

@@ -62,7 +62,9 @@ export function throughLayers(layers: readonly FilmLayer[], n1: number, n2: numb
     const r = div(sub(up, h), add(up, h));
     const scale = eIn[0] / power(incident);
     // Powers over that of the wave that arrives, which is |(ηE + H)/2|²/η.
-    return { r, reflectance: power(r), transmittance: out2 > 0 ? eOut[0] * scale : 0, absorbed: lost * scale };
+    // The tangential electric field is 1 behind the layers.
+    const t = div(eIn, incident);
+    return { r, t, reflectance: power(r), transmittance: out2 > 0 ? eOut[0] * scale : 0, absorbed: lost * scale };
   };
   return { s: one('s'), p: one('p') };
 }

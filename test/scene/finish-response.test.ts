@@ -2,7 +2,8 @@
 import fc from 'fast-check';
 import { expect, test } from 'vitest';
 import type { FinishDescription } from '../../src/design/description.js';
-import { SHARES, splitLight } from '../../src/kernel/split-light.js';
+import { SHARES } from '../../src/kernel/shares.js';
+import { splitLight } from '../../src/kernel/split-light.js';
 import { compileScene } from '../../src/scene/compile-scene.js';
 import { finishResponse } from '../../src/scene/finish-response.js';
 import { RegionGraph } from '../../src/scene/region-graph.js';

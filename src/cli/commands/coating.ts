@@ -55,10 +55,11 @@ export async function coatingCommand(file: string, name: string, options: Coatin
     options.out ?? join(RESULTS, slug(description.title, 'design'), `coating-${slug(name, 'finish')}-${pair}`);
   await writeFolder(folder, [
     ['coating.csv', coatingCsv(curves)],
-    ['curves.svg', coatingCurvesPicture(name, curves)],
+    ['curves.svg', coatingCurvesPicture(name, curves, 'mean')],
+    ['polarised.svg', coatingCurvesPicture(name, curves, 'apart')],
     ['map.svg', coatingMapPicture(name, curves)],
   ]);
-  print(`\n${safeText(folder)}: coating.csv, curves.svg, map.svg\n`);
+  print(`\n${safeText(folder)}: coating.csv, curves.svg, polarised.svg, map.svg\n`);
   return EXIT.ok;
 }
 

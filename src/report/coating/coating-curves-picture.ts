@@ -19,15 +19,42 @@ const HEIGHT = 190;
 const ACROSS = 356;
 const DOWN = 262;
 
-/** Reflectance above, transmittance below, against wavelength at several angles; a column for each way of light. A whole SVG file. */
-export function coatingCurvesPicture(name: string, panels: readonly CoatingPanel[]): string {
+interface Row {
+  readonly share: (panel: CoatingPanel, at: number) => number;
+  readonly label: string;
+}
+const ROWS = {
+  mean: {
+    title: 'mean of s and p',
+    describes: 'Reflectance and transmittance of unpolarised light',
+    rows: [
+      { share: meanReflectance, label: 'reflected, %' },
+      { share: meanTransmittance, label: 'transmitted, %' },
+    ],
+  },
+  apart: {
+    title: 's and p apart',
+    describes: 'Transmittance of s light and of p light',
+    rows: [
+      { share: ({ transmittanceS }, at) => transmittanceS[at], label: 's transmitted, %' },
+      { share: ({ transmittanceP }, at) => transmittanceP[at], label: 'p transmitted, %' },
+    ],
+  },
+} as const satisfies Record<string, { title: string; describes: string; rows: readonly [Row, Row] }>;
+
+/**
+ * Two rows of curves against wavelength at several angles; a column for each way of light. A whole SVG file.
+ * @param what reflectance above transmittance of unpolarised light, or transmittance of s above that of p light
+ */
+export function coatingCurvesPicture(name: string, panels: readonly CoatingPanel[], what: keyof typeof ROWS): string {
+  const { title, describes, rows } = ROWS[what];
   const width = LEFT + panels.length * ACROSS - 22;
   const height = TOP + 2 * DOWN - 12;
   const contents = panels.map((panel, column) => {
     const x = LEFT + column * ACROSS;
-    return markup`<text class="panel-title" x="${x}" y="${TOP - 12}">${panel.from} → ${panel.to}</text>${plot(panel, meanReflectance, x, TOP, 'reflected, %')}${plot(panel, meanTransmittance, x, TOP + DOWN, 'transmitted, %')}`;
+    return markup`<text class="panel-title" x="${x}" y="${TOP - 12}">${panel.from} → ${panel.to}</text>${rows.map(({ share, label }, row) => plot(panel, share, x, TOP + row * DOWN, label))}`;
   });
-  return markup`${trusted('<?xml version="1.0" encoding="UTF-8"?>\n')}<svg xmlns="http://www.w3.org/2000/svg" width="${width}" height="${height}" viewBox="0 0 ${width} ${height}" role="img"><title>${name}</title><desc>Reflectance and transmittance of unpolarised light against wavelength, at ${ANGLES.map(({ degrees }) => `${degrees}°`).join(', ')}.</desc><style>${trusted(STANDALONE_STYLE)}</style><rect width="${width}" height="${height}" fill="#ffffff"/><text class="picture-title" x="${LEFT}" y="24">${name}, mean of s and p</text>${legend(LEFT, 43)}${contents}</svg>`.text.concat(
+  return markup`${trusted('<?xml version="1.0" encoding="UTF-8"?>\n')}<svg xmlns="http://www.w3.org/2000/svg" width="${width}" height="${height}" viewBox="0 0 ${width} ${height}" role="img"><title>${name}</title><desc>${describes} against wavelength, at ${ANGLES.map(({ degrees }) => `${degrees}°`).join(', ')}.</desc><style>${trusted(STANDALONE_STYLE)}</style><rect width="${width}" height="${height}" fill="#ffffff"/><text class="picture-title" x="${LEFT}" y="24">${name}, ${title}</text>${legend(LEFT, 43)}${contents}</svg>`.text.concat(
     '\n',
   );
 }
