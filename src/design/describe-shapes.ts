@@ -1,4 +1,6 @@
 /** Shapes as written -> shapes of the description; checks that each is a convex solid. */
+
+import { describeOptics } from './describe-optics.js';
 import type { ShapeDescription, Vector2 } from './description.js';
 import type { DesignPath } from './fault.js';
 import { checkName } from './form-record.js';
@@ -16,7 +18,8 @@ export function describeShape(fields: ShapeFields, path: DesignPath, reading: Re
   if (cylinder !== null) return { kind: 'cylinder', radius: radiusOf(cylinder), height: cylinder.height };
   if (cone !== null) return describeCone(cone, [...path, 'cone'], reading);
   if (sphere !== null) return { kind: 'sphere', radius: radiusOf(sphere) };
-  return cap && describeCap(cap, [...path, 'cap'], reading);
+  if (cap !== null) return describeCap(cap, [...path, 'cap'], reading);
+  return describeOptics(fields, path, reading);
 }
 
 const half = (diameter: number | null): number => (diameter === null ? Number.NaN : diameter / 2);

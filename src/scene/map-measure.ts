@@ -4,7 +4,9 @@ import { bareShare } from './bare-face.js';
 import type { RecorderPlan } from './compile-recorders.js';
 import type { CompiledScene } from './compile-scene.js';
 import type { FacePatch } from './convex-solid.js';
+import { lineOfSight } from './line-of-sight.js';
 import { RegionGraph } from './region-graph.js';
+import { revolvedStretch } from './revolved.js';
 import { add, dot, scale, subtract } from './vector.js';
 
 const SAMPLES = 8;
@@ -87,13 +89,15 @@ function areaDensity(plan: RecorderPlan): (u: number, v: number) => number {
       return inPolygon(plan, patch);
     case 'disc':
       return (u, v) => (u * u + v * v <= patch.radius ** 2 ? 1 : 0);
-    case 'side': {
-      const mean = (patch.bottomRadius + patch.topRadius) / 2;
-      const slant = Math.hypot(patch.height, patch.topRadius - patch.bottomRadius) / patch.height;
-      return (_, v) => {
-        const radius = patch.bottomRadius + ((patch.topRadius - patch.bottomRadius) * v) / patch.height;
-        return (radius / mean) * slant;
-      };
+    case 'side':
+    case 'profile': {
+      const stretch = revolvedStretch(patch);
+      return (_, v) => stretch(v);
+    }
+    case 'dish':
+    case 'group': {
+      const seen = lineOfSight(plan, patch);
+      return (u, v) => seen(u, v).reduce((sum, { stretch }) => sum + stretch, 0);
     }
     case 'zone':
       return inZone(patch);
