@@ -4,6 +4,7 @@
 import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
 import type { Description, FinishDescription, Vector3 } from '../../src/design/description.js';
+import { shapeFaces } from '../../src/design/shape-faces.js';
 import { batchStream } from '../../src/engine/trace-share.js';
 import { clearBatch, createBatchTally, grownBytes, grownTally } from '../../src/kernel/batch-tally.js';
 import { traceBatch } from '../../src/kernel/trace-batch.js';
@@ -32,7 +33,7 @@ function pileDesign(pile: readonly PilePart[], pick: readonly number[], clear: b
         medium('m1', 1.5, { absorption: 0.02, kind: 'solid' }),
         medium('m2', 1, { absorption: 0.001, kind: 'gas' }),
       ];
-  const exitFace = pile[0].shape.kind === 'sphere' ? 'surface' : pile[0].shape.kind === 'cap' ? 'dome' : 'top';
+  const exitFace = shapeFaces(pile[0].shape).at(-1) ?? '';
   return describeDesign({
     media,
     finishes,
