@@ -1,6 +1,7 @@
 import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
 import type { Description } from '../../src/design/description.js';
+import { shapeFaces } from '../../src/design/shape-faces.js';
 import { compileScene } from '../../src/scene/compile-scene.js';
 import { RegionGraph } from '../../src/scene/region-graph.js';
 import { beam, describeDesign, medium, part } from '../helpers/describe.js';
@@ -13,7 +14,7 @@ function pileDesign(pile: readonly PilePart[]): Description {
       part(`p${i}`, shape, 'glass', { at, turns, minus: hole === null ? [] : [{ name: 'hole', ...hole }] }),
     ),
     pumps: [beam([50, 0, 0], [-1, 0, 0])],
-    exit: `p0.${pile[0].shape.kind === 'sphere' ? 'surface' : pile[0].shape.kind === 'cap' ? 'dome' : 'top'}`,
+    exit: `p0.${shapeFaces(pile[0].shape).at(-1)}`,
   });
 }
 
