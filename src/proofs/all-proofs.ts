@@ -8,6 +8,7 @@ import { glassPlateProof } from './glass-plate-proof.js';
 import { glassSphereProof } from './glass-sphere-proof.js';
 import { halfSpaceProof } from './half-space-proof.js';
 import { integratingSphereProof } from './integrating-sphere-proof.js';
+import { lensProof } from './lens-proof.js';
 import { lightBoxProof } from './light-box-proof.js';
 import { meanChordProof } from './mean-chord-proof.js';
 import { metalMirrorProof } from './metal-mirror-proof.js';
@@ -17,6 +18,7 @@ import { photometryProof } from './photometry-proof.js';
 import { prismProof } from './prism-proof.js';
 import type { Proof } from './proof.js';
 import { reciprocityProof } from './reciprocity-proof.js';
+import { reflectorProof } from './reflector-proof.js';
 import { slabProof } from './slab-proof.js';
 import { trappedLightProof } from './trapped-light-proof.js';
 import { twoColourSlabProof } from './two-colour-slab-proof.js';
@@ -30,6 +32,8 @@ export const allProofs: readonly Proof[] = [
   diffuseFresnelProof,
   metalMirrorProof,
   prismProof,
+  lensProof,
+  reflectorProof,
   beamSpreadProof,
   viewFactorProof,
   meanChordProof,

@@ -159,9 +159,12 @@ export function dishRange(dish: Dish, direction: Vector3): readonly [number, num
     if (distance <= outline.radius) see(turn * distance * c, turn * distance * s);
   } else {
     const { from, to, halfWidth } = strip(dish);
-    for (let i = 0; i <= STEPS; i++) {
-      const a = from + ((to - from) * i) / STEPS;
-      for (let k = 0; k <= STEPS; k++) see(a, halfWidth(a) * ((2 * k) / STEPS - 1));
+    // Along a ruling the ends are the extremes.
+    const rows = dish.ruled === 'v' ? STEPS : 16;
+    const columns = dish.ruled === 'v' ? 1 : 16;
+    for (let i = 0; i <= rows; i++) {
+      const a = from + ((to - from) * i) / rows;
+      for (let k = 0; k <= columns; k++) see(a, halfWidth(a) * ((2 * k) / columns - 1));
     }
   }
   return [Math.min(...values), Math.max(...values)];

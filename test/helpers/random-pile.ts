@@ -218,7 +218,8 @@ function lensDepth({ outline, thickness, profile, front, back }: LensDescription
     const depth = (r * r) / (R * (1 + Math.sqrt(1 - ((1 + k) * r * r) / (R * R))));
     return surface.kind === 'bulges' ? depth : -depth;
   };
-  const [a, b] = outline.kind === 'disc' ? [outline.radius, outline.radius] : [outline.size[0] / 2, outline.size[1] / 2];
+  const [a, b] =
+    outline.kind === 'disc' ? [outline.radius, outline.radius] : [outline.size[0] / 2, outline.size[1] / 2];
   const corner = outline.kind === 'disc' ? outline.radius : Math.hypot(a, b);
   const reach = profile === 'round' ? corner : profile === 'upright' ? a : b;
   const low = Math.min(0, sag(front, reach));
@@ -248,10 +249,13 @@ function slicedHalf({ smallEnd: a, halfAngle, height, slices }: ConcentratorDesc
   const along = (up: number) => wallHalf(a, halfAngle, up) * c + up * s;
   const heightAt = (goal: number): number => {
     let [low, high] = [0, height];
-    for (let i = 0; i < 60; i++) [low, high] = along((low + high) / 2) < goal ? [(low + high) / 2, high] : [low, (low + high) / 2];
+    for (let i = 0; i < 60; i++)
+      [low, high] = along((low + high) / 2) < goal ? [(low + high) / 2, high] : [low, (low + high) / 2];
     return (low + high) / 2;
   };
-  const levels = Array.from({ length: slices + 1 }, (_, i) => heightAt(along(0) + ((along(height) - along(0)) * i) / slices));
+  const levels = Array.from({ length: slices + 1 }, (_, i) =>
+    heightAt(along(0) + ((along(height) - along(0)) * i) / slices),
+  );
   const i = Math.min(slices - 1, Math.max(0, levels.findIndex((level) => level >= z) - 1));
   const [z0, z1] = [levels[i], levels[i + 1]];
   const [r0, r1] = [wallHalf(a, halfAngle, z0), wallHalf(a, halfAngle, z1)];
