@@ -1,4 +1,4 @@
-import type { ShapeDescription, Vector3 } from '../design/description.js';
+import type { ShapeDescription, Vector2, Vector3 } from '../design/description.js';
 import { fateShare } from './estimate.js';
 import { radians } from './fresnel-law.js';
 import { compare } from './judge-case.js';
@@ -6,23 +6,72 @@ import type { Proof, ProofCase, ProofContext } from './proof.js';
 import { cell, detector, part, piece, pump } from './proof-cells.js';
 import { slotsOf } from './slots-of.js';
 import { traceCell } from './trace-cell.js';
+import { throughWedge } from './unfolded-taper.js';
 
 /** Of the hole at the focus that all light must find. */
 const PINHOLE_MM = 1e-5;
 
 export const reflectorProof: Proof = {
   name: 'Reflectors',
-  law: 'a paraboloid brings axial light to its focus; a compound parabolic trough passes all light within its half angle and none beyond',
-  source: 'conic sections; Welford & Winston, High Collection Nonimaging Optics (1989), ch. 4',
+  law: 'a paraboloid brings axial light to its focus; a compound parabolic trough passes all light within its half angle and none beyond; a taper what meets its images',
+  source:
+    'conic sections; Welford & Winston, High Collection Nonimaging Optics (1989), ch. 4; Williamson, J. Opt. Soc. Am. 42 712 (1952), from memory',
   status: 'exact',
   async run(context) {
     const cases: ProofCase[] = [await paraboloid(context, 4), await paraboloid(context, 7)];
     for (const share of [0, 0.5, 0.99, 1.01, 1.5]) cases.push(await concentrator(context, 'trough', 40, share));
     // In the crossed form the other walls only steepen a tilt: what comes straight passes, what is beyond the angle never does.
     for (const share of [0, 1.01, 1.5]) cases.push(await concentrator(context, 'square', null, share));
+    for (const degrees of [5, 15, 20, 30]) cases.push(await taper(context, degrees));
     return cases;
   },
 };
+
+/** Parallel light down a taper with two slanting walls; what turns back leaves by the wide end. */
+async function taper(context: ProofContext, degrees: number): Promise<ProofCase> {
+  const [narrow, wide, height] = [1, 3, 10];
+  const angle = radians(degrees);
+  const title = `mirrored taper of 3 to 1, light at ${degrees}°`;
+  const end = (half: number): Vector2[] => [
+    [-half, -20],
+    [half, -20],
+    [half, 20],
+    [-half, 20],
+  ];
+  const down: Vector3 = [Math.sin(angle), 0, -Math.cos(angle)];
+  const back = 5;
+  const tallies = await traceCell(
+    context,
+    cell(title, {
+      media: [],
+      parts: [
+        part(
+          'taper',
+          'air',
+          { kind: 'frustum', bottom: end(narrow), top: end(wide), height, sides: ['front', 'right', 'back', 'left'] },
+          { faces: { left: 'perfect', right: 'perfect' } },
+        ),
+      ],
+      pumps: [
+        pump([-back * down[0], 0, height / 2 - back * down[2]], down, {
+          kind: 'patch',
+          outline: { kind: 'rectangle', size: [2, 2 * wide * Math.cos(angle) * 0.9999] },
+          divergence: [0, 0],
+        }),
+      ],
+      exit: 'taper.bottom',
+    }),
+    0.5,
+  );
+  return compare(
+    `comes through, ${title}`,
+    'lines that meet the polygon of images',
+    fateShare(tallies, slotsOf({ where: 'taper.bottom' })),
+    throughWedge(narrow, wide, height, angle),
+    // The beam stops a hair within the wide end.
+    2e-4,
+  );
+}
 
 /** A mirrored bowl taken out of a block; a beam beside the axis must leave through a pinhole at the focus. */
 async function paraboloid(context: ProofContext, beside: number): Promise<ProofCase> {
