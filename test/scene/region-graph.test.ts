@@ -34,7 +34,7 @@ describe('region graph', () => {
           }
         },
       ),
-      { numRuns: 300, seed: 20261201 },
+      { numRuns: 200, seed: 20261201 },
     );
   });
 
