@@ -59,7 +59,7 @@ describe.each(names)('%s', (name) => {
 });
 
 describe(`the spread of the pump, by 4 standard errors, seed ${SEED}`, () => {
-  test('every way but the slow fly's eye is more even than none, and costs light', async () => {
+  test('every way but the slow pair of lens arrays is more even than none, and costs light', async () => {
     const bare = await spread('bare');
     for (const name of names.filter((each) => each !== 'bare' && each !== 'flys-eye')) {
       const other = await spread(name);
