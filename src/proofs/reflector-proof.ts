@@ -22,6 +22,8 @@ export const reflectorProof: Proof = {
     for (const share of [0, 0.5, 0.99, 1.01, 1.5]) cases.push(await concentrator(context, 'trough', 40, share));
     // In the crossed form the other walls only steepen a tilt: what comes straight passes, what is beyond the angle never does.
     for (const share of [0, 1.01, 1.5]) cases.push(await concentrator(context, 'square', null, share));
+    // Axial light meets the round wall in planes of the axis, where it is the same curve.
+    cases.push(await concentrator(context, 'round', null, 0));
     for (const degrees of [5, 15, 20, 30]) cases.push(await taper(context, degrees));
     return cases;
   },
@@ -120,7 +122,7 @@ async function paraboloid(context: ProofContext, beside: number): Promise<ProofC
 /** Parallel light that fills the large end; the share that comes out of the small one. */
 async function concentrator(
   context: ProofContext,
-  form: 'trough' | 'square',
+  form: 'trough' | 'square' | 'round',
   length: number | null,
   share: number,
 ): Promise<ProofCase> {
@@ -140,14 +142,17 @@ async function concentrator(
         part(
           'trough',
           'air',
-          { kind: 'concentrator', form, halfAngle, smallEnd, height, length, slices: 1 },
+          { kind: 'concentrator', form, halfAngle, smallEnd, height, length, slices: 40 },
           { faces: { '*': 'perfect', top: 'clear', bottom: 'clear' } },
         ),
       ],
       pumps: [
         pump([-back * down[0], 0, height / 2 - back * down[2]], down, {
           kind: 'patch',
-          outline: { kind: 'rectangle', size: sides(form, large, angle) },
+          outline:
+            form === 'round'
+              ? { kind: 'disc', radius: large * 0.9999 }
+              : { kind: 'rectangle', size: sides(form, large, angle) },
           divergence: [0, 0],
         }),
       ],
