@@ -244,7 +244,19 @@ export function wallHalf(a: number, angle: number, z: number): number {
 }
 
 /** The same between the chords over equal steps of x cos θ + z sin θ, which grows evenly along the tangent of the vertex. */
-function slicedHalf({ smallEnd: a, halfAngle, height, slices }: ConcentratorDescription, z: number): number {
+function slicedHalf(shape: ConcentratorDescription, z: number): number {
+  const { smallEnd: a, halfAngle, height, slices } = shape;
+  const levels = levelsOf.get(shape) ?? sliceLevels(shape);
+  levelsOf.set(shape, levels);
+  const i = Math.min(slices - 1, Math.max(0, levels.findIndex((level) => level >= z) - 1));
+  const [z0, z1] = [levels[i], levels[i + 1]];
+  const [r0, r1] = [wallHalf(a, halfAngle, z0), wallHalf(a, halfAngle, z1)];
+  return z > height ? Number.NaN : r0 + ((r1 - r0) * (z - z0)) / (z1 - z0);
+}
+
+const levelsOf = new WeakMap<ConcentratorDescription, readonly number[]>();
+
+function sliceLevels({ smallEnd: a, halfAngle, height, slices }: ConcentratorDescription): readonly number[] {
   const [s, c] = [Math.sin(halfAngle), Math.cos(halfAngle)];
   const along = (up: number) => wallHalf(a, halfAngle, up) * c + up * s;
   const heightAt = (goal: number): number => {
@@ -253,13 +265,7 @@ function slicedHalf({ smallEnd: a, halfAngle, height, slices }: ConcentratorDesc
       [low, high] = along((low + high) / 2) < goal ? [(low + high) / 2, high] : [low, (low + high) / 2];
     return (low + high) / 2;
   };
-  const levels = Array.from({ length: slices + 1 }, (_, i) =>
-    heightAt(along(0) + ((along(height) - along(0)) * i) / slices),
-  );
-  const i = Math.min(slices - 1, Math.max(0, levels.findIndex((level) => level >= z) - 1));
-  const [z0, z1] = [levels[i], levels[i + 1]];
-  const [r0, r1] = [wallHalf(a, halfAngle, z0), wallHalf(a, halfAngle, z1)];
-  return z > height ? Number.NaN : r0 + ((r1 - r0) * (z - z0)) / (z1 - z0);
+  return Array.from({ length: slices + 1 }, (_, i) => heightAt(along(0) + ((along(height) - along(0)) * i) / slices));
 }
 
 /** Number of the last part that holds the point (1-based), 0 for none; null too close to a surface to say. */

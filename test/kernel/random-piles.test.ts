@@ -114,5 +114,14 @@ describe('random piles of touching and overlapping parts', () => {
 });
 
 function describeDesignWithBeam(pile: readonly PilePart[], start: Vector3, unit: Vector3): Description {
-  return { ...pileDesign(pile, [0, 1, 2, 0, 1], true), pumps: [beam(start, unit)] };
+  const design = pileDesign(pile, [0, 1, 2, 0, 1], true);
+  // Light that leaves by an exit ends there: the exit is a plane that the ray has passed by when it comes out of the pile.
+  const at = unit.map((c) => 60 * c) as unknown as Vector3;
+  const target = { kind: 'plane', at, normal: unit, outline: { kind: 'disc', radius: 1 } } as const;
+  return {
+    ...design,
+    pumps: [beam(start, unit)],
+    detectors: [{ name: 'beyond', path: [], target, pixels: null }],
+    exit: { ...design.exit, name: 'beyond' },
+  };
 }
