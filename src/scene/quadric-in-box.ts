@@ -21,20 +21,28 @@ export function quadricMeetsBox(
     if (a === 0 && b === 0) continue;
     const from = low[axis] - MARGIN;
     const to = high[axis] + MARGIN;
-    const ends = [along(a, b, from), along(a, b, to)];
-    const turn = -b / a;
+    const start = along(a, b, from);
+    const end = along(a, b, to);
+    let lowest = start < end ? start : end;
+    let highest = start < end ? end : start;
     // The vertex of the parabola a·x² + 2·b·x.
-    if (a !== 0 && turn > from && turn < to) ends.push(-(b * b) / a);
-    least += Math.min(...ends);
-    most += Math.max(...ends);
-    for (const end of ends) if (Number.isFinite(end)) size += Math.abs(end);
+    const turn = -b / a;
+    if (a !== 0 && turn > from && turn < to) {
+      const vertex = -(b * b) / a;
+      if (vertex < lowest) lowest = vertex;
+      if (vertex > highest) highest = vertex;
+    }
+    least += lowest;
+    most += highest;
+    if (Number.isFinite(lowest)) size += Math.abs(lowest);
+    if (Number.isFinite(highest)) size += Math.abs(highest);
   }
   for (let pair = 0; pair < 3; pair++) {
     const c = 2 * q[at + 3 + pair];
     if (c === 0) continue;
-    const [i, j] = [pair === 2 ? 1 : 0, pair === 0 ? 1 : 2];
-    const reach = (axis: number) => Math.max(Math.abs(low[axis] - MARGIN), Math.abs(high[axis] + MARGIN));
-    const product = Math.abs(c) * reach(i) * reach(j);
+    const i = pair === 2 ? 1 : 0;
+    const j = pair === 0 ? 1 : 2;
+    const product = Math.abs(c) * farthest(low[i], high[i]) * farthest(low[j], high[j]);
     // Without bounds on both axes nothing can be told.
     if (!Number.isFinite(product)) return true;
     least -= product;
@@ -51,3 +59,5 @@ function along(a: number, b: number, x: number): number {
   if (Number.isFinite(x)) return (a * x + 2 * b) * x;
   return a !== 0 ? a * Number.POSITIVE_INFINITY : b * x;
 }
+
+const farthest = (low: number, high: number): number => Math.max(Math.abs(low - MARGIN), Math.abs(high + MARGIN));
