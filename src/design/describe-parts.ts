@@ -1,7 +1,8 @@
 /** Parts as written -> parts of the description: pieces, placement, finishes of faces. */
 
+import { isHollow } from './describe-optics.js';
 import { describeShape } from './describe-shapes.js';
-import type { Against, FaceFinish, PartDescription, PieceDescription, Placement, Turn } from './description.js';
+import type { Against, FaceFinish, PartDescription, PieceDescription, Placement, Repeat, Turn } from './description.js';
 import type { DesignRecord } from './design-fields.js';
 import type { DesignPath } from './fault.js';
 import { checkName, type Named } from './form-record.js';
@@ -52,7 +53,7 @@ export function reportNone(section: 'parts' | 'pumps', reading: Reading): void {
 function describePieces({ path, value }: Named<PartRecord>, reading: Reading): PieceDescription[] | null {
   if (value.union === null) {
     const shape = describeShape(value, path, reading);
-    const minus = value.minus.map((hole, i) => describePiece(hole, [...path, 'minus', i], reading));
+    const minus = value.minus.map((hole, i) => describeHole(hole, [...path, 'minus', i], reading));
     reportRepeatedNames(nameReferences(value.minus), reading);
     if (shape === null || minus.includes(null)) return null;
     const holes = minus.filter((hole) => hole !== null);
@@ -75,15 +76,70 @@ function describePieces({ path, value }: Named<PartRecord>, reading: Reading): P
 const nameReferences = (records: readonly HoleRecord[]): Reference[] =>
   records.map(({ name, path }) => ({ name, path: [...path, 'name'] }));
 
+function describeHole(record: HoleRecord, path: DesignPath, reading: Reading): PieceDescription | null {
+  const hole = describePiece(record, path, reading);
+  if (hole !== null) checkHole(hole, reading);
+  return hole;
+}
+
 function describePiece(record: HoleRecord | PieceRecord, path: DesignPath, reading: Reading): PieceDescription | null {
   const { name, at, turn } = record;
   if (name !== '') checkName(name, [...path, 'name'], null, new Map(), reading);
   const shape = describeShape(record, path, reading);
   const holes = 'minus' in record ? record.minus : [];
   reportRepeatedNames(nameReferences(holes), reading);
-  const minus = holes.map((hole, i) => describePiece(hole, [...path, 'minus', i], reading));
+  const minus = holes.map((hole, i) => describeHole(hole, [...path, 'minus', i], reading));
   if (shape === null || minus.includes(null)) return null;
-  return { name, path, shape, at, turns: turn.map(describeTurn), minus: minus.filter((hole) => hole !== null) };
+  const repeat = describeRepeat(record, path, reading);
+  return {
+    name,
+    path,
+    shape,
+    at,
+    turns: turn.map(describeTurn),
+    minus: minus.filter((hole) => hole !== null),
+    ...(repeat === null ? {} : { repeat }),
+  };
+}
+
+/** Copies are cheap to write and dear to trace: each curved face of each is tested at every step of the light. */
+const MOST_COPIES = 400;
+
+function describeRepeat({ repeat, pitch }: HoleRecord, path: DesignPath, reading: Reading): Repeat | null {
+  if (repeat === null) {
+    if (pitch === null) return null;
+    const problem = 'pitch has no meaning without repeat';
+    reading.report({ code: 'geometry', path: [...path, 'pitch'], problem, expected: '`repeat: [x, y, z]`' });
+    return null;
+  }
+  const total = repeat[0] * repeat[1] * repeat[2];
+  if (total > MOST_COPIES) {
+    const problem = 'these are more copies than can be traced in a sensible time';
+    const expected = `at most ${MOST_COPIES}`;
+    reading.report({ code: 'range', path: [...path, 'repeat'], problem, found: `${total} copies`, expected });
+    return null;
+  }
+  const still = repeat.findIndex((count, axis) => count > 1 && !((pitch?.[axis] ?? 0) > 0));
+  // A pitch that could not be read has been told.
+  if (still >= 0 && !(pitch?.some(Number.isNaN) ?? false)) {
+    const problem = 'the copies would all stand in one place';
+    const expected = `a pitch above 0 mm along ${'xyz'[still]}`;
+    const field = pitch === null ? 'repeat' : 'pitch';
+    reading.report({ code: 'geometry', path: [...path, field], problem, expected });
+  }
+  return { counts: repeat, pitch: pitch ?? [0, 0, 0] };
+}
+
+/** Nothing convex is left over when something hollow is taken away. */
+function checkHole({ shape, path }: PieceDescription, reading: Reading): void {
+  if (!isHollow(shape)) return;
+  reading.report({
+    code: 'geometry',
+    path,
+    problem: 'a hollow shape cannot be taken away',
+    found: shape.kind === 'tube' ? 'a tunnel' : 'a lens with a hollow surface',
+    suggestion: 'take its outer shape away and add what is left of it as a piece of a union',
+  });
 }
 
 const describeTurn = ({ axis, by }: TurnRecord): Turn => ({ axis, angle: by });

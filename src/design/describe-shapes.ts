@@ -1,4 +1,6 @@
 /** Shapes as written -> shapes of the description; checks that each is a convex solid. */
+
+import { describeOptics } from './describe-optics.js';
 import type { ShapeDescription, Vector2 } from './description.js';
 import type { DesignPath } from './fault.js';
 import { checkName } from './form-record.js';
@@ -18,7 +20,8 @@ export function describeShape(fields: ShapeFields, path: DesignPath, reading: Re
   if (cone !== null) return describeCone(cone, [...path, 'cone'], reading);
   if (sphere !== null) return { kind: 'sphere', radius: radiusOf(sphere) };
   if (mesh !== null) return describeMesh(mesh, [...path, 'mesh'], reading);
-  return cap && describeCap(cap, [...path, 'cap'], reading);
+  if (cap !== null) return describeCap(cap, [...path, 'cap'], reading);
+  return describeOptics(fields, path, reading);
 }
 
 const half = (diameter: number | null): number => (diameter === null ? Number.NaN : diameter / 2);

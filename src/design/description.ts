@@ -218,14 +218,25 @@ export interface PieceDescription {
   readonly at: Vector3;
   readonly turns: readonly Turn[];
   readonly minus: readonly PieceDescription[];
+  readonly repeat?: Repeat;
+}
+
+/** The same piece many times, on a grid about its place along the axes of what holds it. */
+export interface Repeat {
+  readonly counts: Vector3;
+  /** Centre to centre, mm. */
+  readonly pitch: Vector3;
 }
 
 /**
- * Convex shapes. The own frame of each has its origin at the centre of its bounding box, z up; a prism keeps
+ * Shapes, convex but for a tube and a lens with a hollow surface. The own frame of each has its origin at the centre of its bounding box, z up; a prism keeps
  * the coordinates of its outline and is centred in z.
  * Faces — box: left(−x) right(+x) front(−y) back(+y) bottom(−z) top(+z); prism: side-1 … side-n (edge i runs from
  * corner i to corner i+1) or the names in `sides`, bottom, top; cylinder, cone: side, bottom, top;
- * sphere: surface; cap: dome, bottom; mesh: its groups. A mesh need not be convex and keeps the coordinates of its file.
+ * sphere: surface; cap: dome, bottom; frustum: the names in `sides`, bottom, top; tube: those of its outer shape, and
+ * those of the sides of its bore after 'inside-'; lens: front(−y) back(+y), and edge (round outline) or left right bottom
+ * top (rectangle); paraboloid: bowl, top; concentrator: wall (round) or left right front back, bottom (its small end), top;
+ * mesh: its groups. A mesh need not be convex and keeps the coordinates of its file.
  */
 export type ShapeDescription =
   | { readonly kind: 'box'; readonly size: Vector3 }
@@ -240,7 +251,57 @@ export type ShapeDescription =
   | { readonly kind: 'sphere'; readonly radius: number }
   /** The part of a sphere of `radius` above a plane: `height` from the flat bottom to the crown, at most 2·radius. */
   | { readonly kind: 'cap'; readonly radius: number; readonly height: number }
-  | { readonly kind: 'mesh'; readonly mesh: ClosedMesh };
+  | { readonly kind: 'mesh'; readonly mesh: ClosedMesh }
+  /** Flat sides between two convex outlines, counter-clockwise as seen from +z, whose edges are parallel one by one. */
+  | {
+      readonly kind: 'frustum';
+      readonly bottom: readonly Vector2[];
+      readonly top: readonly Vector2[];
+      readonly height: number;
+      readonly sides: readonly string[];
+    }
+  /** A shape with a bore of the same height through it. */
+  | { readonly kind: 'tube'; readonly outer: TubeWall; readonly bore: TubeWall }
+  | LensDescription
+  /** r² = 4·focalLength·z, from the vertex at the bottom to the flat top. */
+  | { readonly kind: 'paraboloid'; readonly focalLength: number; readonly height: number }
+  | ConcentratorDescription;
+
+export type TubeWall = Extract<ShapeDescription, { readonly kind: 'frustum' | 'cone' }>;
+
+/** A pane in the plane of x and z whose front looks along −y. */
+export interface LensDescription {
+  readonly kind: 'lens';
+  readonly outline: Outline;
+  /** Between the vertices, mm. */
+  readonly thickness: number;
+  /** Round about the axis; or drawn out along z (upright) or along x (lying), as on a cylinder. */
+  readonly profile: 'round' | 'upright' | 'lying';
+  readonly front: LensSurface;
+  readonly back: LensSurface;
+}
+
+/** Depth behind the vertex at distance ρ from the axis: ρ²/(r + √(r² − (1 + conic)·ρ²)); bulging out of the glass or hollow. */
+export type LensSurface =
+  | { readonly kind: 'flat' }
+  | { readonly kind: 'bulges' | 'hollow'; readonly radius: number; readonly conic: number };
+
+/**
+ * Compound parabolic concentrator along z, small end at the bottom. Its walls are parabolas tilted by the half angle of
+ * acceptance; turned about the axis (round), crossed (square), or drawn out along y over `length` (trough).
+ */
+export interface ConcentratorDescription {
+  readonly kind: 'concentrator';
+  readonly form: 'round' | 'square' | 'trough';
+  readonly halfAngle: number;
+  /** Radius or half width of the small end, mm. */
+  readonly smallEnd: number;
+  readonly height: number;
+  /** Of a trough. */
+  readonly length: number | null;
+  /** Cone frusta that stand for a round wall. */
+  readonly slices: number;
+}
 
 /** Right-handed turn about an axis of the design through the shape's own origin, rad; applied in list order. */
 export interface Turn {

@@ -1,6 +1,12 @@
 /** Names of the faces of shapes and parts, as promised in `ShapeDescription`. */
 import type { PieceDescription, ShapeDescription } from './description.js';
 
+/** Before the names of the walls of a bore. */
+export const INSIDE = 'inside-';
+
+const sidesOf = (shape: ShapeDescription): readonly string[] =>
+  shapeFaces(shape).filter((name) => name !== 'bottom' && name !== 'top');
+
 export function shapeFaces(shape: ShapeDescription): readonly string[] {
   switch (shape.kind) {
     case 'box':
@@ -16,6 +22,18 @@ export function shapeFaces(shape: ShapeDescription): readonly string[] {
       return ['dome', 'bottom'];
     case 'mesh':
       return shape.mesh.groups;
+    case 'frustum':
+      return [...shape.sides, 'bottom', 'top'];
+    case 'tube':
+      return [...shapeFaces(shape.outer), ...sidesOf(shape.bore).map((side) => INSIDE + side)];
+    case 'lens':
+      return shape.outline.kind === 'disc'
+        ? ['edge', 'front', 'back']
+        : ['left', 'right', 'bottom', 'top', 'front', 'back'];
+    case 'paraboloid':
+      return ['bowl', 'top'];
+    case 'concentrator':
+      return [...(shape.form === 'round' ? ['wall'] : ['left', 'right', 'front', 'back']), 'bottom', 'top'];
   }
 }
 

@@ -1,14 +1,8 @@
 /** The skin of a part: holes taken out of its pieces, and of its pieces what lies inside another taken away. */
 import type { PlacedPart } from '../scene/place-parts.js';
 import { type Facet, flipFacet, type Segment, settleFacet, sidesMarked } from './facet.js';
-import {
-  type Contact,
-  type FacetedFace,
-  type FacetedSolid,
-  facetSolid,
-  partFacet,
-  segmentOutside,
-} from './faceted-solid.js';
+import { type FacetedFace, type FacetedSolid, facetSolid } from './facet-solid.js';
+import { type Contact, partFacet, segmentOutside } from './part-facet.js';
 
 export interface SkinFace {
   readonly name: string;
@@ -24,8 +18,12 @@ export interface CarvedPiece {
   readonly holes: readonly FacetedSolid[];
 }
 
-export function facetPieces({ pieces }: PlacedPart): CarvedPiece[] {
-  return pieces.map(({ body, minus }) => ({ body: facetSolid(body), holes: minus.map(facetSolid) }));
+/** @param round facets round a full turn */
+export function facetPieces({ pieces }: PlacedPart, round: number): CarvedPiece[] {
+  return pieces.map(({ body, minus }) => ({
+    body: facetSolid(body, round),
+    holes: minus.map((hole) => facetSolid(hole, round)),
+  }));
 }
 
 /**
@@ -33,11 +31,31 @@ export function facetPieces({ pieces }: PlacedPart): CarvedPiece[] {
  * @param tolerance mm within which a facet lies in a plane
  */
 export function carvePart(pieces: readonly CarvedPiece[], tolerance: number): SkinFace[] {
-  return pieces.flatMap((piece, i) =>
-    carvePiece(piece, tolerance).map((face) =>
-      pieces.reduce((so, other, j) => (i === j ? so : outsidePiece(so, other, j < i, tolerance)), face),
-    ),
-  );
+  const near = neighbours(pieces, tolerance);
+  const faces = new Map<string, { name: string; facets: Facet[]; seams: Segment[] }>();
+  pieces.forEach((piece, i) => {
+    for (const face of carvePiece(piece, tolerance)) {
+      const { name, facets, seams } = near(i).reduce((so, j) => outsidePiece(so, pieces[j], j < i, tolerance), face);
+      const known = faces.get(name) ?? { name, facets: [], seams: [] };
+      faces.set(name, known);
+      for (const facet of facets) known.facets.push(facet);
+      for (const seam of seams) known.seams.push(seam);
+    }
+  });
+  return [...faces.values()];
+}
+
+/** Of each piece the others whose boxes touch its own, in order. */
+function neighbours(pieces: readonly CarvedPiece[], tolerance: number): (i: number) => number[] {
+  return (i) => {
+    const { low, high } = pieces[i].body;
+    return pieces.flatMap(({ body }, j) => {
+      const apart = ([0, 1, 2] as const).some(
+        (axis) => body.low[axis] > high[axis] + tolerance || body.high[axis] < low[axis] - tolerance,
+      );
+      return i === j || apart ? [] : [j];
+    });
+  };
 }
 
 /** Of a part that a later one overlaps: what the later one leaves of it. */

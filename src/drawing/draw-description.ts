@@ -3,11 +3,12 @@ import type { Description, Vector3 } from '../design/description.js';
 import { DesignFaults } from '../design/design-faults.js';
 import type { Drawing, DrawnPlane } from '../record/drawing.js';
 import { designSize } from '../scene/compile-solids.js';
-import { placeParts } from '../scene/place-parts.js';
+import { type PlacedPart, placeParts } from '../scene/place-parts.js';
 import { frameAbout, normalise, snapDirection } from '../scene/vector.js';
 import { carvePart, facetPieces, outsidePart } from './carve-part.js';
 import { drawPart } from './draw-part.js';
 import { drawPumps, outlineEdges } from './draw-pumps.js';
+import { FACETS_ROUND } from './facet-patch.js';
 
 /** Facets this share of the design's size off a plane lie in it. */
 const RELATIVE_TOLERANCE = 1e-9;
@@ -20,7 +21,7 @@ export function drawDescription(description: Description): Drawing {
   const { parts, faults } = placeParts(description.parts);
   if (faults.length > 0) throw new DesignFaults(faults);
   const tolerance = RELATIVE_TOLERANCE * designSize(parts);
-  const pieces = parts.map(facetPieces);
+  const pieces = parts.map((part) => facetPieces(part, facetsRound(part)));
   const exitFace = exitFaceOf(description);
   return {
     parts: parts.map((part, i) => {
@@ -38,6 +39,12 @@ export function drawDescription(description: Description): Drawing {
     paths: [],
     pathsFrom: 0,
   };
+}
+
+/** Parts of many pieces, such as arrays of lenslets, are drawn coarser: each is small, and they add up. */
+function facetsRound({ pieces }: PlacedPart): number {
+  if (pieces.length <= 64) return FACETS_ROUND;
+  return pieces.length <= 512 ? FACETS_ROUND / 2 : FACETS_ROUND / 4;
 }
 
 function exitFaceOf({ exit, detectors }: Description): string | null {

@@ -69,7 +69,7 @@ function boundsOf(part: PlacedPart, faces: readonly SkinFace[]): DrawnPart['boun
   const corners = faces.flatMap(({ facets }) => facets.flatMap((facet) => facet.corners));
   const bodies = partFaces(part).filter(({ hollow }) => !hollow);
   const ranges = AXES.map((axis, i): readonly [number, number] => {
-    const all = bodies.map(({ face }) => patchRange(face.patch, axis));
+    const all = bodies.map(({ patch }) => patchRange(patch, axis));
     const body = [Math.min(...all.map(([low]) => low)), Math.max(...all.map(([, high]) => high))] as const;
     if (corners.length === 0) return body;
     const own = corners.map((corner) => corner[i]);

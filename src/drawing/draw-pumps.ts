@@ -4,7 +4,8 @@ import type { Coordinates, DrawnPump } from '../record/drawing.js';
 import { type BeamFrame, beamFrame } from '../scene/compile-pumps.js';
 import type { PlacedPart } from '../scene/place-parts.js';
 import { add, scale } from '../scene/vector.js';
-import { ringOf } from './facet-patch.js';
+import { FACETS_ROUND } from './facet-patch.js';
+import { evenAngles, ringOf } from './rings.js';
 
 /** More emitters than this are drawn as the outline of their bank. */
 const MOST_EMITTERS = 200;
@@ -83,7 +84,8 @@ function rayEdges(position: readonly number[], frame: BeamFrame): Coordinates {
 export function outlineEdges(outline: Outline, frame: Omit<BeamFrame, 'w'>): Coordinates {
   const { origin, u, v } = frame;
   if (outline.kind === 'rectangle' && Math.max(...outline.size) > 0) return rectangleEdges(frame, [0, 0], outline.size);
-  if (outline.kind === 'disc' && outline.radius > 0) return closed(ringOf(origin, u, v, outline.radius));
+  if (outline.kind === 'disc' && outline.radius > 0)
+    return closed(ringOf(origin, u, v, outline.radius, evenAngles(FACETS_ROUND)));
   return [u, v].flatMap((axis) => [...add(origin, scale(axis, -POINT / 2)), ...add(origin, scale(axis, POINT / 2))]);
 }
 

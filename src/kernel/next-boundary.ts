@@ -53,10 +53,13 @@ export function findBoundary(scene: Scene, graph: RegionGraph, ray: Float64Array
       way = 2 * f + up;
     }
   }
-  const quadrics = scene.quadrics;
+  const near = graph.near;
+  const first = region * scene.quadrics;
+  const last = first + graph.nearCount[region];
   const sides = graph.sides;
   const q = scene.quadric;
-  for (let k = 0; k < quadrics; k++) {
+  for (let i = first; i < last; i++) {
+    const k = near[i];
     const at = k * QUADRIC_STRIDE;
     const side = graph.side[region * sides + k];
     // side·q(p + t d) = a t² + 2 b t + c, not negative at t = 0; wanted is the first t at which it turns negative.

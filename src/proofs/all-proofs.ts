@@ -8,6 +8,7 @@ import { glassPlateProof } from './glass-plate-proof.js';
 import { glassSphereProof } from './glass-sphere-proof.js';
 import { halfSpaceProof } from './half-space-proof.js';
 import { integratingSphereProof } from './integrating-sphere-proof.js';
+import { lensProof } from './lens-proof.js';
 import { lightBoxProof } from './light-box-proof.js';
 import { meanChordProof } from './mean-chord-proof.js';
 import { meshProof } from './mesh-proof.js';
@@ -20,6 +21,7 @@ import { polarisingFilmsProof } from './polarising-films-proof.js';
 import { prismProof } from './prism-proof.js';
 import type { Proof } from './proof.js';
 import { reciprocityProof } from './reciprocity-proof.js';
+import { reflectorProof } from './reflector-proof.js';
 import { scatteringMediumProof } from './scattering-medium-proof.js';
 import { slabProof } from './slab-proof.js';
 import { surfaceScatterProof } from './surface-scatter-proof.js';
@@ -39,6 +41,8 @@ export const allProofs: readonly Proof[] = [
   thinFilmProof,
   polarisingFilmsProof,
   prismProof,
+  lensProof,
+  reflectorProof,
   beamSpreadProof,
   surfaceScatterProof,
   viewFactorProof,

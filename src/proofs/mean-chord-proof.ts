@@ -1,4 +1,5 @@
-import type { ShapeDescription, Vector3 } from '../design/description.js';
+import type { ShapeDescription, Vector2, Vector3 } from '../design/description.js';
+import { shapeFaces } from '../design/shape-faces.js';
 import { figureMean } from './estimate.js';
 import { compare } from './judge-case.js';
 import type { Proof, ProofCase } from './proof.js';
@@ -81,6 +82,79 @@ function boxFaces(size: Vector3): Entry[] {
   });
 }
 
+/** Rings of a paraboloid of revolution with its vertex at the bottom. */
+function bowl(focalLength: number, height: number): Entry[] {
+  const rim = Math.sqrt(4 * focalLength * height);
+  return NODES.map(({ at, weight }) => {
+    const across = rim * at;
+    const slope = across / (2 * focalLength);
+    const stretch = Math.hypot(1, slope);
+    const inward: Vector3 = [-slope / stretch, 0, 1 / stretch];
+    return {
+      at: [across + UNDER_MM * inward[0], 0, across ** 2 / (4 * focalLength) - height / 2 + UNDER_MM * inward[2]],
+      inward,
+      area: weight * rim * 2 * Math.PI * across * stretch,
+    };
+  });
+}
+
+/** One of two equal spherical sides of a lens (equal depths are equal areas), standing for both, and its edge. */
+function biconvex(radius: number, rim: number, edge: number): Entry[] {
+  const depth = radius - Math.sqrt(radius ** 2 - rim ** 2);
+  const side = NODES.map(({ at, weight }): Entry => {
+    const rise = radius - depth * at;
+    const across = Math.sqrt(radius ** 2 - rise ** 2);
+    const inward: Vector3 = [-across / radius, -rise / radius, 0];
+    return {
+      at: [across + UNDER_MM * inward[0], edge / 2 + depth * (1 - at) + UNDER_MM * inward[1], 0],
+      inward,
+      area: weight * 2 * 2 * Math.PI * radius * depth,
+    };
+  });
+  const rings = NODES.map(
+    ({ at, weight }): Entry => ({
+      at: [rim - UNDER_MM, edge * (at - 0.5), 0],
+      inward: [-1, 0, 0],
+      area: weight * 2 * Math.PI * rim * edge,
+    }),
+  );
+  return [...side, ...rings];
+}
+
+/** Faces of a rectangular frustum: a quarter of its ends, a half of its front and left, which stand for their opposites too. */
+function frustum([w0, d0]: Vector2, [w1, d1]: Vector2, height: number): Entry[] {
+  const grid = NODES.flatMap((s) => NODES.map((t) => ({ s: s.at, t: t.at, weight: s.weight * t.weight })));
+  const end = (w: number, d: number, up: number) =>
+    grid.map(
+      ({ s, t, weight }): Entry => ({
+        at: [(w / 2) * s, (d / 2) * t, up * (height / 2 - UNDER_MM)],
+        inward: [0, 0, -up],
+        area: weight * w * d,
+      }),
+    );
+  const wall = (w: number, v: number, lean: number, place: (across: number, out: number, z: number) => Vector3) => {
+    const slant = Math.hypot(height, lean);
+    return grid.map(({ s, t, weight }): Entry => {
+      const width = w + (v - w) * t;
+      const inward = place(0, -height / slant, -lean / slant);
+      const at = place((width / 2) * s, (place === onFront ? d0 : w0) / 2 - lean * t, height * (t - 0.5));
+      return {
+        at: [at[0] + UNDER_MM * inward[0], at[1] + UNDER_MM * inward[1], at[2] + UNDER_MM * inward[2]],
+        inward,
+        area: 2 * weight * width * slant,
+      };
+    });
+  };
+  return [
+    ...end(w0, d0, -1),
+    ...end(w1, d1, 1),
+    ...wall(w0, w1, (d0 - d1) / 2, onFront),
+    ...wall(d0, d1, (w0 - w1) / 2, onLeft),
+  ];
+}
+const onFront = (across: number, out: number, z: number): Vector3 => [across, -out, z];
+const onLeft = (across: number, out: number, z: number): Vector3 => [-out, across, z];
+
 const BODIES: readonly Body[] = [
   {
     name: 'box 2 × 3 × 5',
@@ -117,6 +191,50 @@ const BODIES: readonly Body[] = [
     volume: (Math.PI * 1.5 ** 2 * (6 - 1.5)) / 3,
     surface: Math.PI * (3.75 + 2 * 2 * 1.5),
   },
+  {
+    name: 'paraboloid of focal length 1, height 2',
+    shape: { kind: 'paraboloid', focalLength: 1, height: 2 },
+    entries: [...disc(Math.sqrt(8), 1, -1), ...bowl(1, 2)],
+    volume: 8 * Math.PI,
+    surface: 8 * Math.PI + ((Math.PI * Math.sqrt(8)) / 24) * (24 ** 1.5 - 8 ** 1.5),
+  },
+  {
+    name: 'biconvex lens, radii 5, rim 3, edge 1',
+    shape: {
+      kind: 'lens',
+      outline: { kind: 'disc', radius: 3 },
+      thickness: 3,
+      profile: 'round',
+      front: { kind: 'bulges', radius: 5, conic: 0 },
+      back: { kind: 'bulges', radius: 5, conic: 0 },
+    },
+    entries: biconvex(5, 3, 1),
+    volume: Math.PI * (9 + 28 / 3),
+    surface: Math.PI * (6 + 20),
+  },
+  {
+    name: 'rectangular frustum, 4 × 2 to 2 × 1, height 3',
+    shape: {
+      kind: 'frustum',
+      bottom: [
+        [-2, -1],
+        [2, -1],
+        [2, 1],
+        [-2, 1],
+      ],
+      top: [
+        [-1, -0.5],
+        [1, -0.5],
+        [1, 0.5],
+        [-1, 0.5],
+      ],
+      height: 3,
+      sides: ['front', 'right', 'back', 'left'],
+    },
+    entries: frustum([4, 2], [2, 1], 3),
+    volume: 14,
+    surface: 10 + 6 * Math.hypot(3, 0.5) + 3 * Math.hypot(3, 1),
+  },
 ];
 
 /** Allowed for twelve nodes a direction; at 8·10⁵ histories nothing of it is seen above 3·10⁻⁴. */
@@ -139,7 +257,7 @@ export const meanChordProof: Proof = {
           pumps: entries.map(({ at, inward, area }, index) =>
             pump(at, inward, lambertianDisc(1e-9), { name: `entry-${index}`, power: area }),
           ),
-          exit: shape.kind === 'sphere' ? 'body.surface' : 'body.bottom',
+          exit: `body.${shapeFaces(shape)[0]}`,
         }),
       );
       const expected = (4 * volume) / surface;

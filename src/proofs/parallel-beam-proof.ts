@@ -1,4 +1,5 @@
-import type { BeamDescription, PieceDescription, ShapeDescription } from '../design/description.js';
+import type { BeamDescription, PieceDescription, ShapeDescription, Vector2 } from '../design/description.js';
+import { pieceFaces, shapeFaces } from '../design/shape-faces.js';
 import { fateShare } from './estimate.js';
 import { compare } from './judge-case.js';
 import type { Proof, ProofCase, ProofContext } from './proof.js';
@@ -10,6 +11,27 @@ import { traceCell } from './trace-cell.js';
 /** Absorption of the bodies, 1/mm. */
 const MU = 0.5;
 const survives = (chord: number): number => Math.exp(-MU * chord);
+
+/** Lens axis along the beam. */
+const alongBeam = [{ axis: 'x' as const, angle: Math.PI / 2 }];
+
+/** Depth of a conicoid behind its vertex. */
+const sag = (radius: number, conic: number, across: number): number =>
+  across ** 2 / (radius + Math.sqrt(radius ** 2 - (1 + conic) * across ** 2));
+
+const squareOutline = (side: number): Vector2[] => [
+  [-side / 2, -side / 2],
+  [side / 2, -side / 2],
+  [side / 2, side / 2],
+  [-side / 2, side / 2],
+];
+const column = (side: number, height: number) => ({
+  kind: 'frustum' as const,
+  bottom: squareOutline(side),
+  top: squareOutline(side),
+  height,
+  sides: ['front', 'right', 'back', 'left'],
+});
 
 interface Beam {
   readonly label: string;
@@ -35,7 +57,7 @@ const BEAMS: readonly Beam[] = [
   {
     label: 'sphere with a hollow of radius 2',
     against: '∫e^(−µ·chord) over the disc',
-    body: [piece({ kind: 'sphere', radius: 3 }, { minus: [piece({ kind: 'sphere', radius: 2 })] })],
+    body: [piece({ kind: 'sphere', radius: 3 }, { minus: [piece({ kind: 'sphere', radius: 2 }, { name: 'hollow' })] })],
     fills: disc(3),
     // Outside the hollow's shadow the chord is 2√(9 − ρ²); inside it is shorter by 2√(4 − ρ²). ρ² = s: two smooth pieces.
     transmitted:
@@ -113,6 +135,81 @@ const BEAMS: readonly Beam[] = [
     fills: square(2),
     transmitted: 0.75 * survives(2) + 0.25 * survives(4),
   },
+  {
+    label: 'paraboloid along its axis',
+    against: '(1 − e^(−µh))/(µh)',
+    body: { kind: 'paraboloid', focalLength: 1, height: 2 },
+    fills: disc(Math.sqrt(8)),
+    transmitted: -Math.expm1(-MU * 2) / (MU * 2),
+  },
+  {
+    label: 'biconcave lens',
+    against: 'chord t + 2 sag(ρ)',
+    body: [
+      piece(
+        {
+          kind: 'lens',
+          outline: disc(3),
+          thickness: 1,
+          profile: 'round',
+          front: { kind: 'hollow', radius: 5, conic: 0 },
+          back: { kind: 'hollow', radius: 5, conic: 0 },
+        },
+        { turns: alongBeam },
+      ),
+    ],
+    fills: disc(3),
+    transmitted: integrate((rho) => ((2 * rho) / 9) * survives(1 + 2 * sag(5, 0, rho)), 0, 3),
+  },
+  {
+    label: 'meniscus of a hyperboloid and an ellipsoid',
+    against: 'chord t − sag₁(ρ) + sag₂(ρ)',
+    body: [
+      piece(
+        {
+          kind: 'lens',
+          outline: disc(3),
+          thickness: 2,
+          profile: 'round',
+          front: { kind: 'bulges', radius: 4, conic: -3 },
+          back: { kind: 'hollow', radius: 7, conic: 0.5 },
+        },
+        { turns: alongBeam },
+      ),
+    ],
+    fills: disc(3),
+    transmitted: integrate((rho) => ((2 * rho) / 9) * survives(2 - sag(4, -3, rho) + sag(7, 0.5, rho)), 0, 3),
+  },
+  {
+    label: 'four square lenslets on a plate',
+    against: 'chord t − sag(ρ) over one of them',
+    body: [
+      {
+        ...piece(
+          {
+            kind: 'lens',
+            outline: square(2),
+            thickness: 1,
+            profile: 'round',
+            front: { kind: 'bulges', radius: 3, conic: 0 },
+            back: { kind: 'flat' },
+          },
+          { name: 'lenslets', turns: alongBeam },
+        ),
+        repeat: { counts: [2, 2, 1], pitch: [2, 2, 0] },
+      },
+      piece({ kind: 'box', size: [4, 4, 1] }, { name: 'plate', at: [0, 0, 1] }),
+    ],
+    fills: square(4),
+    transmitted: integrate((a) => integrate((b) => survives(2 - sag(3, 0, Math.hypot(a, b))), 0, 1), 0, 1),
+  },
+  {
+    label: 'square tunnel along its axis',
+    against: '(b² + (a² − b²)e^(−µh))/a²',
+    body: { kind: 'tube', outer: column(3, 3), bore: column(2, 3) },
+    fills: square(3),
+    transmitted: (4 + 5 * survives(3)) / 9,
+  },
 ];
 
 export const parallelBeamProof: Proof = {
@@ -152,9 +249,5 @@ async function throughBody(
 }
 
 function exitOf(body: Beam['body']): string {
-  const first = 'kind' in body ? body : body[0].shape;
-  if (!('kind' in body) && body[0].name !== null) return 'body.high.top';
-  if (first.kind === 'sphere') return 'body.surface';
-  if (first.kind === 'cap') return 'body.dome';
-  return first.kind === 'cylinder' ? 'body.side' : 'body.top';
+  return `body.${'kind' in body ? shapeFaces(body)[0] : pieceFaces(body[0])[0]}`;
 }

@@ -3,7 +3,9 @@ import type { Vector3 } from '../design/description.js';
 import type { BeamFrame } from './compile-pumps.js';
 import type { SceneFace } from './compile-solids.js';
 import type { FacePatch } from './convex-solid.js';
+import { dishMeetings, roots } from './dish.js';
 import { facetsMeetings } from './mesh/facet-patch.js';
+import { revolvedMeetings } from './revolved.js';
 import { add, cross, dot, normalise, scale, subtract } from './vector.js';
 
 /** Nearer than this the beam starts on the face and leaves it behind, mm. */
@@ -25,13 +27,13 @@ export function aimedFace({ origin, w }: BeamFrame, faces: readonly SceneFace[])
   return found;
 }
 
-interface Meeting {
+export interface Meeting {
   readonly distance: number;
   readonly normal: Vector3;
 }
 
-/** Where a ray meets a patch, before or behind its start. */
-function meetings(patch: FacePatch, origin: Vector3, direction: Vector3): Meeting[] {
+/** Where a ray meets a patch, before or behind its start; normals look out of the patch's solid. */
+export function meetings(patch: FacePatch, origin: Vector3, direction: Vector3): Meeting[] {
   switch (patch.kind) {
     case 'polygon':
     case 'disc': {
@@ -40,24 +42,13 @@ function meetings(patch: FacePatch, origin: Vector3, direction: Vector3): Meetin
       const point = add(origin, scale(direction, distance));
       return Number.isFinite(distance) && onFlat(patch, point) ? [{ distance, normal: patch.normal }] : [];
     }
-    case 'side': {
-      const { base, axis, bottomRadius, topRadius, height } = patch;
-      const slope = (topRadius - bottomRadius) / height;
-      const from = subtract(origin, base);
-      // |p|² − (p·a)² = (r₀ + slope p·a)² along p = from + t d.
-      const z0 = dot(from, axis);
-      const dz = dot(direction, axis);
-      const a = dot(direction, direction) - (1 + slope * slope) * dz * dz;
-      const b = dot(from, direction) - (1 + slope * slope) * z0 * dz - slope * bottomRadius * dz;
-      const c = dot(from, from) - (1 + slope * slope) * z0 * z0 - 2 * slope * bottomRadius * z0 - bottomRadius ** 2;
-      return roots(a, b, c).flatMap((distance) => {
-        const p = add(from, scale(direction, distance));
-        const z = dot(p, axis);
-        if (z < 0 || z > height) return [];
-        const radial = normalise(subtract(p, scale(axis, z)));
-        return [{ distance, normal: normalise(subtract(radial, scale(axis, slope))) }];
-      });
-    }
+    case 'side':
+    case 'profile':
+      return revolvedMeetings(patch, origin, direction);
+    case 'dish':
+      return dishMeetings(patch, origin, direction);
+    case 'group':
+      return patch.members.flatMap((member) => meetings(member, origin, direction));
     case 'zone': {
       const from = subtract(origin, patch.centre);
       const c = dot(from, from) - patch.radius ** 2;
@@ -69,15 +60,6 @@ function meetings(patch: FacePatch, origin: Vector3, direction: Vector3): Meetin
     case 'facets':
       return facetsMeetings(patch, origin, direction);
   }
-}
-
-/** Real roots of a t² + 2 b t + c. */
-function roots(a: number, b: number, c: number): number[] {
-  if (Math.abs(a) < 1e-12) return b === 0 ? [] : [-c / (2 * b)];
-  const discriminant = b * b - a * c;
-  if (discriminant < 0) return [];
-  const root = Math.sqrt(discriminant);
-  return [(-b - root) / a, (-b + root) / a];
 }
 
 function onFlat(patch: Extract<FacePatch, { kind: 'polygon' | 'disc' }>, point: Vector3): boolean {

@@ -3,7 +3,9 @@ import type { Vector3 } from '../design/description.js';
 import type { RecorderPlan } from './compile-recorders.js';
 import type { SceneFace } from './compile-solids.js';
 import type { FacePatch } from './convex-solid.js';
+import { lineOfSight } from './line-of-sight.js';
 import type { RegionGraph } from './region-graph.js';
+import { isRevolved, revolvedPoint } from './revolved.js';
 import { add, normalise, scale, subtract } from './vector.js';
 
 /** Step off the face to look at either side, mm. */
@@ -24,6 +26,7 @@ export function bareShare(plan: RecorderPlan, face: SceneFace, graph: RegionGrap
   const spots = spotsOf(plan, face.patch);
   return (u, v) => {
     const all = spots(u, v);
+    if (all.length === 0) return 0;
     const bare = all.filter(({ point, normal }) => {
       const out = face.hollow ? scale(normal, -1) : normal;
       return ownerAt(point, out, -STEP) === face.owner && ownerAt(point, out, STEP) !== face.owner;
@@ -35,16 +38,10 @@ export function bareShare(plan: RecorderPlan, face: SceneFace, graph: RegionGrap
 /** Points of the patch that the map shows at (u, v), at least one; two on a dome beyond its equator. */
 function spotsOf(plan: RecorderPlan, patch: FacePatch): (u: number, v: number) => readonly Spot[] {
   const [[uLow, uHigh], [vLow]] = plan.extent;
-  if (patch.kind === 'side') {
-    const { base, axis, bottomRadius, topRadius, height } = patch;
-    return (u, v) => {
-      const angle = 2 * Math.PI * ((u - uLow) / (uHigh - uLow) - 0.5);
-      const radial = add(scale(patch.u, Math.cos(angle)), scale(patch.v, Math.sin(angle)));
-      const radius = bottomRadius + ((topRadius - bottomRadius) * v) / height;
-      const point = add(base, add(scale(axis, v), scale(radial, radius)));
-      return [{ point, normal: normalise(add(scale(radial, height), scale(axis, bottomRadius - topRadius))) }];
-    };
+  if (isRevolved(patch)) {
+    return (u, v) => [revolvedPoint(patch, v, 2 * Math.PI * ((u - uLow) / (uHigh - uLow) - 0.5))];
   }
+  if (patch.kind === 'dish' || patch.kind === 'group') return lineOfSight(plan, patch);
   if (patch.kind === 'zone') {
     const { centre, radius, axis, from } = patch;
     return (u, v) => {

@@ -11,8 +11,9 @@ import { scattererFaults } from './check-scatterers.js';
 import { strengthFaults, voxelFaults } from './check-strength.js';
 import { surroundingFaults } from './check-surroundings.js';
 import { type CompiledScene, compileScene } from './compile-scene.js';
-import { designSize, type SceneFace } from './compile-solids.js';
-import { patchArea, patchCentre, patchNormal, patchPoint } from './face-patch.js';
+import { designSize, type FaceMember, type SceneFace } from './compile-solids.js';
+import type { FacePatch } from './convex-solid.js';
+import { patchArea, patchCentre, patchNormal, patchPoint, pickByArea } from './face-patch.js';
 import { INTERFACE, RegionGraph } from './region-graph.js';
 import { add, scale } from './vector.js';
 
@@ -25,7 +26,7 @@ export interface SceneCheck {
 export interface FaceReport {
   readonly part: string;
   readonly face: string;
-  readonly shape: 'flat' | 'cylinder' | 'cone' | 'sphere' | 'facets';
+  readonly shape: PatchShape;
   readonly centre: Vector3;
   readonly normal: Vector3;
   readonly areaMm2: number;
@@ -35,6 +36,8 @@ export interface FaceReport {
   /** Share of the area where the face is the boundary of its part: 0 when it is buried or cut away. */
   readonly exposed: number;
 }
+
+type PatchShape = 'flat' | 'cylinder' | 'cone' | 'sphere' | 'conic' | 'profile' | 'facets';
 
 const SAMPLES = 256;
 /** Step off the face to look at either side, mm. */
@@ -94,13 +97,18 @@ class FaceLook {
       // R2 sequence (Roberts 2018): even cover of the unit square.
       const s = (0.5 + i * 0.7548776662466927) % 1;
       const t = (0.5 + i * 0.5698402909980532) % 1;
-      const { point, normal } = patchPoint(face.patch, s, t);
+      const { member, rest } = pickByArea(
+        face.members.map(({ patch }) => patch),
+        s,
+      );
+      const { patch, surface } = face.members[member];
+      const { point, normal } = patchPoint(patch, rest, t);
       const out = face.hollow ? scale(normal, -1) : normal;
       if (this.#ownerAt(point, out, -STEP) !== face.owner) continue;
       const beyond = this.#ownerAt(point, out, STEP);
       if (beyond === face.owner) continue;
       exposed++;
-      const [left, entered] = this.#facesAt(face, point, out);
+      const [left, entered] = this.#facesAt(surface, point, out);
       touches.add(entered?.reference ?? this.#names[beyond]);
       for (const partner of [left, entered]) {
         if (partner === undefined || partner === face) continue;
@@ -122,7 +130,7 @@ class FaceLook {
   }
 
   /** Faces by which light leaves and enters at a spot of a face: what is traced there is asked, not worked out again. */
-  #facesAt({ surface }: SceneFace, point: Vector3, out: Vector3): readonly (SceneFace | undefined)[] {
+  #facesAt(surface: FaceMember['surface'], point: Vector3, out: Vector3): readonly (SceneFace | undefined)[] {
     const graph = this.#graph;
     const region = this.#regionAt(point, out, -STEP);
     let way = 2 * graph.families;
@@ -151,16 +159,7 @@ function report(
   return {
     part,
     face: face.reference.slice(part.length + 1),
-    shape:
-      patch.kind === 'facets' && !patch.flat
-        ? 'facets'
-        : patch.kind === 'zone'
-          ? 'sphere'
-          : patch.kind === 'side'
-            ? patch.bottomRadius === patch.topRadius
-              ? 'cylinder'
-              : 'cone'
-            : 'flat',
+    shape: shapeOf(patch),
     centre: patchCentre(patch),
     normal: face.hollow ? scale(normal, -1) : normal,
     areaMm2: patchArea(patch),
@@ -168,6 +167,26 @@ function report(
     touches,
     exposed,
   };
+}
+
+function shapeOf(patch: FacePatch): PatchShape {
+  switch (patch.kind) {
+    case 'polygon':
+    case 'disc':
+      return 'flat';
+    case 'zone':
+      return 'sphere';
+    case 'side':
+      return patch.bottomRadius === patch.topRadius ? 'cylinder' : 'cone';
+    case 'profile':
+      return 'profile';
+    case 'dish':
+      return patch.conic !== 0 ? 'conic' : patch.ruled === null ? 'sphere' : 'cylinder';
+    case 'facets':
+      return patch.flat ? 'flat' : 'facets';
+    case 'group':
+      return shapeOf(patch.members[0]);
+  }
 }
 
 function finishFaults(

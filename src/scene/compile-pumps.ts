@@ -124,7 +124,7 @@ function aimedFrame(aim: Aim, parts: readonly PlacedPart[]): BeamFrame {
   }
   const face = findFace(parts, aim.face);
   if (face === null) throw new Error(`face ${aim.face} does not exist`);
-  const spot = patchAim(face.face.patch);
+  const spot = patchAim(face.patch);
   const inward = scale(faceNormal(face) ?? scale(spot.normal, face.hollow ? -1 : 1), -1);
   const target = add(spot.point, add(scale(spot.u, aim.shift[0]), scale(spot.v, aim.shift[1])));
   const tilted = turnAbout(turnAbout(inward, spot.u, aim.tilt[0]), spot.v, aim.tilt[1]);

@@ -6,6 +6,7 @@ import type { CompiledSolids, SceneFace } from './compile-solids.js';
 import type { FacePatch } from './convex-solid.js';
 import { patchCentre, patchNormal, patchRange } from './face-patch.js';
 import { type PlacedPart, partFaces } from './place-parts.js';
+import { girthOf, heightOf, isRevolved } from './revolved.js';
 import { add, dot, frameAbout, normalise, scale, snapDirection, subtract } from './vector.js';
 
 export interface RecorderPlan {
@@ -100,19 +101,20 @@ type MapGeometry = Pick<
 function faceMap(face: SceneFace, pixels: Vector2 | null): MapGeometry {
   const { patch } = face;
   const base = { face, outline: null, plane: null };
-  if (patch.kind === 'side') {
-    const girth = Math.PI * (patch.bottomRadius + patch.topRadius);
+  if (isRevolved(patch)) {
+    const girth = girthOf(patch);
+    const height = heightOf(patch);
     return {
       ...base,
       wrapped: true,
-      cells: cellCounts(girth, patch.height, pixels),
+      cells: cellCounts(girth, height, pixels),
       origin: patch.base,
       u: patch.u,
       v: patch.v,
       normal: patch.axis,
       extent: [
         [-girth / 2, girth / 2],
-        [0, patch.height],
+        [0, height],
       ],
     };
   }
@@ -189,7 +191,7 @@ export function planVoxels(description: Description, parts: readonly PlacedPart[
     ] as Vector3[]
   ).map((axis) => {
     const bodies = within.flatMap((part) => partFaces(part).filter(({ hollow }) => !hollow));
-    const all = bodies.map(({ face }) => patchRange(face.patch, axis));
+    const all = bodies.map(({ patch }) => patchRange(patch, axis));
     return [Math.min(...all.map(([a]) => a)), Math.max(...all.map(([, b]) => b))] as const;
   });
   const size = ranges.map(([a, b]) => b - a) as unknown as Vector3;

@@ -1,7 +1,7 @@
 /** Parts -> surfaces, convex primitives, pieces and faces as flat arrays. */
 import type { Description, Vector3 } from '../design/description.js';
 import type { Fault } from '../design/fault.js';
-import type { FacePatch } from './convex-solid.js';
+import type { ConvexSolid, FacePatch } from './convex-solid.js';
 import { patchRange } from './face-patch.js';
 import type { PlacedMesh } from './mesh/placed-mesh.js';
 import { findFace, type NamedSolid, type PlacedPart, partFaces } from './place-parts.js';
@@ -18,6 +18,12 @@ export interface SceneFace {
   readonly patch: FacePatch;
   /** The patch's normal looks into the material: the wall of a hole. */
   readonly hollow: boolean;
+  /** The surfaces it lies on, each with its own patch; usually one. */
+  readonly members: readonly FaceMember[];
+}
+
+export interface FaceMember {
+  readonly patch: FacePatch;
   readonly surface: PlaneHandle | CurveHandle | MeshHandle;
 }
 
@@ -66,35 +72,48 @@ export function compileSolids(description: Description, parts: readonly PlacedPa
   // Owner 0, the surroundings, has no pieces.
   const ownerPieceStart = [0, 0];
 
-  const addPrimitive = (part: PlacedPart, owner: number, named: NamedSolid, hollow: boolean): number => {
-    const sides: SurfaceSide[] = [];
-    const own: number[] = [];
-    const firstFace = faces.length;
-    for (const face of named.solid.faces) {
-      if (face.surface.kind === 'mesh') {
-        const { mesh, group } = face.surface;
-        if (group === 0) meshes.push(mesh);
-        const reference = `${part.description.name}.${named.prefix}${face.name}`;
-        const surface = { kind: 'mesh', index: meshes.length - 1, group } as const;
-        faces.push({ index: faces.length, reference, part, owner, patch: face.patch, hollow, surface });
-        continue;
-      }
-      const side = table.add(face.surface);
-      const reference = `${part.description.name}.${named.prefix}${face.name}`;
-      faces.push({ index: faces.length, reference, part, owner, patch: face.patch, hollow, surface: side.handle });
-      sides.push(side);
-      own.push(faces.length - 1);
+  const members: FaceMember[][] = [];
+  const addPart = (part: PlacedPart, owner: number) => {
+    const own = new Map<string, number>();
+    for (const { name, patch, hollow } of partFaces(part)) {
+      own.set(name, faces.length);
+      members.push([]);
+      const reference = `${part.description.name}.${name}`;
+      faces.push({ index: faces.length, reference, part, owner, patch, hollow, members: members[faces.length] });
     }
-    // A mesh is one surface, whatever the number of its faces.
-    if (sides.length === 0) primitives.push({ mesh: meshes.length - 1, face: firstFace });
-    else primitives.push({ sides, faces: own });
-    return primitives.length - 1;
+    // A hole in a part of several pieces is one primitive, met in each of them.
+    const known = new Map<ConvexSolid, number>();
+    return ({ prefix, solid }: NamedSolid): number => {
+      const before = known.get(solid);
+      if (before !== undefined) return before;
+      const sides: SurfaceSide[] = [];
+      const numbers = solid.faces.map(({ name, surface, patch }) => {
+        const face = own.get(prefix + name) ?? -1;
+        let handle: FaceMember['surface'];
+        if (surface.kind === 'mesh') {
+          if (surface.group === 0) meshes.push(surface.mesh);
+          handle = { kind: 'mesh', index: meshes.length - 1, group: surface.group };
+        } else {
+          const side = table.add(surface);
+          sides.push(side);
+          handle = side.handle;
+        }
+        if (patch !== null) members[face].push({ patch, surface: handle });
+        return face;
+      });
+      // A mesh is one surface, whatever the number of its faces, which are numbered in the order of its groups.
+      if (sides.length === 0) primitives.push({ mesh: meshes.length - 1, face: numbers[0] });
+      else primitives.push({ sides, faces: numbers });
+      known.set(solid, primitives.length - 1);
+      return primitives.length - 1;
+    };
   };
 
   parts.forEach((part, i) => {
+    const addPrimitive = addPart(part, i + 1);
     for (const { body, minus } of part.pieces) {
-      pieceMember.push(addPrimitive(part, i + 1, body, false));
-      for (const hole of minus) pieceMember.push(addPrimitive(part, i + 1, hole, true));
+      pieceMember.push(addPrimitive(body));
+      for (const hole of minus) pieceMember.push(addPrimitive(hole));
       pieceStart.push(pieceMember.length);
     }
     ownerPieceStart.push(pieceStart.length - 1);
@@ -159,7 +178,7 @@ export function designSize(parts: readonly PlacedPart[]): number {
     [0, 0, 1],
   ];
   const ranges = axes.map((axis) => {
-    const all = parts.flatMap((part) => partFaces(part).map(({ face }) => patchRange(face.patch, axis)));
+    const all = parts.flatMap((part) => partFaces(part).map(({ patch }) => patchRange(patch, axis)));
     return all.length === 0 ? 1 : Math.max(...all.map(([, b]) => b)) - Math.min(...all.map(([a]) => a));
   });
   return Math.max(...ranges);

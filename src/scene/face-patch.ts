@@ -1,7 +1,9 @@
 /** Areas, centres, bounds and sample points of face patches. */
 import type { Vector3 } from '../design/description.js';
 import type { FacePatch } from './convex-solid.js';
+import { dishArea, dishMiddle, dishRange, dishSample } from './dish.js';
 import { facetsAim, facetsArea, facetsPoint, facetsRange } from './mesh/facet-patch.js';
+import { girthOf, heightOf, isRevolved, revolvedArea, revolvedSample, stationsOf } from './revolved.js';
 import { add, cross, dot, length, normalise, scale, subtract } from './vector.js';
 
 /** Area of the whole patch, mm². */
@@ -12,16 +14,17 @@ export function patchArea(patch: FacePatch): number {
     case 'disc':
       return Math.PI * patch.radius ** 2;
     case 'side':
-      return Math.PI * (patch.bottomRadius + patch.topRadius) * slantHeight(patch);
+    case 'profile':
+      return revolvedArea(patch);
     case 'zone':
       return 2 * Math.PI * patch.radius * (patch.radius - patch.from);
+    case 'dish':
+      return dishArea(patch);
+    case 'group':
+      return patch.members.reduce((sum, member) => sum + patchArea(member), 0);
     case 'facets':
       return facetsArea(patch);
   }
-}
-
-function slantHeight(patch: Extract<FacePatch, { kind: 'side' }>): number {
-  return Math.hypot(patch.height, patch.topRadius - patch.bottomRadius);
 }
 
 function polygonVectorArea(corners: readonly Vector3[]): Vector3 {
@@ -32,7 +35,7 @@ function polygonVectorArea(corners: readonly Vector3[]): Vector3 {
   return scale(sum, 0.5);
 }
 
-/** Centre of a flat patch (of area), of the axis of a side, crown of a dome, centre of a sphere. */
+/** Centre of a flat patch (of area), of the axis of a side, crown of a dome or lens, centre of a sphere; of a group their mean. */
 export function patchCentre(patch: FacePatch): Vector3 {
   switch (patch.kind) {
     case 'polygon':
@@ -41,7 +44,18 @@ export function patchCentre(patch: FacePatch): Vector3 {
     case 'facets':
       return patch.centre;
     case 'side':
-      return add(patch.base, scale(patch.axis, patch.height / 2));
+    case 'profile':
+      return add(patch.base, scale(patch.axis, heightOf(patch) / 2));
+    case 'dish':
+      return dishMiddle(patch);
+    case 'group':
+      return scale(
+        patch.members.reduce(
+          (sum: Vector3, member) => add(sum, scale(patchCentre(member), patchArea(member))),
+          [0, 0, 0],
+        ),
+        1 / patchArea(patch),
+      );
     case 'zone':
       return patch.from <= -patch.radius ? patch.centre : add(patch.centre, scale(patch.axis, patch.radius));
   }
@@ -61,7 +75,7 @@ function polygonCentre(corners: readonly Vector3[]): Vector3 {
 
 /** Outward normal at the centre; for sides and whole spheres their axis, which is what their angular maps refer to. */
 export function patchNormal(patch: FacePatch): Vector3 {
-  return patch.kind === 'polygon' || patch.kind === 'disc' || patch.kind === 'facets' ? patch.normal : patch.axis;
+  return 'normal' in patch ? patch.normal : patch.axis;
 }
 
 export interface PatchPoint {
@@ -79,7 +93,14 @@ export function patchPoint(patch: FacePatch, s: number, t: number): PatchPoint {
       return { point: ring(patch.centre, patch.u, patch.v, r, t), normal: patch.normal };
     }
     case 'side':
-      return sidePoint(patch, s, t);
+    case 'profile':
+      return revolvedSample(patch, s, t);
+    case 'dish':
+      return dishSample(patch, s, t);
+    case 'group': {
+      const { member, rest } = pickByArea(patch.members, s);
+      return patchPoint(patch.members[member], rest, t);
+    }
     case 'zone': {
       const along = patch.from + (patch.radius - patch.from) * s;
       const r = Math.sqrt(Math.max(0, patch.radius ** 2 - along ** 2));
@@ -91,15 +112,13 @@ export function patchPoint(patch: FacePatch, s: number, t: number): PatchPoint {
   }
 }
 
-function sidePoint(patch: Extract<FacePatch, { kind: 'side' }>, s: number, t: number): PatchPoint {
-  const { bottomRadius: r0, topRadius: r1, height } = patch;
-  // Inverse of the area below height fraction h: r0 h + (r1 − r0) h²/2.
-  const total = (r0 + r1) / 2;
-  const h = Math.abs(r1 - r0) < 1e-12 * total ? s : (Math.sqrt(r0 * r0 + 2 * (r1 - r0) * total * s) - r0) / (r1 - r0);
-  const angle = 2 * Math.PI * t;
-  const radial = add(scale(patch.u, Math.cos(angle)), scale(patch.v, Math.sin(angle)));
-  const point = add(add(patch.base, scale(patch.axis, h * height)), scale(radial, r0 + (r1 - r0) * h));
-  return { point, normal: normalise(add(scale(radial, height), scale(patch.axis, r0 - r1))) };
+/** The patch that holds the share s of the area of all, and the share of its own area below that. */
+export function pickByArea(patches: readonly FacePatch[], s: number): { member: number; rest: number } {
+  const areas = patches.map(patchArea);
+  let rest = s * areas.reduce((a, b) => a + b, 0);
+  let member = 0;
+  while (member < areas.length - 1 && rest > areas[member]) rest -= areas[member++];
+  return { member, rest: Math.min(1, rest / areas[member]) };
 }
 
 function ring(centre: Vector3, u: Vector3, v: Vector3, radius: number, turn: number): Vector3 {
@@ -130,11 +149,18 @@ export function patchRange(patch: FacePatch, direction: Vector3): readonly [numb
     }
     case 'disc':
       return discRange(patch.centre, patch.radius, patch.normal, direction);
-    case 'side': {
-      const bottom = discRange(patch.base, patch.bottomRadius, patch.axis, direction);
-      const topCentre = add(patch.base, scale(patch.axis, patch.height));
-      const top = discRange(topCentre, patch.topRadius, patch.axis, direction);
-      return [Math.min(bottom[0], top[0]), Math.max(bottom[1], top[1])];
+    case 'side':
+    case 'profile': {
+      const rings = stationsOf(patch).map(([height, radius]) =>
+        discRange(add(patch.base, scale(patch.axis, height)), radius, patch.axis, direction),
+      );
+      return [Math.min(...rings.map(([low]) => low)), Math.max(...rings.map(([, high]) => high))];
+    }
+    case 'dish':
+      return dishRange(patch, direction);
+    case 'group': {
+      const all = patch.members.map((member) => patchRange(member, direction));
+      return [Math.min(...all.map(([low]) => low)), Math.max(...all.map(([, high]) => high))];
     }
     case 'zone': {
       // Rim of the zone, and the sphere itself where its own extreme point belongs to the zone.
@@ -164,8 +190,8 @@ function discRange(centre: Vector3, radius: number, normal: Vector3, direction: 
 export function patchAim(patch: FacePatch): { point: Vector3; normal: Vector3; u: Vector3; v: Vector3 } {
   if (patch.kind === 'facets') return facetsAim(patch);
   const front = scale(patch.v, -1);
-  if (patch.kind === 'side') {
-    const point = add(patchCentre(patch), scale(front, (patch.bottomRadius + patch.topRadius) / 2));
+  if (isRevolved(patch)) {
+    const point = add(patchCentre(patch), scale(front, girthOf(patch) / (2 * Math.PI)));
     return { point, normal: front, u: patch.u, v: patch.axis };
   }
   if (patch.kind === 'zone' && patch.from <= -patch.radius) {

@@ -4,16 +4,27 @@ import { bareShare } from './bare-face.js';
 import type { RecorderPlan } from './compile-recorders.js';
 import type { CompiledScene } from './compile-scene.js';
 import type { FacePatch } from './convex-solid.js';
+import { lineOfSight } from './line-of-sight.js';
+import type { FacetPatch } from './mesh/facet-patch.js';
 import { facetsMeasure } from './mesh/facets-measure.js';
 import { RegionGraph } from './region-graph.js';
+import { revolvedStretch } from './revolved.js';
 import { add, dot, scale, subtract } from './vector.js';
 
 const SAMPLES = 8;
 
 /** Area, mm², of each cell of a recorder's map: of a face, what of it bounds its part. */
 export function mapMeasure(plan: RecorderPlan, graph: RegionGraph): Float64Array {
-  if (plan.face?.patch.kind === 'facets') return facetsMeasure(plan, plan.face, plan.face.patch, graph);
   const [cellsU, cellsV] = plan.cells;
+  const facets = plan.face === null ? [] : facetPatches(plan.face.patch);
+  if (plan.face !== null && facets.length > 0) {
+    const sum = new Float64Array(cellsU * cellsV);
+    for (const patch of facets) {
+      const own = facetsMeasure(plan, plan.face, patch, graph);
+      for (let i = 0; i < sum.length; i++) sum[i] += own[i];
+    }
+    return sum;
+  }
   const [[uLow, uHigh], [vLow, vHigh]] = plan.extent;
   const stepU = (uHigh - uLow) / cellsU;
   const stepV = (vHigh - vLow) / cellsV;
@@ -42,6 +53,13 @@ export function mapMeasure(plan: RecorderPlan, graph: RegionGraph): Float64Array
     }
   }
   return measure;
+}
+
+/** A mesh's face, or that of its copies on a grid; none for other faces. */
+function facetPatches(patch: FacePatch): readonly FacetPatch[] {
+  if (patch.kind === 'facets') return [patch];
+  if (patch.kind !== 'group') return [];
+  return patch.members.flatMap((member) => (member.kind === 'facets' ? [member] : []));
 }
 
 /** Probes along either side of a map: what covers less than one step of a face is overlooked where the rest is bare. */
@@ -89,13 +107,15 @@ function areaDensity(plan: RecorderPlan): (u: number, v: number) => number {
       return inPolygon(plan, patch);
     case 'disc':
       return (u, v) => (u * u + v * v <= patch.radius ** 2 ? 1 : 0);
-    case 'side': {
-      const mean = (patch.bottomRadius + patch.topRadius) / 2;
-      const slant = Math.hypot(patch.height, patch.topRadius - patch.bottomRadius) / patch.height;
-      return (_, v) => {
-        const radius = patch.bottomRadius + ((patch.topRadius - patch.bottomRadius) * v) / patch.height;
-        return (radius / mean) * slant;
-      };
+    case 'side':
+    case 'profile': {
+      const stretch = revolvedStretch(patch);
+      return (_, v) => stretch(v);
+    }
+    case 'dish':
+    case 'group': {
+      const seen = lineOfSight(plan, patch);
+      return (u, v) => seen(u, v).reduce((sum, { stretch }) => sum + stretch, 0);
     }
     case 'zone':
       return inZone(patch);

@@ -2,11 +2,14 @@
 import type { Against, PartDescription, PieceDescription, Vector3 } from '../design/description.js';
 import type { Fault } from '../design/fault.js';
 import type { ConvexSolid, FacePatch, SolidFace } from './convex-solid.js';
-import { patchCentre } from './face-patch.js';
-import { makeSolid, moveSolid } from './shapes/make-solid.js';
+import { patchCentre, patchNormal } from './face-patch.js';
+import { makePieces, moveSolid } from './shapes/make-solid.js';
 import { add, dot, type Matrix, multiply, rigidMatrix, scale, subtract } from './vector.js';
 
-/** A convex body minus other convex solids, in design coordinates; names carry the prefix of the piece. */
+/**
+ * A convex body minus other convex solids, in design coordinates; names carry the prefix of the piece. A shape that is not convex, or is
+ * repeated, makes several; faces of one name are one face.
+ */
 export interface PlacedPiece {
   readonly body: NamedSolid;
   readonly minus: readonly NamedSolid[];
@@ -25,7 +28,9 @@ export interface PlacedPart {
 
 export interface PlacedFace {
   readonly name: string;
-  readonly face: SolidFace;
+  readonly patch: FacePatch;
+  /** Outward normal of the solid where the whole face lies in one plane, else null. */
+  readonly plane: Vector3 | null;
   /** The face of a solid that was taken away: its outward normal looks into the part. */
   readonly hollow: boolean;
 }
@@ -45,29 +50,97 @@ export function placeParts(parts: readonly PartDescription[]): { parts: PlacedPa
 const turnMatrix = (part: PartDescription): Matrix => rigidMatrix([0, 0, 0], part.placement.turns);
 
 function placePieces(description: PartDescription, matrix: Matrix): PlacedPart {
-  const place = (piece: PieceDescription, outer: string, frame: Matrix): NamedSolid & { frame: Matrix } => {
-    const own = multiply(frame, rigidMatrix(piece.at, piece.turns));
-    const prefix = piece.name === null ? outer : `${outer}${piece.name}.`;
-    return { prefix, solid: moveSolid(makeSolid(piece.shape), own), frame: own };
-  };
-  const pieces = description.pieces.map((piece): PlacedPiece => {
-    const body = place(piece, '', matrix);
-    // What is taken away is given in the frame of the piece it is taken from.
-    return { body, minus: piece.minus.map((hole) => place(hole, body.prefix, body.frame)) };
+  const prefixOf = ({ name }: PieceDescription, outer: string) => (name === null ? outer : `${outer}${name}.`);
+  const pieces = description.pieces.flatMap((piece) => {
+    const prefix = prefixOf(piece, '');
+    return framesOf(piece, matrix).flatMap((frame) => {
+      // What is taken away is given in the frame of the piece it is taken from.
+      const holes = piece.minus.flatMap((hole) =>
+        framesOf(hole, frame).flatMap((own) =>
+          makePieces(hole.shape).map(({ body }) => ({ prefix: prefixOf(hole, prefix), solid: moveSolid(body, own) })),
+        ),
+      );
+      const shape = makePieces(piece.shape).map(({ body, minus }) => ({
+        body,
+        minus: minus.map((solid) => ({ prefix, solid: moveSolid(solid, frame) })),
+      }));
+      return shape.map(
+        ({ body, minus }): PlacedPiece => ({
+          body: { prefix, solid: moveSolid(body, frame) },
+          minus: [...minus, ...holes],
+        }),
+      );
+    });
   });
   return { description, pieces };
 }
 
-/** Every face of a part by its name, e.g. 'top', 'bore.side'. */
-export function partFaces(part: PlacedPart): PlacedFace[] {
-  return part.pieces.flatMap(({ body, minus }) => [
-    ...namedFaces(body, false),
-    ...minus.flatMap((hole) => namedFaces(hole, true)),
-  ]);
+/** Frame of each copy of a piece, rows along x first. */
+function framesOf({ at, turns, repeat }: PieceDescription, outer: Matrix): Matrix[] {
+  if (repeat === undefined) return [multiply(outer, rigidMatrix(at, turns))];
+  const { counts, pitch } = repeat;
+  return Array.from({ length: counts[0] * counts[1] * counts[2] }, (_, i) => {
+    const cell = [i % counts[0], Math.floor(i / counts[0]) % counts[1], Math.floor(i / (counts[0] * counts[1]))];
+    const [x, y, z] = cell.map((k, axis) => at[axis] + (k - (counts[axis] - 1) / 2) * pitch[axis]);
+    return multiply(outer, rigidMatrix([x, y, z], turns));
+  });
 }
 
-function namedFaces({ prefix, solid }: NamedSolid, hollow: boolean): PlacedFace[] {
-  return solid.faces.map((face) => ({ name: prefix + face.name, face, hollow }));
+interface Member {
+  readonly face: SolidFace;
+  readonly hollow: boolean;
+}
+
+/** Every face of a part by its name, e.g. 'top', 'bore.side'. */
+export function partFaces(part: PlacedPart): PlacedFace[] {
+  const members = new Map<string, Member[]>();
+  const solids = part.pieces.flatMap(({ body, minus }) => [
+    { ...body, hollow: false },
+    ...minus.map((hole) => ({ ...hole, hollow: true })),
+  ]);
+  const seen = new Set<ConvexSolid>();
+  for (const { prefix, solid, hollow } of solids) {
+    // A hole in a part of several pieces is listed with each.
+    if (seen.has(solid)) continue;
+    seen.add(solid);
+    for (const face of solid.faces) {
+      const name = prefix + face.name;
+      const known = members.get(name);
+      if (known === undefined) members.set(name, [{ face, hollow }]);
+      else known.push({ face, hollow });
+    }
+  }
+  return [...members].flatMap(([name, all]) => joinFaces(name, all));
+}
+
+/** Nothing for a name that no patch bears. */
+function joinFaces(name: string, members: readonly Member[]): PlacedFace[] {
+  const shown = members.filter(({ face }) => face.patch !== null || face.whole !== undefined);
+  if (shown.length === 0) return [];
+  const wholes = shown.flatMap(({ face }) => (face.whole === undefined ? [] : [face.whole]));
+  const patches = wholes.length > 0 ? wholes : shown.flatMap(({ face }) => (face.patch === null ? [] : [face.patch]));
+  const [first] = patches;
+  const patch: FacePatch =
+    patches.length === 1
+      ? first
+      : { kind: 'group', members: patches, normal: patchNormal(first), u: first.u, v: first.v };
+  const plane = planeOf(shown[0].face);
+  const flat = shown.every(({ face }) => {
+    const own = planeOf(face);
+    return (
+      own !== null &&
+      plane !== null &&
+      dot(own.normal, plane.normal) > 1 - 1e-12 &&
+      Math.abs(own.offset - plane.offset) < 1e-9
+    );
+  });
+  return [{ name, patch, plane: flat && plane !== null ? plane.normal : null, hollow: shown[0].hollow }];
+}
+
+function planeOf({ surface, patch }: SolidFace): { readonly normal: Vector3; readonly offset: number } | null {
+  if (surface.kind === 'plane') return surface;
+  if (patch?.kind !== 'facets' || !patch.flat) return null;
+  return { normal: patch.normal, offset: dot(patch.normal, patch.centre) };
 }
 
 export function findFace(parts: readonly PlacedPart[], reference: string): PlacedFace | null {
@@ -77,11 +150,8 @@ export function findFace(parts: readonly PlacedPart[], reference: string): Place
 }
 
 /** Looking out of the material: a hole's wall looks into the hole. */
-export function faceNormal({ face, hollow }: PlacedFace): Vector3 | null {
-  const { patch, surface } = face;
-  const normal =
-    surface.kind === 'plane' ? surface.normal : patch.kind === 'facets' && patch.flat ? patch.normal : null;
-  return normal !== null && hollow ? scale(normal, -1) : normal;
+export function faceNormal({ plane, hollow }: PlacedFace): Vector3 | null {
+  return plane !== null && hollow ? scale(plane, -1) : plane;
 }
 
 function leanOn(part: PlacedPart, against: Against, earlier: readonly PlacedPart[], faults: Fault[]): Vector3 {
@@ -112,10 +182,10 @@ function leanOn(part: PlacedPart, against: Against, earlier: readonly PlacedPart
       suggestion: 'turn the part, or name another face in "with"',
     });
   }
-  const patch: FacePatch = target.face.patch;
+  const patch: FacePatch = target.patch;
   const goal = add(
     patchCentre(patch),
     add(scale(out, against.gap), add(scale(patch.u, against.shift[0]), scale(patch.v, against.shift[1]))),
   );
-  return subtract(goal, patchCentre(own.face.patch));
+  return subtract(goal, patchCentre(own.patch));
 }

@@ -1,5 +1,5 @@
 /**
- * Spheres, cylinders and cones as one quadratic form q(p) = xx·x² + yy·y² + zz·z² + 2(xy·xy + xz·xz + yz·yz) + 2(x·x + y·y + z·z) + c,
+ * Spheres, cylinders, cones and conicoids as one quadratic form q(p) = xx·x² + yy·y² + zz·z² + 2(xy·xy + xz·xz + yz·yz) + 2(x·x + y·y + z·z) + c,
  * negative inside. Coefficient order: xx yy zz xy xz yz x y z c.
  */
 import type { Vector3 } from '../design/description.js';
@@ -17,7 +17,19 @@ export function quadricCoefficients(surface: Curved): number[] {
       return centredForm(surface.point, surface.axis, 1, -(surface.radius ** 2));
     case 'cone':
       return centredForm(surface.apex, surface.axis, 1 + surface.slope ** 2, 0);
+    case 'conic':
+      return conicForm(surface);
   }
+}
+
+/** dᵀ(1 + conic·aaᵀ − rrᵀ)d + 2·radius·a·d with d = p − vertex: depth below the vertex is −a·d. */
+function conicForm({ vertex: o, axis: a, radius, conic, ruled }: Extract<Curved, { kind: 'conic' }>): number[] {
+  const r = ruled ?? [0, 0, 0];
+  const m = (i: number, j: number) => (i === j ? 1 : 0) + conic * a[i] * a[j] - r[i] * r[j];
+  const row = (i: number) => m(i, 0) * o[0] + m(i, 1) * o[1] + m(i, 2) * o[2];
+  const linear = [0, 1, 2].map((i) => radius * a[i] - row(i));
+  const free = dot(o, [row(0), row(1), row(2)]) - 2 * radius * dot(a, o);
+  return [m(0, 0), m(1, 1), m(2, 2), m(0, 1), m(0, 2), m(1, 2), ...linear, free];
 }
 
 /** |p − o|² − k ((p − o)·a)² + constant. */
@@ -54,8 +66,20 @@ export function sameCurve(a: Curved, b: Curved, tolerance: number): boolean {
     const parallel = Math.abs(Math.abs(dot(a.axis, b.axis)) - 1) <= 1e-12;
     return parallel && near(a.apex, b.apex) && Math.abs(a.slope - b.slope) <= 1e-12;
   }
+  if (a.kind === 'conic' && b.kind === 'conic') {
+    const same = dot(a.axis, b.axis) >= 1 - 1e-12 && Math.abs(a.conic - b.conic) <= 1e-12;
+    const ruled =
+      a.ruled === null || b.ruled === null ? a.ruled === b.ruled : Math.abs(dot(a.ruled, b.ruled)) >= 1 - 1e-12;
+    return (
+      same && ruled && onRuling(a.vertex, b.vertex, a.ruled) <= tolerance && Math.abs(a.radius - b.radius) <= tolerance
+    );
+  }
   return false;
 }
+
+/** Distance of two vertices, not counting what runs along the ruling. */
+const onRuling = (a: Vector3, b: Vector3, ruled: Vector3 | null): number =>
+  ruled === null ? Math.hypot(a[0] - b[0], a[1] - b[1], a[2] - b[2]) : offAxis(a, b, ruled);
 
 function offAxis(a: Vector3, b: Vector3, axis: Vector3): number {
   const d: Vector3 = [b[0] - a[0], b[1] - a[1], b[2] - a[2]];

@@ -5,10 +5,15 @@
  * quadric and each mesh. Where light is, is known by its region alone, never by asking a rounded coordinate, so no ray can slip between two
  * faces or be lost on an edge: it always has a next surface that bounds its region, and crossing it leads to exactly one
  * neighbour. Most surfaces continue beyond the part that they bound; crossing them there changes nothing (`CROSSING.pass`).
+ *
+ * A quadric whose surface keeps clear of the box that the axis planes make of a region is never asked there (`near`). It cannot change sides
+ * unseen: light stays in the box to within rounding and crosses surfaces only where it is, so a side bit can be wrong only within rounding
+ * of its surface, and there the surface is near every box that light may be in.
  */
 
 import { meshSide } from './mesh/mesh-side.js';
 import { QUADRIC_STRIDE, quadricValue } from './quadric.js';
+import { quadricMeetsBox } from './quadric-in-box.js';
 import type { Scene } from './scene-layout.js';
 import { SPLIT, SURROUNDINGS } from './scene-layout.js';
 
@@ -71,6 +76,9 @@ export class RegionGraph {
   readonly bound: Float64Array;
   /** [region · sides + quadric, or + quadrics + mesh]: −1 inside, +1 outside. */
   readonly side: Int8Array;
+  /** [region · quadrics + i]: the first `nearCount[region]` are the quadrics that light there may meet, in order. */
+  readonly near: Uint16Array;
+  readonly nearCount: Int32Array;
   /** [region · ways + way]: region beyond, meaningful once `crossing` is known. */
   readonly neighbour: Int32Array;
   /** [region · ways + way]: place of the interface's record, or CROSSING.pass, or unknown. */
@@ -95,6 +103,8 @@ export class RegionGraph {
   /** Slab of every family, then side of every quadric, of the region being looked up. */
   readonly #wanted: Int32Array;
   readonly #point = new Float64Array(6);
+  readonly #low = new Float64Array(3);
+  readonly #high = new Float64Array(3);
   readonly #knownInterfaces = new Map<string, number>();
 
   /** @param stepwise also where all surfaces are axis planes: slower, but the flight stops at every boundary. */
@@ -107,10 +117,12 @@ export class RegionGraph {
     this.sides = this.quadrics + scene.meshes;
     this.ways = 2 * this.families + this.quadrics + scene.groups;
     this.stepwise = stepwise || scene.polarised !== 0 || this.ways !== 6;
-    const bytes = this.ways * 8 + this.families * 20 + this.sides + 8;
+    const bytes = this.ways * 8 + this.families * 20 + this.sides + 2 * this.quadrics + 12;
     this.capacity = Math.max(64, Math.min(1 << 16, Math.floor(2 ** 28 / bytes)));
     this.bound = new Float64Array(this.capacity * 2 * this.families);
     this.side = new Int8Array(this.capacity * this.sides);
+    this.near = new Uint16Array(this.capacity * this.quadrics);
+    this.nearCount = new Int32Array(this.capacity);
     this.neighbour = new Int32Array(this.capacity * this.ways);
     this.crossing = new Int32Array(this.capacity * this.ways);
     this.owner = new Int32Array(this.capacity);
@@ -286,10 +298,25 @@ export class RegionGraph {
       this.bound[b + 1] = slab < count ? this.scene.planeOffset[start + slab] : Number.POSITIVE_INFINITY;
     }
     for (let q = 0; q < this.sides; q++) this.side[region * this.sides + q] = wanted[this.families + q];
+    this.#findNear(region);
     this.crossing.fill(CROSSING.unknown, region * this.ways, (region + 1) * this.ways);
     this.owner[region] = this.#ownerOf(region);
     this.medium[region] = this.scene.ownerMedium[this.owner[region]];
     return region;
+  }
+
+  #findNear(region: number): void {
+    for (let axis = 0; axis < 3; axis++) {
+      const b = 2 * (region * this.families + axis);
+      this.#low[axis] = this.bound[b];
+      this.#high[axis] = this.bound[b + 1];
+    }
+    let count = 0;
+    for (let q = 0; q < this.quadrics; q++) {
+      if (quadricMeetsBox(this.scene.quadric, q * QUADRIC_STRIDE, this.#low, this.#high))
+        this.near[region * this.quadrics + count++] = q;
+    }
+    this.nearCount[region] = count;
   }
 
   #isWanted(region: number): boolean {

@@ -26,7 +26,7 @@ export function stackNeighbours(
   parts: readonly PlacedPart[],
   surroundings: string,
 ): MediaPair[] {
-  const extents = parts.map((part) => extentOf(partFaces(part).map(({ face }) => face.patch)));
+  const extents = parts.map((part) => extentOf(partFaces(part).map(({ patch }) => patch)));
   const pairs = new Map<string, MediaPair>();
   const add = (outside: string, inside: string) => pairs.set(`${outside}\n${inside}`, { outside, inside });
   for (const face of faces) {

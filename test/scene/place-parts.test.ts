@@ -11,7 +11,7 @@ function placed(...parts: PartDescription[]) {
   const centre = (face: string) => {
     const found = findFace(result.parts, face);
     if (found === null) throw new Error(`no ${face}`);
-    return patchCentre(found.face.patch);
+    return patchCentre(found.patch);
   };
   return { ...result, centre };
 }

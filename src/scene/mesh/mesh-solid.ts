@@ -17,7 +17,7 @@ export function moveMeshSolid(solid: ConvexSolid, matrix: Matrix): ConvexSolid {
   if (mesh === first.mesh) return solid;
   return {
     faces: solid.faces.map(({ patch }) => {
-      if (patch.kind !== 'facets') throw new Error('a face of a mesh is made of facets');
+      if (patch?.kind !== 'facets') throw new Error('a face of a mesh is made of facets');
       const frame = {
         normal: moveDirection(matrix, patch.normal),
         u: moveDirection(matrix, patch.u),

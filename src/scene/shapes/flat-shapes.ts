@@ -1,9 +1,10 @@
 /** Boxes and prisms in their own frames. */
 import type { ShapeDescription, Vector2, Vector3 } from '../../design/description.js';
 import type { ConvexSolid, SolidFace } from '../convex-solid.js';
-import { dot } from '../vector.js';
+import { cross, dot, normalise, snapDirection, subtract } from '../vector.js';
 
 type Box = Extract<ShapeDescription, { kind: 'box' }>;
+type Frustum = Extract<ShapeDescription, { kind: 'frustum' }>;
 type Prism = Extract<ShapeDescription, { kind: 'prism' }>;
 
 export function boxSolid({ size: [sx, sy, sz] }: Box): ConvexSolid {
@@ -49,13 +50,41 @@ export function prismSolid({ outline, height, sides }: Prism): ConvexSolid {
   return { faces };
 }
 
+/** Outlines counter-clockwise as seen from +z, edge i of one parallel to edge i of the other. */
+export function frustumSolid({ bottom, top, height, sides }: Frustum): ConvexSolid {
+  const [low, high] = [-height / 2, height / 2];
+  const faces: SolidFace[] = bottom.map((from, i) => {
+    const to = bottom[(i + 1) % bottom.length];
+    const corners: Vector3[] = [
+      [...from, low],
+      [...to, low],
+      [...top[(i + 1) % top.length], high],
+      [...top[i], high],
+    ];
+    const along = normalise(subtract(corners[1], corners[0]));
+    const normal = snapDirection(cross(along, subtract(corners[3], corners[0])));
+    const u = forwardAxis(along);
+    const up = cross(normal, along);
+    return flatFace(sides[i], normal, corners, u, snapDirection(up));
+  });
+  const flat = (name: string, z: number, outline: readonly Vector2[], normal: Vector3) =>
+    flatFace(
+      name,
+      normal,
+      outline.map(([a, b]): Vector3 => [a, b, z]),
+      [1, 0, 0],
+      [0, 1, 0],
+    );
+  return { faces: [...faces, flat('bottom', low, bottom.toReversed(), [0, 0, -1]), flat('top', high, top, [0, 0, 1])] };
+}
+
 /** The u axis of an upright face looks along +x where it can, else along +y, so that a box's maps read the usual way. */
 function forwardAxis(along: Vector3): Vector3 {
   const backward = Math.abs(along[0]) > 1e-9 ? along[0] < 0 : along[1] < 0;
   return backward ? [-along[0] + 0, -along[1] + 0, 0] : along;
 }
 
-function flatFace(name: string, normal: Vector3, corners: Vector3[], u: Vector3, v: Vector3): SolidFace {
+export function flatFace(name: string, normal: Vector3, corners: Vector3[], u: Vector3, v: Vector3): SolidFace {
   return {
     name,
     surface: { kind: 'plane', normal, offset: dot(normal, corners[0]) },

@@ -1,12 +1,33 @@
 import type { ShapeDescription } from '../../design/description.js';
 import type { BoundarySurface, ConvexSolid, FacePatch } from '../convex-solid.js';
 import { meshSolid, moveMeshSolid } from '../mesh/mesh-solid.js';
-import { dot, type Matrix, moveDirection, movePoint } from '../vector.js';
-import { boxSolid, prismSolid } from './flat-shapes.js';
+import { dot, type Matrix, moveDirection, movePoint, scale } from '../vector.js';
+import { concentratorSolid, paraboloidSolid } from './bowl-shapes.js';
+import { boxSolid, frustumSolid, prismSolid } from './flat-shapes.js';
+import { lensPieces } from './lens-shape.js';
 import { capSolid, coneSolid, cylinderSolid, sphereSolid } from './round-shapes.js';
+import { tubePiece } from './tube-shape.js';
 
-/** The convex solid of a shape in its own frame. */
-export function makeSolid(shape: ShapeDescription): ConvexSolid {
+/** A convex body minus other convex solids. */
+export interface ShapePiece {
+  readonly body: ConvexSolid;
+  readonly minus: readonly ConvexSolid[];
+}
+
+/** The pieces whose union a shape is, in its own frame. */
+export function makePieces(shape: ShapeDescription): readonly ShapePiece[] {
+  switch (shape.kind) {
+    case 'lens':
+      return lensPieces(shape);
+    case 'tube':
+      return [tubePiece(makeSolid(shape.outer), makeSolid(shape.bore))];
+    default:
+      return [{ body: makeSolid(shape), minus: [] }];
+  }
+}
+
+/** The convex solid of a convex shape in its own frame. */
+export function makeSolid(shape: Exclude<ShapeDescription, { readonly kind: 'lens' | 'tube' }>): ConvexSolid {
   switch (shape.kind) {
     case 'box':
       return boxSolid(shape);
@@ -20,6 +41,12 @@ export function makeSolid(shape: ShapeDescription): ConvexSolid {
       return sphereSolid(shape);
     case 'cap':
       return capSolid(shape);
+    case 'frustum':
+      return frustumSolid(shape);
+    case 'paraboloid':
+      return paraboloidSolid(shape);
+    case 'concentrator':
+      return concentratorSolid(shape);
     case 'mesh':
       return meshSolid(shape.mesh);
   }
@@ -29,20 +56,26 @@ export function makeSolid(shape: ShapeDescription): ConvexSolid {
 export function moveSolid(solid: ConvexSolid, matrix: Matrix): ConvexSolid {
   if (solid.faces[0].surface.kind === 'mesh') return moveMeshSolid(solid, matrix);
   return {
-    faces: solid.faces.map(({ name, surface, patch }) => ({
+    faces: solid.faces.map(({ name, surface, patch, whole, wall }) => ({
       name,
       surface: moveSurface(surface, patch, matrix),
-      patch: movePatch(patch, matrix),
+      patch: patch && movePatch(patch, matrix),
+      ...(whole === undefined ? {} : { whole: movePatch(whole, matrix) }),
+      ...(wall === undefined ? {} : { wall: movePatch(wall, matrix) }),
     })),
   };
 }
 
-function moveSurface(surface: BoundarySurface, patch: FacePatch, matrix: Matrix): BoundarySurface {
+function moveSurface(surface: BoundarySurface, patch: FacePatch | null, matrix: Matrix): BoundarySurface {
   switch (surface.kind) {
     case 'plane': {
       const normal = moveDirection(matrix, surface.normal);
-      const on = patch.kind === 'polygon' ? patch.corners[0] : patch.kind === 'disc' ? patch.centre : null;
-      if (on === null) throw new Error('a flat face has a flat patch');
+      const on =
+        patch?.kind === 'polygon'
+          ? patch.corners[0]
+          : patch?.kind === 'disc'
+            ? patch.centre
+            : scale(surface.normal, surface.offset);
       return { kind: 'plane', normal, offset: dot(normal, movePoint(matrix, on)) };
     }
     case 'sphere':
@@ -51,6 +84,13 @@ function moveSurface(surface: BoundarySurface, patch: FacePatch, matrix: Matrix)
       return { ...surface, point: movePoint(matrix, surface.point), axis: moveDirection(matrix, surface.axis) };
     case 'cone':
       return { ...surface, apex: movePoint(matrix, surface.apex), axis: moveDirection(matrix, surface.axis) };
+    case 'conic':
+      return {
+        ...surface,
+        vertex: movePoint(matrix, surface.vertex),
+        axis: moveDirection(matrix, surface.axis),
+        ruled: surface.ruled && moveDirection(matrix, surface.ruled),
+      };
     case 'mesh':
       throw new Error('a mesh moves as a whole');
   }
@@ -72,6 +112,14 @@ function movePatch(patch: FacePatch, matrix: Matrix): FacePatch {
       };
     case 'side':
       return { ...patch, ...frame, base: movePoint(matrix, patch.base), axis: moveDirection(matrix, patch.axis) };
+    case 'profile':
+      return { ...patch, ...frame, base: movePoint(matrix, patch.base), axis: moveDirection(matrix, patch.axis) };
+    case 'dish':
+      return { ...patch, ...frame, vertex: movePoint(matrix, patch.vertex), axis: moveDirection(matrix, patch.axis) };
+    case 'group': {
+      const members = patch.members.map((member) => movePatch(member, matrix));
+      return { ...patch, ...frame, members, normal: moveDirection(matrix, patch.normal) };
+    }
     case 'zone':
       return { ...patch, ...frame, centre: movePoint(matrix, patch.centre), axis: moveDirection(matrix, patch.axis) };
     case 'facets':

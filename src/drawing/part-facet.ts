@@ -1,46 +1,8 @@
-/** A convex solid as a convex polyhedron, and the cutting of facets by it. */
+/** The cutting of facets and segments by a convex polyhedron. */
 import type { Vector3 } from '../design/description.js';
-import type { NamedSolid } from '../scene/place-parts.js';
 import { dot } from '../scene/vector.js';
-import { type Facet, facetNormal, type HalfSpace, type Segment, splitFacet } from './facet.js';
-import { facetPatch } from './facet-patch.js';
-
-export interface FacetedFace {
-  /** Within the part: 'top', 'bore.side'. */
-  readonly name: string;
-  readonly facets: readonly Facet[];
-}
-
-export interface FacetedSolid {
-  readonly faces: readonly FacetedFace[];
-  /** None: it cuts nothing. */
-  readonly planes: readonly HalfSpace[];
-  readonly low: Vector3;
-  readonly high: Vector3;
-}
-
-export function facetSolid({ prefix, solid }: NamedSolid): FacetedSolid {
-  const faces = solid.faces.map(({ name, patch }) => ({ name: prefix + name, facets: facetPatch(patch) }));
-  const facets = faces.flatMap((face) => face.facets);
-  const corners = facets.flatMap((facet) => facet.corners);
-  const extreme = (pick: (...values: number[]) => number, start: number): Vector3 =>
-    corners.reduce<Vector3>(
-      (so, corner) => [pick(so[0], corner[0]), pick(so[1], corner[1]), pick(so[2], corner[2])],
-      [start, start, start],
-    );
-  return {
-    faces,
-    // A mesh need not be convex and cuts nothing: what it hides is drawn all the same.
-    planes: solid.faces.some(({ patch }) => patch.kind === 'facets')
-      ? []
-      : facets.map((facet) => {
-          const normal = facetNormal(facet);
-          return { normal, offset: dot(normal, facet.corners[0]) };
-        }),
-    low: extreme(Math.min, Number.POSITIVE_INFINITY),
-    high: extreme(Math.max, Number.NEGATIVE_INFINITY),
-  };
-}
+import { type Facet, facetNormal, type Segment, splitFacet } from './facet.js';
+import type { FacetedSolid } from './facet-solid.js';
 
 /** Where a facet counts that lies in a face of the solid: looking the same way as that face, or the opposite way. */
 export interface Contact {
