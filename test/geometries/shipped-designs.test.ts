@@ -27,6 +27,7 @@ test('the shipped designs are these', () => {
     'box-with-white-back',
     'edge-lit-plate',
     'pebble-block',
+    'ring-pumped-hexagon',
     'rod-fed-cell',
     'side-pumped-cylinder',
     'two-bank-box-cell',
