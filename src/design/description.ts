@@ -69,11 +69,25 @@ export interface DissolvedDye {
   readonly concentration: number | null;
   /** Napierian absorption at this strength, 1/mm. */
   readonly absorption: Curve;
-  /** 0..1, per absorbed photon. */
+  /** 0..1, per absorbed photon, as traced: at this strength, pH and temperature. */
   readonly quantumYield: number;
+  /** The same before the dye's own crowding lowers it; left out where nothing does. */
+  readonly diluteYield?: number;
+  /** How the dye quenches itself at this strength; left out where that is not modelled. */
+  readonly quenching?: QuenchingDescription;
   readonly emission: EmissionDescription;
   /** Fluorescence lifetime, ns, null when unknown. */
   readonly lifetimeNs: number | null;
+}
+
+/** What became of the yield, for people to read. */
+export interface QuenchingDescription {
+  /** Yield at this strength over that of the dilute dye. */
+  readonly factor: number;
+  /** Share of the molecules that are bound in dark dimers. */
+  readonly dimerShare: number;
+  readonly law: string;
+  readonly source: string;
 }
 
 /** What turns light aside within a medium. Several add up. */
