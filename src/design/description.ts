@@ -61,10 +61,18 @@ export interface MediumDescription {
   readonly scatterers: readonly ScattererDescription[];
   /** Heat data, null where the library has none. */
   readonly thermal: ThermalProperties | null;
+  /** Solvents of a mixture with their shares by volume before mixing; left out for one material. */
+  readonly mixture?: readonly { readonly solvent: string; readonly share: number }[];
+  /** Self-quenching switched off by the design. */
+  readonly quenching?: 'off';
+  /** What was taken for granted about the medium, for people to read. */
+  readonly notes?: readonly string[];
 }
 
 export interface DissolvedDye {
   readonly name: string;
+  /** The dye whose protolytic form this is; left out where forms are not told apart. */
+  readonly formOf?: string;
   /** mol/L; null for a dye given directly by an absorption coefficient. */
   readonly concentration: number | null;
   /** Napierian absorption at this strength, 1/mm. */
@@ -88,6 +96,9 @@ export interface QuenchingDescription {
   readonly dimerShare: number;
   readonly law: string;
   readonly source: string;
+  /** mol/L of the dye, in all its forms, and up to which the constants are meant. */
+  readonly strength: number;
+  readonly most: number;
 }
 
 /** What turns light aside within a medium. Several add up. */

@@ -48,7 +48,7 @@ function explain(error: unknown, folder: string, name: string): TableFile {
     if (lstatSync(resolve(folder, name), { throwIfNoEntry: false })?.isSymbolicLink()) {
       return { ok: false, problem: 'the link leads nowhere' };
     }
-    const tables = readdirSync(folder).filter((each) => /\.csv$/i.test(each));
+    const tables = readdirSync(folder).filter((each) => /\.(csv|jdx|dx)$/i.test(each));
     const nearest = nearestName(name, tables);
     return { ok: false, problem: 'there is no such file', ...(nearest === null ? {} : { suggestion: nearest }) };
   }
