@@ -1,5 +1,7 @@
 import { beamSpreadProof } from './beam-spread-proof.js';
 import { beerLambertProof } from './beer-lambert-proof.js';
+import { birksProof } from './birks-proof.js';
+import { brightnessProof } from './brightness-proof.js';
 import { diffuseFresnelProof } from './diffuse-fresnel-proof.js';
 import { energyProof } from './energy-proof.js';
 import { escapeConeProof } from './escape-cone-proof.js';
@@ -7,16 +9,19 @@ import { fresnelProof } from './fresnel-proof.js';
 import { glassPlateProof } from './glass-plate-proof.js';
 import { glassSphereProof } from './glass-sphere-proof.js';
 import { halfSpaceProof } from './half-space-proof.js';
+import { innerFilterProof } from './inner-filter-proof.js';
 import { integratingSphereProof } from './integrating-sphere-proof.js';
 import { lightBoxProof } from './light-box-proof.js';
 import { meanChordProof } from './mean-chord-proof.js';
 import { metalMirrorProof } from './metal-mirror-proof.js';
 import { mixingRodProof } from './mixing-rod-proof.js';
+import { mixtureProof } from './mixture-proof.js';
 import { parallelBeamProof } from './parallel-beam-proof.js';
 import { photometryProof } from './photometry-proof.js';
 import { polarisedLightProof } from './polarised-light-proof.js';
 import { prismProof } from './prism-proof.js';
 import type { Proof } from './proof.js';
+import { quenchingProof } from './quenching-proof.js';
 import { reciprocityProof } from './reciprocity-proof.js';
 import { scatteringMediumProof } from './scattering-medium-proof.js';
 import { slabProof } from './slab-proof.js';
@@ -48,6 +53,11 @@ export const allProofs: readonly Proof[] = [
   slabProof,
   halfSpaceProof,
   twoColourSlabProof,
+  birksProof,
+  innerFilterProof,
+  quenchingProof,
+  brightnessProof,
+  mixtureProof,
   scatteringMediumProof,
   integratingSphereProof,
   lightBoxProof,

@@ -112,7 +112,7 @@ describe('absorption', () => {
   ])('as %s is the same dye', (_, entry) => {
     const { extinction, warnings } = read(design(entry, LIGHT));
     expect(warnings).toEqual([]);
-    for (const [i, x] of nm.entries()) expect(Math.abs(extinction(x) - raw[i])).toBeLessThan(1);
+    for (const [i, x] of nm.entries()) expect(Math.abs(extinction(x) - Math.max(0, raw[i]))).toBeLessThan(1);
   });
 
   // The head of the library's file says: red end is instrument baseline, about 79 L/(mol cm).
@@ -199,7 +199,7 @@ describe('sense', () => {
     expect(read(design(RAW, LIGHT, ', lifetime: 3.9 ns')).warnings).toEqual([]);
     const { warnings } = read(design(RAW, LIGHT, ', lifetime: 39 ns'));
     expect(warnings).toMatchObject([
-      { problem: expect.stringContaining('do not fit'), expected: expect.stringContaining('3.8 ns') },
+      { problem: expect.stringContaining('do not fit'), expected: expect.stringMatching(/3\.[78] ns/) },
     ]);
   });
 
