@@ -29,8 +29,10 @@ export function designSheet(reading: SoundDesign, faults: readonly Fault[], face
     checks: faults,
     cautions: cautionsFor({
       pumpWatts: description.pumps.reduce((sum, { power }) => sum + power, 0),
-      solvents: filled.flatMap(({ kind, base }) => (kind === 'liquid' ? [base] : [])),
-      dyes: filled.flatMap(({ dyes }) => dyes.map(({ name }) => name)),
+      solvents: filled.flatMap(({ kind, base, mixture }) =>
+        kind === 'liquid' ? (mixture?.map(({ solvent }) => solvent) ?? [base]) : [],
+      ),
+      dyes: filled.flatMap(({ dyes }) => dyes.map(({ name, formOf = name }) => formOf)),
     }),
     atNm: media[0]?.atNm ?? null,
     media,

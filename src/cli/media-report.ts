@@ -1,4 +1,4 @@
-import type { Description, MediumDescription } from '../design/description.js';
+import type { Description, MediumDescription, QuenchingDescription } from '../design/description.js';
 import { absorptionAt, scatteringAt } from '../scene/scattering-at.js';
 import { significant } from './number-format.js';
 import { safeText } from './safe-text.js';
@@ -17,8 +17,15 @@ export interface MediumReport {
   readonly dyes: readonly {
     readonly dye: string;
     readonly millimolesPerLitre: number | null;
+    /** As traced. */
     readonly quantumYield: number;
+    /** Before the dye's own crowding lowers it. */
+    readonly diluteYield: number;
+    /** How and by whose constants it is lowered; null where that is not modelled. */
+    readonly quenching: { readonly law: string; readonly dimerShare: number; readonly source: string } | null;
   }[];
+  /** What was taken for granted. */
+  readonly notes: readonly string[];
   readonly scatterers: readonly {
     readonly scatterer: string;
     /** Mean free path between two scatterings, mm; null where it does not scatter. */
@@ -46,7 +53,10 @@ export function reportMedia(description: Description): MediumReport[] {
         dye: dye.name,
         millimolesPerLitre: dye.concentration === null ? null : dye.concentration * 1e3,
         quantumYield: dye.quantumYield,
+        diluteYield: dye.diluteYield ?? dye.quantumYield,
+        quenching: dye.quenching === undefined ? null : pickQuenching(dye.quenching),
       })),
+      notes: [...(medium.notes ?? []), ...(medium.quenching === 'off' ? ['self-quenching switched off'] : [])],
       scatterers: medium.scatterers.map((scatterer) => {
         const { scattering, anisotropy } = scatteringAt(scatterer, medium, atNm);
         return { scatterer: scatterer.name, freePathMm: scattering > 0 ? 1 / scattering : null, anisotropy };
@@ -54,12 +64,22 @@ export function reportMedia(description: Description): MediumReport[] {
     }));
 }
 
-/** One line a medium. */
+const pickQuenching = ({ law, dimerShare, source }: QuenchingDescription) => ({ law, dimerShare, source });
+
+/** '96.8 % (97 % dilute, 0.2 % in dark dimers)'. */
+export function yieldWords({ quantumYield, diluteYield, quenching }: MediumReport['dyes'][number]): string {
+  const used = `${significant(100 * quantumYield, 3)} %`;
+  if (quenching === null) return used;
+  const dimers = quenching.dimerShare > 0 ? `, ${significant(100 * quenching.dimerShare, 2)} % in dark dimers` : '';
+  return `${used} (${significant(100 * diluteYield, 3)} % dilute${dimers})`;
+}
+
+/** A line a medium, and one a note. */
 export function mediaLines(media: readonly MediumReport[], style: TerminalStyle): string[] {
-  return media.map((report) => {
+  return media.flatMap((report) => {
     const dyes = report.dyes.map((dye) => {
       const strength = dye.millimolesPerLitre === null ? '' : ` ${significant(dye.millimolesPerLitre, 4)} mmol/L`;
-      return `${safeText(dye.dye)}${strength}, quantum yield ${significant(100 * dye.quantumYield, 3)} %`;
+      return `${safeText(dye.dye)}${strength}, quantum yield ${yieldWords(dye)}`;
     });
     const depth = report.depthMm === null ? 'no absorption' : `1/e depth ${significant(report.depthMm, 3)} mm`;
     const facts = [
@@ -71,7 +91,10 @@ export function mediaLines(media: readonly MediumReport[], style: TerminalStyle)
         return `${safeText(scatterer)}: ${free}, mean cosine ${anisotropy.toFixed(3)}`;
       }),
     ];
-    return `  ${style.bold(safeText(report.medium))} in ${report.parts.map((part) => safeText(part)).join(', ')}: ${facts.join('; ')}`;
+    return [
+      `  ${style.bold(safeText(report.medium))} in ${report.parts.map((part) => safeText(part)).join(', ')}: ${facts.join('; ')}`,
+      ...report.notes.map((note) => `    note: ${safeText(note)}`),
+    ];
   });
 }
 

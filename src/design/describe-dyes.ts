@@ -1,83 +1,183 @@
 /** Dyes of the design and of the library -> what a medium holds of them. */
-import { dyeNames, dyeSolvents, readDye } from '../materials/library.js';
+
+import { formShares } from '../materials/acid-base.js';
+import { dyeNames } from '../materials/library.js';
+import { type QuenchingLaw, selfQuenching } from '../materials/self-quenching.js';
+import { activationEnergy, yieldAtTemperature } from '../materials/thermal-yield.js';
 import type { Curve } from '../units/curve.js';
-import type { DissolvedDye, EmissionDescription } from './description.js';
+import type { DissolvedDye, QuenchingDescription } from './description.js';
+import type { Dye, Host } from './dye.js';
+import type { DesignPath } from './fault.js';
 import type { Named } from './form-record.js';
-import type { DyeRecord, DyeStrength } from './media-fields.js';
+import { libraryDye } from './library-dye.js';
+import type { DyeStrength } from './media-fields.js';
 import { checkReference } from './names.js';
-import { nearestSolvent } from './nearest-solvent.js';
-import { checkAscending, pointCurve } from './point-curve.js';
 import type { Reading } from './reading.js';
 
-/** A dye before it is given a strength. */
-export interface Dye {
-  /** Decadic molar extinction, L/(mol cm), or Napierian absorption at strength 1, 1/mm. */
-  readonly extinction: Curve | null;
-  readonly absorption: Curve | null;
-  readonly emission: EmissionDescription;
-  readonly quantumYield: number;
-  readonly lifetimeNs: number | null;
-  readonly molarMassGPerMol: number | null;
+/** A dye in its medium: one entry, or one for each protolytic form; and what was taken for granted. */
+export interface Dissolved {
+  readonly dyes: readonly DissolvedDye[];
+  readonly notes: readonly string[];
 }
 
-export function describeOwnDye({ path, value }: Named<DyeRecord>, reading: Reading): Dye {
-  const { extinction, absorption, emission } = value;
-  checkAscending(extinction ?? absorption ?? [], [...path, extinction === null ? 'absorption' : 'extinction'], reading);
-  checkAscending(emission, [...path, 'emission'], reading);
-  if (emission.length > 1 && emission.every(([, photons]) => photons === 0)) {
-    const problem = 'the emission is zero at every wavelength';
-    reading.report({ code: 'range', path: [...path, 'emission'], problem, expected: 'some photons per nm above 0' });
-  }
-  return {
-    extinction: extinction && pointCurve(extinction, 'hold'),
-    absorption: absorption && pointCurve(absorption, 'hold'),
-    emission: describeEmission(emission),
-    quantumYield: value.yield,
-    lifetimeNs: value.lifetime,
-    molarMassGPerMol: value['molar-mass'],
-  };
-}
-
-function describeEmission(rows: DyeRecord['emission']): EmissionDescription {
-  const [from, to] = [rows[0]?.[0] ?? Number.NaN, rows[rows.length - 1]?.[0] ?? Number.NaN];
-  if (rows.length === 1) return { kind: 'line', wavelengthNm: from };
-  return { kind: 'spectrum', photonsPerNm: pointCurve(rows, 'zero'), fromNm: from, toNm: to };
-}
-
-/** What the dye is dissolved in; `pH` only for solvents. */
-export interface Host {
-  readonly base: string;
-  readonly pH: number | null;
-}
-
-/** The dye at its strength, or null after reporting why not. */
+/** The dye at its strength; nothing after reporting why not. */
 export function dissolveDye(
   { name, path, value: strength }: Named<DyeStrength>,
   ownDyes: ReadonlyMap<string, Dye>,
   host: Host,
   reading: Reading,
-): DissolvedDye | null {
+): Dissolved {
   const own = ownDyes.get(name);
   const names = [...ownDyes.keys(), ...dyeNames()];
-  if (own === undefined && !checkReference({ name, path }, names, 'no dye has this name', reading, 'key')) return null;
+  if (own === undefined && !checkReference({ name, path }, names, 'no dye has this name', reading, 'key')) {
+    return { dyes: [], notes: [] };
+  }
   const dye = own ?? libraryDye(name, path, host, reading);
-  const { emission, quantumYield, lifetimeNs } = dye;
-  const given = { name, quantumYield, emission, lifetimeNs };
+  const warm = atTemperature(name, dye, host, path, reading);
   if (dye.absorption !== null) {
     const { absorption } = dye;
     if (strength.kind !== 'number' && !Number.isNaN(strength.value)) {
       reportStrength('a plain factor, for the dye is given by its absorption', path, reading);
     }
-    return { ...given, concentration: null, absorption: (nm) => absorption(nm) * strength.value };
+    const given = {
+      name,
+      quantumYield: warm.factor * dye.quantumYield,
+      emission: dye.emission,
+      lifetimeNs: dye.lifetimeNs,
+    };
+    const dyes = [{ ...given, concentration: null, absorption: (nm: number) => absorption(nm) * strength.value }];
+    return { dyes, notes: [...dye.notes, ...warm.notes] };
   }
   const concentration = molarConcentration(strength, dye, path, reading);
-  const { extinction } = dye;
-  // 1 cm⁻¹ = 0.1 mm⁻¹; decadic to Napierian by ln 10.
-  const scale = (Math.LN10 * concentration) / 10;
-  return { ...given, concentration, absorption: (nm) => scale * (extinction?.(nm) ?? Number.NaN) };
+  const quenched =
+    host.quenching && Number.isFinite(concentration) && concentration >= 0 ? quench(dye, concentration) : null;
+  const forms = presentForms(name, dye, host);
+  const dyes = forms.map(({ share, extinction, quantumYield, lifetimeNs, ...rest }): DissolvedDye => {
+    const dilute = warm.factor * quantumYield;
+    const moving = quenched === null ? 1 : quenched.factor / Math.max(1e-300, 1 - quenched.dimerShare);
+    return {
+      ...rest,
+      concentration: share * concentration,
+      absorption: molarAbsorption(extinction, share * concentration),
+      quantumYield: dilute * (quenched?.factor ?? 1),
+      ...(quenched === null ? {} : { diluteYield: dilute, quenching: quenched }),
+      emission: dye.emission,
+      // What takes light away at the same rate of emission shortens the lifetime as much; dimers are dark from the start.
+      lifetimeNs: lifetimeNs === null ? null : lifetimeNs * warm.factor * moving,
+    };
+  });
+  const mixed = forms.length > 1 || forms[0]?.formOf !== undefined ? [formNote(name, forms, host)] : [];
+  return { dyes, notes: [...dye.notes, ...mixed, ...warm.notes] };
 }
 
-function molarConcentration(strength: DyeStrength, dye: Dye, path: Named<unknown>['path'], reading: Reading): number {
+/** 1 cm⁻¹ = 0.1 mm⁻¹; decadic to Napierian by ln 10. */
+function molarAbsorption(extinction: Curve | null, concentration: number): Curve {
+  const scale = (Math.LN10 * concentration) / 10;
+  return (nm) => scale * (extinction?.(nm) ?? Number.NaN);
+}
+
+interface PresentForm {
+  readonly name: string;
+  readonly formOf?: string;
+  readonly share: number;
+  readonly extinction: Curve | null;
+  readonly quantumYield: number;
+  readonly lifetimeNs: number | null;
+}
+
+/** Forms with a smaller share of the molecules are left out. */
+const LEAST_SHARE = 1e-3;
+
+/** The forms at the pH of the host; the dye as it is where its forms are not known or one is all but alone and has the dye's own data. */
+function presentForms(name: string, { forms, extinction, quantumYield, lifetimeNs }: Dye, { pH }: Host): PresentForm[] {
+  const whole: PresentForm = { name, share: 1, extinction, quantumYield, lifetimeNs };
+  if (forms.length === 0 || pH === null || !Number.isFinite(pH)) return [whole];
+  const shares = formShares(
+    pH,
+    forms.flatMap(({ pKa }) => pKa ?? []),
+  );
+  const present = shares.map((share) => (share >= LEAST_SHARE ? share : 0));
+  const total = present.reduce((a, b) => a + b, 0);
+  const last = forms.length - 1;
+  if (present[last] === total) return [whole];
+  return forms.flatMap((form, i): PresentForm[] =>
+    present[i] === 0
+      ? []
+      : [
+          {
+            name: `${name} ${form.name}`,
+            formOf: name,
+            share: present[i] / total,
+            extinction: form.extinction,
+            quantumYield: form.quantumYield,
+            lifetimeNs: i === last ? lifetimeNs : null,
+          },
+        ],
+  );
+}
+
+function formNote(name: string, forms: readonly PresentForm[], { pH }: Host): string {
+  const shares = forms.map(
+    (form) => `${Number((100 * form.share).toPrecision(3))} % ${form.name.slice(name.length + 1)}`,
+  );
+  return (
+    `${name} at pH ${pH} is ${shares.join(', ')} (pKa, extinctions and yields: Sjöback, Nygren & Kubista 1995; other band shapes are a model). ` +
+    'Each form has its measured yield, which holds what it gives to another form while excited; all emit one spectrum. Forms below 0.1 % are left out'
+  );
+}
+
+function quench({ quenching }: Dye, concentration: number): QuenchingDescription | null {
+  if (quenching === null) return null;
+  const { law, most, source } = quenching;
+  return { ...selfQuenching(law, concentration), law: lawWords(law), source, strength: concentration, most };
+}
+
+function lawWords(law: QuenchingLaw): string {
+  switch (law.kind) {
+    case 'transfer-to-dimers':
+      return `transfer to dark dimers, R₀ ${law.radiusNm} nm, K ${law.pairing} L/mol`;
+    case 'half-strength':
+      return '1/(1 + (c/c½)²)';
+    case 'stern-volmer':
+      return '1/(1 + K c)';
+    case 'perrin':
+      return 'exp(−c/c₀)';
+  }
+}
+
+/** Where data are taken to hold when the design says no temperature, °C. */
+const USUAL_C = 25;
+
+/** Factor on the yield at the temperature of the host. */
+function atTemperature(
+  name: string,
+  { temperature, quantumYield }: Dye,
+  { temperatureC }: Host,
+  path: DesignPath,
+  reading: Reading,
+): { factor: number; notes: readonly string[] } {
+  if (temperatureC === null || !Number.isFinite(temperatureC) || Math.abs(temperatureC - USUAL_C) < 0.01)
+    return { factor: 1, notes: [] };
+  if (temperature === null) {
+    return { factor: 1, notes: [`${name}: no data on its yield against temperature, taken as near 25 °C`] };
+  }
+  const { fallPerKelvin, rangeC, status } = temperature;
+  if (temperatureC < rangeC[0] || temperatureC > rangeC[1]) {
+    reading.report({
+      code: 'caution',
+      severity: 'warning',
+      path,
+      problem: `the yield of ${name} against temperature is carried on beyond its data`,
+      found: `${Number(temperatureC.toPrecision(4))} °C`,
+      expected: `${rangeC[0]} to ${rangeC[1]} °C`,
+    });
+  }
+  const warm = yieldAtTemperature(quantumYield, activationEnergy(quantumYield, fallPerKelvin), temperatureC);
+  const words = `${name}: yield ${Number((100 * warm).toPrecision(3))} % at ${Number(temperatureC.toPrecision(4))} °C, ${100 * quantumYield} % at 25 °C (${status})`;
+  return { factor: warm / quantumYield, notes: [words] };
+}
+
+function molarConcentration(strength: DyeStrength, dye: Dye, path: DesignPath, reading: Reading): number {
   if (strength.kind === 'concentration') return strength.value;
   if (strength.kind === 'massConcentration') {
     if (dye.molarMassGPerMol !== null) return strength.value / dye.molarMassGPerMol;
@@ -89,51 +189,6 @@ function molarConcentration(strength: DyeStrength, dye: Dye, path: Named<unknown
   return Number.NaN;
 }
 
-function reportStrength(expected: string, path: Named<unknown>['path'], reading: Reading): void {
+function reportStrength(expected: string, path: DesignPath, reading: Reading): void {
   reading.report({ code: 'quantity', path, problem: 'the strength is of the wrong kind for this dye', expected });
-}
-
-function libraryDye(name: string, path: Named<unknown>['path'], { base, pH }: Host, reading: Reading): Dye {
-  const measured = dyeSolvents(name);
-  const solvent = measured.includes(base) ? base : nearestSolvent(base, measured);
-  const data = readDye(name, solvent);
-  if (solvent !== base) {
-    const host = base === 'custom' ? 'a material of your own' : base;
-    reading.report({
-      code: 'caution',
-      severity: 'warning',
-      path,
-      problem: `the library has no spectra of ${name} in ${host}; those in ${solvent} are used, peaks and yield may differ`,
-      found: host,
-      expected: measured.join(', '),
-    });
-  }
-  if (data.pHRange !== null) cautionAboutPH(name, data.pHRange, pH, path, reading);
-  return {
-    extinction: data.extinction,
-    absorption: null,
-    emission: { kind: 'spectrum', ...data.emission },
-    quantumYield: data.quantumYield,
-    lifetimeNs: data.lifetimeNs,
-    molarMassGPerMol: data.molarMassGPerMol,
-  };
-}
-
-function cautionAboutPH(
-  name: string,
-  [low, high]: readonly [number, number],
-  pH: number | null,
-  path: Named<unknown>['path'],
-  reading: Reading,
-): void {
-  // A pH that cannot be has been told already.
-  if (pH !== null && (Number.isNaN(pH) || pH < 0 || pH > 14 || (pH >= low && pH <= high))) return;
-  reading.report({
-    code: 'caution',
-    severity: 'warning',
-    path,
-    problem: `yield and spectra of ${name} are those of the form it has between pH ${low} and pH ${high}`,
-    found: pH === null ? 'no pH' : `pH ${pH}`,
-    expected: `pH ${low} to ${high}`,
-  });
 }

@@ -8,15 +8,18 @@ import {
   solidNames,
   solventNames,
 } from '../materials/library.js';
-import { type Dye, describeOwnDye, dissolveDye } from './describe-dyes.js';
+import { dissolveDye } from './describe-dyes.js';
 import { describeScatterer } from './describe-scatterers.js';
 import type { MediumDescription } from './description.js';
 import type { DesignRecord } from './design-fields.js';
+import type { Dye, Host } from './dye.js';
 import type { DesignPath } from './fault.js';
 import type { Named } from './form-record.js';
 import type { Reference } from './form-scalars.js';
 import type { MediumEntry, MediumRecord } from './media-fields.js';
+import { mixSolvents } from './mix-solvents.js';
 import { checkReference } from './names.js';
+import { describeOwnDye } from './own-dye.js';
 import { checkAscending, pointCurve } from './point-curve.js';
 import type { Reading } from './reading.js';
 
@@ -75,11 +78,38 @@ function describeMedium(
   const { fields } = value;
   const base = describeBase(fields, path, reading);
   // The dyes are looked at even when the base is unknown, so that all faults come at once.
-  const host = { base: base?.base ?? 'custom', pH: fields.pH };
-  const dyes = fields.dyes.flatMap((dye) => dissolveDye(dye, ownDyes, host, reading) ?? []);
+  const host = hostOf(base, fields);
+  const dissolved = fields.dyes.map((dye) => dissolveDye(dye, ownDyes, host, reading));
   const hostDensity = base?.thermal?.densityKgPerM3 ?? null;
   const scatterers = fields.scatterers.flatMap((entry) => describeScatterer(entry, hostDensity, reading) ?? []);
-  return base && { name, path, ...base, dyes, scatterers };
+  if (base === null) return null;
+  const notes = [...(base.notes ?? []), ...dissolved.flatMap((one) => one.notes)];
+  return {
+    name,
+    path,
+    ...base,
+    dyes: dissolved.flatMap(({ dyes }) => dyes),
+    scatterers,
+    ...(notes.length === 0 ? {} : { notes }),
+    ...(fields.quenching === 'off' ? { quenching: 'off' } : {}),
+  };
+}
+
+const KELVIN = 273.15;
+const celsius = ({ temperature }: MediumRecord): number | null => (temperature === null ? null : temperature - KELVIN);
+
+function hostOf(base: Base | null, fields: MediumRecord): Host {
+  const most = base?.mixture?.reduce((a, b) => (b.share > a.share ? b : a));
+  const name = most?.solvent ?? base?.base ?? 'custom';
+  return {
+    base: name,
+    words: base?.mixture !== undefined ? base.base : name === 'custom' ? 'a material of your own' : name,
+    pure: base?.mixture === undefined,
+    kind: base?.kind ?? 'liquid',
+    pH: fields.pH,
+    temperatureC: celsius(fields),
+    quenching: fields.quenching === 'on',
+  };
 }
 
 function describeBase(fields: MediumRecord, path: DesignPath, reading: Reading): Base | null {
@@ -97,15 +127,83 @@ function describeBase(fields: MediumRecord, path: DesignPath, reading: Reading):
       thermal: null,
     };
   }
-  const base = solvent === null ? named(solid, 'solid', reading) : named(solvent, 'solvent', reading);
+  const celsiusNow = celsius(fields);
+  const base =
+    solvent === null
+      ? named(solid, reading)
+      : solvent.kind === 'one'
+        ? describeSolvent(solvent.one, celsiusNow, reading)
+        : describeMixture(solvent.shares, celsiusNow, [...path, 'solvent'], reading);
+  if (base?.thermal?.boilingPointC != null && celsiusNow !== null && celsiusNow >= base.thermal.boilingPointC) {
+    const found = `${Number(celsiusNow.toPrecision(4))} °C`;
+    const expected = `below ${base.thermal.boilingPointC} °C, where ${base.base} boils at 101.325 kPa`;
+    reading.report({
+      code: 'range',
+      path: [...path, 'temperature'],
+      problem: 'the liquid would boil',
+      found,
+      expected,
+    });
+  }
   return base && { ...base, ...(absorption === null ? {} : { absorption: pointCurve(absorption, 'hold') }) };
 }
 
-function named(material: Reference | null, kind: 'solid' | 'solvent', reading: Reading): Base | null {
+function named(material: Reference | null, reading: Reading): Base | null {
   if (material === null) return null;
-  const names = kind === 'solid' ? solidNames() : solventNames();
-  if (!checkReference(material, names, `no ${kind} of the library has this name`, reading)) return null;
+  if (!checkReference(material, solidNames(), 'no solid of the library has this name', reading)) return null;
   return libraryMaterial(material.name);
+}
+
+const knownSolvent = (solvent: Reference, reading: Reading, at?: 'key'): boolean =>
+  checkReference(solvent, solventNames(), 'no solvent of the library has this name', reading, at);
+
+function describeSolvent(solvent: Reference, temperatureC: number | null, reading: Reading): Base | null {
+  if (!knownSolvent(solvent, reading)) return null;
+  const warm = solventAt(solvent.name, temperatureC);
+  const cold = warm.thermal?.indexPerKelvin ?? null;
+  const notes =
+    temperatureC !== null && cold === null
+      ? [`${solvent.name}: index taken as near 25 °C, its change is not held`]
+      : [];
+  return { ...fromLibrary(warm), ...(notes.length === 0 ? {} : { notes }) };
+}
+
+/** Where library data hold, °C. */
+const DATA_C = 25;
+
+/** A solvent at a temperature: its index moves by dn/dT, and heating starts from there; all else stays as at 25 °C. */
+function solventAt(name: string, temperatureC: number | null): MaterialData {
+  const data = readSolvent(name);
+  if (temperatureC === null || !Number.isFinite(temperatureC)) return data;
+  const shift = (data.thermal?.indexPerKelvin ?? 0) * (temperatureC - DATA_C);
+  const thermal = data.thermal && { ...data.thermal, temperatureC };
+  return { ...data, index: (nm) => data.index(nm) + shift, thermal };
+}
+
+/** What shares may miss of 100 %: rounding of thirds. */
+const SHARE_SLACK = 2e-3;
+
+function describeMixture(
+  shares: readonly Named<number>[],
+  temperatureC: number | null,
+  path: DesignPath,
+  reading: Reading,
+): Base | null {
+  const known = shares.filter((share) => knownSolvent(share, reading, 'key'));
+  const sum = shares.reduce((total, { value }) => total + value, 0);
+  if (shares.length < 2 || Math.abs(sum - 1) > SHARE_SLACK) {
+    const problem =
+      shares.length < 2 ? 'a mixture needs two solvents' : 'the shares of the solvents do not sum to 100 %';
+    const found = shares.length < 2 ? `${shares.length}` : `${Number((100 * sum).toPrecision(4))} %`;
+    if (!Number.isNaN(sum))
+      reading.report({ code: 'range', path, problem, found, expected: 'shares by volume that sum to 100 %' });
+    return null;
+  }
+  if (known.length < shares.length) return null;
+  return mixSolvents(
+    shares.map(({ name, value }) => ({ solvent: name, share: value / sum })),
+    (name) => solventAt(name, temperatureC),
+  );
 }
 
 function reportMisplaced(field: string, owner: string, path: DesignPath, reading: Reading): void {

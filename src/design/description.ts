@@ -62,19 +62,44 @@ export interface MediumDescription {
   readonly scatterers: readonly ScattererDescription[];
   /** Heat data, null where the library has none. */
   readonly thermal: ThermalProperties | null;
+  /** Solvents of a mixture with their shares by volume before mixing; left out for one material. */
+  readonly mixture?: readonly { readonly solvent: string; readonly share: number }[];
+  /** Self-quenching switched off by the design. */
+  readonly quenching?: 'off';
+  /** What was taken for granted about the medium, for people to read. */
+  readonly notes?: readonly string[];
 }
 
 export interface DissolvedDye {
   readonly name: string;
+  /** The dye whose protolytic form this is; left out where forms are not told apart. */
+  readonly formOf?: string;
   /** mol/L; null for a dye given directly by an absorption coefficient. */
   readonly concentration: number | null;
   /** Napierian absorption at this strength, 1/mm. */
   readonly absorption: Curve;
-  /** 0..1, per absorbed photon. */
+  /** 0..1, per absorbed photon, as traced: at this strength, pH and temperature. */
   readonly quantumYield: number;
+  /** The same before the dye's own crowding lowers it; left out where nothing does. */
+  readonly diluteYield?: number;
+  /** How the dye quenches itself at this strength; left out where that is not modelled. */
+  readonly quenching?: QuenchingDescription;
   readonly emission: EmissionDescription;
   /** Fluorescence lifetime, ns, null when unknown. */
   readonly lifetimeNs: number | null;
+}
+
+/** What became of the yield, for people to read. */
+export interface QuenchingDescription {
+  /** Yield at this strength over that of the dilute dye. */
+  readonly factor: number;
+  /** Share of the molecules that are bound in dark dimers. */
+  readonly dimerShare: number;
+  readonly law: string;
+  readonly source: string;
+  /** mol/L of the dye, in all its forms, and up to which the constants are meant. */
+  readonly strength: number;
+  readonly most: number;
 }
 
 /** What turns light aside within a medium. Several add up. */

@@ -2,10 +2,17 @@
 import { optional, required, withDefault } from './form.js';
 import { either, mapped } from './form-either.js';
 import { quantity, quantityOf } from './form-quantities.js';
-import { mapOf, record } from './form-record.js';
+import { mapOf, type Named, record } from './form-record.js';
 import { oneWord, type Reference, reference } from './form-scalars.js';
 import { scatterersForm } from './scatterer-fields.js';
 import { rowsOf, type SpectralRows, spectral, WAVELENGTH_RANGE } from './spectral-form.js';
+import {
+  type EmissionFile,
+  type ExtinctionFile,
+  emissionFileForm,
+  extinctionFileForm,
+  quenchingForm,
+} from './spectrum-fields.js';
 
 const wavelength = quantity('wavelength', WAVELENGTH_RANGE);
 
@@ -28,14 +35,36 @@ const absorption = optional(
 const mediumRecord = record(
   'solvent, solid or index, with dyes',
   {
-    solvent: optional(reference('a solvent of the library', ['ethanol', 'water']), 'A solvent of the library.'),
+    solvent: optional(
+      either<SolventEntry>({
+        scalar: mapped(reference('a solvent of the library', ['ethanol', 'water']), (one) => ({ kind: 'one', one })),
+        map: mapped(
+          mapOf('solvents, each with its share by volume', quantity('fraction', { above: 0, below: 1 })),
+          (shares) => ({ kind: 'mixture', shares }),
+        ),
+      }),
+      'A solvent of the library, or several with their shares by volume before mixing, which sum to 100 %.',
+    ),
     solid: optional(reference('a solid of the library', ['pmma']), 'A glass, crystal or polymer of the library.'),
     index: optional(
       spectral(quantity('number', { min: 1, max: 5 }), 'index'),
       'Refractive index of a material of your own, or a list of [wavelength, index] pairs.',
     ),
     kind: optional(oneWord('liquid', 'solid'), 'What a material given by `index` is. Default: liquid.'),
-    pH: optional(quantity('number', { min: 0, max: 14 }), 'pH of a solution in a solvent.'),
+    pH: optional(
+      quantity('number', { min: 0, max: 14 }),
+      'pH of a solution in a solvent: mixes the protolytic forms of a dye where the library knows them.',
+    ),
+    temperature: optional(
+      quantity('temperature', { min: 173.15, max: 673.15 }),
+      'Temperature of the medium. Moves the yield of dyes with data, and the index of solvents. Left out: data as they are, about 25 °C.',
+    ),
+    quenching: withDefault(
+      oneWord('on', 'off'),
+      'on',
+      'on',
+      'Whether dyes of the library quench themselves at their strength; off gives the yield of dilute dyes.',
+    ),
     absorption,
     dyes,
     scatterers: withDefault(
@@ -47,6 +76,11 @@ const mediumRecord = record(
   },
   { exactlyOne: [['solvent', 'solid', 'index']] },
 );
+
+/** What a solution is made with. */
+export type SolventEntry =
+  | { readonly kind: 'one'; readonly one: Reference }
+  | { readonly kind: 'mixture'; readonly shares: readonly Named<number>[] };
 
 export type MediumRecord = ReturnType<typeof mediumRecord.read>;
 export type DyeStrength = ReturnType<typeof strength.read>;
@@ -67,26 +101,38 @@ export const mediaForm = mapOf(
   }),
 );
 
+type RowsEntry = { readonly kind: 'rows'; readonly rows: SpectralRows };
+export type ExtinctionEntry = RowsEntry | { readonly kind: 'file'; readonly fields: ExtinctionFile };
+export type EmissionEntry = RowsEntry | { readonly kind: 'file'; readonly fields: EmissionFile };
+
+const rowsEntry = (rows: SpectralRows): RowsEntry => ({ kind: 'rows', rows });
+
 const dyeRecord = record(
   'extinction or absorption, emission and yield',
   {
     extinction: optional(
-      spectral(quantity('extinction', { min: 0 }), 'extinction'),
-      'Decadic molar extinction, or a list of [wavelength, extinction] pairs, linear between them and held at the ends.',
+      either<ExtinctionEntry>({
+        scalar: mapped(quantity('extinction', { min: 0 }), (constant) => rowsEntry([[null, constant]])),
+        list: mapped(rowsOf(quantity('extinction', { min: 0 }), 'extinction'), rowsEntry),
+        map: mapped(extinctionFileForm, (fields) => ({ kind: 'file', fields })),
+      }),
+      'Decadic molar extinction, or a list of [wavelength, extinction] pairs, linear between them and held at the ends, or a file.',
     ),
     absorption: optional(
       spectral(quantity('absorption', { min: 0 }), 'absorption'),
       'Napierian absorption at strength 1, in place of an extinction: media then give the dye as a plain factor.',
     ),
     emission: required(
-      either<SpectralRows>({
-        scalar: mapped(wavelength, (line): SpectralRows => [[line, 1]]),
-        list: rowsOf(quantity('number', { min: 0 }), 'photons per nm'),
+      either<EmissionEntry>({
+        scalar: mapped(wavelength, (line) => rowsEntry([[line, 1]])),
+        list: mapped(rowsOf(quantity('number', { min: 0 }), 'photons per nm'), rowsEntry),
+        map: mapped(emissionFileForm, (fields) => ({ kind: 'file', fields })),
       }),
-      'One wavelength, or a list of [wavelength, relative photons per nm] pairs, linear between them, nothing outside.',
+      'One wavelength, or a list of [wavelength, relative photons per nm] pairs, linear between them, nothing outside, or a file.',
     ),
     yield: required(quantity('fraction', { min: 0, max: 1 }), 'Quantum yield: photons emitted per photon absorbed.'),
     lifetime: optional(quantity('lifetime', { above: 0 }), 'Fluorescence lifetime.'),
+    quenching: optional(quenchingForm, 'How the dye quenches itself as it gets stronger. Left out: not at all.'),
     'molar-mass': optional(quantity('molarMass', { above: 0 }), 'Molar mass, needed where a strength is given in g/L.'),
   },
   { exactlyOne: [['extinction', 'absorption']] },

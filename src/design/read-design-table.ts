@@ -2,7 +2,7 @@
 import { readCompanionFile } from './read-companion-file.js';
 import type { TableFileReader } from './table-file.js';
 
-const RULES = { what: 'table', largestBytes: 5_000_000, pattern: /\.csv$/i } as const;
+const RULES = { what: 'table', largestBytes: 5_000_000, pattern: /\.(csv|jdx|dx)$/i } as const;
 
 /** Reader of the tables of the design in `designFile`. */
 export const tableReader =

@@ -74,7 +74,7 @@ export function createFlight(scene: Scene, graph: RegionGraph, desk: FlightDesk)
   const ways = graph.ways;
   const others = graph.stepwise;
   const maxAbsorbers = scene.maxAbsorbers;
-  const { index, attenuation, absorberCount, absorberShare, dyeYield, dyeSpectrum } = scene;
+  const { index, attenuation, absorberCount, absorberShare, dyeYield, diluteYield, dyeSpectrum } = scene;
   const { energyQuanta, faceSlot, ownerSlot, dyeSlot, faceRecorderOut } = scene;
   /** Where nothing scatters, nothing is asked. */
   const turbid = scene.maxScatterers > 0;
@@ -481,7 +481,7 @@ export function createFlight(scene: Scene, graph: RegionGraph, desk: FlightDesk)
         const survival = units[draw];
         draw = (draw + 1) | 0;
         if (survival >= dyeYield[dye]) {
-          end = slot + DYE_SLOT.lostPump + light;
+          end = (survival < diluteYield[dye] ? slot + DYE_SLOT.quenchedPump : slot + DYE_SLOT.lostPump) + light;
           break;
         }
         // Alias table (drawIndex); cell or other, by arithmetic: a comparison would often be guessed wrong.

@@ -1,4 +1,6 @@
 import { linearCurve } from '../numerics/interpolate.js';
+import { readDyeForms } from './dye-forms.js';
+import { readYieldTemperature } from './dye-temperature.js';
 import { type DyeData, unknownName } from './material-data.js';
 import { numberIn, type Row, readTable } from './read-table.js';
 
@@ -49,11 +51,12 @@ export function readDye(dye: string, solvent: string): DyeData {
   const nm = rows.map((row) => numberIn(row, 'wavelength_nm'));
   const column = (name: string) => rows.map((row) => numberIn(row, name));
   const emission = column('emission_photons_per_nm_rel');
+  const extinction = linearCurve(nm, column('epsilon_L_per_mol_cm'), { below: 'hold', above: 'zero' });
   return {
     name: dye,
     solvent,
     molarMassGPerMol,
-    extinction: linearCurve(nm, column('epsilon_L_per_mol_cm'), { below: 'hold', above: 'zero' }),
+    extinction,
     emission: {
       photonsPerNm: linearCurve(nm, emission, { below: 'zero', above: 'zero' }),
       ...litRange(nm, emission),
@@ -63,6 +66,9 @@ export function readDye(dye: string, solvent: string): DyeData {
     source: sourceOf(notes, file),
     status: summary.caution === '' ? summary.spectra_status : `${summary.spectra_status}; ${summary.caution}`,
     pHRange,
+    rangeNm: [nm[0], nm[nm.length - 1]],
+    forms: readDyeForms(dye, solvent, extinction),
+    temperature: readYieldTemperature(dye),
   };
 }
 

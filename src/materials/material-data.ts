@@ -23,6 +23,8 @@ export interface ThermalData {
   readonly conductivityWPerMK: number;
   readonly viscosityMPaS: number;
   readonly boilingPointC: number | null;
+  /** Change of the index a kelvin; null where unknown. */
+  readonly indexPerKelvin: number | null;
   /** Closed cup, °C, the lowest value given; null for what does not burn or has no figure. */
   readonly flashPointC: number | null;
   readonly temperatureC: number;
@@ -44,6 +46,43 @@ export interface DyeData {
   readonly status: string;
   /** pH over which the spectra and yield hold; null where pH does not matter. */
   readonly pHRange: readonly [number, number] | null;
+  /** Wavelengths the absorption was measured or modelled at, nm. */
+  readonly rangeNm: readonly [number, number];
+  /** Forms by protonation, most protonated first; empty where the library knows one form only. */
+  readonly forms: readonly DyeForm[];
+  readonly temperature: YieldTemperature | null;
+}
+
+/** One protolytic form of a dye. All forms emit with the spectrum of the dye. */
+export interface DyeForm {
+  readonly name: string;
+  /** Of the loss of the next proton; null for the last form. */
+  readonly pKa: number | null;
+  /** Decadic molar extinction, L/(mol cm). */
+  readonly extinction: Curve;
+  /** Per photon this form absorbs, whatever form emits in the end. */
+  readonly quantumYield: number;
+}
+
+/** Constants of self-quenching by transfer to dark dimers. */
+export interface QuenchingData {
+  readonly radiusNm: number;
+  readonly dimerRadiusNm: number;
+  /** K = [dimer]/[single]², L/mol. */
+  readonly pairing: number;
+  /** mol/L up to which the constants are meant. */
+  readonly most: number;
+  readonly status: string;
+  readonly source: string;
+}
+
+/** How the yield falls with temperature. */
+export interface YieldTemperature {
+  /** Share of itself the yield loses a kelvin at 25 °C. */
+  readonly fallPerKelvin: number;
+  readonly rangeC: readonly [number, number];
+  readonly status: string;
+  readonly source: string;
 }
 
 /** What the library knows of a metal or of another material of thin films. */

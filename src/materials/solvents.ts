@@ -60,6 +60,7 @@ function solventThermal(name: string): ThermalData | null {
     conductivityWPerMK: numberIn(row, 'thermal_conductivity_W_per_mK'),
     viscosityMPaS: numberIn(row, 'viscosity_mPa_s'),
     boilingPointC: numberIn(row, 'boiling_point_C'),
+    indexPerKelvin: row.dn_dT_per_K === '' ? null : numberIn(row, 'dn_dT_per_K'),
     flashPointC: flashPoint(wanted),
     temperatureC: numberIn(row, 'temperature_C'),
     source: row.source,

@@ -84,7 +84,13 @@ export function timeToBoiling(
   };
 }
 
-const HEAT: ReadonlySet<Fate> = new Set(['lost-in-dye', 'stokes-heat', 'absorbed-by-solvent', 'absorbed-by-solid']);
+const HEAT: ReadonlySet<Fate> = new Set([
+  'lost-in-dye',
+  'quenched',
+  'stokes-heat',
+  'absorbed-by-solvent',
+  'absorbed-by-solid',
+]);
 
 function dyedParts({ parts, media }: Description): { part: string; medium: MediumDescription }[] {
   return parts.flatMap(({ name: part, medium: name }) => {

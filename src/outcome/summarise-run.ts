@@ -81,8 +81,10 @@ export function summariseRun(result: TraceResult, about: RunAbout): { record: Ru
     checks: [...result.warnings, ...all.filter((field) => !hasMeasure(field)).map(leftOut)],
     cautions: cautionsFor({
       pumpWatts,
-      solvents: partMedia(result).flatMap(({ kind, base }) => (kind === 'liquid' ? [base] : [])),
-      dyes: partMedia(result).flatMap(({ dyes }) => dyes.map(({ name }) => name)),
+      solvents: partMedia(result).flatMap(({ kind, base, mixture }) =>
+        kind === 'liquid' ? (mixture?.map(({ solvent }) => solvent) ?? [base]) : [],
+      ),
+      dyes: partMedia(result).flatMap(({ dyes }) => dyes.map(({ name, formOf = name }) => formOf)),
     }),
   };
   return { record, arrays: runArrays(result, fields, pumpWatts) };

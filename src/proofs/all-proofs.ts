@@ -1,5 +1,7 @@
 import { beamSpreadProof } from './beam-spread-proof.js';
 import { beerLambertProof } from './beer-lambert-proof.js';
+import { birksProof } from './birks-proof.js';
+import { brightnessProof } from './brightness-proof.js';
 import { diffuseFresnelProof } from './diffuse-fresnel-proof.js';
 import { energyProof } from './energy-proof.js';
 import { escapeConeProof } from './escape-cone-proof.js';
@@ -7,6 +9,7 @@ import { fresnelProof } from './fresnel-proof.js';
 import { glassPlateProof } from './glass-plate-proof.js';
 import { glassSphereProof } from './glass-sphere-proof.js';
 import { halfSpaceProof } from './half-space-proof.js';
+import { innerFilterProof } from './inner-filter-proof.js';
 import { integratingSphereProof } from './integrating-sphere-proof.js';
 import { lensProof } from './lens-proof.js';
 import { lightBoxProof } from './light-box-proof.js';
@@ -14,12 +17,14 @@ import { meanChordProof } from './mean-chord-proof.js';
 import { meshProof } from './mesh-proof.js';
 import { metalMirrorProof } from './metal-mirror-proof.js';
 import { mixingRodProof } from './mixing-rod-proof.js';
+import { mixtureProof } from './mixture-proof.js';
 import { parallelBeamProof } from './parallel-beam-proof.js';
 import { photometryProof } from './photometry-proof.js';
 import { polarisedLightProof } from './polarised-light-proof.js';
 import { polarisingFilmsProof } from './polarising-films-proof.js';
 import { prismProof } from './prism-proof.js';
 import type { Proof } from './proof.js';
+import { quenchingProof } from './quenching-proof.js';
 import { reciprocityProof } from './reciprocity-proof.js';
 import { reflectorProof } from './reflector-proof.js';
 import { scatteringMediumProof } from './scattering-medium-proof.js';
@@ -56,6 +61,11 @@ export const allProofs: readonly Proof[] = [
   slabProof,
   halfSpaceProof,
   twoColourSlabProof,
+  birksProof,
+  innerFilterProof,
+  quenchingProof,
+  brightnessProof,
+  mixtureProof,
   scatteringMediumProof,
   integratingSphereProof,
   lightBoxProof,

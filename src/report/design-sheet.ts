@@ -20,7 +20,10 @@ export interface DesignSheet {
       readonly dye: string;
       readonly millimolesPerLitre: number | null;
       readonly quantumYield: number;
+      readonly diluteYield: number;
     }[];
+    /** What was taken for granted. */
+    readonly notes: readonly string[];
   }[];
   readonly finishes: readonly { readonly finish: string; readonly words: string }[];
   readonly faces: readonly {

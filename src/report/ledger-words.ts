@@ -15,6 +15,7 @@ export function placedWords(row: Ending): string {
 function heatWords({ fate, light, by }: Ending): string {
   const of = light === 'pump' ? 'pump light' : 'light taken back';
   const dye = by ?? 'the dye';
+  if (fate === 'quenched') return `${of} quenched in ${dye}`;
   return fate === 'stokes-heat' ? `Stokes heat of ${of} in ${dye}` : `${of} not re-emitted by ${dye}`;
 }
 

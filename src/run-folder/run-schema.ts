@@ -60,6 +60,7 @@ export const fateSlotSchema = z.object({
       'absorbed-by-solid',
       'absorbed-by-solvent',
       'lost-in-dye',
+      'quenched',
       'stokes-heat',
       'trapped',
     ]),

@@ -5,31 +5,41 @@ import type { BeamFrame } from './compile-pumps.js';
 import type { VoxelPlan } from './compile-recorders.js';
 import { absorptionAt } from './scattering-at.js';
 
-/** Dyes at this strength begin to quench themselves and pair up (common practice, no source), which is not modelled; mol/L. */
+/** Dyes without constants of quenching begin to quench themselves at about this strength (common practice, no source); mol/L. */
 const STRONG = 1e-3;
 /** Voxels longer than this share of the 1/e depth, or of a Gaussian beam's 1/e² radius, blur the peak. */
 const COARSE = 0.5;
 
+/** Dyes beyond the strengths that their constants of quenching, if there are any, were meant for. */
 export function strengthFaults({ media, parts }: Description): Fault[] {
   const used = new Set(parts.map(({ medium }) => medium));
   return [...media.values()].flatMap((medium): Fault[] => {
-    if (!used.has(medium.name)) return [];
-    return medium.dyes.flatMap(({ name, concentration }): Fault[] => {
-      if (concentration === null || concentration <= STRONG) return [];
+    if (!used.has(medium.name) || medium.quenching === 'off') return [];
+    const told = new Set<string>();
+    return medium.dyes.flatMap((dye): Fault[] => {
+      const { quenching } = dye;
+      const name = dye.formOf ?? dye.name;
+      const concentration = quenching?.strength ?? dye.concentration;
+      if (concentration === null || concentration <= (quenching?.most ?? STRONG) || told.has(name)) return [];
+      told.add(name);
       return [
         {
           code: 'caution',
           severity: 'warning',
           path: medium.path,
           problem:
-            'at this strength dyes quench themselves and form dimers, which is not modelled: output will read high',
-          found: `${Number((1000 * concentration).toPrecision(3))} mmol/L of ${name}`,
-          expected: 'about 1 mmol/L or less',
+            quenching === undefined
+              ? 'at this strength dyes quench themselves and form dimers; no constants are held for this one, so output will read high'
+              : 'at this strength dyes quench themselves beyond what the constants in use were meant for',
+          found: `${millimoles(concentration)} of ${name}`,
+          expected: `${quenching === undefined ? 'about ' : ''}${millimoles(quenching?.most ?? STRONG)} or less`,
         },
       ];
     });
   });
 }
+
+const millimoles = (concentration: number): string => `${Number((1000 * concentration).toPrecision(3))} mmol/L`;
 
 /** Absorbed power falls off faster than the voxels can show. */
 export function voxelFaults(description: Description, voxels: VoxelPlan, beams: readonly BeamFrame[]): Fault[] {

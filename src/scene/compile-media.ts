@@ -12,7 +12,10 @@ export interface CompiledMedia {
   readonly maxAbsorbers: number;
   readonly absorberCount: number[];
   readonly absorberShare: Float64Array;
+  /** Yield at the strength in use. */
   readonly dyeYield: Float64Array;
+  /** Yield of the dilute dye; what lies between the two is quenched. */
+  readonly diluteYield: Float64Array;
   readonly dyeSpectrum: Int32Array;
   readonly scatterers: CompiledScatterers;
   /** [medium · wavelengths]: share of the attenuation that scatters. */
@@ -32,13 +35,15 @@ export function compileMedia(description: Description, grid: WavelengthGrid, poo
   const attenuation = new Float64Array(media.length * cells);
   const absorberShare = new Float64Array(media.length * maxAbsorbers * cells);
   const dyeYield = new Float64Array(media.length * maxAbsorbers);
+  const diluteYield = new Float64Array(media.length * maxAbsorbers);
   const dyeSpectrum = new Int32Array(media.length * maxAbsorbers);
   const scatterers = compileScatterers(media, grid);
   const scatterShare = new Float64Array(media.length * cells);
   media.forEach((medium, m) => {
-    medium.dyes.forEach(({ emission, quantumYield }, d) => {
+    medium.dyes.forEach(({ emission, quantumYield, diluteYield: dilute = quantumYield }, d) => {
       const slot = m * maxAbsorbers + d + 1;
       dyeYield[slot] = quantumYield;
+      diluteYield[slot] = dilute;
       dyeSpectrum[slot] = pool.add(
         emission.kind === 'line'
           ? linePhotons(grid, emission.wavelengthNm, 0)
@@ -77,6 +82,7 @@ export function compileMedia(description: Description, grid: WavelengthGrid, poo
     absorberCount,
     absorberShare,
     dyeYield,
+    diluteYield,
     dyeSpectrum,
     scatterers,
     scatterShare,

@@ -105,6 +105,7 @@ export function compileScene(description: Description): CompiledScene {
     absorberCount: sharedInts(media.absorberCount),
     absorberShare: sharedDoubles(media.absorberShare),
     dyeYield: sharedDoubles(media.dyeYield),
+    diluteYield: sharedDoubles(media.diluteYield),
     dyeSpectrum: sharedInts(media.dyeSpectrum),
     maxScatterers: media.scatterers.maxScatterers,
     scatterShare: sharedDoubles(media.scatterShare),

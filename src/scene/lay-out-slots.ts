@@ -60,6 +60,7 @@ export function layOutSlots(
       dyeSlot[owner * media.maxAbsorbers + d + 1] = add(
         ...both('lost-in-dye', ownerName(owner), dye.name),
         ...both('stokes-heat', ownerName(owner), dye.name),
+        ...both('quenched', ownerName(owner), dye.name),
       );
     });
   });

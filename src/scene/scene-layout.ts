@@ -107,7 +107,9 @@ export const enum DYE_SLOT {
   lostEmitted = 1,
   stokesPump = 2,
   stokesEmitted = 3,
-  COUNT = 4,
+  quenchedPump = 4,
+  quenchedEmitted = 5,
+  COUNT = 6,
 }
 /** Slots that every scene has. */
 export const enum SLOT {
@@ -217,6 +219,7 @@ export interface Scene {
   readonly absorberCount: Int32Array; // [medium]; absorber 0 is the bare solvent or solid, the others are dyes
   readonly absorberShare: Float64Array; // [(medium · maxAbsorbers + absorber) · wavelengths]: cumulative
   readonly dyeYield: Float64Array; // [medium · maxAbsorbers + absorber]
+  readonly diluteYield: Float64Array; // at least dyeYield; a photon drawn between the two is quenched
   readonly dyeSpectrum: Int32Array; // alias table of its emission
 
   // ---- scatterers of media; where none scatters, maxScatterers is 0 and only scatterShare has entries

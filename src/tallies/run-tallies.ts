@@ -18,7 +18,8 @@ export type Fate =
   | 'absorbed-by-finish' // where: face
   | 'absorbed-by-solid' // where: part
   | 'absorbed-by-solvent' // where: part
-  | 'lost-in-dye' // absorbed by a dye and not re-emitted; where: part, by: dye
+  | 'lost-in-dye' // absorbed by a dye and not re-emitted, as in a dilute solution; where: part, by: dye
+  | 'quenched' // absorbed by a dye, not re-emitted because its own kind is too near; where: part, by: dye
   | 'stokes-heat' // energy only: absorbed minus re-emitted photon energy; where: part, by: dye
   | 'trapped'; // goes round for ever between boundaries that absorb nothing; where: part
 

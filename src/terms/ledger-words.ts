@@ -14,7 +14,7 @@ export const GROUP_WORDS: Readonly<Record<Group, string>> = {
 
 /** What is wanted, what was lost before and after the dye, and what the dye itself keeps. */
 export function groupOf({ fate, light }: Pick<LedgerRow, 'fate' | 'light'>): Group {
-  if (fate === 'stokes-heat' || fate === 'lost-in-dye') return 'heat';
+  if (fate === 'stokes-heat' || fate === 'lost-in-dye' || fate === 'quenched') return 'heat';
   if (light === 'pump') return 'pump-lost';
   return fate === 'left-by-exit' ? 'output' : 'light-lost';
 }
@@ -38,6 +38,8 @@ export function fateWords({ fate, light, by }: Pick<LedgerRow, 'fate' | 'light' 
       return `absorbed by ${material(by) ?? 'the solvent'}`;
     case 'lost-in-dye':
       return `not re-emitted by ${by ?? 'the dye'}`;
+    case 'quenched':
+      return `quenched in ${by ?? 'the dye'}`;
     case 'stokes-heat':
       return `Stokes heat in ${by ?? 'the dye'}`;
     case 'trapped':

@@ -140,7 +140,7 @@ const WHERE = {
     also: ['fluorescence yield', 'yield'],
     means: 'chance that a dye gives back a photon it absorbed',
     formula: 'photons emitted ÷ photons absorbed',
-    assumes: 'the same at all wavelengths and strengths',
+    assumes: 'the same at all wavelengths; lowered by crowding and heat',
     source: IUPAC,
   },
   'stokes-shift': {

@@ -35,6 +35,7 @@ export const QUANTITY_KINDS = {
   numberDensity: kind([-3, 0, 0, 0, 0, 0, 0], '1/mm³', 9, 'a number per volume', '2e6 /mm³'),
   absorption: kind([-1, 0, 0, 0, 0, 0, 0], '1/mm', 3, 'an absorption per length', '0.2 /cm'),
   extinction: kind([2, 0, 0, -1, 0, 0, 0], 'L/(mol cm)', -1, 'a molar extinction', '50000 L/(mol cm)'),
+  molarVolume: kind([3, 0, 0, -1, 0, 0, 0], 'L/mol', -3, 'a volume per mole', '5 L/mol'),
   molarMass: kind([0, 1, 0, -1, 0, 0, 0], 'g/mol', -3, 'a molar mass', '332 g/mol'),
   time: kind([0, 0, 1, 0, 0, 0, 0], 's', 0, 'a time', '2 s'),
   lifetime: kind([0, 0, 1, 0, 0, 0, 0], 'ns', -9, 'a lifetime', '4 ns'),

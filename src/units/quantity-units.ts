@@ -68,5 +68,6 @@ export const UNITS: ReadonlyMap<string, Unit> = new Map([
   ['%', unit(PLAIN, -2)],
   ['K', unit(TEMPERATURE, 0)],
   ['°C', { ...unit(TEMPERATURE, 0), zeroAtKelvin: 273.15 }],
+  ['degC', { ...unit(TEMPERATURE, 0), zeroAtKelvin: 273.15 }],
   ['lm', unit(LUMINOUS_FLUX, 0)],
 ]);

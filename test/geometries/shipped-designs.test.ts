@@ -25,6 +25,7 @@ test('the shipped designs are these', () => {
     'beaded-converter',
     'box-with-bonded-dome',
     'box-with-white-back',
+    'buffered-water-cell',
     'edge-lit-plate',
     'pebble-block',
     'ring-pumped-hexagon',

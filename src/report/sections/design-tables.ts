@@ -32,10 +32,12 @@ export function designTables({ parts, pumps, planes }: Drawing, sheet: DesignShe
       dyes.length === 0
         ? '–'
         : dyes.map(
-            ({ dye, millimolesPerLitre, quantumYield }) =>
-              markup`${nameText(dye)}${millimolesPerLitre === null ? '' : ` ${significant(millimolesPerLitre, 4)} mmol/L`}, quantum yield ${significant(100 * quantumYield, 3)} % `,
+            ({ dye, millimolesPerLitre, quantumYield, diluteYield }, i) =>
+              markup`${i === 0 ? '' : '; '}${nameText(dye)}${millimolesPerLitre === null ? '' : ` ${significant(millimolesPerLitre, 4)} mmol/L`}, quantum yield ${significant(100 * quantumYield, 3)} %${diluteYield > quantumYield ? ` (${significant(100 * diluteYield, 3)} % dilute)` : ''}`,
           ),
     ]),
+  )}${sheet.media.flatMap(({ medium, notes }) =>
+    notes.map((note) => markup`<p class="note">${nameText(medium)}: ${note}.</p>`),
   )}${table(
     'Finishes',
     ['finish', 'what it does'],
