@@ -12,6 +12,7 @@ const SAMPLES = 8;
 /** Area, mm², of each cell of a recorder's map: of a face, what of it bounds its part. */
 export function mapMeasure(plan: RecorderPlan, graph: RegionGraph): Float64Array {
   const [cellsU, cellsV] = plan.cells;
+  if (plan.sphere !== null) return sphereMeasure(plan.sphere, cellsU, cellsV);
   const [[uLow, uHigh], [vLow, vHigh]] = plan.extent;
   const stepU = (uHigh - uLow) / cellsU;
   const stepV = (vHigh - vLow) / cellsV;
@@ -38,6 +39,21 @@ export function mapMeasure(plan: RecorderPlan, graph: RegionGraph): Float64Array
       }
       measure[iu + cellsU * iv] = (sum / SAMPLES ** 2) * stepU * stepV;
     }
+  }
+  return measure;
+}
+
+/** Cells of equal azimuth and polar angle on a sphere, exactly. */
+function sphereMeasure(
+  { radius, polar: [from, to] }: NonNullable<RecorderPlan['sphere']>,
+  cellsU: number,
+  cellsV: number,
+): Float64Array {
+  const edge = (row: number) => Math.cos(from + ((to - from) * row) / cellsV);
+  const measure = new Float64Array(cellsU * cellsV);
+  for (let row = 0; row < cellsV; row++) {
+    const area = ((radius ** 2 * 2 * Math.PI) / cellsU) * (edge(row) - edge(row + 1));
+    measure.fill(area, row * cellsU, (row + 1) * cellsU);
   }
   return measure;
 }

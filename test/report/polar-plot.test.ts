@@ -9,7 +9,7 @@ const lambertian = (watts: number) => {
     // Alternating azimuths average out.
     return (watts / Math.PI) * Math.cos(((polar + 0.5) * Math.PI) / 2 / polarCells) * (i % 2 === 0 ? 1.5 : 0.5);
   });
-  return { id: 'exit', polarCells, azimuthCells, wattsPerSr };
+  return { id: 'exit', polarCells, azimuthCells, polarToDeg: 90 as const, wattsPerSr, candela: wattsPerSr };
 };
 
 const points = (svg: string, className: string): number[][] => {
