@@ -1,5 +1,6 @@
 import { beamSpreadProof } from './beam-spread-proof.js';
 import { beerLambertProof } from './beer-lambert-proof.js';
+import { detectorProof } from './detector-proof.js';
 import { diffuseFresnelProof } from './diffuse-fresnel-proof.js';
 import { energyProof } from './energy-proof.js';
 import { escapeConeProof } from './escape-cone-proof.js';
@@ -39,6 +40,7 @@ export const allProofs: readonly Proof[] = [
   beamSpreadProof,
   surfaceScatterProof,
   viewFactorProof,
+  detectorProof,
   meanChordProof,
   parallelBeamProof,
   escapeConeProof,

@@ -17,7 +17,7 @@ export interface IntensityGrid {
 const JOINS = [
   [1, 1],
   [1, 3],
-  [1, 9],
+  [3, 3],
   [3, 9],
   [5, 9],
   [5, 18],
@@ -35,7 +35,7 @@ export function intensityGrid(angles: AnglesArray, lumens: number, photons: numb
   const join = JOINS.find((one) => photons / values(one) >= PHOTONS_PER_VALUE) ?? JOINS[JOINS.length - 1];
   const rows = polarCells / join[0];
   const columns = azimuthCells / join[1];
-  const cells = joined(angles, join);
+  const cells = roundedOff(joined(angles, join), (polarToDeg / rows) * (Math.PI / 180));
   const ring = (row: number) => mean(cells.map((column) => column[row]));
   // At the poles all azimuths are one direction.
   const first = endValue(ring(0), ring(1));
@@ -86,6 +86,24 @@ function joined(
         }
       }
       return sum / weights;
+    }),
+  );
+}
+
+/**
+ * Cells near a pole are slivers with few photons: there each value is the mean over as many neighbours round the pole as make it about as wide
+ * as it is long. Means of whole rings stay.
+ */
+function roundedOff(cells: readonly (readonly number[])[], step: number): readonly (readonly number[])[] {
+  const columns = cells.length;
+  const azimuth = (2 * Math.PI) / columns;
+  return cells.map((own, column) =>
+    own.map((_, row) => {
+      const wide = step / (azimuth * Math.sin((row + 0.5) * step));
+      const aside = Math.min(Math.floor((columns - 1) / 2), Math.floor(wide / 2));
+      let sum = 0;
+      for (let k = -aside; k <= aside; k++) sum += cells[(column + k + columns) % columns][row];
+      return sum / (2 * aside + 1);
     }),
   );
 }
