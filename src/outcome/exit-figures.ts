@@ -13,6 +13,8 @@ const ETENDUE = 'mm² sr';
 const LUMINANCE = 'cd/m²';
 /** Light this near to the normal stands for that along it. */
 const NORMAL_CONE_DEG = 10;
+/** Cells of azimuth taken as one for the effective étendue: fewer photons a cell would only add noise. */
+const AZIMUTHS_JOINED = 6;
 const MM2_PER_M2 = 1e6;
 
 export function exitFigures(
@@ -97,12 +99,22 @@ function effective(
     return { value: null, standardError: null, unit: ETENDUE, note };
   }
   const step = (angles.polarToDeg * Math.PI) / 180 / angles.polarCells;
+  const columns = angles.azimuthCells / AZIMUTHS_JOINED;
   const size = (cell: number) => {
-    const row = Math.floor(cell / angles.azimuthCells);
-    return projectedSolidAngle(row * step, (row + 1) * step, angles.azimuthCells);
+    const row = Math.floor(cell / columns);
+    return projectedSolidAngle(row * step, (row + 1) * step, columns);
   };
+  const [even, odd] = angles.halves.map(joinAzimuths);
   const note = `${words}; by direction alone, as if even over the exit`;
-  return figure(effectiveSize(angles.halves, size), index2 * area, note);
+  return figure(effectiveSize([even, odd], size), index2 * area, note);
+}
+
+function joinAzimuths(cells: Float64Array): Float64Array {
+  const joined = new Float64Array(cells.length / AZIMUTHS_JOINED);
+  cells.forEach((value, cell) => {
+    joined[Math.floor(cell / AZIMUTHS_JOINED)] += value;
+  });
+  return joined;
 }
 
 /** @param lumensPerEv lumens that one eV·ȳ a history stands for */

@@ -46,7 +46,7 @@ describe('shipped designs stay below the bound', () => {
     const reading = await readDesign(`${FOLDER}/${name}.yaml`);
     if (!reading.ok) throw new Error('faulty design');
     const { brightnessBoundShare: share, brightnessRatio: ratio } = figuresOf(
-      await traceHere(widened(reading.description), 4096),
+      await traceHere(widened(reading.description), 2048),
     );
     expect(share.value).toBeGreaterThan(0);
     expect((share.value ?? Number.NaN) - 4 * (share.standardError ?? 0)).toBeLessThan(1);
