@@ -54,18 +54,18 @@ function parse(text: string): Photometry {
   return { keywords, numbers: all.slice(0, 13), vertical, horizontal, candela };
 }
 
-/** Trapezia of I sin θ in both angles, on twenty steps between vertical angles, straight between values. */
+/** Trapezia of I sin θ in both angles, on 200 steps between vertical angles, straight between values. */
 function lumensOf({ vertical, horizontal, candela }: Photometry): number {
   const rad = Math.PI / 180;
   let sum = 0;
   for (let h = 1; h < horizontal.length; h++) {
     const width = (horizontal[h] - horizontal[h - 1]) * rad;
     for (let v = 1; v < vertical.length; v++) {
-      const step = ((vertical[v] - vertical[v - 1]) * rad) / 20;
-      for (let k = 0; k <= 20; k++) {
+      const step = ((vertical[v] - vertical[v - 1]) * rad) / 200;
+      for (let k = 0; k <= 200; k++) {
         const at = vertical[v - 1] * rad + k * step;
-        const value = (one: readonly number[]) => one[v - 1] + (k / 20) * (one[v] - one[v - 1]);
-        const weight = k === 0 || k === 20 ? 0.5 : 1;
+        const value = (one: readonly number[]) => one[v - 1] + (k / 200) * (one[v] - one[v - 1]);
+        const weight = k === 0 || k === 200 ? 0.5 : 1;
         sum += (weight * width * step * Math.sin(at) * (value(candela[h - 1]) + value(candela[h]))) / 2;
       }
     }

@@ -34,6 +34,22 @@ export function sampleRun(): { record: RunRecord; arrays: RunArrays } {
         photometricFile: '',
       },
     ],
+    radiance: [
+      {
+        id: 'exit-lid.top',
+        where: 'lid.top',
+        unit: 'W/(m² sr)',
+        shape: [2, 1, 2, 1],
+        extentMm: [
+          [0, 6],
+          [-4, 4],
+        ],
+        axes: ['u', 'v'],
+        files: [],
+        mean: 2,
+        maximum: 3,
+      },
+    ],
     histograms: [{ id: 'absorptions-per-history', unit: '', from: 0, width: 1, shares: [0.25, 0.5, 0.25] }],
     checks: [{ code: 'caution', severity: 'warning', path: ['parts', 'cell', 0], problem: 'thin wall', found: '1 µm' }],
   };
@@ -64,7 +80,18 @@ export function sampleRun(): { record: RunRecord; arrays: RunArrays } {
         candela: Float64Array.of(6, 5, 4, 3, 2, 1),
       },
     ],
-    radiance: [],
+    radiance: [
+      {
+        id: 'exit-lid.top',
+        shape: [2, 1, 2, 1],
+        extentMm: [
+          [0, 6],
+          [-4, 4],
+        ],
+        axes: ['u', 'v'],
+        values: Float64Array.of(1, 2, 3, Number.NaN),
+      },
+    ],
   };
   return { record, arrays };
 }
