@@ -14,9 +14,15 @@ const HALF_WORDS =
 const WHOLE_WORDS =
   'Radiant intensity against the angle from the axis, averaged over azimuth, drawn to both sides. Dashed: the same power evenly in all directions. Near 0° and 180° few photons fall into each step, so the curve is roughest there.';
 
+/** Share of the power beyond 90° from which both half spaces are drawn. */
+const WORTH_DRAWING = 0.01;
+
 /** Light goes further than 90° off the normal. */
-const isWhole = (angles: AnglesArray): boolean =>
-  azimuthMeans(angles).some((value, row) => value > 0 && row * angles.polarToDeg >= 90 * angles.polarCells);
+function isWhole(angles: AnglesArray): boolean {
+  const means = azimuthMeans(angles);
+  const ahead = means.map((value, row) => (row * angles.polarToDeg < 90 * angles.polarCells ? value : 0));
+  return watts(angles, ahead) < (1 - WORTH_DRAWING) * watts(angles, means);
+}
 
 export const polarWords = (angles: AnglesArray): string => (isWhole(angles) ? WHOLE_WORDS : HALF_WORDS);
 

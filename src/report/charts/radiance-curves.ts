@@ -11,7 +11,7 @@ const BOTTOM = 192;
 const WIDTH = 372;
 
 export const RADIANCE_WORDS =
-  'Radiance against the angle from the normal, averaged over azimuth. Line: mean over the face; band: from the dimmest to the brightest of its places. A matt face is a level line.';
+  'Radiance against the angle from the normal, averaged over azimuth. Line: mean over the face; band: from the dimmest to the brightest of its places, counting noise included. A matt face is a level line.';
 
 /** Radiance against the angle from the normal: mean over all places, and the range of them. @param id unique on the page */
 export function radianceCurves(id: string, radiance: RadianceArray, title: string): Picture {
