@@ -465,17 +465,31 @@ export interface DetectorDescription {
   readonly path: DesignPath;
   readonly target: DetectorTarget;
   readonly pixels: Vector2 | null;
+  /** Where radiance is recorded too. */
+  readonly radiance?: RadianceCells | null;
 }
 
 export type DetectorTarget =
   /** Light that leaves the part through this face. */
   | { readonly kind: 'face'; readonly face: string }
   /** Light that crosses a bounded plane along its normal. */
-  | { readonly kind: 'plane'; readonly at: Vector3; readonly normal: Vector3; readonly outline: Outline };
+  | { readonly kind: 'plane'; readonly at: Vector3; readonly normal: Vector3; readonly outline: Outline }
+  /** Light that crosses a sphere outward, or the part of it between two polar angles from its axis, rad. */
+  | {
+      readonly kind: 'sphere';
+      readonly centre: Vector3;
+      readonly radius: number;
+      readonly axis: Vector3;
+      readonly polar: Vector2;
+    };
+
+/** Cells of a radiance record: along u and v of the map, and of direction by polar angle and azimuth from the normal. */
+export type RadianceCells = readonly [u: number, v: number, polar: number, azimuth: number];
 
 export interface ExitDescription {
   /** 'part.face' or the name of a detector. */
   readonly name: string;
   readonly path: DesignPath;
   readonly pixels: Vector2 | null;
+  readonly radiance?: RadianceCells | null;
 }

@@ -1,5 +1,6 @@
 /** The table of fields of a design file: validator, JSON Schema and help all come from it. */
 
+import type { RadianceCells } from './description.js';
 import { finishesForm } from './finish-fields.js';
 import { optional, required, withDefault } from './form.js';
 import { either, mapped } from './form-either.js';
@@ -9,7 +10,7 @@ import { mapOf, record } from './form-record.js';
 import { freeText, oneWord, type Reference, reference } from './form-scalars.js';
 import { dyesForm, mediaForm } from './media-fields.js';
 import { partsForm } from './part-fields.js';
-import { detectorsForm, pixels, pumpsForm } from './pump-fields.js';
+import { detectorsForm, pixels, pumpsForm, radiance } from './pump-fields.js';
 import { dialForm } from './read-dials.js';
 import { layerMaterialsForm } from './stack-fields.js';
 
@@ -19,11 +20,16 @@ const exitName = reference('part.face or the name of a detector', ['lid.top']);
 export interface ExitRecord {
   readonly face: Reference;
   readonly pixels: readonly [number, number] | null;
+  readonly radiance: RadianceCells | null;
 }
 
 const exit = either<ExitRecord>({
-  scalar: mapped(exitName, (face) => ({ face, pixels: null })),
-  map: record('face and pixels', { face: required(exitName, 'part.face or the name of a detector.'), pixels }),
+  scalar: mapped(exitName, (face) => ({ face, pixels: null, radiance: null })),
+  map: record('face, pixels and radiance', {
+    face: required(exitName, 'part.face or the name of a detector.'),
+    pixels,
+    radiance,
+  }),
 });
 
 const trace = record('histories, precision, seed, voxels, polarisation', {
@@ -63,7 +69,7 @@ export const designForm = record('the fields of a design', {
   finishes: withDefault(finishesForm, [], 'none', 'What faces do to light, beside the built-in clear and black.'),
   parts: required(partsForm, 'Closed solids; where parts overlap, the later one wins.'),
   pumps: required(pumpsForm, 'Light sources.'),
-  detectors: withDefault(detectorsForm, [], 'none', 'Faces and planes that record maps, spectra and angles.'),
+  detectors: withDefault(detectorsForm, [], 'none', 'Faces, planes and spheres that record maps, spectra and angles.'),
   exit: required(exit, 'Where light becomes output: part.face, or the name of a detector.'),
   surroundings: withDefault(
     reference('the name of a medium', ['air']),

@@ -1,7 +1,8 @@
 /** Fields of pumps. */
+import type { RadianceCells } from './description.js';
 import { optional, required, withDefault } from './form.js';
 import { either, mapped } from './form-either.js';
-import { pair, triple } from './form-lists.js';
+import { pair, triple, tuple } from './form-lists.js';
 import { count, quantity } from './form-quantities.js';
 import { mapOf, record } from './form-record.js';
 import { freeText, oneWord, reference } from './form-scalars.js';
@@ -134,6 +135,42 @@ export const pixels = optional(
   'Pixels of the map. Default: chosen from the shape.',
 );
 
+/** Cells of a radiance record when the design only says `yes`. */
+const RADIANCE_BY_DEFAULT = [4, 4, 18, 12] as const;
+const radianceCount = count(1, 1000);
+export const radiance = optional(
+  either<RadianceCells | null>({
+    scalar: mapped(oneWord('yes', 'no'), (word) => (word === 'yes' ? RADIANCE_BY_DEFAULT : null)),
+    list: tuple<[number, number, number, number]>(
+      'numbers of cells [u, v, polar, azimuth]',
+      radianceCount,
+      radianceCount,
+      radianceCount,
+      radianceCount,
+    ),
+  }),
+  'Records radiance by place and direction too: cells [u, v, polar, azimuth], or yes for [4, 4, 18, 12]. Default: no.',
+);
+
+const polarAngle = quantity('angle', { min: 0, max: Math.PI });
+
+const sphere = record('centre and radius', {
+  centre: required(triple(anyLength, 'a place [x, y, z]'), 'Centre of the sphere.'),
+  radius: required(size, 'Radius of the sphere.'),
+  axis: withDefault(
+    triple(quantity('number'), 'a direction [x, y, z] in plain numbers'),
+    [0, 0, 1],
+    '[0, 0, 1]',
+    'Axis from which polar angles count; its length does not matter.',
+  ),
+  polar: withDefault(
+    pair(polarAngle, 'polar angles [from, to]'),
+    [0, Math.PI],
+    '[0 deg, 180 deg]',
+    'The part of the sphere that records, between two angles from the axis.',
+  ),
+});
+
 const plane = record(
   'at, normal, and rectangle or disc',
   {
@@ -148,13 +185,15 @@ const plane = record(
 );
 
 const detectorRecord = record(
-  'face or plane',
+  'face, plane or sphere',
   {
     face: optional(reference('part.face', ['cell.left']), 'Records the light that leaves the part through this face.'),
     plane: optional(plane, 'Records the light that crosses a bounded plane along its normal.'),
+    sphere: optional(sphere, 'Records the light that crosses a sphere, or a part of it, outward.'),
     pixels,
+    radiance,
   },
-  { exactlyOne: [['face', 'plane']] },
+  { exactlyOne: [['face', 'plane', 'sphere']] },
 );
 
 export type DetectorRecord = ReturnType<typeof detectorRecord.read>;

@@ -9,9 +9,12 @@ import { carvePart, facetPieces, outsidePart } from './carve-part.js';
 import { drawPart } from './draw-part.js';
 import { drawPumps, outlineEdges } from './draw-pumps.js';
 import { FACETS_ROUND } from './facet-patch.js';
+import { sphereEdges } from './sphere-edges.js';
 
 /** Facets this share of the design's size off a plane lie in it. */
 const RELATIVE_TOLERANCE = 1e-9;
+/** A sphere detector of a larger radius, in sizes of the design, would leave nothing to see of the parts. */
+const LARGEST_SPHERE = 1.5;
 
 /**
  * The parts as triangles and rims, the pumps and the free planes; no paths. Where parts overlap the later one is drawn, as it wins there.
@@ -35,7 +38,7 @@ export function drawDescription(description: Description): Drawing {
       );
     }),
     pumps: drawPumps(description, parts),
-    planes: drawPlanes(description),
+    planes: drawPlanes(description, designSize(parts)),
     paths: [],
     pathsFrom: 0,
   };
@@ -53,8 +56,12 @@ function exitFaceOf({ exit, detectors }: Description): string | null {
   return target.kind === 'face' ? target.face : null;
 }
 
-function drawPlanes({ detectors, exit }: Description): DrawnPlane[] {
+function drawPlanes({ detectors, exit }: Description, size: number): DrawnPlane[] {
   return detectors.flatMap(({ name, target }): DrawnPlane[] => {
+    if (target.kind === 'sphere') {
+      const edges = target.radius <= LARGEST_SPHERE * size ? sphereEdges(target) : [];
+      return [{ name, isExit: name === exit.name, normal: snapDirection(normalise(target.axis)), edges }];
+    }
     if (target.kind !== 'plane') return [];
     const normal: Vector3 = snapDirection(normalise(target.normal));
     const edges = outlineEdges(target.outline, { origin: target.at, ...frameAbout(normal) });

@@ -1,11 +1,21 @@
 /** Raw counters + legend -> run tallies: names, units (eV, mm) and the measure of every map cell. */
 
 import type { GrownTally } from '../kernel/batch-tally.js';
+import type { RecorderPlan } from '../scene/compile-recorders.js';
 import type { CompiledScene } from '../scene/compile-scene.js';
+import { luminousOpening, middleOf } from '../scene/luminous-opening.js';
 import { mapMeasure, voxelMeasure } from '../scene/map-measure.js';
 import { RegionGraph } from '../scene/region-graph.js';
 import { CELLS } from '../scene/scene-layout.js';
-import type { Histogram, RecordedAngles, RecordedMap, RecordedSpectrum, RunTallies } from '../tallies/run-tallies.js';
+import { add, scale } from '../scene/vector.js';
+import type {
+  Histogram,
+  RecordedAngles,
+  RecordedMap,
+  RecordedRadiance,
+  RecordedSpectrum,
+  RunTallies,
+} from '../tallies/run-tallies.js';
 import type { BatchFold } from './fold-batches.js';
 
 export function collectTallies(compiled: CompiledScene, fold: BatchFold, grown: GrownTally): RunTallies {
@@ -17,6 +27,7 @@ export function collectTallies(compiled: CompiledScene, fold: BatchFold, grown: 
     maps: [...recorderMaps(compiled, grown), ...voxelMaps(compiled, grown)],
     spectra: spectra(compiled, grown),
     angles: angles(compiled, grown),
+    radiance: radiance(compiled, grown),
     histograms: histograms(compiled, grown),
     wavelengthsNm: compiled.legend.grid.nm,
   };
@@ -40,12 +51,40 @@ function recorderMaps(compiled: CompiledScene, grown: GrownTally): RecordedMap[]
       where: plan.where,
       shape: [u, v],
       extent: plan.extent,
-      axes: plan.wrapped ? ['round the side', 'along the axis'] : ['u', 'v'],
+      axes: axesOf(plan),
       energy: halves(compiled, grown, compiled.scene.recorderMap[i], u * v),
       measure: mapMeasure(plan, graph),
-      frame: plan.wrapped ? null : { origin: plan.origin, u: plan.u, v: plan.v },
+      frame: plan.wrapped || plan.sphere !== null ? null : { origin: plan.origin, u: plan.u, v: plan.v },
+      ...extentDeg(plan),
+      ...(plan.isExit ? { mediumBeyond: mediumBeyond(compiled, plan, graph) } : {}),
     };
   });
+}
+
+function axesOf({ wrapped, sphere }: RecorderPlan): readonly string[] {
+  if (sphere !== null) return ['azimuth', 'polar angle'];
+  return wrapped ? ['round the side', 'along the axis'] : ['u', 'v'];
+}
+
+function extentDeg({ sphere }: RecorderPlan): { extentDeg?: RecordedMap['extent'] } {
+  if (sphere === null) return {};
+  const [from, to] = sphere.polar.map((angle) => Number(((angle * 180) / Math.PI).toPrecision(12)));
+  return {
+    extentDeg: [
+      [0, 360],
+      [from, to],
+    ],
+  };
+}
+
+/** How far beyond the exit the medium is looked up, mm: further than free planes and spheres are moved off faces. */
+const BEYOND = 1e-4;
+
+function mediumBeyond({ scene, legend }: CompiledScene, plan: RecorderPlan, graph: RegionGraph): string {
+  const { point, normal } = middleOf(plan);
+  const [x, y, z] = add(point, scale(normal, BEYOND));
+  if (graph.crowded) graph.forget();
+  return legend.mediaNames[scene.ownerMedium[graph.owner[graph.locate(x, y, z, ...normal)]]];
 }
 
 function voxelMaps(compiled: CompiledScene, grown: GrownTally): RecordedMap[] {
@@ -109,11 +148,48 @@ function spectra({ scene, legend }: CompiledScene, grown: GrownTally): RecordedS
 }
 
 function angles({ scene, legend }: CompiledScene, grown: GrownTally): RecordedAngles[] {
-  return legend.recorders.flatMap(({ what, where }, i) => {
+  const toEv = (quanta: number) => quanta * legend.quantumEv;
+  return legend.recorders.flatMap((plan, i): RecordedAngles[] => {
+    const { what, where } = plan;
     const offset = scene.recorderAngles[i];
     if (offset < 0) return [];
-    const energy = grown.angles.slice(offset, offset + CELLS.polar * CELLS.azimuth).map((q) => q * legend.quantumEv);
-    return [{ id: `${what}-${where}`, where, polarCells: CELLS.polar, azimuthCells: CELLS.azimuth, energy }];
+    const rows = scene.recorderPolar[i];
+    const cells = rows * CELLS.azimuth;
+    const part = (k: number) =>
+      grown.angles.slice(k * scene.angleCells + offset, k * scene.angleCells + offset + cells).map(toEv);
+    const [even, odd] = [part(0), part(1)];
+    return [
+      {
+        id: `${what}-${where}`,
+        where,
+        polarCells: rows,
+        azimuthCells: CELLS.azimuth,
+        polarToDeg: plan.polarToDeg,
+        energy: even.map((energy, cell) => energy + odd[cell]),
+        halves: [even, odd],
+        luminous: part(2),
+        opening: luminousOpening(plan),
+      },
+    ];
+  });
+}
+
+function radiance({ scene, legend }: CompiledScene, grown: GrownTally): RecordedRadiance[] {
+  const graph = new RegionGraph(scene);
+  return legend.recorders.flatMap((plan, i): RecordedRadiance[] => {
+    const { what, where, radiance: shape, extent } = plan;
+    if (shape === null || what === 'pumped-face') return [];
+    const offset = scene.recorderRadiance[i];
+    const cells = shape.reduce((a, b) => a * b);
+    const half = (h: number) => {
+      const start = h * scene.radianceCells + offset;
+      return grown.radiance.slice(start, start + cells).map((quanta) => quanta * legend.quantumEv);
+    };
+    const measure = mapMeasure({ ...plan, cells: [shape[0], shape[1]] }, graph);
+    const id = `${what}-${where}`;
+    return [
+      { id, what, where, shape, extent, axes: axesOf(plan), energy: [half(0), half(1)], measure, ...extentDeg(plan) },
+    ];
   });
 }
 

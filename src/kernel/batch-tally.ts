@@ -17,7 +17,10 @@ export interface GrownTally {
   /** [half · mapCells + cell], energy quanta. */
   readonly maps: Float64Array;
   readonly spectra: Float64Array;
+  /** [half · angleCells + cell], energy quanta; in the third part, from 2 · angleCells, quanta as the eye weighs them. */
   readonly angles: Float64Array;
+  /** [half · radianceCells + cell], energy quanta. */
+  readonly radiance: Float64Array;
   readonly absorptions: Float64Array;
   readonly exitReabsorptions: Float64Array;
   readonly exitPath: Float64Array;
@@ -26,7 +29,8 @@ export interface GrownTally {
 const lengths = (scene: Scene): readonly number[] => [
   2 * scene.mapCells,
   scene.spectrumCells,
-  scene.angleCells,
+  3 * scene.angleCells,
+  2 * scene.radianceCells,
   CELLS.absorptions,
   CELLS.absorptions,
   CELLS.path,
@@ -39,12 +43,12 @@ export function grownBytes(scene: Scene): number {
 
 export function grownTally(scene: Scene, buffer: ArrayBuffer | SharedArrayBuffer): GrownTally {
   let offset = 0;
-  const [maps, spectra, angles, absorptions, exitReabsorptions, exitPath] = lengths(scene).map((length) => {
+  const [maps, spectra, angles, radiance, absorptions, exitReabsorptions, exitPath] = lengths(scene).map((length) => {
     const view = new Float64Array(buffer, offset, length);
     offset += 8 * length;
     return view;
   });
-  return { maps, spectra, angles, absorptions, exitReabsorptions, exitPath };
+  return { maps, spectra, angles, radiance, absorptions, exitReabsorptions, exitPath };
 }
 
 export function createBatchTally(scene: Scene, grown: GrownTally): BatchTally {

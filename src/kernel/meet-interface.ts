@@ -1,4 +1,4 @@
-/** Light at an interface, in full: free planes, recorders, every finish, refraction and scatter. */
+/** Light at an interface, in full: free planes and spheres, recorders, every finish, refraction and scatter. */
 import { FLAG, INTERFACE, type RegionGraph } from '../scene/region-graph.js';
 import { FACE_SLOT, type Scene, SLOT, SPREAD } from '../scene/scene-layout.js';
 import type { GrownTally } from './batch-tally.js';
@@ -35,9 +35,11 @@ export function meetInterface(
   const wavelength = now[NOW.wavelength];
   const light = now[NOW.light];
   const flags = interfaces[record + INTERFACE.flags];
-  if ((flags & FLAG.freePlane) !== 0) {
+  if ((flags & FLAG.freeSurface) !== 0) {
     const recorder = interfaces[record + INTERFACE.recorder];
-    if (inAperture(scene, recorder, way, ray)) {
+    const sphere = way - 2 * graph.families;
+    const leaves = sphere < 0 || graph.side[now[NOW.region] * graph.quadrics + sphere] < 0;
+    if (leaves && inAperture(scene, recorder, way, ray)) {
       recordCrossing(scene, grown, recorder, half, light, wavelength, ray);
       if (scene.detectorExit[recorder] === 1) return light === 0 ? SLOT.exitPump : SLOT.exitEmitted;
     }

@@ -2,10 +2,12 @@
 import type { Figure, FigureName } from '../record/run-record.js';
 import type { TraceResult } from '../trace/trace-result.js';
 import { MAXIMUM_LUMINOUS_EFFICACY_LM_PER_W } from '../units/constants.js';
+import { brightnessFigures } from './brightness-figures.js';
 import { chromaticityX, chromaticityY, dominantWavelength } from './colour.js';
 import { densityFigures } from './density-figures.js';
 import { ErrorBars, oneEventAtLeast } from './error-bars.js';
 import { evennessFigures } from './evenness-figures.js';
+import { exitFigures } from './exit-figures.js';
 import type { MapField } from './map-field.js';
 
 /** @param fields maps of the run; those without area say nothing and may be left out. */
@@ -36,6 +38,7 @@ export function runFigures(result: TraceResult, fields: readonly MapField[]): Re
   });
   const lumens = MAXIMUM_LUMINOUS_EFFICACY_LM_PER_W;
   const dark = bars.mean('exitPhotons') > 0 ? undefined : NO_OUTPUT;
+  const outlet = exitFigures(result, bars, fields);
   const figures: Record<FigureName, Figure> = {
     exitPhotonFraction: perHistory('exitPhotons', 'photons per pump photon'),
     opticalEfficiency: share('exitEnergy', 1, 'W/W'),
@@ -66,9 +69,14 @@ export function runFigures(result: TraceResult, fields: readonly MapField[]): Re
     ),
     pumpAbsorbedFraction: perHistory('pumpAbsorbed', 'of pump photons'),
     pumpPower: { value: pumpWatts, standardError: null, unit: 'W' },
+    ...outlet,
+    ...brightnessFigures(result, bars, outlet),
   };
   return bars.tellErrors ? figures : withoutErrors(figures);
 }
+
+/** Given by the design, or exact. */
+const GIVEN: ReadonlySet<string> = new Set(['pumpPower', 'exitEtendue', 'pumpEtendue'] satisfies FigureName[]);
 
 const NO_OUTPUT = 'no light left by the exit';
 
@@ -80,7 +88,7 @@ function noted(figure: Figure, note: string | undefined): Figure {
 function withoutErrors(figures: Record<FigureName, Figure>): Record<FigureName, Figure> {
   const why = 'too few histories to tell its error';
   const entries = Object.entries(figures).map(([name, figure]) => {
-    const silent = figure.value !== null && figure.standardError === null && name !== 'pumpPower';
+    const silent = figure.value !== null && figure.standardError === null && !GIVEN.has(name);
     return [name, silent ? noted(figure, figure.note === undefined ? why : `${figure.note}; ${why}`) : figure];
   });
   return Object.fromEntries(entries) as Record<FigureName, Figure>;

@@ -1,5 +1,5 @@
 /** Evenness figures of a recorded face map, on cells coarse enough that counting noise does not speak. */
-import { cellSize, type MapField, soundness } from './map-field.js';
+import { cellSize, cellSizes, type MapField, soundness } from './map-field.js';
 import {
   coarsen,
   isoUniformity,
@@ -29,13 +29,14 @@ export function mapEvenness(field: MapField): Evenness | null {
   if (field.map.shape.length !== 2 || !(field.power > 0)) return null;
   const whole = planeMap(field, field.values);
   const factor = joinFactor(field, whole);
-  const size = cellSize(field.map);
   const joined = coarsen(whole, factor);
-  const coarse = dropSlivers(joined, (cell) => joined.joined[cell] * size);
+  const onSphere = field.map.extentDeg !== undefined;
+  const size = onSphere ? null : cellSize(field.map);
+  const coarse = dropSlivers(joined, (cell) => (size === null ? joined.weights[cell] : joined.joined[cell] * size));
   const mean = mapMean(coarse);
   if (!(mean > 0)) return null;
   const [even, odd] = field.halves;
-  const halfMap = (values: Float64Array) => dropSlivers(planeMap(field, values), () => size);
+  const halfMap = (values: Float64Array) => dropSlivers(planeMap(field, values), cellSizes(field.map));
   const halves = even === null || odd === null ? [] : [halfMap(even), halfMap(odd)];
   return {
     variation: halves.length === 2 && halves.every(isLit) ? trueVariation(halves[0], halves[1]) : null,

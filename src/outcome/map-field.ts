@@ -57,11 +57,17 @@ export const hasMeasure = ({ map }: MapField): boolean => map.measure.some((meas
 
 /** Cells of which at least half belongs to the face or the liquid; others are too thin to judge evenness by. */
 export function soundCells({ map }: MapField): number[] {
-  const size = cellSize(map);
-  const sound = soundness(map.measure, () => size);
+  const sound = soundness(map.measure, cellSizes(map));
   const cells: number[] = [];
   for (let i = 0; i < map.measure.length; i++) if (sound(i)) cells.push(i);
   return cells;
+}
+
+/** Size of each whole cell, as `cellSize`; on a sphere, where cells shrink towards the poles, all are whole. */
+export function cellSizes(map: RecordedMap): (cell: number) => number {
+  if (map.extentDeg !== undefined) return (cell) => map.measure[cell];
+  const size = cellSize(map);
+  return () => size;
 }
 
 /** Size of a whole cell, mm² or mm³, on the map. The face itself may have more in it: the rim of a dome is steep. */

@@ -4,11 +4,13 @@ import { cautionsFor } from '../materials/cautions.js';
 import type { RunArrays } from '../record/run-arrays.js';
 import { type MapRecord, RUN_FORMAT, type RunRecord } from '../record/run-record.js';
 import type { TraceResult } from '../trace/trace-result.js';
+import { MAXIMUM_LUMINOUS_EFFICACY_LM_PER_W } from '../units/constants.js';
 import { ErrorBars } from './error-bars.js';
 import { runFigures } from './figures.js';
 import { photonLedger, wattLedger } from './ledger.js';
 import { mapEvenness } from './map-evenness.js';
 import { hasMeasure, type MapField, mapField, soundCells } from './map-field.js';
+import { radianceArray, radianceRecord } from './radiance.js';
 
 /** What only the caller knows of a run. */
 export interface RunAbout {
@@ -72,7 +74,16 @@ export function summariseRun(result: TraceResult, about: RunAbout): { record: Ru
       photonFraction: total(photons) / tallies.moments.histories,
     })),
     curves: result.curves.map(({ id, what, name, where, unit }) => ({ id, what, name, where, unit, file: '' })),
-    angles: tallies.angles.map(({ id, where }) => ({ id, where, file: '' })),
+    angles: tallies.angles.map(({ id, where, polarToDeg, luminous, opening }) => ({
+      id,
+      where,
+      file: '',
+      polarToDeg,
+      lumens: total(luminous) * lumensPerEv(result),
+      opening,
+      photometricFile: '',
+    })),
+    radiance: tallies.radiance.map((one) => radianceRecord(one, wattsPerEv(result))),
     histograms: tallies.histograms.map(({ id, unit, from, width, counts }) => {
       const all = total(counts);
       return { id, unit, from, width, shares: Array.from(counts, (count) => (all > 0 ? count / all : 0)) };
@@ -87,7 +98,7 @@ export function summariseRun(result: TraceResult, about: RunAbout): { record: Ru
       dyes: partMedia(result).flatMap(({ dyes }) => dyes.map(({ name, formOf = name }) => formOf)),
     }),
   };
-  return { record, arrays: runArrays(result, fields, pumpWatts) };
+  return { record, arrays: runArrays(result, fields) };
 }
 
 function partMedia({ description }: TraceResult) {
@@ -126,6 +137,7 @@ function mapRecord(field: MapField): MapRecord {
     shape: map.shape,
     extentMm: map.extent,
     axes: map.axes,
+    ...(map.extentDeg === undefined ? {} : { extentDeg: map.extentDeg }),
     files: [],
     power,
     mean: power / (measure * (unit === 'W/cm³' ? 1e-3 : 1e-2)),
@@ -137,15 +149,24 @@ function mapRecord(field: MapField): MapRecord {
   };
 }
 
-function runArrays({ tallies, curves }: TraceResult, fields: readonly MapField[], pumpWatts: number): RunArrays {
+/** W that one eV counted stands for, and lumens that one eV·ȳ does. */
+function wattsPerEv({ description, tallies }: TraceResult): number {
+  const pumpWatts = description.pumps.reduce((sum, { power }) => sum + power, 0);
+  return pumpWatts / (tallies.moments.histories * new ErrorBars(tallies).mean('launchedEnergy'));
+}
+const lumensPerEv = (result: TraceResult): number => MAXIMUM_LUMINOUS_EFFICACY_LM_PER_W * wattsPerEv(result);
+
+function runArrays(result: TraceResult, fields: readonly MapField[]): RunArrays {
+  const { tallies, curves } = result;
   const { histories } = tallies.moments;
-  const wattsPerEv = pumpWatts / (histories * new ErrorBars(tallies).mean('launchedEnergy'));
+  const perEv = wattsPerEv(result);
   const widths = cellWidths(tallies.wavelengthsNm);
   return {
     maps: fields.map(({ map, unit, values }) => ({
       id: map.id,
       shape: map.shape,
       extentMm: map.extent,
+      ...(map.extentDeg === undefined ? {} : { extentDeg: map.extentDeg }),
       axes: map.axes,
       unit,
       values,
@@ -159,20 +180,24 @@ function runArrays({ tallies, curves }: TraceResult, fields: readonly MapField[]
       })),
     },
     curves: { wavelengthsNm: tallies.wavelengthsNm, columns: curves.map(({ id, values }) => ({ id, values })) },
-    angles: tallies.angles.map(({ id, polarCells, azimuthCells, energy }) => ({
-      id,
-      polarCells,
-      azimuthCells,
-      wattsPerSr: energy.map(
-        (ev, i) => (ev * wattsPerEv) / cellSolidAngle(Math.floor(i / azimuthCells), polarCells, azimuthCells),
-      ),
-    })),
+    angles: tallies.angles.map(({ id, polarCells, azimuthCells, polarToDeg, energy, luminous }) => {
+      const step = (polarToDeg * Math.PI) / 180 / polarCells;
+      const solidAngle = (cell: number) => cellSolidAngle(Math.floor(cell / azimuthCells), step, azimuthCells);
+      return {
+        id,
+        polarCells,
+        azimuthCells,
+        polarToDeg,
+        wattsPerSr: energy.map((ev, i) => (ev * perEv) / solidAngle(i)),
+        candela: luminous.map((ev, i) => (ev * lumensPerEv(result)) / solidAngle(i)),
+      };
+    }),
+    radiance: tallies.radiance.map((one) => radianceArray(one, perEv)),
     drawing: null,
   };
 }
 
-function cellSolidAngle(polar: number, polarCells: number, azimuthCells: number): number {
-  const step = Math.PI / 2 / polarCells;
+function cellSolidAngle(polar: number, step: number, azimuthCells: number): number {
   return ((2 * Math.PI) / azimuthCells) * (Math.cos(polar * step) - Math.cos((polar + 1) * step));
 }
 

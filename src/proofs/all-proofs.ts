@@ -2,6 +2,7 @@ import { beamSpreadProof } from './beam-spread-proof.js';
 import { beerLambertProof } from './beer-lambert-proof.js';
 import { birksProof } from './birks-proof.js';
 import { brightnessProof } from './brightness-proof.js';
+import { detectorProof } from './detector-proof.js';
 import { diffuseFresnelProof } from './diffuse-fresnel-proof.js';
 import { energyProof } from './energy-proof.js';
 import { escapeConeProof } from './escape-cone-proof.js';
@@ -51,6 +52,7 @@ export const allProofs: readonly Proof[] = [
   beamSpreadProof,
   surfaceScatterProof,
   viewFactorProof,
+  detectorProof,
   meanChordProof,
   parallelBeamProof,
   meshProof,

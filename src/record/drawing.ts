@@ -43,7 +43,7 @@ export interface DrawnPump {
   readonly edges: Coordinates;
 }
 
-/** A detector in the open: a bounded plane. */
+/** A detector in the open: a bounded plane, or a sphere with its axis for a normal; one too large to draw has no edges. */
 export interface DrawnPlane {
   readonly name: string;
   readonly isExit: boolean;

@@ -3,10 +3,10 @@
  * `format` counts up whenever a reader of older records would go wrong.
  */
 import type { Fault } from '../design/fault.js';
-import type { Fate, Light } from '../tallies/run-tallies.js';
+import type { Fate, Light, LuminousOpening } from '../tallies/run-tallies.js';
 import type { CurveKind, StopReason, UsedCurve } from '../trace/trace-result.js';
 
-export const RUN_FORMAT = 2;
+export const RUN_FORMAT = 3;
 
 export interface Figure {
   /** null: undefined for this run (no light left by the exit, wall-plug efficiency not given, …). */
@@ -42,7 +42,15 @@ export type FigureName =
   | 'meanPumpPath' // mm per history
   | 'meanEmittedPath' // mm per emission
   | 'pumpAbsorbedFraction' // pump photons absorbed by a dye
-  | 'pumpPower'; // W
+  | 'pumpPower' // W
+  | 'exitEtendue' // mm² sr, n² π A
+  | 'exitEffectiveEtendue' // mm² sr, from the measured directions
+  | 'exitMeanLuminance' // cd/m²
+  | 'exitNormalLuminance' // cd/m²
+  | 'pumpEtendue' // mm² sr, of the brightest pump
+  | 'brightnessRatio' // exit over pump, photons per étendue and bandwidth
+  | 'brightnessBound' // thermodynamic bound of that ratio
+  | 'brightnessBoundShare'; // ratio over bound
 
 export interface LedgerRow {
   readonly fate: Fate;
@@ -61,6 +69,8 @@ export interface MapRecord {
   readonly shape: readonly number[];
   readonly extentMm: readonly (readonly [number, number])[];
   readonly axes: readonly string[];
+  /** Of a sphere: azimuth and polar angle, degrees, of which `extentMm` are the arcs. */
+  readonly extentDeg?: readonly (readonly [number, number])[];
   /** Files beside run.json. */
   readonly files: readonly string[];
   readonly power: number;
@@ -71,6 +81,35 @@ export interface MapRecord {
   readonly variation: number | null;
   readonly variationError: number | null;
   readonly minOverMean: number | null;
+}
+
+export interface RadianceRecord {
+  readonly id: string;
+  readonly where: string;
+  readonly unit: 'W/(m² sr)';
+  /** Cells along u, v, polar angle from the normal (0 to 90°) and azimuth (0 to 360°). */
+  readonly shape: readonly number[];
+  /** Of the first two axes, mm. */
+  readonly extentMm: readonly (readonly [number, number])[];
+  readonly extentDeg?: readonly (readonly [number, number])[];
+  readonly axes: readonly string[];
+  readonly files: readonly string[];
+  /** Power over area and π: the radiance of even light. */
+  readonly mean: number;
+  readonly maximum: number;
+}
+
+export interface AnglesRecord {
+  readonly id: string;
+  readonly where: string;
+  readonly file: string;
+  readonly polarToDeg: 90 | 180;
+  /** Luminous flux, lm. */
+  readonly lumens: number;
+  /** Of the far field for photometry; null where there is none. */
+  readonly opening: LuminousOpening | null;
+  /** Photometric file beside run.json; blank where there is none. */
+  readonly photometricFile: string;
 }
 
 export interface PumpRecord {
@@ -138,7 +177,8 @@ export interface RunRecord {
     readonly unit: UsedCurve['unit'];
     readonly file: string;
   }[];
-  readonly angles: readonly { readonly id: string; readonly where: string; readonly file: string }[];
+  readonly angles: readonly AnglesRecord[];
+  readonly radiance: readonly RadianceRecord[];
   readonly histograms: readonly {
     readonly id: string;
     readonly unit: string;

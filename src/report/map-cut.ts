@@ -1,6 +1,6 @@
 import { heatMap, isStretched } from './charts/heat-map.js';
 import type { Picture } from './charts/picture.js';
-import { AXIS_LETTERS, axesOf, extents, mapWords, middleCell, placeWords } from './map-words.js';
+import { AXIS_LETTERS, axesOf, axisUnit, extents, mapWords, middleCell, placeWords } from './map-words.js';
 import { shortName } from './name-text.js';
 import { significant } from './number-format.js';
 import { cutOf, peakCell, type ShownMap } from './shown-map.js';
@@ -36,11 +36,12 @@ export function cutPicture(map: ShownMap, id: string, { across: [a, b], along, c
   return heatMap({
     id,
     title: `${mapWords(map)} ${shortName(record.where)}${where}`,
-    description: `A map over ${shortName(names[a])} and ${shortName(names[b])} in mm, dark for 0 and light for ${significant(record.maximum, 4)} ${record.unit}; mean ${significant(record.mean, 4)}, least ${significant(record.minimum, 4)}. Below it the colour scale and a cross-section along either axis.`,
+    description: `A map over ${shortName(names[a])} and ${shortName(names[b])} in ${axisUnit(map) === '°' ? 'degrees' : 'mm'}, dark for 0 and light for ${significant(record.maximum, 4)} ${record.unit}; mean ${significant(record.mean, 4)}, least ${significant(record.minimum, 4)}. Below it the colour scale and a cross-section along either axis.`,
     plane: cutOf(map, [a, b], along, cell[along]),
     extentMm: [ends[a], ends[b]],
     spanMm: spanOf(map),
     axes: [shortName(names[a], AXIS_LETTERS), shortName(names[b], AXIS_LETTERS)],
+    axisUnit: axisUnit(map),
     maximum: record.maximum,
     mean: record.mean,
     unit: record.unit,

@@ -46,9 +46,12 @@ export function axesOf({ record: { axes } }: ShownMap): readonly string[] {
   return [0, 1, 2].map((axis) => axes[axis] ?? '');
 }
 
-export function extents({ record: { extentMm } }: ShownMap): readonly (readonly [number, number])[] {
-  return [0, 1, 2].map((axis) => extentMm[axis] ?? [0, 0]);
+/** In mm, or degrees on a sphere. */
+export function extents({ record: { extentMm, extentDeg } }: ShownMap): readonly (readonly [number, number])[] {
+  return [0, 1, 2].map((axis) => (extentDeg ?? extentMm)[axis] ?? [0, 0]);
 }
+
+export const axisUnit = ({ record: { extentDeg } }: ShownMap): ' mm' | '°' => (extentDeg === undefined ? ' mm' : '°');
 
 export function middleCell({ cells }: ShownMap): readonly [number, number, number] {
   return [cells[0] >> 1, cells[1] >> 1, 0];

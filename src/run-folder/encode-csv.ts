@@ -1,14 +1,15 @@
 /** The tables of a run folder. Header names carry the unit in plain letters, so that every spreadsheet shows them right. */
 
-import type { AnglesArray, CurvesArray, MapArray, SpectraArray } from '../record/run-arrays.js';
+import type { AnglesArray, CurvesArray, MapArray, RadianceArray, SpectraArray } from '../record/run-arrays.js';
 import type { RunRecord } from '../record/run-record.js';
 import { type CsvField, csvText } from './csv-text.js';
 
 /** A row per cell: the centre of the cell, the value (blank off the face or liquid), and how much face or liquid the cell holds. */
-export function mapCsv({ shape, extentMm, axes, unit, values, measure }: MapArray): string {
+export function mapCsv({ shape, extentMm, extentDeg, axes, unit, values, measure }: MapArray): string {
   const [value, size] =
     unit === 'W/cm²' ? ['irradiance_W_per_cm2', 'area_mm2'] : ['absorbed_power_density_W_per_cm3', 'volume_mm3'];
-  const header = [...axes.map((axis) => `${axis.replaceAll(' ', '_')}_mm`), value, size];
+  const ends = extentDeg ?? extentMm;
+  const header = [...axisNames(axes, extentDeg), value, size];
   return csvText(header, mapRows());
 
   function* mapRows(): Generator<CsvField[]> {
@@ -17,13 +18,18 @@ export function mapCsv({ shape, extentMm, axes, unit, values, measure }: MapArra
       const centre = shape.map((cells, axis) => {
         const at = rest % cells;
         rest = (rest - at) / cells;
-        const [low, high] = extentMm[axis];
-        return low + ((at + 0.5) / cells) * (high - low);
+        return cellMiddle(ends[axis], cells, at);
       });
       yield [...centre, values[i], measure[i]];
     }
   }
 }
+
+const axisNames = (axes: readonly string[], extentDeg: MapArray['extentDeg']): string[] =>
+  axes.map((axis) => `${axis.replaceAll(' ', '_')}_${extentDeg === undefined ? 'mm' : 'deg'}`);
+
+const cellMiddle = ([low, high]: readonly [number, number], cells: number, at: number): number =>
+  low + ((at + 0.5) / cells) * (high - low);
 
 /** A row per wavelength; a column per spectrum, photons per launched photon per nm. */
 export function spectraCsv({ wavelengthsNm, columns }: SpectraArray): string {
@@ -54,13 +60,32 @@ export function curvesCsv({ wavelengthsNm, columns }: CurvesArray, records: RunR
 }
 
 /** A row per direction, at the centre of its cell. */
-export function anglesCsv({ polarCells, azimuthCells, wattsPerSr }: AnglesArray): string {
+export function anglesCsv({ polarCells, azimuthCells, polarToDeg, wattsPerSr, candela }: AnglesArray): string {
   return csvText(
-    ['polar_deg', 'azimuth_deg', 'radiant_intensity_W_per_sr'],
+    ['polar_deg', 'azimuth_deg', 'radiant_intensity_W_per_sr', 'luminous_intensity_cd'],
     Array.from(wattsPerSr, (intensity, i) => {
       const azimuth = i % azimuthCells;
       const polar = (i - azimuth) / azimuthCells;
-      return [((polar + 0.5) * 90) / polarCells, ((azimuth + 0.5) * 360) / azimuthCells, intensity];
+      return [((polar + 0.5) * polarToDeg) / polarCells, ((azimuth + 0.5) * 360) / azimuthCells, intensity, candela[i]];
+    }),
+  );
+}
+
+/** A row per place and direction, at the centres of their cells; blank off the face. */
+export function radianceCsv({ shape, extentMm, extentDeg, axes, values }: RadianceArray): string {
+  const [nu, nv, polar, azimuth] = shape;
+  const [u, v] = extentDeg ?? extentMm;
+  return csvText(
+    [...axisNames(axes, extentDeg), 'polar_from_normal_deg', 'azimuth_about_normal_deg', 'radiance_W_per_m2_sr'],
+    Array.from(values, (value, i) => {
+      const place = Math.floor(i / (polar * azimuth));
+      return [
+        cellMiddle(u, nu, place % nu),
+        cellMiddle(v, nv, Math.floor(place / nu)),
+        cellMiddle([0, 90], polar, Math.floor(i / azimuth) % polar),
+        cellMiddle([0, 360], azimuth, i % azimuth),
+        value,
+      ];
     }),
   );
 }

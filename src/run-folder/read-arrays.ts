@@ -1,6 +1,6 @@
 /** Reads the arrays of a run back from the files beside its run.json. */
 import { join } from 'node:path';
-import type { AnglesArray, MapArray, RunArrays, SpectraArray } from '../record/run-arrays.js';
+import type { AnglesArray, MapArray, RadianceArray, RunArrays, SpectraArray } from '../record/run-arrays.js';
 import type { RunRecord } from '../record/run-record.js';
 import { columnOf, readNumberTable, unreadable } from './read-csv.js';
 import { readDrawing } from './read-drawing.js';
@@ -13,16 +13,20 @@ export async function readArrays(folder: string, record: RunRecord): Promise<Run
   for (const map of record.maps) maps.push(await readMap(folder, map));
   const angles: AnglesArray[] = [];
   for (const one of record.angles) angles.push(await readAngles(folder, one));
+  const radiance: RadianceArray[] = [];
+  for (const one of record.radiance) radiance.push(await readRadiance(folder, one));
   return {
     maps,
     spectra: await readColumns(folder, record.spectra),
     curves: await readColumns(folder, record.curves),
     angles,
+    radiance,
     drawing: await readDrawing(folder),
   };
 }
 
-async function readMap(folder: string, { id, shape, extentMm, axes, unit, files }: MapRecord): Promise<MapArray> {
+async function readMap(folder: string, record: MapRecord): Promise<MapArray> {
+  const { id, shape, extentMm, extentDeg, axes, unit, files } = record;
   const name = files.find((file) => file.endsWith('.csv'));
   if (name === undefined) throw unreadable(folder, `run.json names no table of the map ${id}`);
   const table = await readNumberTable(folder, name, shape.length + 2);
@@ -31,7 +35,8 @@ async function readMap(folder: string, { id, shape, extentMm, axes, unit, files 
   if (values.length !== cells) {
     throw unreadable(join(folder, name), `it has ${values.length} cells, and run.json says ${cells}`);
   }
-  return { id, shape, extentMm, axes, unit, values, measure: columnOf(table, shape.length + 1) };
+  const measure = columnOf(table, shape.length + 1);
+  return { id, shape, extentMm, ...(extentDeg === undefined ? {} : { extentDeg }), axes, unit, values, measure };
 }
 
 /** A column for each entry of the record, beside the wavelengths. */
@@ -48,8 +53,8 @@ async function readColumns(
   };
 }
 
-async function readAngles(folder: string, { id, file }: RunRecord['angles'][number]): Promise<AnglesArray> {
-  const table = await readNumberTable(folder, file, 3);
+async function readAngles(folder: string, { id, file, polarToDeg }: RunRecord['angles'][number]): Promise<AnglesArray> {
+  const table = await readNumberTable(folder, file, 4);
   const polar = columnOf(table, 0);
   const next = polar.findIndex((angle) => angle !== polar[0]);
   const azimuthCells = next < 0 ? polar.length : next;
@@ -57,5 +62,27 @@ async function readAngles(folder: string, { id, file }: RunRecord['angles'][numb
   if (azimuthCells === 0 || !Number.isInteger(polarCells)) {
     throw unreadable(join(folder, file), 'its rows make no whole rings of directions');
   }
-  return { id, polarCells, azimuthCells, wattsPerSr: columnOf(table, 2) };
+  return {
+    id,
+    polarCells,
+    azimuthCells,
+    polarToDeg,
+    wattsPerSr: columnOf(table, 2),
+    candela: columnOf(table, 3),
+  };
+}
+
+async function readRadiance(
+  folder: string,
+  { id, shape, extentMm, extentDeg, axes, files }: RunRecord['radiance'][number],
+): Promise<RadianceArray> {
+  const name = files.find((file) => file.endsWith('.csv'));
+  if (name === undefined) throw unreadable(folder, `run.json names no table of the radiance ${id}`);
+  const values = columnOf(await readNumberTable(folder, name, 5), 4);
+  const [u, v, polar, azimuth] = shape;
+  if (values.length !== u * v * polar * azimuth) {
+    throw unreadable(join(folder, name), `it has ${values.length} cells, and run.json says ${u * v * polar * azimuth}`);
+  }
+  const deg = extentDeg === undefined ? {} : { extentDeg };
+  return { id, shape: [u, v, polar, azimuth], extentMm, ...deg, axes, values };
 }

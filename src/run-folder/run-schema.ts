@@ -2,7 +2,7 @@
 import { z } from 'zod';
 import type { FaultCode } from '../design/fault.js';
 import { type FigureName, RUN_FORMAT, type RunRecord } from '../record/run-record.js';
-import type { Fate } from '../tallies/run-tallies.js';
+import type { Fate, LuminousOpening } from '../tallies/run-tallies.js';
 import type { CurveKind, StopReason } from '../trace/trace-result.js';
 import { everyName } from './every-name.js';
 
@@ -46,6 +46,14 @@ const FIGURE_NAMES = everyName<FigureName>()([
   'meanEmittedPath',
   'pumpAbsorbedFraction',
   'pumpPower',
+  'exitEtendue',
+  'exitEffectiveEtendue',
+  'exitMeanLuminance',
+  'exitNormalLuminance',
+  'pumpEtendue',
+  'brightnessRatio',
+  'brightnessBound',
+  'brightnessBoundShare',
 ]);
 
 /** How a history ended, where and by what. */
@@ -89,6 +97,10 @@ const map = z
     shape: z.array(z.int().positive()).min(1).max(3),
     extentMm: z.array(z.tuple([z.number(), z.number()])),
     axes: z.array(text),
+    extentDeg: z
+      .array(z.tuple([z.number(), z.number()]))
+      .exactOptional()
+      .describe('of a sphere: azimuth and polar angle, of which extentMm are the arcs'),
     files: z.array(fileName),
     power: z.number(),
     mean: z.number(),
@@ -101,6 +113,38 @@ const map = z
   .refine(({ shape, extentMm, axes }) => shape.length === extentMm.length && shape.length === axes.length, {
     error: 'shape, extentMm and axes must be equally long',
   });
+
+const opening = z.object({
+  shape: z.enum(everyName<LuminousOpening['shape']>()(['rectangle', 'disc', 'dome', 'sphere'])),
+  sizeMm: z
+    .tuple([z.number(), z.number(), z.number()])
+    .describe('along azimuth 0, along azimuth 90°, along the normal; a diameter twice where round'),
+});
+const angles = z.object({
+  id: text,
+  where: text,
+  file: fileName,
+  polarToDeg: z.union([z.literal(90), z.literal(180)]),
+  lumens: z.number(),
+  opening: opening.nullable().describe('null: directions from a round side, no far field'),
+  photometricFile: fileName.describe('ANSI/IES LM-63; blank where there is none'),
+});
+
+const radiance = z.object({
+  id: text,
+  where: text,
+  unit: z.literal('W/(m² sr)'),
+  shape: z.array(z.int().positive()).length(4),
+  extentMm: z.array(z.tuple([z.number(), z.number()])).length(2),
+  extentDeg: z
+    .array(z.tuple([z.number(), z.number()]))
+    .length(2)
+    .exactOptional(),
+  axes: z.array(text),
+  files: z.array(fileName),
+  mean: z.number(),
+  maximum: z.number(),
+});
 
 const share = z.number().positive().max(1).nullable();
 const pump = z.object({
@@ -189,7 +233,8 @@ export const runRecordSchema = z.object({
     z.object({ id: text, what: text, where: line, light, file: fileName, photonFraction: z.number().nonnegative() }),
   ),
   curves: z.array(curve),
-  angles: z.array(z.object({ id: text, where: text, file: fileName })),
+  angles: z.array(angles),
+  radiance: z.array(radiance),
   histograms: z.array(
     z.object({
       id: text,

@@ -1,5 +1,5 @@
 /** What records light where: the exit, detectors, pumped faces; and the voxels of the dyed liquid. */
-import type { Description, Outline, Vector2, Vector3 } from '../design/description.js';
+import type { Description, Outline, RadianceCells, Vector2, Vector3 } from '../design/description.js';
 import { aimedFace } from './aimed-face.js';
 import type { BeamFrame } from './compile-pumps.js';
 import type { CompiledSolids, SceneFace } from './compile-solids.js';
@@ -16,21 +16,30 @@ export interface RecorderPlan {
   /** For free planes. */
   readonly outline: Outline | null;
   readonly plane: { readonly plane: number; readonly sign: 1 | -1 } | null;
+  /** Quadric of a sphere detector. */
+  readonly curve: number | null;
+  readonly sphere: { readonly radius: number; readonly polar: Vector2 } | null;
   readonly isExit: boolean;
   readonly wrapped: boolean;
   readonly cells: readonly [number, number];
-  /** Corner of the map (flat) or bottom centre of the axis (wrapped). */
+  /** Corner of the map (flat), bottom centre of the axis (wrapped) or centre of the sphere. */
   readonly origin: Vector3;
   readonly u: Vector3;
   readonly v: Vector3;
   readonly normal: Vector3;
-  /** Own coordinates of the map's edges, mm; the origin of u, v is the centre of the face. */
+  /**
+   * Own coordinates of the map's edges, mm; the origin of u, v is the centre of the face. On a sphere arcs: along the equator, and along
+   * a meridian from the axis.
+   */
   readonly extent: readonly [readonly [number, number], readonly [number, number]];
   /** Maps count these lights. */
   readonly countsPump: boolean;
   readonly countsEmitted: boolean;
   readonly spectrum: boolean;
   readonly angles: boolean;
+  /** Largest angle from the normal that the angular record tells apart, degrees: curved faces send light backwards of their axis. */
+  readonly polarToDeg: 90 | 180;
+  readonly radiance: RadianceCells | null;
 }
 
 const LONG_SIDE_CELLS = 40;
@@ -59,15 +68,27 @@ export function planRecorders(
     const face = faceNamed(exitFace);
     if (face !== null) {
       const pixels = description.exit.pixels ?? exitDetector?.pixels ?? null;
-      plans.push({ ...exitRest, ...everything, ...faceMap(face, pixels) });
+      const radiance = description.exit.radiance ?? exitDetector?.radiance ?? null;
+      plans.push({ ...exitRest, ...everything, ...faceMap(face, pixels), radiance });
     }
   }
   for (const detector of description.detectors) {
     const isExit = detector === exitDetector;
-    const common = { what: isExit ? 'exit' : 'detector', where: detector.name, isExit, countsPump: !isExit } as const;
+    const common = {
+      what: isExit ? 'exit' : 'detector',
+      where: detector.name,
+      isExit,
+      countsPump: !isExit,
+      radiance: detector.radiance ?? null,
+    } as const;
     if (detector.target.kind === 'plane') {
       const plane = solids.detectorPlanes.get(detector.name) ?? null;
       plans.push({ ...common, ...everything, ...planeMap(detector.target, detector.pixels), plane });
+      continue;
+    }
+    if (detector.target.kind === 'sphere') {
+      const curve = solids.detectorSpheres.get(detector.name) ?? null;
+      plans.push({ ...common, ...everything, ...sphereMap(detector.target, detector.pixels), curve });
       continue;
     }
     const face = faceNamed(detector.target.face);
@@ -88,6 +109,7 @@ export function planRecorders(
       spectrum: false,
       angles: false,
       ...faceMap(face, null),
+      radiance: null,
     });
   }
   return plans;
@@ -95,12 +117,25 @@ export function planRecorders(
 
 type MapGeometry = Pick<
   RecorderPlan,
-  'face' | 'outline' | 'plane' | 'wrapped' | 'cells' | 'origin' | 'u' | 'v' | 'normal' | 'extent'
+  | 'face'
+  | 'outline'
+  | 'plane'
+  | 'curve'
+  | 'sphere'
+  | 'wrapped'
+  | 'cells'
+  | 'origin'
+  | 'u'
+  | 'v'
+  | 'normal'
+  | 'extent'
+  | 'polarToDeg'
 >;
 
 function faceMap(face: SceneFace, pixels: Vector2 | null): MapGeometry {
   const { patch } = face;
-  const base = { face, outline: null, plane: null };
+  const polarToDeg = patch.kind === 'zone' ? 180 : 90;
+  const base = { face, outline: null, plane: null, curve: null, sphere: null, polarToDeg } as const;
   if (isRevolved(patch)) {
     const girth = girthOf(patch);
     const height = heightOf(patch);
@@ -153,6 +188,9 @@ function planeMap(
     face: null,
     outline: target.outline,
     plane: null,
+    curve: null,
+    sphere: null,
+    polarToDeg: 90,
     wrapped: false,
     cells: cellCounts(2 * a, 2 * b, pixels),
     origin: subtract(target.at, add(scale(u, a), scale(v, b))),
@@ -163,6 +201,32 @@ function planeMap(
       [-a, a],
       [-b, b],
     ],
+  };
+}
+
+/** Cells along azimuth and polar angle; by themselves as fine round the sphere as along a meridian. */
+function sphereMap(
+  { centre, radius, axis, polar }: { centre: Vector3; radius: number; axis: Vector3; polar: Vector2 },
+  pixels: Vector2 | null,
+): MapGeometry {
+  const normal = snapDirection(normalise(axis));
+  const share = (polar[1] - polar[0]) / (2 * Math.PI);
+  return {
+    face: null,
+    outline: null,
+    plane: null,
+    curve: null,
+    sphere: { radius, polar },
+    wrapped: false,
+    cells: pixels ?? [LONG_SIDE_CELLS, Math.max(8, Math.round(LONG_SIDE_CELLS * share))],
+    origin: centre,
+    ...frameAbout(normal),
+    normal,
+    extent: [
+      [0, 2 * Math.PI * radius],
+      [radius * polar[0], radius * polar[1]],
+    ],
+    polarToDeg: 180,
   };
 }
 

@@ -156,6 +156,7 @@ export function compileScene(description: Description): CompiledScene {
     spectrumKeep: sharedDoubles(spectra.keep),
     spectrumOther: sharedInts(spectra.other),
     energyQuanta: sharedDoubles(energyQuanta),
+    luminousQuanta: sharedDoubles(energyQuanta.map((quanta, i) => Math.round(quanta * observer[i][1]))),
     observerX: sharedDoubles(observer.map(([x]) => x)),
     observerY: sharedDoubles(observer.map(([, y]) => y)),
     observerZ: sharedDoubles(observer.map(([, , z]) => z)),

@@ -51,13 +51,15 @@ export interface CompiledSolids {
   readonly ownerPieceStart: number[];
   /** Plane of each free-plane detector by name, and the sign of its normal along the family's. */
   readonly detectorPlanes: ReadonlyMap<string, { readonly plane: number; readonly sign: 1 | -1 }>;
+  /** Quadric of each sphere detector by name. */
+  readonly detectorSpheres: ReadonlyMap<string, number>;
 }
 
 /** Surfaces closer than this share of the design's size are one. */
 const RELATIVE_TOLERANCE = 1e-9;
 /**
- * A free plane stands this far beyond where it was put, or a few times as far, so that it never coincides with a face or another plane:
- * its light has left the face first.
+ * A free plane or sphere stands this far beyond where it was put, or a few times as far, so that it never coincides with a face or
+ * another detector: its light has left the face first.
  */
 const PLANE_CLEARANCE = 1e-6;
 
@@ -120,10 +122,18 @@ export function compileSolids(description: Description, parts: readonly PlacedPa
   });
 
   const planes = new Map<string, SurfaceSide>();
+  const detectorSpheres = new Map<string, number>();
+  const clearance = PLANE_CLEARANCE * Math.max(1, size / 100);
   for (const { name, target } of description.detectors) {
+    if (target.kind === 'sphere') {
+      let radius = target.radius + clearance;
+      const sphere = () => ({ kind: 'sphere', centre: target.centre, radius }) as const;
+      while (!table.isFreeCurve(sphere())) radius += clearance;
+      const { handle } = table.add(sphere());
+      if (handle.kind === 'curve') detectorSpheres.set(name, handle.index);
+    }
     if (target.kind !== 'plane') continue;
     const normal = snapDirection(normalise(target.normal));
-    const clearance = PLANE_CLEARANCE * Math.max(1, size / 100);
     let offset = dot(normal, target.at) + clearance;
     while (!table.isFree(normal, offset)) offset += clearance;
     planes.set(name, table.add({ kind: 'plane', normal, offset }));
@@ -167,6 +177,7 @@ export function compileSolids(description: Description, parts: readonly PlacedPa
     pieceMember,
     ownerPieceStart,
     detectorPlanes,
+    detectorSpheres,
   };
 }
 

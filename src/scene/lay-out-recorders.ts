@@ -2,7 +2,7 @@
 
 import type { RecorderPlan, VoxelPlan } from './compile-recorders.js';
 import type { CompiledSolids } from './compile-solids.js';
-import { CELLS, RECORDER, type Scene } from './scene-layout.js';
+import { CELLS, NORMAL, RECORDER, type Scene, WRAP } from './scene-layout.js';
 import { sharedBytes, sharedDoubles, sharedInts } from './shared-arrays.js';
 import { frameAbout, scale } from './vector.js';
 import type { WavelengthGrid } from './wavelength-grid.js';
@@ -13,6 +13,7 @@ type RecorderArrays = Pick<
   | 'faceRecorderOut'
   | 'faceRecorderArriving'
   | 'planeDetector'
+  | 'quadricDetector'
   | 'detectorAperture'
   | 'detectorExit'
   | 'detectorSign'
@@ -23,6 +24,10 @@ type RecorderArrays = Pick<
   | 'recorderMap'
   | 'recorderSpectrum'
   | 'recorderAngles'
+  | 'recorderPolar'
+  | 'recorderRadiance'
+  | 'radianceGrid'
+  | 'recorderNormal'
   | 'recorderLights'
   | 'recorderNext'
   | 'voxelOrigin'
@@ -33,6 +38,7 @@ type RecorderArrays = Pick<
   | 'mapCells'
   | 'spectrumCells'
   | 'angleCells'
+  | 'radianceCells'
   | 'spectrumLaunched'
   | 'spectrumAbsorbedPump'
   | 'spectrumEmitted'
@@ -56,16 +62,20 @@ export function layOutRecorders(
   const maps = counter();
   const spectra = counter();
   const angles = counter();
+  const radiance = counter();
   const frame = new Float64Array(plans.length * RECORDER.STRIDE);
   const aperture = new Float64Array(plans.length * 2);
   const mapAt: number[] = [];
   const spectrumAt: number[] = [];
   const anglesAt: number[] = [];
+  const radianceAt: number[] = [];
   plans.forEach((plan, i) => {
     frame.set(frameOf(plan), i * RECORDER.STRIDE);
     mapAt.push(maps.take(plan.cells[0] * plan.cells[1]));
     spectrumAt.push(plan.spectrum ? spectra.take(2 * wavelengths) : -1);
-    anglesAt.push(plan.angles ? angles.take(CELLS.polar * CELLS.azimuth) : -1);
+    anglesAt.push(plan.angles ? angles.take(polarCells(plan) * CELLS.azimuth) : -1);
+    radianceAt.push(plan.radiance === null ? -1 : radiance.take(plan.radiance.reduce((a, b) => a * b)));
+    if (plan.sphere !== null) aperture.set(plan.sphere.polar, 2 * i);
     if (plan.outline?.kind === 'disc') aperture.set([plan.outline.radius, -1], 2 * i);
     if (plan.outline?.kind === 'rectangle') aperture.set(scaleHalf(plan.outline.size), 2 * i);
   });
@@ -76,6 +86,10 @@ export function layOutRecorders(
   plans.forEach((plan, i) => {
     if (plan.plane !== null) planeDetector[plan.plane.plane] = i;
   });
+  const quadricDetector = new Int32Array(solids.curves).fill(-1);
+  plans.forEach((plan, i) => {
+    if (plan.curve !== null) quadricDetector[plan.curve] = i;
+  });
   const exitFaces = new Set(plans.filter(({ isExit }) => isExit).map(({ face }) => face));
   return {
     arrays: {
@@ -83,16 +97,23 @@ export function layOutRecorders(
       faceRecorderOut: sharedInts(faceRecorder(({ what }) => what !== 'pumped-face')),
       faceRecorderArriving: sharedInts(faceRecorder(({ what }) => what === 'pumped-face')),
       planeDetector: sharedInts(planeDetector),
+      quadricDetector: sharedInts(quadricDetector),
       detectorAperture: sharedDoubles(aperture),
       detectorExit: sharedBytes(plans.map(({ isExit }) => (isExit ? 1 : 0))),
       detectorSign: sharedBytes(plans.map(({ plane }) => plane?.sign ?? 0)),
       recorders: plans.length,
       recorderFrame: sharedDoubles(frame),
-      recorderWrap: sharedInts(plans.map(({ wrapped }) => (wrapped ? 1 : 0))),
+      recorderWrap: sharedInts(
+        plans.map(({ wrapped, sphere }) => (sphere !== null ? WRAP.sphere : wrapped ? WRAP.side : WRAP.flat)),
+      ),
       recorderCells: sharedInts(plans.flatMap(({ cells }) => cells)),
       recorderMap: sharedInts(mapAt),
       recorderSpectrum: sharedInts(spectrumAt),
       recorderAngles: sharedInts(anglesAt),
+      recorderPolar: sharedInts(plans.map(polarCells)),
+      recorderRadiance: sharedInts(radianceAt),
+      radianceGrid: sharedInts(plans.flatMap((plan) => plan.radiance ?? [0, 0, 0, 0])),
+      recorderNormal: sharedDoubles(plans.flatMap(localNormal)),
       recorderNext: sharedInts(plans.map((plan, i) => nextOnFace(plans, plan, i))),
       recorderLights: sharedInts(plans.map((p) => (p.countsPump ? 1 : 0) | (p.countsEmitted ? 2 : 0))),
       voxelOrigin: sharedDoubles(voxels.origin),
@@ -106,8 +127,26 @@ export function layOutRecorders(
       spectrumEmitted: spectra.take(wavelengths),
       spectrumCells: spectra.total(),
       angleCells: angles.total(),
+      radianceCells: radiance.total(),
     },
   };
+}
+
+/** Cells of an angular record along the polar angle: all of the same width. */
+export const polarCells = ({ polarToDeg }: RecorderPlan): number => (CELLS.polar * polarToDeg) / 90;
+
+/** What the outward normal at a point of the recorder is worked out from; see LOCAL_NORMAL. */
+function localNormal({ face, sphere, origin, wrapped }: RecorderPlan): number[] {
+  const patch = face?.patch;
+  const sign = face?.hollow === true ? -1 : 1;
+  if (sphere !== null) return [NORMAL.aboutCentre, ...origin, 0, 0, 1];
+  if (patch?.kind === 'zone') return [NORMAL.aboutCentre, ...patch.centre, 0, 0, sign];
+  if (wrapped && patch?.kind === 'side') {
+    const slope = patch.bottomRadius - patch.topRadius;
+    const slant = Math.hypot(patch.height, slope);
+    return [NORMAL.ofSide, 0, 0, 0, patch.height / slant, slope / slant, sign];
+  }
+  return [NORMAL.flat, 0, 0, 0, 0, 0, 1];
 }
 
 /** The next recorder of light leaving through the same face, −1 for none. */

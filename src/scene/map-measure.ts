@@ -16,6 +16,7 @@ const SAMPLES = 8;
 /** Area, mm², of each cell of a recorder's map: of a face, what of it bounds its part. */
 export function mapMeasure(plan: RecorderPlan, graph: RegionGraph): Float64Array {
   const [cellsU, cellsV] = plan.cells;
+  if (plan.sphere !== null) return sphereMeasure(plan.sphere, cellsU, cellsV);
   const facets = plan.face === null ? [] : facetPatches(plan.face.patch);
   if (plan.face !== null && facets.length > 0) {
     const sum = new Float64Array(cellsU * cellsV);
@@ -60,6 +61,21 @@ function facetPatches(patch: FacePatch): readonly FacetPatch[] {
   if (patch.kind === 'facets') return [patch];
   if (patch.kind !== 'group') return [];
   return patch.members.flatMap((member) => (member.kind === 'facets' ? [member] : []));
+}
+
+/** Cells of equal azimuth and polar angle on a sphere, exactly. */
+function sphereMeasure(
+  { radius, polar: [from, to] }: NonNullable<RecorderPlan['sphere']>,
+  cellsU: number,
+  cellsV: number,
+): Float64Array {
+  const edge = (row: number) => Math.cos(from + ((to - from) * row) / cellsV);
+  const measure = new Float64Array(cellsU * cellsV);
+  for (let row = 0; row < cellsV; row++) {
+    const area = ((radius ** 2 * 2 * Math.PI) / cellsU) * (edge(row) - edge(row + 1));
+    measure.fill(area, row * cellsU, (row + 1) * cellsU);
+  }
+  return measure;
 }
 
 /** Probes along either side of a map: what covers less than one step of a face is overlooked where the rest is bare. */

@@ -37,15 +37,15 @@ export const enum INTERFACE {
   faceIn = 5,
   /** Face that carries the finish: where its absorption is booked. */
   faceActing = 6,
-  /** Recorder: of a free plane, or of pump light arriving at the face entered. */
+  /** Recorder: of a free plane or sphere, or of pump light arriving at the face entered. */
   recorder = 7,
   /** Table of a stack of thin films between the two media, in this direction; −1 for other finishes. */
   film = 8,
   STRIDE = 9,
 }
 export const enum FLAG {
-  /** The interface is a free plane. */
-  freePlane = 1,
+  /** The interface is a free plane or sphere. */
+  freeSurface = 1,
   /** Pump light that arrives here is recorded. */
   recordsArrival = 2,
   /** The finish spreads what it reflects or transmits. */
@@ -367,9 +367,8 @@ export class RegionGraph {
   #interface(from: number, to: number, surface: number, group: number): number {
     const { scene } = this;
     const isPlane = surface < scene.planeOffset.length;
-    if (isPlane && scene.planeDetector[surface] >= 0) {
-      return this.#internInterface(-1, this.medium[to], this.owner[to], -1, -1, -1, scene.planeDetector[surface], -1);
-    }
+    const detector = isPlane ? scene.planeDetector[surface] : scene.quadricDetector[surface - scene.planeOffset.length];
+    if (detector >= 0) return this.#internInterface(-1, this.medium[to], this.owner[to], -1, -1, -1, detector, -1);
     const ownerFrom = this.owner[from];
     const ownerTo = this.owner[to];
     if (ownerFrom === ownerTo) return CROSSING.pass;
@@ -428,7 +427,7 @@ export class RegionGraph {
     const arrival = faceIn < 0 ? -1 : scene.faceRecorderArriving[faceIn];
     const spreads = finish >= 0 && (scene.finishReflectSpread[finish] || scene.finishTransmitSpread[finish]);
     const flags =
-      (detector >= 0 ? FLAG.freePlane : 0) | (arrival >= 0 ? FLAG.recordsArrival : 0) | (spreads ? FLAG.spreads : 0);
+      (detector >= 0 ? FLAG.freeSurface : 0) | (arrival >= 0 ? FLAG.recordsArrival : 0) | (spreads ? FLAG.spreads : 0);
     const recorder = detector >= 0 ? detector : arrival;
     this.interfaces.set([flags, finish, mediumBeyond, ownerBeyond, faceOut, faceIn, faceActing, recorder, film], at);
     return at;

@@ -3,7 +3,7 @@
  * Numbers of slots and kinds are const enums: the build writes them into the kernel as literals, where imported objects would be looked up.
  * Lengths in mm; spectral tables are indexed [thing · wavelengths + wavelength index].
  */
-export const SCENE_VERSION = 2;
+export const SCENE_VERSION = 3;
 
 /** Index of the surroundings among owners; part i of the design is owner i + 1. */
 export const SURROUNDINGS = 0;
@@ -151,8 +151,35 @@ export const enum RECORDER {
   axisV = 15,
   STRIDE = 18,
 }
+/** Shapes of recorders. */
+export const enum WRAP {
+  flat = 0,
+  /** Side of a cylinder or cone: u is the azimuth about the axis in axisN, v the height. */
+  side = 1,
+  /** Sphere: u is the azimuth about axisN from axisU, v the polar angle. */
+  sphere = 2,
+}
+/** Kinds of outward normal. */
+export const enum NORMAL {
+  flat = 0,
+  ofSide = 1,
+  aboutCentre = 2,
+}
+/** Doubles per recorder in `recorderNormal`. */
+export const enum LOCAL_NORMAL {
+  /** NORMAL. */
+  kind = 0,
+  centreX = 1,
+  /** Parts of a side's normal along the radius and along the axis. */
+  radial = 4,
+  axial = 5,
+  /** −1 where light leaves towards the axis or centre. */
+  sign = 6,
+  STRIDE = 7,
+}
 /** Cells of angular maps and histograms. */
 export const enum CELLS {
+  /** Of 90°; a recorder that looks both ways has twice as many. */
   polar = 45,
   azimuth = 72,
   absorptions = 64,
@@ -207,7 +234,8 @@ export interface Scene {
   readonly faceRecorderOut: Int32Array; // light leaving through the face, −1 none
   readonly faceRecorderArriving: Int32Array; // pump light arriving from outside, −1 none
   readonly planeDetector: Int32Array; // [plane]: recorder of a free plane, −1
-  readonly detectorAperture: Float64Array; // [recorder · 2]: half widths u, v; v < 0: disc of radius u; 0: unbounded
+  readonly quadricDetector: Int32Array; // [quadric]: recorder of a free sphere, −1
+  readonly detectorAperture: Float64Array; // [recorder · 2]: half widths u, v; v < 0: disc of radius u; 0: unbounded; sphere: polar angles
   readonly detectorExit: Int8Array; // [recorder]
   readonly detectorSign: Int8Array; // [recorder]: sign of the detector's normal along its family's
 
@@ -283,6 +311,7 @@ export interface Scene {
 
   // ---- weights per wavelength
   readonly energyQuanta: Float64Array; // photon energy in whole quanta, so that sums of it are exact
+  readonly luminousQuanta: Float64Array; // energyQuanta · ȳ, whole
   readonly observerX: Float64Array;
   readonly observerY: Float64Array;
   readonly observerZ: Float64Array;
@@ -295,11 +324,15 @@ export interface Scene {
   readonly dyeSlot: Int32Array; // [owner · maxAbsorbers + absorber], −1 for the bulk
   readonly recorders: number;
   readonly recorderFrame: Float64Array;
-  readonly recorderWrap: Int32Array; // 0 flat; 1 cylinder: u is the azimuth about axisN-stored axis, v the height
+  readonly recorderWrap: Int32Array; // WRAP
   readonly recorderCells: Int32Array; // [recorder · 2]: cells along u, v
   readonly recorderMap: Int32Array; // offset of the map in the maps array
   readonly recorderSpectrum: Int32Array; // offset of its pump spectrum (emitted follows), −1
   readonly recorderAngles: Int32Array; // offset, −1
+  readonly recorderPolar: Int32Array; // polar cells of the angular record, each of 2°
+  readonly recorderRadiance: Int32Array; // offset, −1
+  readonly radianceGrid: Int32Array; // [recorder · 4]: cells u, v, polar, azimuth
+  readonly recorderNormal: Float64Array; // [recorder · LOCAL_NORMAL.STRIDE]
   readonly recorderNext: Int32Array; // next recorder of light leaving through the same face, −1
   readonly recorderLights: Int32Array; // bit 0: map counts pump, bit 1: emitted
   readonly voxelOrigin: Float64Array; // 3
@@ -310,6 +343,7 @@ export interface Scene {
   readonly mapCells: number; // of one half
   readonly spectrumCells: number;
   readonly angleCells: number;
+  readonly radianceCells: number; // of one half
   readonly spectrumLaunched: number;
   readonly spectrumAbsorbedPump: number;
   readonly spectrumEmitted: number;

@@ -52,6 +52,11 @@ export class SurfaceTable {
     return this.#offsets[family].every((other) => Math.abs(other - wanted) > this.tolerance);
   }
 
+  /** Whether no curve of the table coincides with this one. */
+  isFreeCurve(curve: Curved): boolean {
+    return this.#curves.every((other) => !sameCurve(other, curve, this.tolerance));
+  }
+
   #addPlane(normal: Vector3, offset: number): SurfaceSide {
     const family = this.#familyOf(normal);
     const along = Math.sign(dot(normal, this.#normals[family])) as -1 | 1;

@@ -116,7 +116,11 @@ export interface RecordedMap {
   readonly energy: readonly [Float64Array, Float64Array];
   /** Area (mm²) or volume (mm³) of each cell that belongs to the face or dyed part; 0 outside it. */
   readonly measure: Float64Array;
-  /** Corner of the map (its first cell's outer corner) and its unit axes in design coordinates; null for wrapped maps (cylinder sides). */
+  /** Of a sphere: the extent as azimuth and polar angle, degrees; `extent` then is arcs. */
+  readonly extentDeg?: readonly (readonly [number, number])[];
+  /** Of the exit: name of the medium its light goes out into, at its middle. */
+  readonly mediumBeyond?: string;
+  /** Corner of the map (its first cell's outer corner) and its unit axes in design coordinates; null for maps round cylinders and spheres. */
   readonly frame: {
     readonly origin: readonly [number, number, number];
     readonly u: readonly [number, number, number];
@@ -136,11 +140,40 @@ export interface RecordedSpectrum {
 export interface RecordedAngles {
   readonly id: string;
   readonly where: string;
-  /** Polar cells of equal width from 0 to 90° off the normal, azimuth cells of equal width from 0 to 360°. */
+  /** Polar cells of equal width from 0 to `polarToDeg` off the normal or axis, azimuth cells of equal width from 0 to 360°. */
   readonly polarCells: number;
   readonly azimuthCells: number;
+  readonly polarToDeg: 90 | 180;
   /** Photon energy, eV, index polar·azimuthCells + azimuth. */
   readonly energy: Float64Array;
+  /** The same from even and from odd batches alone. */
+  readonly halves: readonly [Float64Array, Float64Array];
+  /** Σ eV·ȳ(λ). */
+  readonly luminous: Float64Array;
+  /** What the light comes out of, as photometry wants it; null where directions are those from a round side, which is no far field. */
+  readonly opening: LuminousOpening | null;
+}
+
+/** Outline of what shines, mm: along azimuth 0, along azimuth 90°, and along the normal. A round one has its diameter for the first two. */
+export interface LuminousOpening {
+  readonly shape: 'rectangle' | 'disc' | 'dome' | 'sphere';
+  readonly sizeMm: readonly [number, number, number];
+}
+
+/** Light by place and by direction from the outward normal there. */
+export interface RecordedRadiance {
+  readonly id: string;
+  readonly what: 'exit' | 'detector';
+  readonly where: string;
+  /** Cells along u, v, polar angle (0 to 90°) and azimuth; index ((iv·nu + iu)·polar + ip)·azimuth + ia. */
+  readonly shape: readonly [number, number, number, number];
+  readonly extent: RecordedMap['extent'];
+  readonly extentDeg?: RecordedMap['extent'];
+  readonly axes: readonly string[];
+  /** Photon energy, eV, by half. */
+  readonly energy: readonly [Float64Array, Float64Array];
+  /** Area of each place, mm², index iv·nu + iu. */
+  readonly measure: Float64Array;
 }
 
 export interface Histogram {
@@ -160,6 +193,7 @@ export interface RunTallies {
   readonly maps: readonly RecordedMap[];
   readonly spectra: readonly RecordedSpectrum[];
   readonly angles: readonly RecordedAngles[];
+  readonly radiance: readonly RecordedRadiance[];
   readonly histograms: readonly Histogram[];
   /** Wavelength of each cell of every spectrum, nm. */
   readonly wavelengthsNm: Float64Array;

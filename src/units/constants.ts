@@ -2,6 +2,7 @@
 export const PLANCK_J_S = 6.62607015e-34;
 export const SPEED_OF_LIGHT_M_PER_S = 299_792_458;
 export const ELEMENTARY_CHARGE_C = 1.602176634e-19;
+export const BOLTZMANN_J_PER_K = 1.380649e-23;
 export const AVOGADRO_PER_MOL = 6.02214076e23;
 
 /** Photon energy in eV times wavelength in nm: hc / (e · 1 nm), about 1239.84 eV nm. */

@@ -3,7 +3,7 @@ import type { Figure, FigureName, LedgerRow, RunRecord } from '../../src/record/
 /** A run record made by hand (invented numbers), for tests of what is printed. */
 export function sampleRecord(): RunRecord {
   return {
-    format: 2,
+    format: 3,
     tool: { name: 'stokeswell', version: '0.0.0' },
     design: {
       title: 'Loom strobe, two-bank box cell',
@@ -34,6 +34,7 @@ export function sampleRecord(): RunRecord {
     spectra: [],
     curves: [],
     angles: [],
+    radiance: [],
     histograms: [],
     pictures: [],
     checks: [],
@@ -145,5 +146,13 @@ function figures(): Record<FigureName, Figure> {
     meanEmittedPath: figure(14.1, 0.03, 'mm'),
     pumpAbsorbedFraction: figure(0.967, 0.0004, ''),
     pumpPower: figure(60, 0, 'W'),
+    exitEtendue: figure(502.7, null, 'mm² sr'),
+    exitEffectiveEtendue: figure(471, 3, 'mm² sr'),
+    exitMeanLuminance: figure(23.7e6, 66e3, 'cd/m²'),
+    exitNormalLuminance: figure(25e6, 6e5, 'cd/m²'),
+    pumpEtendue: figure(0.39, null, 'mm² sr'),
+    brightnessRatio: figure(2.1e-4, 1e-5, ''),
+    brightnessBound: figure(4.2e4, null, ''),
+    brightnessBoundShare: figure(5e-9, 2.5e-10, ''),
   };
 }

@@ -68,7 +68,7 @@ test('no warnings, whole and in order', () => {
     voxels: [8, 9, 10],
     polarisation: 'carried',
   });
-  expect(description.exit).toEqual({ name: 'eye', path: ['exit', 'face'], pixels: [64, 32] });
+  expect(description.exit).toEqual({ name: 'eye', path: ['exit', 'face'], pixels: [64, 32], radiance: null });
   expect(description.surroundings).toBe('water');
 });
 

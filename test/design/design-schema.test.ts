@@ -78,7 +78,11 @@ describe('as another implementation reads it (zod, fromJSONSchema)', () => {
 test('a choice of fields is written as exactly one of several requirements', () => {
   expect(designJsonSchema()).toMatchObject({
     properties: {
-      detectors: { additionalProperties: { allOf: [{ oneOf: [{ required: ['face'] }, { required: ['plane'] }] }] } },
+      detectors: {
+        additionalProperties: {
+          allOf: [{ oneOf: [{ required: ['face'] }, { required: ['plane'] }, { required: ['sphere'] }] }],
+        },
+      },
     },
   });
 });

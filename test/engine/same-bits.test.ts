@@ -6,7 +6,7 @@ import type { TraceOptions, TraceResult } from '../../src/trace/trace-result.js'
 import { beam, describeDesign, finish, medium, part, plainDye } from '../helpers/describe.js';
 
 function cell(): Description {
-  return describeDesign({
+  const design = describeDesign({
     media: [medium('bath', 1.36, { dyes: [plainDye(0.5, 0.9, 520)], absorption: 0.001 }), medium('glass', 1.5)],
     finishes: [finish('mirror', { kind: 'mirror', reflectance: 0.9 })],
     parts: [
@@ -21,6 +21,7 @@ function cell(): Description {
     ],
     exit: 'dome.dome',
   });
+  return { ...design, exit: { ...design.exit, radiance: [3, 3, 6, 4] } };
 }
 
 const options = (more: Partial<TraceOptions>): TraceOptions => ({
@@ -40,6 +41,7 @@ function bits({ tallies }: TraceResult): string {
     tallies.maps.map(({ energy }) => energy),
     tallies.spectra,
     tallies.angles,
+    tallies.radiance,
     tallies.histograms,
   ]);
 }

@@ -76,6 +76,7 @@ export function syntheticTallies(
     maps: [],
     spectra: [],
     angles: [],
+    radiance: [],
     histograms: [],
     wavelengthsNm: new Float64Array(),
     ...more,

@@ -63,7 +63,19 @@ function run(more: readonly RecordedMap[] = []) {
             photons: Float64Array.of(0, 0, BATCHES * OUT, 0),
           },
         ],
-        angles: [{ id: 'exit-cell.top', where: 'cell.top', polarCells: 18, azimuthCells: 36, energy }],
+        angles: [
+          {
+            id: 'exit-cell.top',
+            where: 'cell.top',
+            polarCells: 18,
+            azimuthCells: 36,
+            polarToDeg: 90,
+            energy,
+            halves: [energy, energy],
+            luminous: energy,
+            opening: null,
+          },
+        ],
         histograms: [
           {
             id: 'absorptions-per-history',

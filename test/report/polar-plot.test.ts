@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { azimuthMeans, polarPlot } from '../../src/report/charts/polar-plot.js';
+import { azimuthMeans, polarPlot, polarWords } from '../../src/report/charts/polar-plot.js';
 
 /** A face of even radiance sends out Φ cos θ / π per steradian (Lambert's law). */
 const lambertian = (watts: number) => {
@@ -9,7 +9,7 @@ const lambertian = (watts: number) => {
     // Alternating azimuths average out.
     return (watts / Math.PI) * Math.cos(((polar + 0.5) * Math.PI) / 2 / polarCells) * (i % 2 === 0 ? 1.5 : 0.5);
   });
-  return { id: 'exit', polarCells, azimuthCells, wattsPerSr };
+  return { id: 'exit', polarCells, azimuthCells, polarToDeg: 90 as const, wattsPerSr, candela: wattsPerSr };
 };
 
 const points = (svg: string, className: string): number[][] => {
@@ -38,5 +38,24 @@ describe('polarPlot', () => {
     expect(curve).toHaveLength(90);
     // In polar coordinates r = 2a cos θ is a circle of radius a through the origin.
     for (const [x, y] of curve) expect(Math.hypot(x - cx, y - (foot - radius)) / radius).toBeCloseTo(1, 2);
+  });
+});
+
+describe('light both ways', () => {
+  it('draws an even emitter upon the dashed circle all round, and says from where its angles count', () => {
+    const [polarCells, azimuthCells] = [90, 8];
+    const wattsPerSr = new Float64Array(polarCells * azimuthCells).fill(2);
+    const angles = { id: 'ball', polarCells, azimuthCells, polarToDeg: 180 as const, wattsPerSr, candela: wattsPerSr };
+    const { text } = polarPlot('p', angles, 'directions');
+    const circle = points(text, 'lambert');
+    const curve = points(text, 'intensity');
+    expect(curve).toHaveLength(180);
+    const [cx, cy] = [0, 1].map(
+      (axis) => (Math.min(...circle.map((p) => p[axis])) + Math.max(...circle.map((p) => p[axis]))) / 2,
+    );
+    const radius = Math.max(...circle.map(([x]) => x)) - cx;
+    for (const [x, y] of curve) expect(Math.hypot(x - cx, y - cy) / radius).toBeCloseTo(1, 2);
+    expect(polarWords(angles)).toMatch(/from the axis/);
+    expect(polarWords(lambertian(1))).toMatch(/from the normal/);
   });
 });

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { anglesCsv, ledgerCsv, mapCsv, spectraCsv } from '../../src/run-folder/encode-csv.js';
+import { anglesCsv, ledgerCsv, mapCsv, radianceCsv, spectraCsv } from '../../src/run-folder/encode-csv.js';
 import { sampleRun } from './sample-run.js';
 
 const { record, arrays } = sampleRun();
@@ -38,13 +38,36 @@ describe('tables of a run', () => {
 
   it('angles: centres of the cells, azimuth fastest', () => {
     expect(lines(anglesCsv(arrays.angles[0]))).toEqual([
-      'polar_deg,azimuth_deg,radiant_intensity_W_per_sr',
-      '15,90,1',
-      '15,270,2',
-      '45,90,3',
-      '45,270,4',
-      '75,90,5',
-      '75,270,6',
+      'polar_deg,azimuth_deg,radiant_intensity_W_per_sr,luminous_intensity_cd',
+      '15,90,1,6',
+      '15,270,2,5',
+      '45,90,3,4',
+      '45,270,4,3',
+      '75,90,5,2',
+      '75,270,6,1',
+    ]);
+  });
+
+  it('radiance: places and directions at the centres of their cells, degrees on a sphere', () => {
+    const [radiance] = arrays.radiance;
+    expect(lines(radianceCsv(radiance))).toEqual([
+      'u_mm,v_mm,polar_from_normal_deg,azimuth_about_normal_deg,radiance_W_per_m2_sr',
+      '1.5,0,22.5,180,1',
+      '1.5,0,67.5,180,2',
+      '4.5,0,22.5,180,3',
+      '4.5,0,67.5,180,',
+    ]);
+    const ball = {
+      ...radiance,
+      extentDeg: [
+        [0, 360],
+        [0, 180],
+      ] as const,
+      axes: ['azimuth', 'polar angle'],
+    };
+    expect(lines(radianceCsv(ball)).slice(0, 2)).toEqual([
+      'azimuth_deg,polar_angle_deg,polar_from_normal_deg,azimuth_about_normal_deg,radiance_W_per_m2_sr',
+      '90,90,22.5,180,1',
     ]);
   });
 

@@ -23,7 +23,33 @@ export function sampleRun(): { record: RunRecord; arrays: RunArrays } {
       { id: 'dye-absorption dye in bath', what: 'dye-absorption', name: 'dye', where: 'bath', unit: '1/mm', file: '' },
       { id: 'finish-transmittance pass', what: 'finish-transmittance', name: 'pass', where: null, unit: '1', file: '' },
     ],
-    angles: [{ id: 'exit-lid.top', where: 'lid.top', file: '' }],
+    angles: [
+      {
+        id: 'exit-lid.top',
+        where: 'lid.top',
+        file: '',
+        polarToDeg: 90,
+        lumens: 2,
+        opening: { shape: 'rectangle', sizeMm: [6, 8, 0] },
+        photometricFile: '',
+      },
+    ],
+    radiance: [
+      {
+        id: 'exit-lid.top',
+        where: 'lid.top',
+        unit: 'W/(m² sr)',
+        shape: [2, 1, 2, 1],
+        extentMm: [
+          [0, 6],
+          [-4, 4],
+        ],
+        axes: ['u', 'v'],
+        files: [],
+        mean: 2,
+        maximum: 3,
+      },
+    ],
     histograms: [{ id: 'absorptions-per-history', unit: '', from: 0, width: 1, shares: [0.25, 0.5, 0.25] }],
     checks: [{ code: 'caution', severity: 'warning', path: ['parts', 'cell', 0], problem: 'thin wall', found: '1 µm' }],
   };
@@ -44,7 +70,28 @@ export function sampleRun(): { record: RunRecord; arrays: RunArrays } {
         { id: 'finish-transmittance pass', values: Float64Array.of(0.95, 0.02) },
       ],
     },
-    angles: [{ id: 'exit-lid.top', polarCells: 3, azimuthCells: 2, wattsPerSr: Float64Array.of(1, 2, 3, 4, 5, 6) }],
+    angles: [
+      {
+        id: 'exit-lid.top',
+        polarCells: 3,
+        azimuthCells: 2,
+        polarToDeg: 90,
+        wattsPerSr: Float64Array.of(1, 2, 3, 4, 5, 6),
+        candela: Float64Array.of(6, 5, 4, 3, 2, 1),
+      },
+    ],
+    radiance: [
+      {
+        id: 'exit-lid.top',
+        shape: [2, 1, 2, 1],
+        extentMm: [
+          [0, 6],
+          [-4, 4],
+        ],
+        axes: ['u', 'v'],
+        values: Float64Array.of(1, 2, 3, Number.NaN),
+      },
+    ],
   };
   return { record, arrays };
 }

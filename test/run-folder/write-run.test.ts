@@ -34,9 +34,14 @@ describe('writeRun', () => {
     expect(await readdir(join(root, 'loom'))).toEqual(['run']);
     expect((await readdir(join(root, 'loom/run'))).sort()).toEqual([...names].sort());
     const read = await readRun(join(root, 'loom/run'));
-    const named = [...read.maps.flatMap(({ files }) => files), ...read.angles, ...read.spectra, ...read.curves].map(
-      (of) => (typeof of === 'string' ? of : of.file),
-    );
+    const named = [
+      ...read.maps.flatMap(({ files }) => files),
+      ...read.radiance.flatMap(({ files }) => files),
+      ...read.angles.map(({ photometricFile }) => photometricFile),
+      ...read.angles,
+      ...read.spectra,
+      ...read.curves,
+    ].map((of) => (typeof of === 'string' ? of : of.file));
     expect([...new Set([...named, 'run.json', 'ledger.csv', 'drawing.json'])].sort()).toEqual([...names].sort());
     expect(names).toContain('map-detector-etc.npy');
     expect(names).toContain('map-detector-etc-2.npy');
@@ -51,7 +56,8 @@ describe('writeRun', () => {
       maps: of.maps.map((map) => ({ ...map, files: [] })),
       spectra: of.spectra.map((spectrum) => ({ ...spectrum, file: '' })),
       curves: of.curves.map((curve) => ({ ...curve, file: '' })),
-      angles: of.angles.map((one) => ({ ...one, file: '' })),
+      angles: of.angles.map((one) => ({ ...one, file: '', photometricFile: '' })),
+      radiance: of.radiance.map((one) => ({ ...one, files: [] })),
     });
     expect(blank(await readRun(join(root, 'run')))).toEqual(record);
   });

@@ -43,7 +43,7 @@ function variationText({ variation, variationError }: MapRecord): string {
 }
 
 function numbers(columns: readonly string[]): string {
-  return columns.map((text, index) => text.padStart(NUMBER_WIDTHS[index] ?? 0)).join('');
+  return columns.map((text, index) => (text === '' ? '' : ` ${text}`).padStart(NUMBER_WIDTHS[index] ?? 0)).join('');
 }
 
 function isoLine(record: RunRecord, style: TerminalStyle): string[] {

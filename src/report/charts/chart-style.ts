@@ -54,5 +54,6 @@ export const CHART_STYLE = `
 .picture .point-text{paint-order:stroke;stroke:#fff;stroke-opacity:.75;stroke-width:3px}
 .picture .on-colour{font-weight:400;font-size:11px}
 .intensity{fill:none;stroke:var(--output);stroke-width:2}
+.radiance-range{fill:var(--output);fill-opacity:.25}
 .lambert{fill:none;stroke:var(--ink);stroke-width:1.1;stroke-dasharray:5 4}
 `;

@@ -8,11 +8,12 @@ import { type Plane, planePng } from './raster.js';
 
 export interface HeatMap extends PictureText {
   readonly plane: Plane;
-  /** Low and high end across and up, mm. */
+  /** Low and high end across and up, in the unit of the axes: mm, or degrees on a sphere. */
   readonly extentMm: readonly [readonly [number, number], readonly [number, number]];
   /** Length that fills the drawing, mm, so that several maps share a scale. */
   readonly spanMm: number;
   readonly axes: readonly [string, string];
+  readonly axisUnit: ' mm' | '°';
   readonly maximum: number;
   readonly mean: number;
   readonly unit: string;
@@ -29,9 +30,10 @@ const SHORTEST = 56;
 const PROFILE = 44;
 const WIDTH = LEFT + LONGEST + 12;
 
-/** A map with axes in mm, its colour scale, and cross-sections through one cell. */
+/** A map with its axes, its colour scale, and cross-sections through one cell. */
 export function heatMap(map: HeatMap): Picture {
-  const { plane, extentMm, spanMm, axes, maximum, mean, unit, at } = map;
+  const { plane, extentMm, spanMm, axes, axisUnit, maximum, mean, unit, at } = map;
+  const label = (axis: string) => `${axis}, ${axisUnit === '°' ? '°' : 'mm'}`;
   const [width, height] = plotSize(extentMm, spanMm);
   const bottom = TOP + height;
   const barAt = bottom + 58;
@@ -43,16 +45,16 @@ export function heatMap(map: HeatMap): Picture {
   const centre = (axis: 0 | 1, cells: number) => cellCentre(extentMm[axis], cells, at[axis]);
   const crossX = LEFT + ((u + 0.5) / plane.cellsU) * width;
   const crossY = bottom - ((v + 0.5) / plane.cellsV) * height;
-  const mm = (value: number) => significant(value, 3).replace('-', '−');
+  const short = (value: number) => significant(value, 3).replace('-', '−');
   return picture(
     map,
     WIDTH,
     profilesAt + 2 * PROFILE + 34,
     markup`<image href="${planePng(plane, maximum)}" x="${LEFT}" y="${TOP}" width="${round(width)}" height="${round(height)}" preserveAspectRatio="none"/><rect class="frame" x="${LEFT}" y="${TOP}" width="${round(width)}" height="${round(height)}"/><g class="cross"><line class="cross-u" x1="${round(crossX)}" x2="${round(crossX)}" y1="${TOP}" y2="${round(bottom)}"/><line class="cross-v" x1="${LEFT}" x2="${round(LEFT + width)}" y1="${round(crossY)}" y2="${round(crossY)}"/></g>${bottomAxis(
-      { domain: extentMm[0], range: [LEFT, LEFT + width], label: `${axes[0]}, mm`, ticks: Math.max(3, width / 45) },
+      { domain: extentMm[0], range: [LEFT, LEFT + width], label: label(axes[0]), ticks: Math.max(3, width / 45) },
       bottom,
     )}${leftAxis(
-      { domain: extentMm[1], range: [bottom, TOP], label: `${axes[1]}, mm`, ticks: Math.max(2, height / 36) },
+      { domain: extentMm[1], range: [bottom, TOP], label: label(axes[1]), ticks: Math.max(2, height / 36) },
       LEFT,
       12,
     )}${colourBar(`${map.id}-scale`, { x: LEFT, y: barAt, width: LONGEST }, { maximum, mean, label: `${map.quantity}, ${unit}` })}${profile(
@@ -60,19 +62,19 @@ export function heatMap(map: HeatMap): Picture {
       { x: LEFT, y: profilesAt, width: LONGEST, height: PROFILE },
       row,
       maximum,
-      `over ${axes[0]}; ${axes[1]} = ${mm(centre(1, plane.cellsV))} mm`,
+      `over ${axes[0]}; ${axes[1]} = ${short(centre(1, plane.cellsV))}${axisUnit}`,
     )}${profile(
       'v',
       { x: LEFT, y: profilesAt + PROFILE + 26, width: LONGEST, height: PROFILE },
       column,
       maximum,
-      `over ${axes[1]}; ${axes[0]} = ${mm(centre(0, plane.cellsU))} mm`,
+      `over ${axes[1]}; ${axes[0]} = ${short(centre(0, plane.cellsU))}${axisUnit}`,
     )}`,
     'heat-map',
   );
 }
 
-/** Place of a cell's centre, mm. */
+/** Place of a cell's centre, in the unit of the ends. */
 export function cellCentre([low, high]: readonly [number, number], cells: number, cell: number): number {
   return low + ((cell + 0.5) / cells) * (high - low);
 }

@@ -213,7 +213,9 @@ function labelsOf(
   const exits = parts.flatMap(({ faces }) => faces.filter(({ isExit }) => isExit));
   return [
     ...exits.map(({ name, triangles }) => ({ text: `exit: ${name}`, at: middle(triangles) })),
-    ...planes.map(({ name, isExit, edges }) => ({ text: isExit ? `exit: ${name}` : name, at: middle(edges) })),
+    ...planes
+      .filter(({ edges }) => edges.length > 0)
+      .map(({ name, isExit, edges }) => ({ text: isExit ? `exit: ${name}` : name, at: middle(edges) })),
     ...arrows.map(({ pump, tail }) => ({
       text: letters < 20 ? pump.name : `${pump.name}, ${significant(pump.watts, 3)} W`,
       at: spot(tail),

@@ -8,7 +8,8 @@ import { chainPicture } from '../charts/chain-picture.js';
 import { chromaticityDiagram } from '../charts/chromaticity-diagram.js';
 import { flowPicture, WIDE_FLOW } from '../charts/flow-picture.js';
 import { histogramBars } from '../charts/histogram-bars.js';
-import { POLAR_WORDS, polarPlot } from '../charts/polar-plot.js';
+import { polarPlot, polarWords } from '../charts/polar-plot.js';
+import { RADIANCE_WORDS, radianceCurves } from '../charts/radiance-curves.js';
 import { spectraStrips } from '../charts/spectra-strips.js';
 import { plainFigure } from '../figure-text.js';
 import { cutPicture, cutsOf, isCutStretched, isVolume } from '../map-cut.js';
@@ -49,6 +50,7 @@ export function runPictures(record: RunRecord, arrays: RunArrays): readonly RunP
     ...spectra(record, arrays),
     ...chromaticity(record),
     ...directions(record, arrays),
+    ...radiance(record, arrays),
     ...histograms(record),
     chain(record),
   ];
@@ -138,7 +140,28 @@ function directions(record: RunRecord, arrays: RunArrays): readonly Planned[] {
     if (array === undefined || !array.wattsPerSr.some((value) => value > 0)) return [];
     const title = `Directions of the light at ${shortName(where)}`;
     return [
-      { id: `directions ${id}`, title, facts: [POLAR_WORDS], charts: () => [polarPlot('directions', array, title)] },
+      {
+        id: `directions ${id}`,
+        title,
+        facts: [polarWords(array)],
+        charts: () => [polarPlot('directions', array, title)],
+      },
+    ];
+  });
+}
+
+function radiance(record: RunRecord, arrays: RunArrays): readonly Planned[] {
+  return record.radiance.flatMap(({ id, where }): Planned[] => {
+    const array = arrays.radiance.find((one) => one.id === id);
+    if (array === undefined || !array.values.some((value) => value > 0)) return [];
+    const title = `Radiance at ${shortName(where)}`;
+    return [
+      {
+        id: `radiance ${id}`,
+        title,
+        facts: [RADIANCE_WORDS],
+        charts: () => [radianceCurves('radiance', array, title)],
+      },
     ];
   });
 }

@@ -18,7 +18,7 @@ const mapOf = (figure) => {
   const top = Number(data.top);
   const axes = data.axes.split('|');
   return {
-    cells, axes, maximum, unit: data.unit,
+    cells, axes, maximum, unit: data.unit, axisUnit: data.axisUnit,
     centre: (axis, cell) => ends[2 * axis] + ((cell + 0.5) / cells[axis]) * (ends[2 * axis + 1] - ends[2 * axis]),
     value: (at) => {
       const one = packed.getUint16(2 * (at[0] + cells[0] * (at[1] + cells[1] * at[2])), true);
@@ -83,8 +83,8 @@ for (const figure of document.querySelectorAll('.map[data-values]')) {
     const size = (name) => Number(image.getAttribute(name));
 
     const show = () => {
-      const { axes, cells, maximum, unit, centre, value } = map();
-      const place = (axis) => axes[axis] + ' = ' + short(centre(axis, at[axis]), 3) + ' mm';
+      const { axes, axisUnit, cells, maximum, unit, centre, value } = map();
+      const place = (axis) => axes[axis] + ' = ' + short(centre(axis, at[axis]), 3) + axisUnit;
       const x = size('x') + ((at[a] + 0.5) / cells[a]) * size('width');
       const y = size('y') + (1 - (at[b] + 0.5) / cells[b]) * size('height');
       for (const name of ['x1', 'x2']) svg.querySelector('.cross-u').setAttribute(name, x);

@@ -4,7 +4,8 @@ import type { RunRecord } from '../../record/run-record.js';
 import { backgroundCurves } from '../charts/background-curves.js';
 import { chromaticityDiagram } from '../charts/chromaticity-diagram.js';
 import { histogramBars } from '../charts/histogram-bars.js';
-import { POLAR_WORDS, polarPlot } from '../charts/polar-plot.js';
+import { polarPlot, polarWords } from '../charts/polar-plot.js';
+import { RADIANCE_WORDS, radianceCurves } from '../charts/radiance-curves.js';
 import { spectraStrips } from '../charts/spectra-strips.js';
 import { figureText, noteText, plainFigure } from '../figure-text.js';
 import { type Markup, markup } from '../markup.js';
@@ -17,7 +18,7 @@ import { termMark } from '../term-mark.js';
 const MOST_ANGLES = 12;
 
 export function lightSection(record: RunRecord, arrays: RunArrays): Markup {
-  return markup`<section id="light"><h2>Colour and direction</h2><div class="maps">${spectra(record, arrays)}${chromaticity(record)}${angles(record, arrays)}${histograms(record)}</div></section>`;
+  return markup`<section id="light"><h2>Colour and direction</h2><div class="maps">${spectra(record, arrays)}${chromaticity(record)}${angles(record, arrays)}${radiance(record, arrays)}${histograms(record)}</div></section>`;
 }
 
 /** The strips, what was not seen, and whether some were left out. */
@@ -49,7 +50,18 @@ function angles(record: RunRecord, arrays: RunArrays): readonly Markup[] {
     if (array === undefined || !array.wattsPerSr.some((value) => value > 0)) return [];
     const title = `Directions of the light at ${shortName(where)}`;
     return [
-      markup`<figure><figcaption><h3>Directions at ${nameText(where)}${termMark('radiant-intensity')}</h3><p class="facts">${POLAR_WORDS}${termMark('lambert')}</p></figcaption>${polarPlot(`angles-${i}`, array, title)}</figure>`,
+      markup`<figure><figcaption><h3>Directions at ${nameText(where)}${termMark('radiant-intensity')}</h3><p class="facts">${polarWords(array)}${termMark('lambert')}</p></figcaption>${polarPlot(`angles-${i}`, array, title)}</figure>`,
+    ];
+  });
+}
+
+function radiance(record: RunRecord, arrays: RunArrays): readonly Markup[] {
+  return record.radiance.slice(0, MOST_ANGLES).flatMap(({ id, where }, i) => {
+    const array = arrays.radiance.find((one) => one.id === id);
+    if (array === undefined || !array.values.some((value) => value > 0)) return [];
+    const title = `Radiance at ${shortName(where)}`;
+    return [
+      markup`<figure><figcaption><h3>Radiance at ${nameText(where)}${termMark('radiance')}</h3><p class="facts">${RADIANCE_WORDS}</p></figcaption>${radianceCurves(`radiance-${i}`, array, title)}</figure>`,
     ];
   });
 }

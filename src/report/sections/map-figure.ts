@@ -1,6 +1,6 @@
 import { termOfMap } from '../../terms/picture-terms.js';
 import { cutPicture, cutsOf, isCutStretched, isVolume, type MapCut } from '../map-cut.js';
-import { AXIS_LETTERS, axesOf, extents, mapNumbers, mapWords, noiseWords, placeWords } from '../map-words.js';
+import { AXIS_LETTERS, axesOf, axisUnit, extents, mapNumbers, mapWords, noiseWords, placeWords } from '../map-words.js';
 import { type Markup, markup } from '../markup.js';
 import { nameText, shortName } from '../name-text.js';
 import { packValues, type ShownMap } from '../shown-map.js';
@@ -17,7 +17,7 @@ export function mapFigure(map: ShownMap, id: string, histories: number, pumpWatt
     .map((axis) => shortName(axis, AXIS_LETTERS))
     .join(
       '|',
-    )}" data-unit="${record.unit}" data-maximum="${record.maximum}" data-top="${map.top}" data-values="${packValues(map)}"`;
+    )}" data-axis-unit="${axisUnit(map)}" data-unit="${record.unit}" data-maximum="${record.maximum}" data-top="${map.top}" data-values="${packValues(map)}"`;
   const { mean, others } = mapNumbers(map);
   const cuts = cutsOf(map).map((one) => cut(map, volume ? `${id}-${one.along}` : id, one));
   return markup`<figure class="map${volume ? ' volume' : ''}" ${data}><figcaption><h3>${title}${termMark(termOfMap(record.what))}</h3><p class="facts"><b>${mean}</b>\u00a0${others}</p><p class="facts">${noiseWords(map, histories, pumpWatts)}</p></figcaption>${

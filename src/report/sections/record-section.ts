@@ -44,12 +44,13 @@ function pictureItem({ pictures }: RunRecord): Markup | null {
   return item('Pictures beside this page', shortName(`${names.join(', ')}; each as ${endings.join(' and ')}`, 2000));
 }
 
-function tablesOf({ maps, spectra, curves, angles }: RunRecord): readonly string[] {
+function tablesOf({ maps, spectra, curves, angles, radiance }: RunRecord): readonly string[] {
   const files = [
     ...maps.flatMap((map) => map.files),
     ...spectra.map(({ file }) => file),
     ...curves.map(({ file }) => file),
-    ...angles.map(({ file }) => file),
+    ...angles.flatMap(({ file, photometricFile }) => [file, photometricFile]),
+    ...radiance.flatMap(({ files }) => files),
   ];
   return ['run.json', 'ledger.csv', ...new Set(files.filter((file) => file !== ''))];
 }
