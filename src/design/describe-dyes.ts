@@ -1,7 +1,7 @@
 /** Dyes of the design and of the library -> what a medium holds of them. */
-import { dyeNames, dyeSolvents, readDye } from '../materials/library.js';
+import { dyeNames, dyeSolvents, type RangedConstant, readDye, readPhotostability } from '../materials/library.js';
 import type { Curve } from '../units/curve.js';
-import type { DissolvedDye, EmissionDescription } from './description.js';
+import type { DissolvedDye, EmissionDescription, GivenConstant } from './description.js';
 import type { Named } from './form-record.js';
 import type { DyeRecord, DyeStrength } from './media-fields.js';
 import { checkReference } from './names.js';
@@ -18,6 +18,8 @@ export interface Dye {
   readonly quantumYield: number;
   readonly lifetimeNs: number | null;
   readonly molarMassGPerMol: number | null;
+  readonly bleachYield: GivenConstant | null;
+  readonly triplet: DissolvedDye['triplet'];
 }
 
 export function describeOwnDye({ path, value }: Named<DyeRecord>, reading: Reading): Dye {
@@ -35,7 +37,35 @@ export function describeOwnDye({ path, value }: Named<DyeRecord>, reading: Readi
     quantumYield: value.yield,
     lifetimeNs: value.lifetime,
     molarMassGPerMol: value['molar-mass'],
+    bleachYield: ownConstant(value['bleach-yield']),
+    triplet: ownTriplet(value, path, reading),
   };
+}
+
+const ownConstant = (value: number | null): GivenConstant | null =>
+  value === null ? null : { value, low: value, high: value, origin: 'as given in the design' };
+
+function ownTriplet(value: DyeRecord, path: Named<unknown>['path'], reading: Reading): DissolvedDye['triplet'] {
+  const [share, lifetime] = [value['triplet-yield'], value['triplet-lifetime']];
+  const [given, missing] =
+    share === null ? ['triplet-lifetime', 'triplet-yield'] : ['triplet-yield', 'triplet-lifetime'];
+  if ((share === null) !== (lifetime === null)) {
+    const problem = `${given} says nothing without ${missing}`;
+    reading.report({ code: 'missing', path: [...path, given], problem, expected: `both, or neither` });
+  }
+  if (share !== null && value.yield + share > 1) {
+    const problem = 'more excitations end as light and in the triplet than there are';
+    const found = `yield ${value.yield} and triplet yield ${share}`;
+    reading.report({
+      code: 'range',
+      path: [...path, 'triplet-yield'],
+      problem,
+      found,
+      expected: 'a sum of 100 % or less',
+    });
+  }
+  const [yields, lasts] = [ownConstant(share), ownConstant(lifetime)];
+  return yields && lasts && { yield: yields, lifetimeNs: lasts };
 }
 
 function describeEmission(rows: DyeRecord['emission']): EmissionDescription {
@@ -61,8 +91,8 @@ export function dissolveDye(
   const names = [...ownDyes.keys(), ...dyeNames()];
   if (own === undefined && !checkReference({ name, path }, names, 'no dye has this name', reading, 'key')) return null;
   const dye = own ?? libraryDye(name, path, host, reading);
-  const { emission, quantumYield, lifetimeNs } = dye;
-  const given = { name, quantumYield, emission, lifetimeNs };
+  const { emission, quantumYield, lifetimeNs, molarMassGPerMol, bleachYield, triplet = null } = dye;
+  const given = { name, quantumYield, emission, lifetimeNs, molarMassGPerMol, bleachYield, triplet };
   if (dye.absorption !== null) {
     const { absorption } = dye;
     if (strength.kind !== 'number' && !Number.isNaN(strength.value)) {
@@ -116,6 +146,21 @@ function libraryDye(name: string, path: Named<unknown>['path'], { base, pH }: Ho
     quantumYield: data.quantumYield,
     lifetimeNs: data.lifetimeNs,
     molarMassGPerMol: data.molarMassGPerMol,
+    ...libraryStability(name, base),
+  };
+}
+
+function libraryStability(name: string, solvent: string): Pick<Dye, 'bleachYield' | 'triplet'> {
+  const { bleachYield, triplet } = readPhotostability(name, solvent);
+  const given = ({ value, low, high, measuredIn, status }: RangedConstant): GivenConstant => ({
+    value,
+    low,
+    high,
+    origin: `of ${measuredIn}; ${status}`,
+  });
+  return {
+    bleachYield: bleachYield && given(bleachYield),
+    triplet: triplet && { yield: given(triplet.yield), lifetimeNs: given(triplet.lifetimeNs) },
   };
 }
 

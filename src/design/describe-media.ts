@@ -79,7 +79,9 @@ function describeMedium(
   const dyes = fields.dyes.flatMap((dye) => dissolveDye(dye, ownDyes, host, reading) ?? []);
   const hostDensity = base?.thermal?.densityKgPerM3 ?? null;
   const scatterers = fields.scatterers.flatMap((entry) => describeScatterer(entry, hostDensity, reading) ?? []);
-  return base && { name, path, ...base, dyes, scatterers };
+  const { reservoir } = fields;
+  if (base && reservoir !== null && base.kind !== 'liquid') reportMisplaced('reservoir', 'a liquid', path, reading);
+  return base && { name, path, ...base, dyes, scatterers, reservoirMm3: reservoir };
 }
 
 function describeBase(fields: MediumRecord, path: DesignPath, reading: Reading): Base | null {

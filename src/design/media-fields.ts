@@ -37,6 +37,10 @@ const mediumRecord = record(
     kind: optional(oneWord('liquid', 'solid'), 'What a material given by `index` is. Default: liquid.'),
     pH: optional(quantity('number', { min: 0, max: 14 }), 'pH of a solution in a solvent.'),
     absorption,
+    reservoir: optional(
+      quantity('volume', { above: 0 }),
+      'Volume of liquid that circulates through the parts besides what is in them: it shares the bleaching.',
+    ),
     dyes,
     scatterers: withDefault(
       scatterersForm,
@@ -88,6 +92,18 @@ const dyeRecord = record(
     yield: required(quantity('fraction', { min: 0, max: 1 }), 'Quantum yield: photons emitted per photon absorbed.'),
     lifetime: optional(quantity('lifetime', { above: 0 }), 'Fluorescence lifetime.'),
     'molar-mass': optional(quantity('molarMass', { above: 0 }), 'Molar mass, needed where a strength is given in g/L.'),
+    'bleach-yield': optional(
+      quantity('fraction', { min: 0, max: 1 }),
+      'Molecules destroyed for good per photon absorbed, such as 1e-6.',
+    ),
+    'triplet-yield': optional(
+      quantity('fraction', { min: 0, max: 1 }),
+      'Share of excitations that end in the triplet; needs `triplet-lifetime`.',
+    ),
+    'triplet-lifetime': optional(
+      quantity('lifetime', { above: 0 }),
+      'How long the triplet lasts in the liquid as used, air and all; needs `triplet-yield`.',
+    ),
   },
   { exactlyOne: [['extinction', 'absorption']] },
 );

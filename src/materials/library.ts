@@ -4,5 +4,6 @@ export { gasNames, readGas } from './gases.js';
 export { layerMaterialNames, readLayerMaterial } from './layer-materials.js';
 export type { DyeData, LayerMaterialData, MaterialData, ThermalData } from './material-data.js';
 export { metalNames, readMetal } from './metals.js';
+export { type Photostability, type RangedConstant, readPhotostability } from './photostability.js';
 export { readSolid, solidNames } from './solids.js';
 export { readSolvent, solventNames } from './solvents.js';
