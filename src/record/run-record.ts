@@ -6,7 +6,7 @@ import type { Fault } from '../design/fault.js';
 import type { Fate, Light } from '../tallies/run-tallies.js';
 import type { CurveKind, StopReason, UsedCurve } from '../trace/trace-result.js';
 
-export const RUN_FORMAT = 2;
+export const RUN_FORMAT = 3;
 
 export interface Figure {
   /** null: undefined for this run (no light left by the exit, wall-plug efficiency not given, …). */
@@ -37,6 +37,16 @@ export type FigureName =
   | 'exitBeamUniformity' // ISO 13694 beam uniformity
   | 'peakAbsorbedPowerDensity' // W/cm³
   | 'timeToBoiling' // s, adiabatic, still liquid, at the peak
+  | 'excitedMolecules' // at any time, in steady light
+  | 'excitedMass' // ng
+  | 'peakExcitedFraction' // of the molecules in the densest voxel
+  | 'depletedAbsorption' // of the absorption, lost because molecules are not in the ground state
+  | 'saturationIrradiance' // W/cm², hν/(σ τ) at the pump
+  | 'peakGain' // 1/cm, small signal, densest voxel
+  | 'gainOverLongestPath' // peak gain times the longest path
+  | 'absorptionsPerMolecule' // 1/s, mean over the liquid in the light
+  | 'timeToBleach' // s until 10 % of the dye in the parts is destroyed
+  | 'timeToBleachWithReservoir' // s, with the circulating volume
   | 'absorptionsPerHistory'
   | 'reabsorptionsPerHistory'
   | 'meanPumpPath' // mm per history

@@ -115,6 +115,8 @@ export interface RecordedMap {
   readonly energy: readonly [Float64Array, Float64Array];
   /** Area (mm²) or volume (mm³) of each cell that belongs to the face or dyed part; 0 outside it. */
   readonly measure: Float64Array;
+  /** Part that each cell lies in, by its place in the design, −1 outside all that is mapped; of voxels only. */
+  readonly part?: Int16Array;
   /** Corner of the map (its first cell's outer corner) and its unit axes in design coordinates; null for wrapped maps (cylinder sides). */
   readonly frame: {
     readonly origin: readonly [number, number, number];

@@ -3,7 +3,7 @@ import type { Figure, FigureName, LedgerRow, RunRecord } from '../../src/record/
 /** A run record made by hand (invented numbers), for tests of what is printed. */
 export function sampleRecord(): RunRecord {
   return {
-    format: 2,
+    format: 3,
     tool: { name: 'stokeswell', version: '0.0.0' },
     design: {
       title: 'Loom strobe, two-bank box cell',
@@ -139,6 +139,16 @@ function figures(): Record<FigureName, Figure> {
     exitBeamUniformity: figure(0.051, null, ''),
     peakAbsorbedPowerDensity: figure(1231, 42, 'W/cm³'),
     timeToBoiling: { ...figure(0.152, 0.005, 's'), note: 'bath at rest from 20 °C to 78.3 °C, no heat carried away' },
+    excitedMolecules: { ...figure(5.2e11, 4e9, 'molecules'), note: 'steady light; lifetime of fluorescein 4.13 ns' },
+    excitedMass: figure(0.287, 0.002, 'ng'),
+    peakExcitedFraction: { ...figure(2.1e-5, 7e-7, 'of molecules'), note: '0.0071 % out of the ground state' },
+    depletedAbsorption: { ...figure(3.3e-5, null, 'of absorption'), note: 'first order, not traced' },
+    saturationIrradiance: figure(3.56e6, null, 'W/cm²'),
+    peakGain: { ...figure(0, null, '1/cm'), note: 'no net gain' },
+    gainOverLongestPath: { ...figure(0, null, ''), note: 'no net gain' },
+    absorptionsPerMolecule: figure(812, 3, '1/s'),
+    timeToBleach: { ...figure(13.1, 0.1, 's'), note: 'fluorescein, 0.00001 molecules lost per absorption' },
+    timeToBleachWithReservoir: { value: null, standardError: null, unit: 's', note: 'the medium has no reservoir' },
     absorptionsPerHistory: figure(1.6, 0.002, ''),
     reabsorptionsPerHistory: figure(0.64, 0.002, ''),
     meanPumpPath: figure(6.2, 0.01, 'mm'),

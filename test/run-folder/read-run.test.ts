@@ -38,7 +38,7 @@ describe('readRun', () => {
     ['[]', 'no record of a run'],
     ['{"format": 0}', 'at format'],
     ['{"format": 1, "tool": {"name": "other", "version": "1"}}', 'at tool.name'],
-    ['{"format": 2, "tool": {"name": "stokeswell", "version": "1"}}', 'at design'],
+    ['{"format": 3, "tool": {"name": "stokeswell", "version": "1"}}', 'at design'],
   ])('refuses %s', async (text, words) => {
     await expect(readText(text)).rejects.toThrow(RunFolderError);
     await expect(readText(text)).rejects.toThrow(words);
