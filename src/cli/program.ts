@@ -95,6 +95,7 @@ export function buildProgram(done: (code: ExitCode) => void): Command {
         "whether light keeps its polarisation (default: the design's, else carried where a pump is polarised)",
       ).choices(['carried', 'averaged']),
     )
+    .option('--saturation', 'let dyes absorb with the molecules left in the ground state, found by iteration')
     .option('--no-files', 'write no files')
     .addOption(picturesOption().default('all'))
     .option('--plain', 'print the record of the run as JSON and nothing else')

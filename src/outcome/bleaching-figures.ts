@@ -64,7 +64,7 @@ function bleachTime(
   }
   const { of, bleachYield, rate, seconds, reservoirCm3 } = soonest;
   if (!Number.isFinite(seconds)) return unknown('s', 'a bleach yield of 0: it never bleaches');
-  const yields = `${of.dye.name}, ${short(bleachYield.value)} molecules lost per absorption (${bleachYield.origin})`;
+  const yields = `${of.dye.name}, ${short(bleachYield.value)} lost per absorption (${bleachYield.origin})`;
   const range =
     bleachYield.low < bleachYield.high
       ? `; from ${short(timeToLose(LOST, bleachYield.high, rate))} to ${short(timeToLose(LOST, bleachYield.low, rate))} s over the known range`

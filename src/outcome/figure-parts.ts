@@ -14,4 +14,8 @@ export const withSpread = (value: number, spread: number | null, unit: string, n
 export const NOT_PUMPED = 'no dye absorbed light';
 export const names = (dyes: readonly DissolvedDye[]): string => [...new Set(dyes.map(({ name }) => name))].join(', ');
 
-export const short = (value: number): string => String(Number(value.toPrecision(2)));
+/** Two digits; with a power of ten where zeros would have to be counted. */
+export const short = (value: number): string =>
+  value !== 0 && (Math.abs(value) < 1e-3 || Math.abs(value) >= 1e6)
+    ? value.toExponential(1).replace('.0e', 'e')
+    : String(Number(value.toPrecision(2)));

@@ -160,7 +160,7 @@ function gainFigures(
   const at = `at ${gain.wavelengthNm} nm in the densest voxel; absorption by excited molecules left out`;
   const along = `straight along ${Number((10 * longestCm).toPrecision(3))} mm, the diagonal of the dyed parts, all as pumped as the densest voxel: no less than the truth, but for light that mirrors send back and forth`;
   if (gain.perCm <= 0) {
-    const none = 'no net gain: the dye absorbs more than it amplifies at every wavelength it emits';
+    const none = 'the liquid absorbs more than it amplifies at every wavelength the dye emits';
     return {
       peakGain: { value: 0, standardError: null, unit: '1/cm', note: none },
       gainOverLongestPath: { value: 0, standardError: null, unit: '', note: none },

@@ -5,6 +5,7 @@
 import type { Fault } from '../design/fault.js';
 import type { Fate, Light } from '../tallies/run-tallies.js';
 import type { CurveKind, StopReason, UsedCurve } from '../trace/trace-result.js';
+import type { GroundShare, SaturationStep } from '../trace/trace-saturated.js';
 
 export const RUN_FORMAT = 3;
 
@@ -103,6 +104,16 @@ export interface PictureRecord {
   readonly files: readonly string[];
 }
 
+/** How the strengths of a saturated run were found. */
+export interface SaturationRecord {
+  /** Whether shares and exit fraction had come to rest. */
+  readonly settled: boolean;
+  /** Share of each dye's molecules that absorbed in the run. */
+  readonly shares: readonly GroundShare[];
+  /** Turns of the iteration, each with the shares it was traced with. */
+  readonly steps: readonly SaturationStep[];
+}
+
 export interface RunRecord {
   readonly format: typeof RUN_FORMAT;
   readonly tool: { readonly name: 'stokeswell'; readonly version: string };
@@ -129,6 +140,8 @@ export interface RunRecord {
   };
   readonly pumps: readonly PumpRecord[];
   readonly figures: Readonly<Record<FigureName, Figure>>;
+  /** null: dyes absorbed as if never saturated. */
+  readonly saturation: SaturationRecord | null;
   readonly ledger: { readonly photons: readonly LedgerRow[]; readonly watts: readonly LedgerRow[] };
   readonly maps: readonly MapRecord[];
   readonly spectra: readonly {

@@ -25,6 +25,7 @@ export function sampleRecord(): RunRecord {
     },
     pumps: [pump('front-bank'), { ...pump('back-bank'), driverEfficiency: null }],
     figures: figures(),
+    saturation: null,
     ledger: { photons: rows(0.5), watts: rows(0.4) },
     maps: [
       map('exit', 'lid.top', 0.0421, 0.81, 'W/cm²'),
