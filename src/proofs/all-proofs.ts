@@ -1,5 +1,6 @@
 import { beamSpreadProof } from './beam-spread-proof.js';
 import { beerLambertProof } from './beer-lambert-proof.js';
+import { bleachingProof } from './bleaching-proof.js';
 import { diffuseFresnelProof } from './diffuse-fresnel-proof.js';
 import { energyProof } from './energy-proof.js';
 import { escapeConeProof } from './escape-cone-proof.js';
@@ -12,12 +13,14 @@ import { lightBoxProof } from './light-box-proof.js';
 import { meanChordProof } from './mean-chord-proof.js';
 import { metalMirrorProof } from './metal-mirror-proof.js';
 import { mixingRodProof } from './mixing-rod-proof.js';
+import { overlapProof } from './overlap-proof.js';
 import { parallelBeamProof } from './parallel-beam-proof.js';
 import { photometryProof } from './photometry-proof.js';
 import { polarisedLightProof } from './polarised-light-proof.js';
 import { prismProof } from './prism-proof.js';
 import type { Proof } from './proof.js';
 import { reciprocityProof } from './reciprocity-proof.js';
+import { saturationProof } from './saturation-proof.js';
 import { scatteringMediumProof } from './scattering-medium-proof.js';
 import { slabProof } from './slab-proof.js';
 import { surfaceScatterProof } from './surface-scatter-proof.js';
@@ -30,6 +33,9 @@ import { viewFactorProof } from './view-factor-proof.js';
 export const allProofs: readonly Proof[] = [
   beerLambertProof,
   energyProof,
+  overlapProof,
+  saturationProof,
+  bleachingProof,
   fresnelProof,
   diffuseFresnelProof,
   metalMirrorProof,

@@ -33,14 +33,14 @@ export interface SaturatedTrace {
 /** Part of the way that a share goes towards what a turn says. */
 const RELAXATION = 0.7;
 /** Shares have come to rest when they would move by less than this. */
-const AT_REST = 0.002;
+const AT_REST = 0.001;
 const MOST_TURNS = 25;
 /** Histories of a turn, at most; the last trace has all that are asked for. */
 const TURN_HISTORIES = 51_200;
 
 /**
  * Traces in turns, all with the same seed: each dye absorbs with one ground-state share in all parts of a medium, which is then moved towards the
- * mean over the voxels that the light of this turn asks for (under-relaxed), until shares move by less than 0.2 % and the exit fraction by less
+ * mean over the voxels that the light of this turn asks for (under-relaxed), until shares move by less than 0.1 % and the exit fraction by less
  * than its error. Then traces as asked. The absorbed total of a medium is right at the fixed point; within a part bright spots absorb a little too
  * much and dim ones too little, for a medium has one strength.
  * @param onStep told after each turn
@@ -66,9 +66,8 @@ export async function traceSaturated(
     settled = off < AT_REST && atRest(steps.at(-1), step);
     steps.push(step);
     onStep(step);
-    if (!settled) {
-      shares = shares.map((one) => ({ ...one, share: one.share + RELAXATION * (shareIn(asked, one) - one.share) }));
-    }
+    // The last turn moves them too: what is left is then much smaller than the bound.
+    shares = shares.map((one) => ({ ...one, share: one.share + RELAXATION * (shareIn(asked, one) - one.share) }));
   }
   const result = await traceDescription(withShares(split, shares), options);
   return { result, steps, settled };
