@@ -63,7 +63,7 @@ function optionFault(fault: LocatedFault): string {
   const [line] = faultLines(fault);
   const place = `${fault.file}:${fault.line}:${fault.column}: `;
   const told = (line ?? formatFault(fault)).slice(place.length).replace(/^(warning: )?[^—]*— /, '$1');
-  return `${optionOf(fault.path)}: ${told}`;
+  return fault.code === 'caution' ? told.replace(/^warning: /, '') : `${optionOf(fault.path)}: ${told}`;
 }
 
 function optionOf(path: readonly (string | number)[]): string {

@@ -1,6 +1,6 @@
 import { line } from 'd3-shape';
 import { type Markup, markup } from '../markup.js';
-import { type Axis, axisScale, bottomAxis, leftAxis } from './axis.js';
+import { type Axis, axisScale, axisTicks, bottomAxis, leftAxis } from './axis.js';
 import { bottomLogAxis, logScale } from './log-axis.js';
 import { type Picture, picture, round } from './picture.js';
 
@@ -52,8 +52,8 @@ export function linePlot(
   const atX = scale === 'log' ? logScale(across) : axisScale({ ...across, ticks: 8 });
   const atY = axisScale(up);
   const inside = (y: number) => Math.min(highest, Math.max(0, y));
-  const grid = [0.2, 0.4, 0.6, 0.8].map((share) => {
-    const y = round(bottom - share * HEIGHT);
+  const grid = axisTicks(up).map((value) => {
+    const y = round(atY(value));
     return markup`<line class="plot-grid" x1="${LEFT}" x2="${RIGHT}" y1="${y}" y2="${y}"/>`;
   });
   const curve = ({ colour, dash, points, errors }: PlotLine): Markup => {
