@@ -76,7 +76,7 @@ describe('stokeswell strength', () => {
       '--points',
       '7',
       '--histories',
-      '4096',
+      '2048',
       '--out',
       'scan',
     ];
@@ -103,7 +103,7 @@ describe('stokeswell strength', () => {
       '--points',
       '40',
       '--histories',
-      '20000',
+      '8192',
       '--out',
       'cut',
     ];
