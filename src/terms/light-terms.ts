@@ -241,7 +241,7 @@ const SURVIVE = {
   },
   'effective-strength': {
     name: 'saturated strength',
-    also: ['--saturation', 'ground share', 'effective strength'],
+    also: ['ground share', 'effective strength'],
     means: 'share of a dye that still absorbs in a part, traced in its place',
     formula: 'mean ground-state share, by absorbed light; found by iteration',
     assumes: 'one for a whole part: bright spots absorb a little too much',

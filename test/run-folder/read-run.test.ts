@@ -23,13 +23,13 @@ describe('readRun', () => {
     const reading = readText(newer);
     await expect(reading).rejects.toThrow(RunFolderError);
     await expect(reading).rejects.toThrow(
-      /stokeswell 9\.1\.0 wrote it in format 7.*this one reads format 2\. Read it with/,
+      /stokeswell 9\.1\.0 wrote it in format 7.*this one reads format 3\. Read it with/,
     );
   });
 
   it('tells an older format, and what to do', async () => {
     const older = JSON.stringify({ ...sampleRun().record, format: 1 });
-    await expect(readText(older)).rejects.toThrow(/in format 1, and this one reads format 2\. Trace the design again/);
+    await expect(readText(older)).rejects.toThrow(/in format 1, and this one reads format 3\. Trace the design again/);
   });
 
   it.each([

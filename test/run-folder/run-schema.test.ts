@@ -50,7 +50,7 @@ describe('runJsonSchema', () => {
     expect(schema).toMatchObject({
       $schema: 'http://json-schema.org/draft-07/schema#',
       type: 'object',
-      properties: { format: { const: 2 }, ledger: { type: 'object' } },
+      properties: { format: { const: 3 }, ledger: { type: 'object' } },
     });
     expect(schema).toHaveProperty('required', Object.keys(record));
     expect(schema).not.toHaveProperty('additionalProperties');
