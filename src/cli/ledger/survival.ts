@@ -22,7 +22,9 @@ export function survival(record: RunRecord, style: TerminalStyle): string[] {
 
 /** Bleaching is asked of every design: where it cannot be told, it says why. */
 function unknownLines({ figures: { timeToBleach } }: RunRecord): string[] {
-  return timeToBleach.value === null ? [`time to bleach not known${noteOf(timeToBleach)}`] : [];
+  return timeToBleach.value === null && timeToBleach.note !== undefined
+    ? [`time to bleach not known${noteOf(timeToBleach)}`]
+    : [];
 }
 
 function excitedLine(molecules: Figure, mass: Figure, style: TerminalStyle): string | null {
