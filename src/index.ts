@@ -8,3 +8,4 @@ export type { Figure, FigureName, LedgerRow, MapRecord, RunRecord } from './reco
 export type { RunTallies } from './tallies/run-tallies.js';
 export { NothingTraced, traceDescription } from './trace/trace-design.js';
 export type { StopReason, TraceOptions, TraceProgress, TraceResult } from './trace/trace-result.js';
+export { type SaturatedTrace, type SaturationStep, traceSaturated } from './trace/trace-saturated.js';

@@ -7,6 +7,8 @@ import { createHash } from 'node:crypto';
 export function designMark(
   { hash, dials }: { readonly hash: string; readonly dials: Readonly<Record<string, string>> },
   polarisation = 'averaged',
+  saturated = false,
 ): string {
-  return createHash('sha256').update(hash).update(JSON.stringify(dials)).update(polarisation).digest('hex');
+  const mode = saturated ? `${polarisation} saturated` : polarisation;
+  return createHash('sha256').update(hash).update(JSON.stringify(dials)).update(mode).digest('hex');
 }

@@ -45,6 +45,13 @@ export function parseWavelengths(text: string): readonly [number, number] {
   return [low, high];
 }
 
+/** A whole number of strengths, 3 to 101. */
+export function parsePoints(text: string): number {
+  const value = wholeNumber(text);
+  if (value === null || value < 3 || value > 101) refuse('Write a whole number from 3 to 101.');
+  return value;
+}
+
 /** A whole number of threads, 1 to 1024. */
 export function parseThreads(text: string): number {
   const value = wholeNumber(text);

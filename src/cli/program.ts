@@ -3,15 +3,18 @@ import { PICTURE_CHOICES } from '../report/pictures/picture-choice.js';
 import type { CheckOptions } from './commands/check.js';
 import type { CoatingOptions } from './commands/coating.js';
 import type { DrawOptions } from './commands/draw.js';
+import type { DyeOptions } from './commands/dye.js';
 import type { ExplainOptions } from './commands/explain.js';
 import type { ProveOptions } from './commands/prove.js';
 import type { ReportOptions } from './commands/report.js';
+import type { StrengthOptions } from './commands/strength.js';
 import type { TraceCommandOptions } from './commands/trace.js';
 import { EXIT_CODES_HELP, type ExitCode } from './exit-codes.js';
 import {
   collectDial,
   parseDuration,
   parseHistories,
+  parsePoints,
   parsePrecision,
   parseSeed,
   parseThreads,
@@ -95,6 +98,7 @@ export function buildProgram(done: (code: ExitCode) => void): Command {
         "whether light keeps its polarisation (default: the design's, else carried where a pump is polarised)",
       ).choices(['carried', 'averaged']),
     )
+    .option('--saturation', 'let dyes absorb with the molecules left in the ground state, found by iteration')
     .option('--no-files', 'write no files')
     .addOption(picturesOption().default('all'))
     .option('--plain', 'print the record of the run as JSON and nothing else')
@@ -139,6 +143,46 @@ export function buildProgram(done: (code: ExitCode) => void): Command {
     .action(async (file: string, finish: string, options: CoatingOptions) => {
       const { coatingCommand } = await import('./commands/coating.js');
       done(await coatingCommand(file, finish, options));
+    });
+
+  program
+    .command('dye')
+    .description(
+      'a dye in a liquid before any tracing: absorbance, depth, overlap, saturation, a first guess of strength',
+    )
+    .argument('<what>', 'a dye of the library, or a design file')
+    .argument('[medium]', 'a solvent for a dye of the library, or a medium of the design (default: the first there is)')
+    .option('--strength <strength>', 'of a dye of the library, e.g. "0.2 mmol/L" or "65 mg/L"')
+    .option('--path <length>', 'path in the liquid (default: 10 mm, or the way of the pumps through the cell)')
+    .option('--pump <wavelength>', "wavelength of the pump (default: 445 nm, or the design's first)")
+    .option('--ph <number>', 'pH, for a dye of the library')
+    .option('--out <folder>', 'new or empty folder for the files (default: a new one below results)')
+    .option('--no-files', 'write no files')
+    .addOption(dialOption())
+    .action(async (what: string, medium: string | undefined, options: DyeOptions) => {
+      const { dyeCommand } = await import('./commands/dye.js');
+      done(await dyeCommand(what, medium, options));
+    });
+
+  program
+    .command('strength')
+    .description('exit fraction against the strength of the dye, traced over three decades, with the best one')
+    .argument('<design>', 'design file whose dye strength is a dial')
+    .option('--turn <dial>', 'the dial that holds the strength (default: the one that changes it)')
+    .option('--points <number>', 'strengths to trace, 3 to 101', parsePoints, 13)
+    .option('--histories <number>', 'pump photons at each strength, for example 50000 or 2e5', parseHistories, 50_000)
+    .option(
+      '--seed <text>',
+      "seed of the random streams, the same at each strength (default: the design's, else 1)",
+      parseSeed,
+    )
+    .option('--threads <number>', 'worker threads (default: all cores); the results do not depend on it', parseThreads)
+    .option('--out <folder>', 'new or empty folder for the files (default: a new one below results)')
+    .option('--no-files', 'write no files')
+    .addOption(dialOption())
+    .action(async (file: string, options: StrengthOptions) => {
+      const { strengthCommand } = await import('./commands/strength.js');
+      done(await strengthCommand(file, options));
     });
 
   program

@@ -6,6 +6,7 @@ import type { RunRecord } from '../record/run-record.js';
 import { keptDrawing } from '../run-folder/drawing-json.js';
 import { tracePaths } from '../trace/trace-paths.js';
 import type { TraceResult } from '../trace/trace-result.js';
+import type { SaturatedTrace } from '../trace/trace-saturated.js';
 import { repeatCommand } from './repeat-command.js';
 import { toolVersion } from './tool-version.js';
 
@@ -19,6 +20,7 @@ export function recordRun(
   turned: Readonly<Record<string, string>>,
   startedAt: Date,
   polarisation?: 'carried' | 'averaged',
+  saturation: SaturatedTrace | null = null,
 ): { record: RunRecord; arrays: RunArrays } {
   const { description, file, text, hash } = reading;
   const { histories } = result.tallies.moments;
@@ -31,10 +33,11 @@ export function recordRun(
       hash,
       dials: Object.fromEntries(description.dials.map((dial) => [dial.name, dial.text])),
       startedAt,
-      repeat: repeatCommand(file, histories, result.seed, turned, polarisation),
+      repeat: repeatCommand(file, histories, result.seed, turned, polarisation, saturation !== null),
+      saturation,
     },
   );
-  const { paths, histories: pathsFrom } = tracePaths(description, result.seed);
+  const { paths, histories: pathsFrom } = tracePaths(result.description, result.seed);
   return { record, arrays: { ...arrays, drawing: keptDrawing({ ...drawDescription(description), paths, pathsFrom }) } };
 }
 

@@ -7,9 +7,11 @@ export function repeatCommand(
   seed: string,
   dials: Readonly<Record<string, string>>,
   polarisation?: 'carried' | 'averaged',
+  saturation = false,
 ): string {
   const turned = Object.entries(dials).flatMap(([name, value]) => ['--dial', `${name}=${value}`]);
   const words = ['stokeswell', 'trace', file, '--histories', String(histories), '--seed', seed, ...turned];
   if (polarisation !== undefined) words.push('--polarisation', polarisation);
+  if (saturation) words.push('--saturation');
   return words.map(shellQuote).join(' ');
 }

@@ -44,6 +44,7 @@ export function dissolveDye(
       quantumYield: warm.factor * dye.quantumYield,
       emission: dye.emission,
       lifetimeNs: dye.lifetimeNs,
+      ...stability(dye),
     };
     const dyes = [{ ...given, concentration: null, absorption: (nm: number) => absorption(nm) * strength.value }];
     return { dyes, notes: [...dye.notes, ...warm.notes] };
@@ -62,6 +63,7 @@ export function dissolveDye(
       quantumYield: dilute * (quenched?.factor ?? 1),
       ...(quenched === null ? {} : { diluteYield: dilute, quenching: quenched }),
       emission: dye.emission,
+      ...stability(dye),
       // What takes light away at the same rate of emission shortens the lifetime as much; dimers are dark from the start.
       lifetimeNs: lifetimeNs === null ? null : lifetimeNs * warm.factor * moving,
     };
@@ -69,6 +71,8 @@ export function dissolveDye(
   const mixed = forms.length > 1 || forms[0]?.formOf !== undefined ? [formNote(name, forms, host)] : [];
   return { dyes, notes: [...dye.notes, ...mixed, ...warm.notes] };
 }
+
+const stability = ({ molarMassGPerMol, bleachYield, triplet }: Dye) => ({ molarMassGPerMol, bleachYield, triplet });
 
 /** 1 cm⁻¹ = 0.1 mm⁻¹; decadic to Napierian by ln 10. */
 function molarAbsorption(extinction: Curve | null, concentration: number): Curve {

@@ -82,6 +82,8 @@ function describeMedium(
   const dissolved = fields.dyes.map((dye) => dissolveDye(dye, ownDyes, host, reading));
   const hostDensity = base?.thermal?.densityKgPerM3 ?? null;
   const scatterers = fields.scatterers.flatMap((entry) => describeScatterer(entry, hostDensity, reading) ?? []);
+  const { reservoir } = fields;
+  if (base && reservoir !== null && base.kind !== 'liquid') reportMisplaced('reservoir', 'a liquid', path, reading);
   if (base === null) return null;
   const notes = [...(base.notes ?? []), ...dissolved.flatMap((one) => one.notes)];
   return {
@@ -90,6 +92,7 @@ function describeMedium(
     ...base,
     dyes: dissolved.flatMap(({ dyes }) => dyes),
     scatterers,
+    reservoirMm3: reservoir,
     ...(notes.length === 0 ? {} : { notes }),
     ...(fields.quenching === 'off' ? { quenching: 'off' } : {}),
   };

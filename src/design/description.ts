@@ -68,6 +68,8 @@ export interface MediumDescription {
   readonly quenching?: 'off';
   /** What was taken for granted about the medium, for people to read. */
   readonly notes?: readonly string[];
+  /** Liquid that circulates besides what is in the parts, mm³; null or left out: none. */
+  readonly reservoirMm3?: number | null;
 }
 
 export interface DissolvedDye {
@@ -87,6 +89,24 @@ export interface DissolvedDye {
   readonly emission: EmissionDescription;
   /** Fluorescence lifetime, ns, null when unknown. */
   readonly lifetimeNs: number | null;
+  /** null or left out: not known. */
+  readonly molarMassGPerMol?: number | null;
+  /** Molecules destroyed per photon absorbed; null or left out: not known. */
+  readonly bleachYield?: GivenConstant | null;
+  /** null or left out: not known, the dye is taken to have two levels. */
+  readonly triplet?: { readonly yield: GivenConstant; readonly lifetimeNs: GivenConstant } | null;
+  /** Share of the molecules in the ground state that `absorption` stands for; 1 when left out. */
+  readonly groundShare?: number;
+}
+
+/** A constant with what is known of it. */
+export interface GivenConstant {
+  readonly value: number;
+  /** Ends of what is published; the value itself where it was given by the user. */
+  readonly low: number;
+  readonly high: number;
+  /** Where it comes from, for people to read. */
+  readonly origin: string;
 }
 
 /** What became of the yield, for people to read. */

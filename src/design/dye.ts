@@ -1,7 +1,7 @@
 import type { DyeForm, YieldTemperature } from '../materials/library.js';
 import type { QuenchingLaw } from '../materials/self-quenching.js';
 import type { Curve } from '../units/curve.js';
-import type { EmissionDescription } from './description.js';
+import type { DissolvedDye, EmissionDescription, GivenConstant } from './description.js';
 
 /** A dye before it is given a strength. */
 export interface Dye {
@@ -12,6 +12,8 @@ export interface Dye {
   readonly quantumYield: number;
   readonly lifetimeNs: number | null;
   readonly molarMassGPerMol: number | null;
+  readonly bleachYield: GivenConstant | null;
+  readonly triplet: NonNullable<DissolvedDye['triplet']> | null;
   /** Protolytic forms to mix by pH, most protonated first; empty where one set of data holds. */
   readonly forms: readonly DyeForm[];
   readonly quenching: { readonly law: QuenchingLaw; readonly most: number; readonly source: string } | null;

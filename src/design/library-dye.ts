@@ -1,5 +1,12 @@
 /** Dyes of the library as a host finds them: spectra of the nearest solvent, forms by pH, constants of quenching. */
-import { dyeSolvents, readDye, readDyeQuenching } from '../materials/library.js';
+import {
+  dyeSolvents,
+  type RangedConstant,
+  readDye,
+  readDyeQuenching,
+  readPhotostability,
+} from '../materials/library.js';
+import type { GivenConstant } from './description.js';
 import type { Dye, Host } from './dye.js';
 import type { DesignPath } from './fault.js';
 import { nearestSolvent } from './nearest-solvent.js';
@@ -33,6 +40,21 @@ export function libraryDye(name: string, path: DesignPath, host: Host, reading: 
     quenching: quenchingOf(name, solvent, host),
     temperature: data.temperature,
     notes: [],
+    ...libraryStability(name, host.base),
+  };
+}
+
+function libraryStability(name: string, solvent: string): Pick<Dye, 'bleachYield' | 'triplet'> {
+  const { bleachYield, triplet } = readPhotostability(name, solvent);
+  const given = ({ value, low, high, measuredIn, status }: RangedConstant): GivenConstant => ({
+    value,
+    low,
+    high,
+    origin: `of ${measuredIn}; ${status}`,
+  });
+  return {
+    bleachYield: bleachYield && given(bleachYield),
+    triplet: triplet && { yield: given(triplet.yield), lifetimeNs: given(triplet.lifetimeNs) },
   };
 }
 

@@ -66,6 +66,10 @@ const mediumRecord = record(
       'Whether dyes of the library quench themselves at their strength; off gives the yield of dilute dyes.',
     ),
     absorption,
+    reservoir: optional(
+      quantity('volume', { above: 0 }),
+      'Volume of liquid that circulates through the parts besides what is in them: it shares the bleaching.',
+    ),
     dyes,
     scatterers: withDefault(
       scatterersForm,
@@ -134,6 +138,18 @@ const dyeRecord = record(
     lifetime: optional(quantity('lifetime', { above: 0 }), 'Fluorescence lifetime.'),
     quenching: optional(quenchingForm, 'How the dye quenches itself as it gets stronger. Left out: not at all.'),
     'molar-mass': optional(quantity('molarMass', { above: 0 }), 'Molar mass, needed where a strength is given in g/L.'),
+    'bleach-yield': optional(
+      quantity('fraction', { min: 0, max: 1 }),
+      'Molecules destroyed for good per photon absorbed, such as 1e-6.',
+    ),
+    'triplet-yield': optional(
+      quantity('fraction', { min: 0, max: 1 }),
+      'Share of excitations that end in the triplet; needs `triplet-lifetime`.',
+    ),
+    'triplet-lifetime': optional(
+      quantity('lifetime', { above: 0 }),
+      'How long the triplet lasts in the liquid as used, air and all; needs `triplet-yield`.',
+    ),
   },
   { exactlyOne: [['extinction', 'absorption']] },
 );

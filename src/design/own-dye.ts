@@ -3,7 +3,7 @@ import { mirrorImage } from '../materials/mirror-image.js';
 import { naturalLifetime } from '../materials/natural-lifetime.js';
 import type { QuenchingLaw } from '../materials/self-quenching.js';
 import type { Curve } from '../units/curve.js';
-import type { EmissionDescription } from './description.js';
+import type { DissolvedDye, EmissionDescription, GivenConstant } from './description.js';
 import type { Dye } from './dye.js';
 import type { Named } from './form-record.js';
 import type { DyeRecord, EmissionEntry, ExtinctionEntry } from './media-fields.js';
@@ -29,6 +29,8 @@ export function describeOwnDye({ name, path, value }: Named<DyeRecord>, reading:
     forms: [],
     quenching: value.quenching === null ? null : ownQuenching(value.quenching),
     temperature: null,
+    bleachYield: ownConstant(value['bleach-yield']),
+    triplet: ownTriplet(value, path, reading) ?? null,
     notes: read?.notes ?? [],
   };
   if (read !== null && read.rangeNm !== null) checkSense(dye, read.curve, read.rangeNm, path, reading);
@@ -145,4 +147,30 @@ function checkSense(
       'emission',
     );
   }
+}
+
+const ownConstant = (value: number | null): GivenConstant | null =>
+  value === null ? null : { value, low: value, high: value, origin: 'as given in the design' };
+
+function ownTriplet(value: DyeRecord, path: Named<unknown>['path'], reading: Reading): DissolvedDye['triplet'] {
+  const [share, lifetime] = [value['triplet-yield'], value['triplet-lifetime']];
+  const [given, missing] =
+    share === null ? ['triplet-lifetime', 'triplet-yield'] : ['triplet-yield', 'triplet-lifetime'];
+  if ((share === null) !== (lifetime === null)) {
+    const problem = `${given} says nothing without ${missing}`;
+    reading.report({ code: 'missing', path: [...path, given], problem, expected: `both, or neither` });
+  }
+  if (share !== null && value.yield + share > 1) {
+    const problem = 'more excitations end as light and in the triplet than there are';
+    const found = `yield ${value.yield} and triplet yield ${share}`;
+    reading.report({
+      code: 'range',
+      path: [...path, 'triplet-yield'],
+      problem,
+      found,
+      expected: 'a sum of 100 % or less',
+    });
+  }
+  const [yields, lasts] = [ownConstant(share), ownConstant(lifetime)];
+  return yields && lasts && { yield: yields, lifetimeNs: lasts };
 }

@@ -91,13 +91,14 @@ function voxelMaps(compiled: CompiledScene, grown: GrownTally): RecordedMap[] {
   const { scene, legend } = compiled;
   const { origin, size, cells } = legend.voxels;
   const count = cells[0] * cells[1] * cells[2];
-  const measure = voxelMeasure(compiled);
+  const { measure, part } = voxelMeasure(compiled);
   const common = {
     where: 'dyed parts',
     shape: cells,
     extent: origin.map((low, axis) => [low, low + size[axis]] as const),
     axes: ['x', 'y', 'z'],
     measure,
+    part,
     frame: { origin, u: [1, 0, 0], v: [0, 1, 0] },
   } as const;
   const pump = halves(compiled, grown, scene.voxelPumpMap, count);

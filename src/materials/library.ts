@@ -14,5 +14,6 @@ export type {
 } from './material-data.js';
 export { metalNames, readMetal } from './metals.js';
 export { mixtureDensity } from './mixture-density.js';
+export { type Photostability, type RangedConstant, readPhotostability } from './photostability.js';
 export { readSolid, solidNames } from './solids.js';
 export { readSolvent, solventNames } from './solvents.js';

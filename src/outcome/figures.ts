@@ -9,6 +9,7 @@ import { ErrorBars, oneEventAtLeast } from './error-bars.js';
 import { evennessFigures } from './evenness-figures.js';
 import { exitFigures } from './exit-figures.js';
 import type { MapField } from './map-field.js';
+import { photophysicsFigures } from './photophysics-figures.js';
 
 /** @param fields maps of the run; those without area say nothing and may be left out. */
 export function runFigures(result: TraceResult, fields: readonly MapField[]): Record<FigureName, Figure> {
@@ -60,6 +61,7 @@ export function runFigures(result: TraceResult, fields: readonly MapField[]): Re
     blueLeakFraction: share('leakEnergy', 1, 'W/W'),
     ...evennessFigures(fields, dark),
     ...densityFigures(result, fields),
+    ...photophysicsFigures(result, fields),
     absorptionsPerHistory: perHistory('dyeAbsorptions', 'per pump photon'),
     reabsorptionsPerHistory: perHistory('reabsorptions', 'per pump photon'),
     meanPumpPath: mean('pumpPath', 'mm per pump photon'),

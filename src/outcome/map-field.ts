@@ -1,7 +1,7 @@
 /** Recorded energies -> irradiance or absorbed power density, per half and together. */
 
 import type { RecordedMap, RunTallies } from '../tallies/run-tallies.js';
-import { BATCH_HISTORIES } from '../tallies/run-tallies.js';
+import { halfHistories } from '../trace/half-histories.js';
 
 /** A map in W/cm² (faces) or W/cm³ (voxels). */
 export interface MapField {
@@ -15,14 +15,6 @@ export interface MapField {
   readonly counts: Float64Array;
   /** W in the whole map. */
   readonly power: number;
-}
-
-/** Histories in even and in odd batches. */
-export function halfHistories(histories: number): readonly [number, number] {
-  const full = Math.floor(histories / BATCH_HISTORIES);
-  const rest = histories - full * BATCH_HISTORIES;
-  const even = Math.ceil(full / 2) * BATCH_HISTORIES + (full % 2 === 0 ? rest : 0);
-  return [even, histories - even];
 }
 
 /**

@@ -2,8 +2,9 @@
 import { carriesPolarisation } from '../design/carries-polarisation.js';
 import { cautionsFor } from '../materials/cautions.js';
 import type { RunArrays } from '../record/run-arrays.js';
-import { type MapRecord, RUN_FORMAT, type RunRecord } from '../record/run-record.js';
+import { type MapRecord, RUN_FORMAT, type RunRecord, type SaturationRecord } from '../record/run-record.js';
 import type { TraceResult } from '../trace/trace-result.js';
+import type { SaturatedTrace } from '../trace/trace-saturated.js';
 import { MAXIMUM_LUMINOUS_EFFICACY_LM_PER_W } from '../units/constants.js';
 import { ErrorBars } from './error-bars.js';
 import { runFigures } from './figures.js';
@@ -24,6 +25,8 @@ export interface RunAbout {
   readonly startedAt: Date;
   /** Command that repeats the run. */
   readonly repeat: string;
+  /** How saturation was taken into account; left out where it was not. */
+  readonly saturation?: SaturatedTrace | null;
 }
 
 /** File names in `record` are left empty: the run folder chooses them. @throws LedgerDefect */
@@ -63,6 +66,7 @@ export function summariseRun(result: TraceResult, about: RunAbout): { record: Ru
       driverEfficiency: driver,
     })),
     figures: runFigures(result, fields),
+    saturation: about.saturation ? saturationRecord(about.saturation) : null,
     ledger: { photons: photonLedger(tallies), watts: wattLedger(tallies) },
     maps: fields.map(mapRecord),
     spectra: tallies.spectra.map(({ id, what, where, light, photons }) => ({
@@ -99,6 +103,13 @@ export function summariseRun(result: TraceResult, about: RunAbout): { record: Ru
     }),
   };
   return { record, arrays: runArrays(result, fields) };
+}
+
+function saturationRecord({ result, steps, settled }: SaturatedTrace): SaturationRecord {
+  const shares = partMedia(result).flatMap(({ name, dyes }) =>
+    dyes.map((dye) => ({ medium: name, dye: dye.name, share: dye.groundShare ?? 1 })),
+  );
+  return { settled, shares, steps };
 }
 
 function partMedia({ description }: TraceResult) {

@@ -1,6 +1,7 @@
 import { beamSpreadProof } from './beam-spread-proof.js';
 import { beerLambertProof } from './beer-lambert-proof.js';
 import { birksProof } from './birks-proof.js';
+import { bleachingProof } from './bleaching-proof.js';
 import { brightnessProof } from './brightness-proof.js';
 import { detectorProof } from './detector-proof.js';
 import { diffuseFresnelProof } from './diffuse-fresnel-proof.js';
@@ -19,6 +20,7 @@ import { meshProof } from './mesh-proof.js';
 import { metalMirrorProof } from './metal-mirror-proof.js';
 import { mixingRodProof } from './mixing-rod-proof.js';
 import { mixtureProof } from './mixture-proof.js';
+import { overlapProof } from './overlap-proof.js';
 import { parallelBeamProof } from './parallel-beam-proof.js';
 import { photometryProof } from './photometry-proof.js';
 import { polarisedLightProof } from './polarised-light-proof.js';
@@ -28,6 +30,7 @@ import type { Proof } from './proof.js';
 import { quenchingProof } from './quenching-proof.js';
 import { reciprocityProof } from './reciprocity-proof.js';
 import { reflectorProof } from './reflector-proof.js';
+import { saturationProof } from './saturation-proof.js';
 import { scatteringMediumProof } from './scattering-medium-proof.js';
 import { slabProof } from './slab-proof.js';
 import { surfaceScatterProof } from './surface-scatter-proof.js';
@@ -40,6 +43,9 @@ import { viewFactorProof } from './view-factor-proof.js';
 export const allProofs: readonly Proof[] = [
   beerLambertProof,
   energyProof,
+  overlapProof,
+  saturationProof,
+  bleachingProof,
   fresnelProof,
   diffuseFresnelProof,
   metalMirrorProof,

@@ -5,6 +5,7 @@
 import type { Fault } from '../design/fault.js';
 import type { Fate, Light, LuminousOpening } from '../tallies/run-tallies.js';
 import type { CurveKind, StopReason, UsedCurve } from '../trace/trace-result.js';
+import type { GroundShare, SaturationStep } from '../trace/trace-saturated.js';
 
 export const RUN_FORMAT = 3;
 
@@ -37,6 +38,16 @@ export type FigureName =
   | 'exitBeamUniformity' // ISO 13694 beam uniformity
   | 'peakAbsorbedPowerDensity' // W/cm³
   | 'timeToBoiling' // s, adiabatic, still liquid, at the peak
+  | 'excitedMolecules' // at any time, in steady light
+  | 'excitedMass' // ng
+  | 'peakExcitedFraction' // of the molecules in the densest voxel
+  | 'depletedAbsorption' // of the absorption, lost because molecules are not in the ground state
+  | 'saturationIrradiance' // W/cm², hν/(σ τ) at the pump
+  | 'peakGain' // 1/cm, small signal, densest voxel
+  | 'gainOverLongestPath' // peak gain times the longest path
+  | 'absorptionsPerMolecule' // 1/s, mean over the liquid in the light
+  | 'timeToBleach' // s until 10 % of the dye in the parts is destroyed
+  | 'timeToBleachWithReservoir' // s, with the circulating volume
   | 'absorptionsPerHistory'
   | 'reabsorptionsPerHistory'
   | 'meanPumpPath' // mm per history
@@ -132,6 +143,16 @@ export interface PictureRecord {
   readonly files: readonly string[];
 }
 
+/** How the strengths of a saturated run were found. */
+export interface SaturationRecord {
+  /** Whether shares and exit fraction had come to rest. */
+  readonly settled: boolean;
+  /** Share of each dye's molecules that absorbed in the run. */
+  readonly shares: readonly GroundShare[];
+  /** Turns of the iteration, each with the shares it was traced with. */
+  readonly steps: readonly SaturationStep[];
+}
+
 export interface RunRecord {
   readonly format: typeof RUN_FORMAT;
   readonly tool: { readonly name: 'stokeswell'; readonly version: string };
@@ -158,6 +179,8 @@ export interface RunRecord {
   };
   readonly pumps: readonly PumpRecord[];
   readonly figures: Readonly<Record<FigureName, Figure>>;
+  /** null: dyes absorbed as if never saturated. */
+  readonly saturation: SaturationRecord | null;
   readonly ledger: { readonly photons: readonly LedgerRow[]; readonly watts: readonly LedgerRow[] };
   readonly maps: readonly MapRecord[];
   readonly spectra: readonly {

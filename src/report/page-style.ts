@@ -56,6 +56,12 @@ p{margin:4px 0}
 .thumbnail{display:block;max-width:100%;image-rendering:pixelated;margin:6px 0;border:1px solid var(--line)}
 .share-bar{display:flex;height:16px;margin:8px 0 5px;background:var(--line)}
 .share-bar span+span{border-left:1px solid var(--panel)}
+.verdicts{margin:6px 0;padding:0 0 0 1.05em;font-size:.84rem;line-height:1.35}
+.verdicts li{margin:3px 0}
+.verdicts .figure{white-space:normal}
+.why{display:inline}
+.why summary{display:inline;cursor:pointer;color:var(--soft);font-size:.8rem;text-decoration:underline dotted}
+.why[open]{display:block;margin:2px 0 5px}
 .legend,.checks,.cautions,.losses{margin:0;padding:0 0 0 1.2em}
 .legend{list-style:none;padding:0;font-size:.84rem}
 .legend li{padding-left:1.35em;position:relative}

@@ -30,7 +30,8 @@ export async function drawingFolderPath(outRoot: string, title: string, hash: st
   return freePath(join(outRoot, slug(title, 'design')), `${slug(hash.slice(0, 8), 'design')}-drawing`);
 }
 
-async function freePath(folder: string, name: string): Promise<string> {
+/** Path of a folder that is not there yet: folder/name, with -2, -3, … as above. */
+export async function freePath(folder: string, name: string): Promise<string> {
   for (let copy = 1; ; copy++) {
     const path = join(folder, copy === 1 ? name : `${name}-${copy}`);
     if (!(await exists(path))) return path;

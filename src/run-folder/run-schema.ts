@@ -40,6 +40,16 @@ const FIGURE_NAMES = everyName<FigureName>()([
   'exitBeamUniformity',
   'peakAbsorbedPowerDensity',
   'timeToBoiling',
+  'excitedMolecules',
+  'excitedMass',
+  'peakExcitedFraction',
+  'depletedAbsorption',
+  'saturationIrradiance',
+  'peakGain',
+  'gainOverLongestPath',
+  'absorptionsPerMolecule',
+  'timeToBleach',
+  'timeToBleachWithReservoir',
   'absorptionsPerHistory',
   'reabsorptionsPerHistory',
   'meanPumpPath',
@@ -200,6 +210,20 @@ const fault = z.object({
   suggestion: text.exactOptional(),
 });
 
+const groundShare = z.object({ medium: text, dye: text, share: z.number().positive().max(1) });
+const saturation = z.object({
+  settled: z.boolean(),
+  shares: z.array(groundShare).describe('share of the molecules that absorbed in the run'),
+  steps: z.array(
+    z.object({
+      shares: z.array(groundShare),
+      exitPhotonFraction: z.number().nonnegative(),
+      standardError: error,
+      off: z.number().nonnegative().describe('largest distance between a share and what this turn asks for'),
+    }),
+  ),
+});
+
 /** Keys it does not know are passed over: a record may gain some without a new format number. */
 export const runRecordSchema = z.object({
   format: z.literal(RUN_FORMAT),
@@ -227,6 +251,7 @@ export const runRecordSchema = z.object({
   }),
   pumps: z.array(pump),
   figures: z.record(z.enum(FIGURE_NAMES), figure),
+  saturation: saturation.nullable().describe('null: dyes absorbed as if never saturated'),
   ledger: z.object({ photons: ledger, watts: ledger }),
   maps: z.array(map),
   spectra: z.array(

@@ -175,8 +175,15 @@ function inZone(patch: Extract<FacePatch, { kind: 'zone' }>): (u: number, v: num
   };
 }
 
-/** Volume, mm³, of each voxel that belongs to a part with dye (or to any part, if none has). */
-export function voxelMeasure({ scene, legend }: CompiledScene): Float64Array {
+export interface VoxelMeasure {
+  /** Volume, mm³, of each voxel that belongs to a part with dye (or to any part, if none has). */
+  readonly measure: Float64Array;
+  /** The part it belongs to, by its place in the design; that of the last point looked at where parts meet. −1 for none. */
+  readonly part: Int16Array;
+}
+
+/** How much of each voxel holds dye, and of which part. */
+export function voxelMeasure({ scene, legend }: CompiledScene): VoxelMeasure {
   const { origin, size, cells } = legend.voxels;
   const graph = new RegionGraph(scene);
   const dyed = (owner: number) => scene.absorberCount[scene.ownerMedium[owner]] > 1;
@@ -189,9 +196,13 @@ export function voxelMeasure({ scene, legend }: CompiledScene): Float64Array {
       region = graph.locate(x, y, z, 0.6, 0.64, 0.48);
     }
     const owner = graph.owner[region];
-    return owner > 0 && (!anyDye || dyed(owner));
+    const counted = owner > 0 && (!anyDye || dyed(owner));
+    if (counted) last = owner - 1;
+    return counted;
   };
+  let last = -1;
   const measure = new Float64Array(cells[0] * cells[1] * cells[2]);
+  const part = new Int16Array(measure.length).fill(-1);
   const share = (ix: number, iy: number, iz: number, samples: number): number => {
     let inside = 0;
     for (let k = 0; k < samples ** 3; k++) {
@@ -209,9 +220,11 @@ export function voxelMeasure({ scene, legend }: CompiledScene): Float64Array {
       for (let ix = 0; ix < cells[0]; ix++) {
         const coarse = share(ix, iy, iz, 2);
         const fine = coarse > 0 && coarse < 1 ? share(ix, iy, iz, 5) : coarse;
-        measure[cell++] = fine * step[0] * step[1] * step[2];
+        measure[cell] = fine * step[0] * step[1] * step[2];
+        if (fine > 0) part[cell] = last;
+        cell++;
       }
     }
   }
-  return measure;
+  return { measure, part };
 }

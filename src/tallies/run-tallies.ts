@@ -116,6 +116,8 @@ export interface RecordedMap {
   readonly energy: readonly [Float64Array, Float64Array];
   /** Area (mm²) or volume (mm³) of each cell that belongs to the face or dyed part; 0 outside it. */
   readonly measure: Float64Array;
+  /** Part that each cell lies in, by its place in the design, −1 outside all that is mapped; of voxels only. */
+  readonly part?: Int16Array;
   /** Of a sphere: the extent as azimuth and polar angle, degrees; `extent` then is arcs. */
   readonly extentDeg?: readonly (readonly [number, number])[];
   /** Of the exit: name of the medium its light goes out into, at its middle. */

@@ -40,7 +40,7 @@ describe('trace', () => {
   it('--plain prints the record and nothing else; --no-files leaves nothing behind', async () => {
     const { code, out, err } = await run('trace', 'cell.yaml', '--histories', '5000', '--plain', '--no-files');
     expect({ code, err }).toEqual({ code: 0, err: '' });
-    expect(JSON.parse(out)).toMatchObject({ format: 2, run: { histories: 5000, stopReason: 'histories' } });
+    expect(JSON.parse(out)).toMatchObject({ format: 3, run: { histories: 5000, stopReason: 'histories' } });
     expect(await readdir(cwd)).toEqual(['cell.yaml']);
   });
 

@@ -1,6 +1,7 @@
 import { describe, expect, test } from 'vitest';
-import { halfHistories, mapField, soundCells } from '../../src/outcome/map-field.js';
+import { mapField, soundCells } from '../../src/outcome/map-field.js';
 import { BATCH_HISTORIES } from '../../src/tallies/run-tallies.js';
+import { halfHistories } from '../../src/trace/half-histories.js';
 import { syntheticMap, syntheticTallies } from '../helpers/synthetic-tallies.js';
 
 /** Batches of a run of so many histories, of 2.5 eV each. */

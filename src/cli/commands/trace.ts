@@ -5,7 +5,8 @@ import type { RunRecord } from '../../record/run-record.js';
 import type { PictureFiles } from '../../report/pictures/draw-pictures.js';
 import type { PictureChoice } from '../../report/pictures/picture-choice.js';
 import { RunFolderError } from '../../run-folder/run-folder-error.js';
-import type { TraceResult } from '../../trace/trace-result.js';
+import type { TraceProgress, TraceResult } from '../../trace/trace-result.js';
+import type { SaturatedTrace } from '../../trace/trace-saturated.js';
 import { colourDepth } from '../colour-depth.js';
 import { CommandFault } from '../command-fault.js';
 import { designFault } from '../design-fault.js';
@@ -15,6 +16,7 @@ import { EXIT, type ExitCode } from '../exit-codes.js';
 import { faultLines } from '../fault-lines.js';
 import { listenForInterrupt } from '../interrupt.js';
 import { faceMap } from '../ledger/face-map.js';
+import { stepWords } from '../ledger/saturation.js';
 import { showLedger } from '../ledger/show-ledger.js';
 import { checkOutputFolder, RESULTS } from '../output-folder.js';
 import { print, tell } from '../output-stream.js';
@@ -36,6 +38,7 @@ export interface TraceCommandOptions extends WantedBounds {
   readonly progress?: boolean;
   readonly dial: Readonly<Record<string, string>>;
   readonly polarisation?: 'carried' | 'averaged';
+  readonly saturation?: boolean;
 }
 
 const SEED_BY_DEFAULT = '1';
@@ -56,9 +59,18 @@ export async function traceCommand(file: string, options: TraceCommandOptions): 
   const startedAt = new Date();
   const interrupt = listenForInterrupt(() => tell(INTERRUPT_NOTE));
   try {
-    const result = { ...(await traceReading(reading, options, interrupt.signal)), warnings: faults };
+    const traced = await traceReading(reading, options, interrupt.signal);
+    const saturation = 'steps' in traced ? traced : null;
+    const result = { ...('steps' in traced ? traced.result : traced), warnings: faults };
     const { recordRun } = await import('../record-run.js');
-    const { record: bare, arrays } = recordRun(result, reading, options.dial, startedAt, options.polarisation);
+    const { record: bare, arrays } = recordRun(
+      result,
+      reading,
+      options.dial,
+      startedAt,
+      options.polarisation,
+      saturation,
+    );
     const drawn = options.files ? await drawnPictures(bare, arrays, options.pictures) : null;
     const record = drawn === null ? bare : { ...bare, pictures: drawn.records };
     const show = async (folder: string | null): Promise<void> => {
@@ -103,7 +115,7 @@ async function keep(
   const folder =
     out ??
     (await runFolderPath(RESULTS, record.design.title, {
-      hash: designMark(record.design, record.run.polarisation),
+      hash: designMark(record.design, record.run.polarisation, record.saturation !== null),
       ...record.run,
     }));
   await writeRun(folder, record, arrays, undefined, [
@@ -123,7 +135,7 @@ async function traceReading(
   reading: SoundDesign,
   options: TraceCommandOptions,
   signal: AbortSignal,
-): Promise<TraceResult> {
+): Promise<TraceResult | SaturatedTrace> {
   const { NothingTraced, traceDescription } = await import('../../trace/trace-design.js');
   const { DesignFaults } = await import('../../design/design-faults.js');
   const { locateFaults } = await import('../../design/read-design.js');
@@ -132,12 +144,17 @@ async function traceReading(
   const onTerminal = process.stderr.isTTY === true;
   const line = new ProgressLine(tell, bounds, onTerminal, process.stderr.columns ?? 80);
   try {
-    return await traceDescription(reading.description, {
+    const plan = {
       ...bounds,
       seed: options.seed ?? defaults.seed ?? SEED_BY_DEFAULT,
       threads: options.threads ?? availableParallelism(),
       signal,
-      ...((options.progress ?? onTerminal) ? { onProgress: (progress) => line.show(progress) } : {}),
+      ...((options.progress ?? onTerminal) ? { onProgress: (progress: TraceProgress) => line.show(progress) } : {}),
+    };
+    if (options.saturation !== true) return await traceDescription(reading.description, plan);
+    const { traceSaturated } = await import('../../trace/trace-saturated.js');
+    return await traceSaturated(reading.description, plan, (step) => {
+      if (options.progress ?? onTerminal) tell(`${stepWords(step)}\n`);
     });
   } catch (error) {
     if (error instanceof DesignFaults) throw designFault(locateFaults(reading, error.faults));

@@ -6,6 +6,7 @@ import { headline } from './headline.js';
 import { labelled } from './labelled.js';
 import { largestLosses } from './largest-losses.js';
 import { ledgerTable } from './ledger-table.js';
+import { saturation } from './saturation.js';
 import { survival } from './survival.js';
 
 /** What of a run is laid out: watts or photons of the ledger, its located warnings, and where its files are. */
@@ -32,6 +33,7 @@ export function showLedger(record: RunRecord, view: LedgerView, style: TerminalS
     evenness(record, style),
     view.map ?? [],
     survival(record, style),
+    saturation(record, style),
     labelled('Warnings', view.warnings, { ...style, bold: style.warn }),
     labelled(
       'Cautions',

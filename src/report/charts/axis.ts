@@ -16,6 +16,9 @@ export function axisScale({ domain, range }: Axis): (value: number) => number {
   return scaleLinear(domain, range);
 }
 
+/** Values at which the ticks of an axis stand. */
+export const axisTicks = ({ domain, range, ticks }: Axis): number[] => scaleLinear(domain, range).ticks(ticks);
+
 /** Ticks, numbers and title below a plot whose lower edge is at `y`. */
 export function bottomAxis(axis: Axis, y: number): Markup {
   const at = axisScale(axis);

@@ -37,6 +37,18 @@ export const CHART_STYLE = `
 .curve-dash-1{stroke-dasharray:7 3}
 .curve-dash-2{stroke-dasharray:2 2}
 .curve-dash-3{stroke-dasharray:8 3 2 3}
+.plot-line{fill:none;stroke-width:1.9;stroke-linejoin:round}
+.plot-pump{stroke:var(--pump)}
+.plot-output{stroke:var(--output)}
+.plot-lost{stroke:var(--heat)}
+.plot-ink{stroke:var(--ink)}
+.plot-dash-1{stroke-dasharray:7 4}
+.plot-dash-2{stroke-dasharray:2 3}
+.plot-grid{stroke:var(--line);stroke-width:1}
+.plot-mark{stroke:var(--soft);stroke-width:1;stroke-dasharray:3 3}
+.plot-error{stroke:var(--output);stroke-width:1.4}
+.plot-dot{fill:var(--output)}
+.plot-band{fill:var(--line);fill-opacity:.5}
 .bar-share{fill:var(--output)}
 .bar-above{fill:var(--stray)}
 .chain-electrical{fill:var(--soft)}

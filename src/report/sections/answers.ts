@@ -2,6 +2,7 @@
 
 import type { RunRecord } from '../../record/run-record.js';
 import { termOfRow } from '../../terms/fate-terms.js';
+import { survivalVerdicts } from '../../terms/survival-words.js';
 import { planePng } from '../charts/raster.js';
 import { figureOr, figureText, noteText } from '../figure-text.js';
 import { largestLosses, lossText } from '../largest-losses.js';
@@ -99,6 +100,35 @@ function survives(record: RunRecord): Markup {
       time === null
         ? markup`Time to boiling not known${termMark('timeToBoiling')}`
         : markup`At rest it boils after <b>${time}</b>`
-    }${noteText(figures.timeToBoiling)}</p><p>${checks.length === 0 ? warnings : markup`<a href="#checks">${warnings}</a>`} <a href="#cautions">Cautions</a></p>`,
+    }${noteText(figures.timeToBoiling)}</p>${dyeSurvives(record)}<p>${checks.length === 0 ? warnings : markup`<a href="#checks">${warnings}</a>`} <a href="#cautions">Cautions</a></p>`,
   );
 }
+
+/** Saturation, amplified emission and bleaching: a line each, its assumption behind a fold. */
+function dyeSurvives(record: RunRecord): Markup {
+  const { figures } = record;
+  const verdicts = survivalVerdicts(figures).map(({ figure, words, alarm }) => {
+    const told = markup`${capital(words)}${termMark(figure)}`;
+    return markup`<li>${alarm ? markup`<b>${told}</b>` : told}${assumption(figures[figure])}</li>`;
+  });
+  const excited = figureText(record, 'excitedMolecules');
+  const mass = figureText(record, 'excitedMass');
+  const share = figureText(record, 'peakExcitedFraction', { factor: 100, unit: '%' });
+  const count =
+    excited === null
+      ? null
+      : markup`<li>Excited at any time: ${excited}${mass === null ? null : markup`, ${mass}`}${share === null ? null : markup`; at the densest spot ${share}`}${assumption(figures.peakExcitedFraction)}</li>`;
+  const silent =
+    figures.timeToBleach.value === null
+      ? markup`<li>Time to bleach not known${termMark('timeToBleach')}${assumption(figures.timeToBleach)}</li>`
+      : null;
+  return markup`<ul class="verdicts">${count}${verdicts}${silent}</ul>`;
+}
+
+function assumption({ note }: RunRecord['figures'][keyof RunRecord['figures']]): Markup | null {
+  return note === undefined
+    ? null
+    : markup` <details class="why"><summary>why</summary><span class="note">${capital(note)}.</span></details>`;
+}
+
+const capital = (text: string): string => text.charAt(0).toUpperCase() + text.slice(1);

@@ -5,6 +5,7 @@ import { type Markup, markup } from '../markup.js';
 import { shortName } from '../name-text.js';
 import { formatSeconds, groupedCount } from '../number-format.js';
 import { termMark } from '../term-mark.js';
+import { saturationSection } from './saturation-section.js';
 
 /** A longer design text would fill the page; run.json has it whole. */
 const LONGEST_TEXT = 200_000;
@@ -27,7 +28,7 @@ export function recordSection(record: RunRecord): Markup {
     cautions.length === 0
       ? markup`<p>None are held for what this design uses; follow your local codes all the same.</p>`
       : markup`<ul class="cautions">${cautions.map((text) => markup`<li>${shortName(text, 1000)}</li>`)}</ul>`
-  }<h3>All figures${termMark('figure')}</h3><p class="note">The sums, shares and quotients on this page are made of these, of the ledgers and of the maps in run.json; the values of single cells, wavelengths and directions are in the tables beside it.</p>${figureTable(record)}<h3>Design text</h3>${
+  }${saturationSection(record)}<h3>All figures${termMark('figure')}</h3><p class="note">The sums, shares and quotients on this page are made of these, of the ledgers and of the maps in run.json; the values of single cells, wavelengths and directions are in the tables beside it.</p>${figureTable(record)}<h3>Design text</h3>${
     cut ? markup`<p class="note">Cut after ${groupedCount(LONGEST_TEXT)} characters; run.json has it whole.</p>` : null
   }<pre class="design-text" tabindex="0" aria-label="Design text">${design.text.slice(0, LONGEST_TEXT)}</pre></section>`;
 }

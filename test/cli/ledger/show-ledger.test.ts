@@ -60,6 +60,15 @@ Evenness                              variation  min./mean   mean    peak
 Survival    peak absorbed power density 1231 ± 42 W/cm³
             time to boiling 0.1520 ± 0.0050 s (bath at rest from 20 °C to
               78.3 °C, no heat carried away)
+            excited at any time (5.200 ± 0.040)e11 molecules, 0.2870 ± 0.0020 ng
+              (steady light; lifetime of fluorescein 4.13 ns)
+            peak excited fraction 0.002100 ± 0.000070 % (0.0071 % out of the
+              ground state)
+            far from saturation: 0.0033 % of the absorption is lost to it (first
+              order, not traced)
+            no net gain, so no amplified spontaneous emission (no net gain)
+            a tenth of the dye is bleached after 13 s with the liquid of the
+              cell alone (fluorescein, 0.00001 molecules lost per absorption)
 
 Warnings    geometries/loom.yaml:4:5: parts.lid — the lid is thinner than its
               window
