@@ -65,7 +65,7 @@ describe('three views', () => {
       }
     }
     for (const pump of description.pumps)
-      expect(words).toContain(`${pump.name}: ${pump.power} W, ${pump.wavelengthNm} nm`);
+      expect(words).toContain(`${pump.name}: ${pump.power} W, ${Number(pump.wavelengthNm.toPrecision(6))} nm`);
     for (const finish of new Set(drawing.parts.flatMap(({ faces }) => faces.map((face) => face.finish)))) {
       expect(words).toContain(finish);
     }

@@ -32,6 +32,7 @@ describe('the pictures of a run', () => {
       'picture-spectra',
       'picture-chromaticity',
       'picture-directions-exit-lid-top',
+      'picture-radiance-exit-lid-top',
       'picture-absorptions-per-history',
       'picture-chain',
     ]);
