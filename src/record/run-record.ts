@@ -4,8 +4,8 @@
  */
 import type { Fault } from '../design/fault.js';
 import type { Fate, Light, LuminousOpening } from '../tallies/run-tallies.js';
+import type { GroundShare, SaturationStep } from '../trace/saturation-step.js';
 import type { CurveKind, StopReason, UsedCurve } from '../trace/trace-result.js';
-import type { GroundShare, SaturationStep } from '../trace/trace-saturated.js';
 
 export const RUN_FORMAT = 3;
 

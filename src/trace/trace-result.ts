@@ -2,7 +2,7 @@
 import type { Description } from '../design/description.js';
 import type { Fault } from '../design/fault.js';
 import type { BatchPlan, BatchProgress, StopReason } from '../engine/batch-plan.js';
-import type { CurveKind, UsedCurve } from '../scene/used-curves.js';
+import type { CurveKind, UsedCurve } from '../scene/used-curve.js';
 import type { RunTallies } from '../tallies/run-tallies.js';
 
 export type TraceOptions = BatchPlan;

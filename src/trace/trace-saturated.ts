@@ -2,26 +2,9 @@
 import type { Description, MediumDescription } from '../design/description.js';
 import { FIGURE } from '../tallies/run-tallies.js';
 import { dyeExcitations, meanGroundShare } from './dye-excitation.js';
+import type { GroundShare, SaturationStep } from './saturation-step.js';
 import { traceDescription } from './trace-design.js';
 import type { TraceOptions, TraceResult } from './trace-result.js';
-
-export interface GroundShare {
-  readonly medium: string;
-  readonly dye: string;
-  /** Share of the molecules that absorb. */
-  readonly share: number;
-}
-
-/** One turn of the iteration. */
-export interface SaturationStep {
-  /** Shares that were traced with. */
-  readonly shares: readonly GroundShare[];
-  /** Exit photons per pump photon, with its error by the scatter of the batches. */
-  readonly exitPhotonFraction: number;
-  readonly standardError: number | null;
-  /** Largest distance between a share and what this turn says it should be. */
-  readonly off: number;
-}
 
 export interface SaturatedTrace {
   readonly result: TraceResult;

@@ -3,7 +3,8 @@ import type { Description } from '../../src/design/description.js';
 import { readDesign } from '../../src/design/read-design.js';
 import { readMetal } from '../../src/materials/library.js';
 import { compileScene } from '../../src/scene/compile-scene.js';
-import { type UsedCurve, usedCurves } from '../../src/scene/used-curves.js';
+import type { UsedCurve } from '../../src/scene/used-curve.js';
+import { usedCurves } from '../../src/scene/used-curves.js';
 import { nearestIndex } from '../../src/scene/wavelength-grid.js';
 import { beam, describeDesign, finish, medium, part } from '../helpers/describe.js';
 

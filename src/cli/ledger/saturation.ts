@@ -1,5 +1,5 @@
 import type { RunRecord } from '../../record/run-record.js';
-import type { SaturationStep } from '../../trace/trace-saturated.js';
+import type { SaturationStep } from '../../trace/saturation-step.js';
 import { formatWithError, significant } from '../number-format.js';
 import { safeText } from '../safe-text.js';
 import type { TerminalStyle } from '../terminal-style.js';
